@@ -1,0 +1,158 @@
+import { z } from 'zod';
+import { endpoint } from './endpoint.js';
+import { problemStatus, type ProblemCode } from './problems.js';
+import { countryCode, email, filamentColour, id, moment, money, secret } from './values.js';
+
+export const basketItem = z.object({ licenceId: id });
+export const couponCode = z
+  .string()
+  .trim()
+  .toUpperCase()
+  .min(3)
+  .max(40)
+  .regex(/^[A-Z0-9-]+$/, 'Codes have letters, digits and hyphens.');
+
+export const quoteLine = z.object({
+  licenceId: id,
+  kitSlug: z.string(),
+  kitName: z.string(),
+  colour: filamentColour,
+  licenceName: z.string(),
+  revision: z.string(),
+  price: money,
+  discount: money,
+  total: money,
+  isOwned: z.boolean(),
+});
+export const quote = z.object({
+  lines: z.array(quoteLine),
+  /** Licences that are no longer sold, dropped from the lines. */
+  gone: z.array(id),
+  subtotal: money,
+  discount: money,
+  total: money,
+  coupon: z
+    .object({
+      code: z.string(),
+      label: z.string(),
+      cap: z.int().nullable(),
+      left: z.int().nullable(),
+    })
+    .nullable(),
+  couponFault: z
+    .object({
+      code: z.enum(Object.keys(problemStatus) as [ProblemCode, ...ProblemCode[]]),
+      detail: z.string(),
+    })
+    .nullable(),
+});
+export type Quote = z.output<typeof quote>;
+
+export const quoteBody = z.object({ items: z.array(basketItem).max(30), couponCode: couponCode.optional() });
+
+export const checkoutBody = z.object({
+  items: z.array(basketItem).min(1, 'The basket is empty.').max(30),
+  couponCode: couponCode.optional(),
+  email,
+  country: countryCode,
+  /** The buyer asks for supply at once and knows the right of withdrawal ends with it (Directive 2011/83/EU, art. 16 m). */
+  hasConsented: z.literal(true, 'Tick the box: files can only be handed over at once with your consent.'),
+  /** Sent again after a broken connection, it opens the same checkout, not a second one. */
+  attempt: id,
+});
+
+export const checkoutOpened = z.object({
+  orderId: id,
+  /** Opens the order page without an account; it is shown once and stored hashed. */
+  orderKey: secret,
+  /** Where to pay; null where nothing is to pay. */
+  paymentUrl: z.string().nullable(),
+});
+
+export const orderState = z.enum(['open', 'paid', 'cancelled', 'expired', 'refunded']);
+
+export const orderLine = z.object({
+  id,
+  kitSlug: z.string(),
+  kitName: z.string(),
+  colour: filamentColour,
+  licenceName: z.string(),
+  revision: z.string(),
+  price: money,
+  discount: money,
+  total: money,
+});
+
+/** An order as its buyer sees it. */
+export const buyerOrder = z.object({
+  id,
+  number: z.string(),
+  state: orderState,
+  email: z.string(),
+  placedAt: moment,
+  paidAt: moment.nullable(),
+  payUntil: moment.nullable(),
+  paymentUrl: z.string().nullable(),
+  receiptNumber: z.string().nullable(),
+  lines: z.array(orderLine),
+  subtotal: money,
+  discount: money,
+  total: money,
+  tax: z.array(z.object({ ratePercent: z.string(), net: money, tax: money })),
+  couponCode: z.string().nullable(),
+  isMine: z.boolean(),
+});
+export type BuyerOrder = z.output<typeof buyerOrder>;
+
+const orderParams = z.object({ orderId: id });
+const withKey = z.object({ key: secret.optional() });
+
+export const basketEndpoints = {
+  'POST /basket/quote': endpoint({
+    access: 'public',
+    summary: 'Price a basket, with a coupon',
+    body: quoteBody,
+    response: quote,
+    isQuestion: true,
+  }),
+  'POST /checkout': endpoint({
+    access: 'public',
+    summary: 'Place an order, hold the coupon, open the payment page',
+    body: checkoutBody,
+    response: checkoutOpened,
+    status: 201,
+  }),
+  'GET /orders/:orderId': endpoint({
+    access: 'public',
+    summary: 'An order, for its buyer or with its key',
+    params: orderParams,
+    query: withKey,
+    response: buyerOrder,
+  }),
+  'POST /orders/:orderId/refresh': endpoint({
+    access: 'public',
+    summary: 'Ask the payment service how an open order stands',
+    params: orderParams,
+    query: withKey,
+    response: buyerOrder,
+  }),
+  'POST /orders/:orderId/cancel': endpoint({
+    access: 'public',
+    summary: 'Give up an open order; its coupon place is free again',
+    params: orderParams,
+    query: withKey,
+    response: buyerOrder,
+  }),
+  'GET /account/orders': endpoint({
+    access: 'signed-in',
+    summary: 'One’s own orders',
+    query: z.object({ page: z.coerce.number().int().min(1).default(1) }),
+    response: z.object({ items: z.array(buyerOrder), page: z.int(), size: z.int(), total: z.int() }),
+  }),
+  'POST /payments/webhook': endpoint({
+    access: 'public',
+    summary: 'Signed events of the payment service',
+    response: z.object({ received: z.literal(true) }),
+    isCalledFromOutside: true,
+  }),
+};

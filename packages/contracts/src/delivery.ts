@@ -1,0 +1,146 @@
+import { z } from 'zod';
+import { endpoint } from './endpoint.js';
+import { drawing } from './kits.js';
+import { differenceKind } from './workshop-kits.js';
+import { email, filamentColour, id, moment, secret, sha256, slug, slugParams } from './values.js';
+
+/** What may be fetched: the whole bundle of a revision, or one document of it. */
+export const grantBody = z.object({ kitSlug: slug, revisionId: id, file: sha256.optional() });
+export const grant = z.object({
+  url: z.string(),
+  expiresAt: moment,
+  fileName: z.string(),
+  bytes: z.int(),
+  sha256,
+});
+
+export const shelfRevision = z.object({
+  id,
+  label: z.string(),
+  releasedAt: moment,
+  bundleBytes: z.int(),
+  bundleSha256: sha256,
+  changeNotes: z.string(),
+  isWithdrawn: z.boolean(),
+});
+export const entitlementSource = z.enum(['purchase', 'pledge', 'gift', 'staff']);
+
+export const shelfItem = z.object({
+  slug,
+  name: z.string(),
+  tagline: z.string(),
+  colour: filamentColour,
+  source: entitlementSource,
+  since: moment,
+  licenceName: z.string(),
+  held: shelfRevision.nullable(),
+  newest: shelfRevision,
+});
+export type ShelfItem = z.output<typeof shelfItem>;
+
+/** How a part stands between the revision held and the newest one. */
+export const shelfPart = z.object({
+  code: z.string(),
+  name: z.string(),
+  quantity: z.int(),
+  difference: differenceKind,
+  mark: z.enum(['reprint needed', 'reprint if it troubles you']).nullable(),
+  reason: z.string(),
+  whatDiffers: z.string(),
+  drawing: drawing.nullable(),
+});
+export const shelfKit = shelfItem.extend({
+  orderId: id.nullable(),
+  revisions: z.array(shelfRevision),
+  parts: z.array(shelfPart),
+  documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
+  licenceTerms: z.string(),
+  cautions: z.string(),
+  downloads: z.array(
+    z.object({ at: moment, revision: z.string(), fileName: z.string(), isComplete: z.boolean() }),
+  ),
+});
+export type ShelfKit = z.output<typeof shelfKit>;
+
+/** What a mailed link opens: a page, never the file itself, since mail scanners open links. */
+export const collection = z.object({
+  orderNumber: z.string(),
+  expiresAt: moment,
+  usesLeft: z.int(),
+  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'ended']),
+  kits: z.array(
+    z.object({
+      slug,
+      name: z.string(),
+      colour: filamentColour,
+      licenceName: z.string(),
+      newest: shelfRevision,
+    }),
+  ),
+});
+export type Collection = z.output<typeof collection>;
+
+const tokenParams = z.object({ token: secret });
+
+export const deliveryEndpoints = {
+  'GET /shelf': endpoint({
+    access: 'signed-in',
+    summary: 'One’s own kits',
+    query: z.object({ page: z.coerce.number().int().min(1).default(1) }),
+    response: z.object({ items: z.array(shelfItem), page: z.int(), size: z.int(), total: z.int() }),
+  }),
+  'GET /shelf/:slug': endpoint({
+    access: 'signed-in',
+    summary: 'One kit on the shelf: held, newest, what differs',
+    params: slugParams,
+    response: shelfKit,
+  }),
+  'POST /shelf/:slug/held': endpoint({
+    access: 'signed-in',
+    summary: 'Say which revision one has printed',
+    params: slugParams,
+    body: z.object({ revisionId: id }),
+    response: shelfKit,
+  }),
+  'POST /shelf/grants': endpoint({
+    access: 'signed-in',
+    summary: 'A short-lived signed address of a file one is entitled to',
+    body: grantBody,
+    response: grant,
+    status: 201,
+  }),
+  'GET /collect/:token': endpoint({
+    access: 'public',
+    summary: 'What a mailed link stands for; opening it uses nothing up',
+    params: tokenParams,
+    response: collection,
+  }),
+  'POST /collect/:token/grants': endpoint({
+    access: 'public',
+    summary: 'A signed address by a mailed link; counts as one use',
+    params: tokenParams,
+    body: grantBody,
+    response: grant,
+    status: 201,
+  }),
+  'POST /collect/:token/replacement': endpoint({
+    access: 'public',
+    summary: 'Mail a fresh link to the order’s own address',
+    params: tokenParams,
+    response: null,
+    status: 202,
+  }),
+  'POST /collect/lost': endpoint({
+    access: 'public',
+    summary: 'Mail fresh links for all orders of an address',
+    body: z.object({ email }),
+    response: null,
+    status: 202,
+  }),
+  'GET /files/:grant': endpoint({
+    access: 'public',
+    summary: 'The file of a signed address; answers ranges',
+    params: z.object({ grant: z.string().min(20).max(2000) }),
+    response: 'stream',
+  }),
+};

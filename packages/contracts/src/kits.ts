@@ -1,0 +1,143 @@
+import { z } from 'zod';
+import { endpoint } from './endpoint.js';
+import { filamentColour, id, moment, money, pageOf, pageQuery, slug, slugParams } from './values.js';
+import { rankVoice, room } from './voices.js';
+
+export const licenceKinds = ['personal', 'small-run', 'classroom'] as const;
+export const orientations = ['as-exported', 'may-turn', 'may-lie'] as const;
+export const sizeMm = z.object({ x: z.number(), y: z.number(), z: z.number() });
+export const buildVolume = z.object({
+  xMm: z.number().positive().max(2000),
+  yMm: z.number().positive().max(2000),
+  zMm: z.number().positive().max(3000),
+});
+
+/** What the maker prints with; a part may carry its own where it differs. */
+export const printSpec = z.object({
+  nozzleMm: z.number().min(0.1).max(2),
+  layerMm: z.number().min(0.04).max(1.2),
+  perimeters: z.int().min(1).max(20),
+  topLayers: z.int().min(0).max(50),
+  bottomLayers: z.int().min(0).max(50),
+  infill: z.number().min(0).max(1),
+  material: z.string().trim().min(1).max(40),
+  supports: z.enum(['none', 'where-told', 'everywhere']).default('none'),
+  remarks: z.string().max(2000).default(''),
+});
+export type PrintSpecification = z.output<typeof printSpec>;
+
+export const hardwareItem = z.object({
+  quantity: z.number().positive().max(10_000),
+  unit: z.string().trim().max(20).default(''),
+  name: z.string().trim().min(1).max(120),
+  remark: z.string().trim().max(300).default(''),
+});
+export const hardwareList = z.array(hardwareItem).max(200);
+export type HardwareItem = z.output<typeof hardwareItem>;
+
+/** A drawing made from a mesh: an SVG path in mm. */
+export const drawing = z.object({
+  path: z.string(),
+  widthMm: z.number(),
+  heightMm: z.number(),
+  viewBox: z.string(),
+});
+export const drawings = z.object({ front: drawing, side: drawing, top: drawing });
+
+export const licence = z.object({
+  id,
+  kind: z.enum(licenceKinds),
+  name: z.string(),
+  terms: z.string(),
+  price: money,
+  yearlyLimit: z.int().nullable(),
+});
+export type Licence = z.output<typeof licence>;
+
+/** A coupon the shop announces on the kit's page; `left` is null where nobody counts. */
+export const launchOffer = z.object({
+  code: z.string(),
+  label: z.string(),
+  price: money,
+  cap: z.int().nullable(),
+  left: z.int().nullable(),
+  endsAt: moment.nullable(),
+});
+
+export const revisionState = z.enum(['draft', 'proving', 'released', 'withdrawn']);
+export const printEstimate = z.object({
+  plates: z.int(),
+  massG: z.number(),
+  lengthM: z.number(),
+  hoursLow: z.number(),
+  hoursHigh: z.number(),
+  bed: buildVolume,
+});
+
+export const kitCard = z.object({
+  slug,
+  name: z.string(),
+  tagline: z.string(),
+  colour: filamentColour,
+  revision: z.string(),
+  releasedAt: moment,
+  compass: z.string(),
+  rank: z.array(rankVoice),
+  tallestPartMm: z.number(),
+  partCount: z.int(),
+  printEstimate: printEstimate.nullable(),
+  price: money,
+  offer: launchOffer.nullable(),
+});
+export type KitCard = z.output<typeof kitCard>;
+
+export const kitPage = kitCard.extend({
+  id,
+  description: z.string(),
+  licences: z.array(licence),
+  bundleBytes: z.int(),
+  declaredCents: z.number(),
+  room,
+  buildVolume,
+  printSpec,
+  hardware: hardwareList,
+  cautions: z.string(),
+  revisions: z.array(z.object({ label: z.string(), releasedAt: moment, changeNotes: z.string() })),
+  isOwned: z.boolean(),
+});
+export type KitPage = z.output<typeof kitPage>;
+
+export const kitPart = z.object({
+  code: z.string(),
+  name: z.string(),
+  quantity: z.int(),
+  orientation: z.enum(orientations),
+  sizeMm,
+  volumeMm3: z.number(),
+  areaMm2: z.number(),
+  printSpec: printSpec.nullable(),
+  /** Shown on the sheet: the side that tells most about the part. */
+  drawing: drawing.nullable(),
+});
+export type KitPart = z.output<typeof kitPart>;
+
+export const kitEndpoints = {
+  'GET /kits': endpoint({
+    access: 'public',
+    summary: 'Kits on sale, newest first',
+    query: pageQuery.extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest') }),
+    response: pageOf(kitCard),
+  }),
+  'GET /kits/:slug': endpoint({
+    access: 'public',
+    summary: 'One kit: its newest revision, licences, rank and notes',
+    params: slugParams,
+    response: kitPage,
+  }),
+  'GET /kits/:slug/parts': endpoint({
+    access: 'public',
+    summary: 'The parts of a kit’s newest revision, drawn',
+    params: slugParams,
+    response: z.array(kitPart),
+  }),
+};
