@@ -22,7 +22,6 @@ export const quoteLine = z.object({
   price: money,
   discount: money,
   total: money,
-  isOwned: z.boolean(),
 });
 export const quote = z.object({
   lines: z.array(quoteLine),

@@ -83,6 +83,11 @@ export type Collection = z.output<typeof collection>;
 const tokenParams = z.object({ token: secret });
 
 export const deliveryEndpoints = {
+  'GET /shelf/owned': endpoint({
+    access: 'signed-in',
+    summary: 'Slugs of the kits one owns, to notice them in the shop',
+    response: z.array(slug),
+  }),
   'GET /shelf': endpoint({
     access: 'signed-in',
     summary: 'One’s own kits',

@@ -56,6 +56,8 @@ export type Licence = z.output<typeof licence>;
 
 /** A coupon the shop announces on the kit's page; `left` is null where nobody counts. */
 export const launchOffer = z.object({
+  kitSlug: slug,
+  licenceId: id,
   code: z.string(),
   label: z.string(),
   price: money,
@@ -86,8 +88,8 @@ export const kitCard = z.object({
   tallestPartMm: z.number(),
   partCount: z.int(),
   printEstimate: printEstimate.nullable(),
+  /** Of the licence for one's own prints, or the cheapest offered. */
   price: money,
-  offer: launchOffer.nullable(),
 });
 export type KitCard = z.output<typeof kitCard>;
 
@@ -103,7 +105,6 @@ export const kitPage = kitCard.extend({
   hardware: hardwareList,
   cautions: z.string(),
   revisions: z.array(z.object({ label: z.string(), releasedAt: moment, changeNotes: z.string() })),
-  isOwned: z.boolean(),
 });
 export type KitPage = z.output<typeof kitPage>;
 
@@ -122,6 +123,11 @@ export const kitPart = z.object({
 export type KitPart = z.output<typeof kitPart>;
 
 export const kitEndpoints = {
+  'GET /offers': endpoint({
+    access: 'public',
+    summary: 'Coupons the shop announces, with what is left of them, by kit and licence',
+    response: z.array(launchOffer),
+  }),
   'GET /kits': endpoint({
     access: 'public',
     summary: 'Kits on sale, newest first',

@@ -18,7 +18,8 @@ describe('the permission table', () => {
   });
 
   it('names only known roles', () => {
-    for (const allowed of Object.values(permissionTable)) for (const role of allowed) expect(roles).toContain(role);
+    for (const allowed of Object.values(permissionTable))
+      for (const role of allowed) expect(roles).toContain(role);
   });
 
   it('is what every workshop route is guarded by', () => {

@@ -45,7 +45,6 @@ export const workshopKitRow = z.object({
   isListed: z.boolean(),
   newest: z.string().nullable(),
   draft: z.string().nullable(),
-  holders: z.int(),
   price: money.nullable(),
   updatedAt: moment,
 });
@@ -62,7 +61,6 @@ export const workshopKit = z.object({
   isListed: z.boolean(),
   licences: z.array(workshopLicence),
   revisions: z.array(revisionSummary),
-  holders: z.int(),
 });
 export type WorkshopKit = z.output<typeof workshopKit>;
 

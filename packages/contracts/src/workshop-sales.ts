@@ -99,7 +99,23 @@ export const overview = z.object({
   ),
 });
 
+export const holder = z.object({
+  email: z.string(),
+  kitName: z.string(),
+  source: z.enum(['purchase', 'pledge', 'gift', 'staff']),
+  state: z.enum(['active', 'suspended', 'ended']),
+  since: moment,
+  held: z.string().nullable(),
+  downloads: z.int(),
+});
+
 export const workshopSalesEndpoints = {
+  'GET /workshop/holders': endpoint({
+    access: 'buyers:read',
+    summary: 'Who is entitled to which kit, by which source, and the revision they hold',
+    query: pageQuery.extend({ kitId: id.optional() }),
+    response: pageOf(holder),
+  }),
   'GET /workshop/overview': endpoint({
     access: 'workshop:enter',
     summary: 'What waits for me; sales by day for those who see money',

@@ -1,0 +1,73 @@
+import { randomUUID } from 'node:crypto';
+import { createReadStream, createWriteStream } from 'node:fs';
+import { mkdir, open, rename, rm, stat } from 'node:fs/promises';
+import { dirname, join, resolve } from 'node:path';
+import type { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
+import { assertSafeKey, Storage, StorageFault, type ByteRange, type StoredObject } from './storage.js';
+
+const CHUNK_BYTES = 1024 ** 2;
+
+/** Files in a folder of this machine. A file appears under its key only when whole and on the disk. */
+export class LocalDiskStorage extends Storage {
+  private readonly root: string;
+
+  constructor(folder: string) {
+    super();
+    this.root = resolve(folder);
+  }
+
+  async put(key: string, source: Readable): Promise<StoredObject> {
+    const target = this.localPath(key);
+    const half = join(this.root, 'incoming', randomUUID());
+    await mkdir(dirname(half), { recursive: true });
+    try {
+      await pipeline(source, createWriteStream(half, { highWaterMark: CHUNK_BYTES }));
+      await flushToDisk(half);
+      const { size } = await stat(half);
+      await mkdir(dirname(target), { recursive: true });
+      await rename(half, target);
+      await flushToDisk(dirname(target));
+      return { bytes: size };
+    } finally {
+      await rm(half, { force: true });
+    }
+  }
+
+  async get(key: string, range?: ByteRange): Promise<Readable> {
+    if (!(await this.head(key))) throw new StorageFault('missing', 'There is no file under this key.');
+    return createReadStream(this.localPath(key), { ...range, highWaterMark: CHUNK_BYTES });
+  }
+
+  async head(key: string): Promise<StoredObject | null> {
+    try {
+      const { size } = await stat(this.localPath(key));
+      return { bytes: size };
+    } catch (fault) {
+      if ((fault as NodeJS.ErrnoException).code === 'ENOENT') return null;
+      throw fault;
+    }
+  }
+
+  localPath(key: string): string {
+    return join(this.root, assertSafeKey(key));
+  }
+
+  presign(): Promise<null> {
+    return Promise.resolve(null);
+  }
+
+  async delete(key: string): Promise<void> {
+    await rm(this.localPath(key), { force: true });
+  }
+}
+
+/** A rename is only durable once file and folder are flushed. */
+const flushToDisk = async (path: string): Promise<void> => {
+  const handle = await open(path, 'r');
+  try {
+    await handle.sync();
+  } finally {
+    await handle.close();
+  }
+};

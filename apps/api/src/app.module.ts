@@ -1,0 +1,20 @@
+import { Module } from '@nestjs/common';
+import { AdaptersModule } from './adapters/adapters.module.js';
+import { ConfigModule } from './config/config.module.js';
+import { DatabaseModule } from './database/database.module.js';
+import { HttpModule } from './http/http.module.js';
+import { JobsModule } from './jobs/jobs.module.js';
+import { MailsModule } from './mails/mails.module.js';
+
+@Module({
+  imports: [
+    ConfigModule,
+    DatabaseModule,
+    AdaptersModule,
+    HttpModule,
+    JobsModule,
+    MailsModule,
+    // The rooms, lower ones first.
+  ],
+})
+export class AppModule {}

@@ -1,0 +1,47 @@
+import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
+import { SequelizeStorage, Umzug } from 'umzug';
+import * as people from './migrations/0001-people.js';
+import * as outbox from './migrations/0002-outbox.js';
+import * as catalogue from './migrations/0003-catalogue.js';
+import * as sales from './migrations/0004-sales.js';
+
+const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
+  '0001-people': people,
+  '0002-outbox': outbox,
+  '0003-catalogue': catalogue,
+  '0004-sales': sales,
+};
+
+/**
+ * Runs what has not run yet, forward only. A named lock of the database server lets one of several
+ * starting processes migrate while the others wait; a lock belongs to one connection, so the pool's
+ * connection is pinned by a transaction for as long.
+ */
+export const migrate = async (database: Sequelize): Promise<string[]> => {
+  const lock = await database.transaction();
+  try {
+    const [row] = await database.query<{ got: number | null }>(
+      "SELECT GET_LOCK('windchest-migrations', 120) AS got",
+      {
+        type: QueryTypes.SELECT,
+        transaction: lock,
+      },
+    );
+    if (row?.got !== 1)
+      throw new Error(
+        'Another process has been migrating the database for two minutes; start again when it is done.',
+      );
+    const context = database.getQueryInterface();
+    const umzug = new Umzug<QueryInterface>({
+      migrations: Object.entries(migrations).map(([name, { up }]) => ({ name, up: () => up(context) })),
+      context,
+      storage: new SequelizeStorage({ sequelize: database, tableName: 'schema_migrations' }),
+      logger: undefined,
+    });
+    const done = await umzug.up();
+    await database.query("SELECT RELEASE_LOCK('windchest-migrations')", { transaction: lock });
+    return done.map((one) => one.name);
+  } finally {
+    await lock.rollback();
+  }
+};
