@@ -23,7 +23,7 @@ const mayUse = {
   ledger: ['accounts', 'catalogue', 'orders'],
   workshop: [...'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' ')],
 };
-const lowerLayers = 'adapters database jobs http config'.split(' ');
+const lowerLayers = 'adapters database jobs mails http config'.split(' ');
 
 module.exports = {
   forbidden: [
@@ -78,6 +78,6 @@ module.exports = {
     doNotFollow: { path: 'node_modules' },
     exclude: { path: '(^|/)dist/' },
     tsPreCompilationDeps: true,
-    enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'types', 'default'], extensions: ['.ts', '.tsx', '.js', '.mjs', '.json'], extensionAlias: { '.js': ['.ts', '.tsx', '.js'] } },
+enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'types', 'default'], extensions: ['.ts', '.tsx', '.js', '.mjs', '.json'] },
   },
 };

@@ -1,4 +1,6 @@
 import { Module } from '@nestjs/common';
+import { ScheduleModule } from '@nestjs/schedule';
+import { AccountsModule } from './accounts/accounts.module.js';
 import { AdaptersModule } from './adapters/adapters.module.js';
 import { ConfigModule } from './config/config.module.js';
 import { DatabaseModule } from './database/database.module.js';
@@ -14,7 +16,9 @@ import { MailsModule } from './mails/mails.module.js';
     HttpModule,
     JobsModule,
     MailsModule,
+    ScheduleModule.forRoot(),
     // The rooms, lower ones first.
+    AccountsModule,
   ],
 })
 export class AppModule {}

@@ -2,7 +2,9 @@ import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import { getConnectionToken } from '@nestjs/sequelize';
 import { SwaggerModule } from '@nestjs/swagger';
+import passport from 'passport';
 import type { Sequelize } from 'sequelize';
+import { sessions } from './accounts/session-middleware.js';
 import { AppModule } from './app.module.js';
 import { CONFIG, type Config } from './config/config.js';
 import { migrate } from './database/migrate.js';
@@ -23,12 +25,14 @@ export const furnishApp = async (
   logger = createLogger('silent'),
 ): Promise<NestExpressApplication> => {
   const config = app.get<Config>(CONFIG);
-  await migrate(app.get<Sequelize>(getConnectionToken()));
+  const database = app.get<Sequelize>(getConnectionToken());
+  await migrate(database);
   app.set('trust proxy', config.TRUST_PROXY);
   app.disable('x-powered-by');
   app.use(requestLog(logger));
   app.use(securityHeaders(config.BASE_URL));
   app.useBodyParser('json', { limit: '1mb' });
+  app.use('/api', ...sessions(config, database), passport.initialize(), passport.session());
   app.setGlobalPrefix('api');
   SwaggerModule.setup('api/docs', app, () => describeApi(config.WORKSHOP_NAME), {
     jsonDocumentUrl: 'api/docs/openapi.json',

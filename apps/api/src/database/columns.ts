@@ -1,5 +1,4 @@
-import { applyDecorators } from '@nestjs/common';
-import { Column, DataType, PrimaryKey } from 'sequelize-typescript';
+import { Column, DataType } from 'sequelize-typescript';
 import { v7 as uuid } from 'uuid';
 
 /** Time-ordered ids keep InnoDB's clustered index compact. */
@@ -7,10 +6,7 @@ export const newId = (): string => uuid();
 
 /** The primary key of every own table. */
 export const IdColumn = (): PropertyDecorator =>
-  applyDecorators(
-    PrimaryKey as PropertyDecorator,
-    Column({ type: DataType.CHAR(36), defaultValue: newId }) as PropertyDecorator,
-  );
+  Column({ type: DataType.CHAR(36), primaryKey: true, defaultValue: newId }) as PropertyDecorator;
 
 /** Without a precision MariaDB drops the milliseconds. */
 export const MomentColumn = (options: { isNullable?: boolean } = {}): PropertyDecorator =>

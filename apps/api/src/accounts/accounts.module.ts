@@ -1,0 +1,51 @@
+import { Module } from '@nestjs/common';
+import { PassportModule } from '@nestjs/passport';
+import { SequelizeModule } from '@nestjs/sequelize';
+import { AccountController } from './account.controller.js';
+import { AccountLinks } from './account-links.js';
+import { Join } from './join.js';
+import { LocalStrategy } from './local.strategy.js';
+import { MailedLinks } from './mailed-links.js';
+import { OneTimeToken } from './one-time-token.model.js';
+import { OneTimeTokens } from './one-time-tokens.js';
+import { OwnSessions } from './own-sessions.js';
+import { Passphrases } from './passphrases.js';
+import { AddressVerifiedSteps, People } from './people.js';
+import { Person } from './person.model.js';
+import { SessionController } from './session.controller.js';
+import { SessionRecord } from './session.model.js';
+import { SessionSerializer } from './session-serializer.js';
+import { SessionView } from './session-view.js';
+import { SetPassphrase } from './set-passphrase.js';
+import { StaffController } from './staff.controller.js';
+import { Staff } from './staff.js';
+import { StaffLog } from './staff-log.js';
+import { StaffLogEntry } from './staff-log-entry.model.js';
+import { SweepSessions } from './sweep-sessions.js';
+
+@Module({
+  imports: [
+    PassportModule.register({ session: true }),
+    SequelizeModule.forFeature([Person, SessionRecord, OneTimeToken, StaffLogEntry]),
+  ],
+  controllers: [SessionController, AccountController, StaffController],
+  providers: [
+    People,
+    AddressVerifiedSteps,
+    Passphrases,
+    OneTimeTokens,
+    AccountLinks,
+    OwnSessions,
+    LocalStrategy,
+    SessionSerializer,
+    SessionView,
+    Join,
+    MailedLinks,
+    SetPassphrase,
+    Staff,
+    StaffLog,
+    SweepSessions,
+  ],
+  exports: [People, AddressVerifiedSteps, StaffLog],
+})
+export class AccountsModule {}

@@ -1,0 +1,186 @@
+import { money } from '@windchest/money';
+import type { EmailMessage, EmailWorkshop } from '../email-message.js';
+
+export const sampleWorkshop: EmailWorkshop = {
+  name: 'Saltmarsh Sound Works',
+  baseUrl: 'https://saltmarsh.example',
+  address: '3 Sluice Lane, Marshfoot',
+  replyTo: 'bench@saltmarsh.example',
+  locale: 'en-GB',
+};
+
+const eur = (minor: number) => money(minor, 'EUR');
+const token = '8r2mQk7wXb1ZcV5nT0yLh3sFgD9pJe6uAoIiR4tNwMx';
+const page = `https://saltmarsh.example/get/${token}`;
+const cautionsLine =
+  'Air the room while you print. Wear eye protection when you stretch bands. Small parts: not for children under three. The build book has the whole list.';
+
+/** Every mail, and the forms of it that differ most. */
+export const sampleMessages: readonly { title: string; message: EmailMessage }[] = [
+  {
+    title: 'Confirm the address',
+    message: {
+      template: 'verify-address',
+      name: 'Wren',
+      link: `https://saltmarsh.example/confirm/${token}`,
+      hours: 24,
+    },
+  },
+  {
+    title: 'Sign-in link',
+    message: { template: 'sign-in-link', link: `https://saltmarsh.example/enter/${token}`, minutes: 15 },
+  },
+  {
+    title: 'New passphrase',
+    message: { template: 'reset-passphrase', link: `https://saltmarsh.example/renew/${token}`, minutes: 30 },
+  },
+  {
+    title: 'Address joined already',
+    message: {
+      template: 'address-already-joined',
+      name: 'Wren',
+      signInLink: 'https://saltmarsh.example/sign-in',
+      resetLink: 'https://saltmarsh.example/renew',
+    },
+  },
+  {
+    title: 'Passphrase changed',
+    message: {
+      template: 'passphrase-changed',
+      name: 'Wren',
+      when: '2026-12-01T14:40:00Z',
+      resetLink: 'https://saltmarsh.example/renew',
+    },
+  },
+  {
+    title: 'Order paid, with a coupon',
+    message: {
+      template: 'order-paid',
+      name: 'Wren',
+      orderNumber: 'W-2026-0417',
+      receiptNumber: '2026-000391',
+      lines: [
+        {
+          kit: 'Curlew',
+          licence: 'personal prints',
+          revision: 'Mk 1.4',
+          total: eur(1600),
+          discount: eur(800),
+        },
+        { kit: 'Reed Bunting', licence: 'classroom', revision: 'Mk 2.0', total: eur(3900) },
+      ],
+      subtotal: eur(6300),
+      discount: eur(800),
+      couponCode: 'FIRSTWIND',
+      total: eur(5500),
+      tax: [{ rateLabel: 'VAT 19 %', amount: eur(878) }],
+      link: page,
+      linkDays: 30,
+      linkUses: 5,
+      orderLink: 'https://saltmarsh.example/orders/W-2026-0417',
+      cautionsLine,
+    },
+  },
+  {
+    title: 'Order of a free kit',
+    message: {
+      template: 'order-paid',
+      orderNumber: 'W-2026-0418',
+      receiptNumber: '2026-000392',
+      lines: [{ kit: 'Clearance gauge', licence: 'personal prints', revision: 'Mk 1.0', total: eur(0) }],
+      subtotal: eur(0),
+      total: eur(0),
+      tax: [],
+      link: page,
+      linkDays: 30,
+      linkUses: 5,
+      orderLink: 'https://saltmarsh.example/orders/W-2026-0418',
+      cautionsLine,
+    },
+  },
+  {
+    title: 'New download link',
+    message: {
+      template: 'new-download-link',
+      link: page,
+      linkDays: 30,
+      linkUses: 5,
+      kits: ['Curlew', 'Reed Bunting'],
+    },
+  },
+  {
+    title: 'Refund',
+    message: {
+      template: 'order-refunded',
+      name: 'Wren',
+      orderNumber: 'W-2026-0417',
+      receiptNumber: '2026-000391',
+      creditNoteNumber: '2026-C00012',
+      amount: eur(1600),
+      tax: [{ rateLabel: 'VAT 19 %', amount: eur(255) }],
+      endedKits: ['Curlew'],
+      keptKits: ['Reed Bunting'],
+      orderLink: 'https://saltmarsh.example/orders/W-2026-0417',
+    },
+  },
+  {
+    title: 'Staff invitation',
+    message: {
+      template: 'staff-invite',
+      name: 'Sedge',
+      role: 'helper',
+      invitedBy: 'Marlow',
+      link: `https://saltmarsh.example/invited/${token}`,
+      days: 7,
+    },
+  },
+  {
+    title: 'New revision, with parts to reprint',
+    message: {
+      template: 'revision-released',
+      name: 'Wren',
+      kit: 'Curlew',
+      from: 'Mk 1.2',
+      to: 'Mk 1.4',
+      reprint: [
+        { code: 'J-01', name: 'Locking tongue', quantity: 2, why: 'Too tight in PETG on most printers.' },
+        {
+          code: 'R-01',
+          name: 'Lip rail',
+          quantity: 1,
+          why: 'Reprint if it troubles you: whistles in the top octave.',
+        },
+      ],
+      link: 'https://saltmarsh.example/shelf/curlew',
+      kitColourHex: '#e97c48',
+      stopLink: `https://saltmarsh.example/quiet/${token}`,
+    },
+  },
+  {
+    title: 'New revision, nothing to reprint',
+    message: {
+      template: 'revision-released',
+      kit: 'Curlew',
+      from: 'Mk 1.4',
+      to: 'Mk 1.5',
+      reprint: [],
+      link: 'https://saltmarsh.example/shelf/curlew',
+    },
+  },
+  {
+    title: 'Gift',
+    message: {
+      template: 'gift-received',
+      name: 'Wren',
+      from: 'Marlow',
+      kit: 'Curlew',
+      licence: 'personal prints',
+      revision: 'Mk 1.4',
+      note: 'For the long evenings. I shall want to hear it in spring.',
+      link: page,
+      linkDays: 90,
+      linkUses: 5,
+      cautionsLine,
+    },
+  },
+];

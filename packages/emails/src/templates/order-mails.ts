@@ -1,0 +1,101 @@
+import { add, formatMoney, type Money } from '@windchest/money';
+import type { EmailBlock, EmailContent, PriceSum } from '../email-content.js';
+import type { EmailWorkshop, OrderPaidMessage, OrderRefundedMessage, PaidLine } from '../email-message.js';
+import { greetedName } from '../plain-text.js';
+import { texts } from '../texts.js';
+
+const say = (text: string) => ({ kind: 'paragraph', text }) as const;
+const minus = (shown: string): string => `\u2212${shown}`;
+
+export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): EmailContent {
+  const words = texts.orderPaid;
+  const show = (amount: Money): string => formatMoney(amount, workshop.locale);
+  const isFree = message.total.minor === 0;
+
+  // The column shows prices before the discount, so that it adds up to the subtotal under it.
+  const lineRow = ({ kit, licence, revision, total, discount }: PaidLine) => {
+    const isLowered = discount !== undefined && discount.minor > 0;
+    return {
+      title: kit,
+      detail: words.lineDetail(texts.unbroken(revision), licence, isLowered ? show(discount) : undefined),
+      amount: show(isLowered ? add(total, discount) : total),
+    };
+  };
+  const { discount } = message;
+  const lowered: PriceSum[] =
+    discount === undefined || discount.minor === 0
+      ? []
+      : [
+          { label: words.subtotal, amount: show(message.subtotal) },
+          { label: words.discount(message.couponCode), amount: minus(show(discount)) },
+        ];
+
+  return {
+    subject: words.subject(message.lines.map(({ kit }) => kit)),
+    preheader: words.preheader(message.orderNumber, show(message.total)),
+    heading: words.heading,
+    blocks: [
+      say(texts.hello(greetedName(message.name))),
+      say(isFree ? words.free : words.paid(show(message.total))),
+      { kind: 'button', label: words.button, link: message.link },
+      { kind: 'paragraph', text: words.limits(message.linkDays, message.linkUses), isSoft: true },
+      {
+        kind: 'price-table',
+        rows: message.lines.map(lineRow),
+        sums: [
+          ...lowered,
+          { label: words.total, amount: show(message.total), isTotal: true },
+          ...message.tax.map(({ rateLabel, amount }) => ({
+            label: words.taxWithin(texts.unbroken(rateLabel)),
+            amount: show(amount),
+            isSoft: true,
+          })),
+        ],
+      },
+      { kind: 'note', label: words.cautions, text: message.cautionsLine },
+      {
+        kind: 'title-block',
+        cells: [
+          { label: words.orderLabel, value: message.orderNumber, link: message.orderLink },
+          { label: words.receiptLabel, value: message.receiptNumber },
+        ],
+      },
+    ],
+    reason: words.reason,
+  };
+}
+
+export function orderRefunded(message: OrderRefundedMessage, workshop: EmailWorkshop): EmailContent {
+  const words = texts.orderRefunded;
+  const amount = formatMoney(message.amount, workshop.locale);
+  const kits: EmailBlock[] = [];
+  if (message.endedKits.length > 0) kits.push(say(words.ended(message.endedKits)));
+  if (message.keptKits && message.keptKits.length > 0) kits.push(say(words.kept(message.keptKits)));
+  const taxCells = (message.tax ?? []).map((line) => ({
+    label: words.taxWithin(texts.unbroken(line.rateLabel)),
+    value: formatMoney(line.amount, workshop.locale),
+  }));
+
+  return {
+    subject: words.subject(amount, message.orderNumber),
+    preheader: words.preheader(message.creditNoteNumber),
+    heading: words.heading(amount),
+    blocks: [
+      say(texts.hello(greetedName(message.name))),
+      say(words.body(amount)),
+      ...kits,
+      { kind: 'button', label: words.button, link: message.orderLink },
+      {
+        kind: 'title-block',
+        cells: [
+          { label: words.orderLabel, value: message.orderNumber },
+          { label: words.receiptLabel, value: message.receiptNumber },
+          { label: words.creditNoteLabel, value: message.creditNoteNumber },
+          { label: words.amountLabel, value: amount },
+          ...taxCells,
+        ],
+      },
+    ],
+    reason: words.reason,
+  };
+}

@@ -1,0 +1,181 @@
+/** All words of the mails. Short, plain, concrete; buttons are verbs; a no-break space holds `Mk 1.4`. */
+
+const nbsp = '\u00a0';
+const lists = new Intl.ListFormat('en-GB', { type: 'conjunction' });
+
+/** `1 day`, `30 days`, held together on one line. */
+export const countOf = (count: number, word: string): string =>
+  `${count}${nbsp}${word}${count === 1 ? '' : 's'}`;
+
+/** `Curlew`, `Curlew and Heron`, `Curlew, Heron and Wren`. */
+export const listOf = (names: readonly string[]): string => lists.format(names);
+
+const kitsInShort = (kits: readonly string[]): string =>
+  kits.length > 2 ? `${kits[0] ?? ''} and ${kits.length - 1} more kits` : listOf(kits);
+
+const linkLimits = (linkDays: number, linkUses: number): string =>
+  `The link works for ${countOf(linkDays, 'day')} and ${countOf(linkUses, 'download')}.`;
+
+const ignoreIt = 'If you did not ask for this, do nothing.';
+
+export const texts = {
+  hello: (name: string | undefined): string => (name === undefined ? 'Hello,' : `Hello ${name},`),
+  replies: (replyTo: string): string => `Questions? Write to ${replyTo}.`,
+  pasteLink: 'Or copy this address into your browser:',
+  unbroken: (label: string): string => label.replaceAll(' ', nbsp),
+
+  verifyAddress: {
+    subject: (workshop: string): string => `Confirm your address for ${workshop}`,
+    preheader: (hours: number): string => `One press, within ${countOf(hours, 'hour')}.`,
+    heading: 'Confirm your e-mail address',
+    body: (workshop: string): string =>
+      `Somebody, most likely you, made an account at ${workshop} with this address. Confirm it, and orders made with it appear on your shelf.`,
+    button: 'Confirm this address',
+    limits: (hours: number): string =>
+      `The link works for ${countOf(hours, 'hour')}. If it was not you, do nothing: the address stays unconfirmed.`,
+    reason: 'You get this because this address was used to make an account.',
+  },
+
+  signInLink: {
+    subject: (workshop: string): string => `Your sign-in link for ${workshop}`,
+    preheader: (minutes: number): string => `Good for one sign-in, within ${countOf(minutes, 'minute')}.`,
+    heading: 'Sign in',
+    body: 'Here is the link you asked for. It takes the place of your passphrase this once.',
+    button: 'Sign in',
+    limits: (minutes: number): string =>
+      `The link works once, within ${countOf(minutes, 'minute')}. Pass it on to nobody. ${ignoreIt}`,
+    reason: 'You get this because a sign-in link was asked for with this address.',
+  },
+
+  resetPassphrase: {
+    subject: (workshop: string): string => `Choose a new passphrase for ${workshop}`,
+    preheader: (minutes: number): string => `The link works for ${countOf(minutes, 'minute')}.`,
+    heading: 'Choose a new passphrase',
+    body: 'Somebody, most likely you, asked for a new passphrase. The old one holds until you have chosen another.',
+    button: 'Choose a passphrase',
+    limits: (minutes: number): string =>
+      `The link works once, within ${countOf(minutes, 'minute')}. Pass it on to nobody. ${ignoreIt}`,
+    reason: 'You get this because a new passphrase was asked for with this address.',
+  },
+
+  addressAlreadyJoined: {
+    subject: (workshop: string): string => `You have an account at ${workshop} already`,
+    preheader: 'Nothing was changed. Sign in as before.',
+    heading: 'You have an account already',
+    body: (workshop: string): string =>
+      `Somebody, most likely you, tried to join ${workshop} with this address. It has an account already, so nothing was changed.`,
+    next: 'Sign in as before, or choose a new passphrase if the old one is gone. If it was not you, do nothing.',
+    signIn: 'Sign in',
+    reset: 'Choose a passphrase',
+    reason: 'You get this because this address was entered on the page for joining.',
+  },
+
+  passphraseChanged: {
+    subject: (workshop: string): string => `Your passphrase for ${workshop} was changed`,
+    preheader: (when: string): string => `Changed ${when}.`,
+    heading: 'Your passphrase was changed',
+    body: (when: string): string => `The passphrase of your account was changed on ${when}.`,
+    ifYou: 'If that was you, there is nothing to do.',
+    ifNot: 'If it was not you, choose a new passphrase now, then end all sessions in your account.',
+    button: 'Choose a passphrase',
+    open: (workshop: string): string => `Open ${workshop}`,
+    reason: 'You get this because your account was changed. These mails cannot be turned off.',
+  },
+
+  orderPaid: {
+    subject: (kits: readonly string[]): string => `Your files: ${kitsInShort(kits)}`,
+    preheader: (order: string, total: string): string => `Order ${order}, ${total}. Download page inside.`,
+    heading: 'Your files are ready',
+    paid: (total: string): string => `Thank you. Your payment of ${total} has arrived.`,
+    free: 'Thank you. There was nothing to pay.',
+    button: 'Open the download page',
+    limits: (linkDays: number, linkUses: number): string =>
+      `${linkLimits(linkDays, linkUses)} After that, get a new one on the page of your order.`,
+    lineDetail: (revision: string, licence: string, discount: string | undefined): string =>
+      discount === undefined ? `${revision}, ${licence}` : `${revision}, ${licence}, ${discount} off`,
+    subtotal: 'Subtotal',
+    discount: (code: string | undefined): string => (code === undefined ? 'Discount' : `Coupon ${code}`),
+    total: 'Total',
+    taxWithin: (rateLabel: string): string => `of which ${rateLabel}`,
+    cautions: 'Before you print and play',
+    orderLabel: 'Order',
+    receiptLabel: 'Receipt',
+    reason: 'You get this because you placed an order.',
+  },
+
+  newDownloadLink: {
+    subject: (kits: readonly string[]): string => `New download link: ${kitsInShort(kits)}`,
+    preheader: 'The earlier link no longer works.',
+    heading: 'Your new download link',
+    body: (kits: readonly string[]): string => `It is for ${listOf(kits)}. The earlier link no longer works.`,
+    button: 'Open the download page',
+    limits: linkLimits,
+    reason: 'You get this because a new link was asked for, for files you have a right to.',
+  },
+
+  orderRefunded: {
+    subject: (amount: string, order: string): string => `Refund of ${amount} for order ${order}`,
+    preheader: (creditNote: string): string => `Credit note ${creditNote}.`,
+    heading: (amount: string): string => `${amount} is on its way back`,
+    body: (amount: string): string =>
+      `${amount} goes back to the card or account you paid with. The bank may take some days to show it.`,
+    ended: (kits: readonly string[]): string =>
+      kits.length === 1
+        ? `With this refund your right to the files of ${listOf(kits)} ends. It is no longer on your shelf.`
+        : `With this refund your right to the files of ${listOf(kits)} ends. They are no longer on your shelf.`,
+    kept: (kits: readonly string[]): string =>
+      `${listOf(kits)} ${kits.length === 1 ? 'stays' : 'stay'} on your shelf.`,
+    button: 'Open your order',
+    taxWithin: (rateLabel: string): string => `of which ${rateLabel}`,
+    orderLabel: 'Order',
+    receiptLabel: 'Receipt',
+    creditNoteLabel: 'Credit note',
+    amountLabel: 'Refunded',
+    reason: 'You get this because money for an order of yours was refunded.',
+  },
+
+  staffInvite: {
+    subject: (workshop: string): string => `An invitation to work at ${workshop}`,
+    preheader: (role: string, days: number): string => `As ${role}. Open for ${countOf(days, 'day')}.`,
+    heading: 'You are invited to the workshop',
+    body: (invitedBy: string, workshop: string, role: string): string =>
+      `${invitedBy} invites you to the workshop side of ${workshop}, as ${role}.`,
+    button: 'Accept the invitation',
+    limits: (days: number): string =>
+      `The link is yours alone and works for ${countOf(days, 'day')}. If you expected no invitation, do nothing.`,
+    reason: 'You get this because somebody at the workshop entered this address.',
+  },
+
+  revisionReleased: {
+    subject: (kit: string, to: string, pieces: number): string =>
+      pieces === 0
+        ? `${kit} ${to} is out, nothing to reprint`
+        : `${kit} ${to} is out, ${countOf(pieces, 'piece')} to reprint`,
+    preheader: (from: string): string => `Compared with ${from}, which you hold.`,
+    heading: (kit: string, to: string): string => `${kit} ${to} is out`,
+    reprint: (from: string, pieces: number): string =>
+      `You hold ${from}. For your build, reprint ${pieces === 1 ? 'one piece' : countOf(pieces, 'piece')}:`,
+    rest: 'Everything else on your bench stays as it is.',
+    nothing: (from: string): string =>
+      `You hold ${from}. For your build no part changes: leave everything as it is.`,
+    getChanged: 'Get the changed parts',
+    getNotes: 'Read what changed',
+    columns: { part: 'Part', print: 'Print', why: 'Why' },
+    times: (quantity: number): string => `×${nbsp}${quantity}`,
+    reason: (kit: string): string => `You get this because ${kit} is on your shelf.`,
+    stop: 'Stop mails about new revisions',
+  },
+
+  giftReceived: {
+    subject: (from: string, kit: string): string => `${from} gives you ${kit}`,
+    preheader: 'Files to print and build an instrument.',
+    heading: (kit: string): string => `${kit} is yours`,
+    body: (from: string, kit: string, revision: string, licence: string): string =>
+      `${from} gives you ${kit}, a musical instrument as files to print and build. You get ${revision}, with the licence “${licence}”.`,
+    button: 'Open the download page',
+    limits: (linkDays: number, linkUses: number): string =>
+      `${linkLimits(linkDays, linkUses)} To keep the kit and get later revisions, make an account with this address.`,
+    cautions: 'Before you print and play',
+    reason: (from: string): string => `You get this because ${from} entered this address for a gift.`,
+  },
+};

@@ -1,0 +1,10 @@
+export { MoneyError, type MoneyErrorCode } from './money-error.js';
+export { currencyCodes, currencyExponent, isCurrencyCode } from './currency-exponents.js';
+export { add, compare, isSameMoney, money, multiply, subtract, sum, zero, type Money } from './money.js';
+export { fraction, percent, percentOf, type Percent } from './percent.js';
+export { spread } from './spread.js';
+export { applyCoupon, type CouponLine, type CouponWorth } from './coupon.js';
+export { taxFromGross, taxFromNet, type TaxSplit } from './tax.js';
+export { refundOf, type RefundableLine } from './refund.js';
+export { decimalText, formatMoney, formatPercent } from './format-money.js';
+export { parseMoney } from './parse-money.js';
