@@ -1,0 +1,24 @@
+import { Column, DataType, Model, Table } from 'sequelize-typescript';
+import { IdColumn, MomentColumn } from '../database/columns.js';
+
+export type EntitlementSource = 'purchase' | 'pledge' | 'gift' | 'staff';
+export type EntitlementState = 'active' | 'suspended' | 'ended';
+
+/** A person's right to a kit's files. Bought without an account it stands under the address alone. */
+@Table({ tableName: 'entitlements', timestamps: false })
+export class Entitlement extends Model {
+  @IdColumn() declare id: string;
+  @Column(DataType.CHAR(36)) declare personId: string | null;
+  @Column(DataType.STRING(254)) declare email: string;
+  @Column(DataType.CHAR(36)) declare kitId: string;
+  @Column(DataType.CHAR(36)) declare licenceId: string | null;
+  @Column(DataType.STRING(20)) declare source: EntitlementSource;
+  @Column(DataType.CHAR(36)) declare orderId: string | null;
+  @Column(DataType.CHAR(36)) declare orderLineId: string | null;
+  @Column(DataType.STRING(20)) declare state: EntitlementState;
+  @Column(DataType.CHAR(36)) declare heldRevisionId: string | null;
+  @MomentColumn({ isNullable: true }) declare heldSince: Date | null;
+  @MomentColumn() declare createdAt: Date;
+  @MomentColumn() declare updatedAt: Date;
+  @MomentColumn({ isNullable: true }) declare endedAt: Date | null;
+}

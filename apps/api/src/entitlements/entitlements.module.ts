@@ -1,0 +1,39 @@
+import { Module } from '@nestjs/common';
+import { SequelizeModule } from '@nestjs/sequelize';
+import { AccountsModule } from '../accounts/accounts.module.js';
+import { CatalogueModule } from '../catalogue/catalogue.module.js';
+import { OrdersModule } from '../orders/orders.module.js';
+import { Collections } from './collections.js';
+import { DeliveryController } from './delivery.controller.js';
+import { DownloadLink } from './download-link.model.js';
+import { DownloadLinks } from './download-links.js';
+import { Download } from './download.model.js';
+import { Entitlement } from './entitlement.model.js';
+import { FileGrants } from './file-grants.js';
+import { GiveEntitlements } from './give-entitlements.js';
+import { Holders } from './holders.js';
+import { ServeFile } from './serve-file.js';
+import { ShelfController } from './shelf.controller.js';
+import { Shelf } from './shelf.js';
+import { SignedAddress } from './signed-address.js';
+
+@Module({
+  imports: [
+    AccountsModule,
+    CatalogueModule,
+    OrdersModule,
+    SequelizeModule.forFeature([Entitlement, DownloadLink, Download]),
+  ],
+  controllers: [ShelfController, DeliveryController],
+  providers: [
+    DownloadLinks,
+    SignedAddress,
+    FileGrants,
+    ServeFile,
+    GiveEntitlements,
+    Collections,
+    Shelf,
+    Holders,
+  ],
+})
+export class EntitlementsModule {}

@@ -1,0 +1,58 @@
+import { Injectable, type OnModuleInit } from '@nestjs/common';
+import { InjectModel } from '@nestjs/sequelize';
+import { Clock } from '../adapters/clock/clock.js';
+import { AddressVerifiedSteps } from '../accounts/people.js';
+import { newId } from '../database/columns.js';
+import type { Tx } from '../database/transactions.js';
+import { OrderPaidSteps, type PaidOrder } from '../orders/order-paid-steps.js';
+import { DownloadLinks } from './download-links.js';
+import { Entitlement } from './entitlement.model.js';
+
+/** Gives what was paid for, inside the transaction that marks the order paid; joins it to the account of its address. */
+@Injectable()
+export class GiveEntitlements implements OnModuleInit {
+  constructor(
+    @InjectModel(Entitlement) private readonly entitlements: typeof Entitlement,
+    private readonly links: DownloadLinks,
+    private readonly orderPaid: OrderPaidSteps,
+    private readonly addressVerified: AddressVerifiedSteps,
+    private readonly clock: Clock,
+  ) {}
+
+  onModuleInit(): void {
+    this.orderPaid.register({ name: 'entitlements', order: 20, run: (tx, order) => this.give(tx, order) });
+    this.addressVerified.register({
+      name: 'entitlements',
+      order: 20,
+      run: (tx, person) => this.claim(tx, person.id, person.email),
+    });
+  }
+
+  private async give(tx: Tx, order: PaidOrder): Promise<void> {
+    const now = this.clock.now();
+    await this.entitlements.bulkCreate(
+      order.lines.map((line) => ({
+        id: newId(),
+        personId: order.personId,
+        email: order.email,
+        kitId: line.kitId,
+        licenceId: line.licenceId,
+        source: 'purchase',
+        orderId: order.id,
+        orderLineId: line.id,
+        state: 'active',
+        createdAt: now,
+        updatedAt: now,
+      })),
+      { transaction: tx },
+    );
+    order.facts.linkId = await this.links.issue(tx, order.id, order.email);
+  }
+
+  private async claim(tx: Tx, personId: string, email: string): Promise<void> {
+    await this.entitlements.update(
+      { personId, updatedAt: this.clock.now() },
+      { where: { email, personId: null }, transaction: tx },
+    );
+  }
+}

@@ -1,0 +1,142 @@
+import { Injectable } from '@nestjs/common';
+import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { Answer } from '@windchest/contracts';
+import type { Sequelize } from 'sequelize';
+import { Clock } from '../adapters/clock/clock.js';
+import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { selectRows } from '../database/rows.js';
+import type { SignedIn } from '../http/person.js';
+import { notFound } from '../http/refusal.js';
+import { Download } from './download.model.js';
+import { Entitlement } from './entitlement.model.js';
+import { toShelfRevision } from './shelf-revision.js';
+
+const PAGE_SIZE = 24;
+
+/** Where a person's kits stand: the revision held, the newest one, and what differs between them. */
+@Injectable()
+export class Shelf {
+  constructor(
+    @InjectConnection() private readonly database: Sequelize,
+    @InjectModel(Entitlement) private readonly entitlements: typeof Entitlement,
+    @InjectModel(Download) private readonly downloads: typeof Download,
+    private readonly catalogue: CatalogueReader,
+    private readonly clock: Clock,
+  ) {}
+
+  async ownedSlugs(person: SignedIn): Promise<string[]> {
+    const mine = await this.entitlements.findAll({
+      attributes: ['kitId'],
+      where: { personId: person.id, state: 'active' },
+      group: ['kitId'],
+    });
+    return (await this.catalogue.kitsByIds(mine.map((one) => one.kitId))).map((kit) => kit.slug);
+  }
+
+  async list(person: SignedIn, page: number): Promise<Answer<'GET /shelf'>> {
+    const rows = await selectRows<{ kitId: string; total: number }>(
+      this.database,
+      `SELECT kit_id AS kitId, COUNT(*) OVER () AS total FROM entitlements WHERE person_id = :personId AND state = 'active'
+       GROUP BY kit_id ORDER BY MAX(created_at) DESC, kit_id LIMIT :limit OFFSET :offset`,
+      { personId: person.id, limit: PAGE_SIZE, offset: (page - 1) * PAGE_SIZE },
+    );
+    const items = await Promise.all(rows.map(({ kitId }) => this.itemOf(person, kitId)));
+    return {
+      items: items.flatMap((item) => item ?? []),
+      page,
+      size: PAGE_SIZE,
+      total: Number(rows[0]?.total ?? 0),
+    };
+  }
+
+  async read(person: SignedIn, slug: string): Promise<Answer<'GET /shelf/:slug'>> {
+    const kit = await this.catalogue.kitBySlug(slug);
+    const item = kit && (await this.itemOf(person, kit.id));
+    if (!kit || !item) throw notFound('kit on your shelf');
+    const best = await this.bestOf(person, kit.id);
+    const [revisions, parts, documents, cautions, downloads, [licence]] = await Promise.all([
+      this.catalogue.revisionsOf(kit.id),
+      this.catalogue.differences(item.held?.id ?? null, item.newest.id),
+      this.catalogue.documentsOf(item.newest.id),
+      this.catalogue.cautionsOf(item.newest.id),
+      this.downloadsOf(person, kit.id),
+      this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
+    ]);
+    const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
+    return {
+      ...item,
+      orderId: best?.orderId ?? null,
+      revisions: revisions.map(toShelfRevision),
+      parts,
+      documents,
+      licenceTerms: licence?.terms ?? '',
+      cautions,
+      downloads: downloads.map((one) => ({
+        at: one.grantedAt.toISOString(),
+        revision: labels.get(one.revisionId) ?? '',
+        fileName: one.fileName,
+        isComplete: one.completedAt !== null,
+      })),
+    };
+  }
+
+  async sayHeld(person: SignedIn, slug: string, revisionId: string): Promise<Answer<'GET /shelf/:slug'>> {
+    const kit = await this.catalogue.kitBySlug(slug);
+    const best = kit && (await this.bestOf(person, kit.id));
+    const revision = kit && (await this.catalogue.revisionsOf(kit.id)).find((one) => one.id === revisionId);
+    if (!best || !revision) throw notFound('kit on your shelf');
+    const now = this.clock.now();
+    await this.entitlements.update(
+      { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
+      { where: { personId: person.id, kitId: best.kitId, state: 'active' } },
+    );
+    return this.read(person, slug);
+  }
+
+  private async itemOf(
+    person: SignedIn,
+    kitId: string,
+  ): Promise<Answer<'GET /shelf'>['items'][number] | null> {
+    const best = await this.bestOf(person, kitId);
+    const [kit] = await this.catalogue.kitsByIds([kitId]);
+    const revisions = await this.catalogue.revisionsOf(kitId);
+    const newest = revisions.find((one) => !one.isWithdrawn);
+    if (!best || !kit || !newest) return null;
+    const held = revisions.find((one) => one.id === best.heldRevisionId);
+    const [licence] = await this.catalogue.licencesByIds(best.licenceId ? [best.licenceId] : []);
+    return {
+      slug: kit.slug,
+      name: kit.name,
+      tagline: kit.tagline,
+      colour: kit.colour,
+      source: best.source,
+      since: best.createdAt.toISOString(),
+      licenceName: licence?.name ?? '',
+      held: held ? toShelfRevision(held) : null,
+      newest: toShelfRevision(newest),
+    };
+  }
+
+  /** Of several entitlements to one kit: the one whose files were fetched last, else the first. */
+  private bestOf(person: SignedIn, kitId: string): Promise<Entitlement | null> {
+    return this.entitlements.findOne({
+      where: { personId: person.id, kitId, state: 'active' },
+      order: [
+        ['heldSince', 'DESC'],
+        ['createdAt', 'ASC'],
+      ],
+    });
+  }
+
+  private async downloadsOf(person: SignedIn, kitId: string): Promise<Download[]> {
+    const mine = await this.entitlements.findAll({
+      attributes: ['id'],
+      where: { personId: person.id, kitId },
+    });
+    return this.downloads.findAll({
+      where: { entitlementId: mine.map((one) => one.id) },
+      order: [['grantedAt', 'DESC']],
+      limit: 20,
+    });
+  }
+}
