@@ -1,0 +1,41 @@
+import type Stripe from 'stripe';
+import type { Settings } from './options.js';
+import { VirtualClock } from './state/clock.js';
+import { Random } from './state/random.js';
+import { loadState, saveState } from './state/snapshot.js';
+import type { State } from './state/state.js';
+
+/** Who caused a change: the API call that did, or nobody (a buyer on the page, the clock). */
+export type Cause = { requestId: string; idempotencyKey: string | null } | null;
+
+/** What every part of the stand-in works with: settings, state, time, chance. */
+export class StandIn {
+  readonly state: State;
+  readonly clock = new VirtualClock();
+  /** For ids. */
+  readonly ids: Random;
+  /** For loss and order of webhooks: apart from `ids`, so that reseeding it cannot repeat an id. */
+  readonly weather: Random;
+  /** Told of each new event; set by the webhook sender. */
+  onEvent: (event: Stripe.Event) => void = () => {};
+
+  constructor(readonly settings: Settings) {
+    this.state = loadState(settings.stateFile, settings.seed);
+    this.clock.offsetMs = this.state.clockOffsetMs;
+    this.ids = new Random(this.state.idRandomState);
+    this.weather = new Random(this.state.weatherRandomState);
+  }
+
+  newId(prefix: string): string {
+    // Checkout sessions alone say in their id that they are of the test mode, and are longer.
+    return prefix === 'cs' ? `cs_test_${this.ids.word(58)}` : `${prefix}_${this.ids.word(24)}`;
+  }
+
+  /** Puts the state on disk if a file is set. Called at the end of everything that may have changed it. */
+  save(): void {
+    this.state.clockOffsetMs = this.clock.offsetMs;
+    this.state.idRandomState = this.ids.state;
+    this.state.weatherRandomState = this.weather.state;
+    if (this.settings.stateFile) saveState(this.settings.stateFile, this.state);
+  }
+}

@@ -1,0 +1,55 @@
+/** What an idempotency key stands for. Kept for 24 hours. */
+export type IdempotentAnswer = {
+  /** The key itself. */
+  id: string;
+  path: string;
+  bodyHash: string;
+  createdMs: number;
+  requestId: string;
+  /** Null while the first call is under way. */
+  answer: { status: number; json: string } | null;
+};
+
+/** An event on its way to the webhook endpoint, until it is taken, given up or lost. */
+export type Delivery = {
+  /** Own id: one event may be under way several times. */
+  id: string;
+  eventId: string;
+  /** Attempts made so far. */
+  attempts: number;
+  /** Virtual time before which no attempt is made. */
+  dueMs: number;
+  /** Deliveries of one batch go out side by side: they are the copies of one event. */
+  batch: string;
+};
+
+/** One line of the delivery log. */
+export type DeliveryAttempt = {
+  deliveryId: string;
+  eventId: string;
+  type: string;
+  attempt: number;
+  atMs: number;
+  outcome: 'delivered' | 'failed' | 'lost' | 'given-up';
+  /** The endpoint's HTTP status; null where there was no answer. */
+  status: number | null;
+  detail: string | null;
+};
+
+/** The weather between the service and the shop, set through the control API. */
+export type WebhookSwitches = {
+  /** Every event waits this long before its first attempt. */
+  delayMs: number;
+  /** Further copies of every event, sent at the same moment. */
+  duplicates: number;
+  /** Events of a quarter of a second are gathered and sent side by side in random order. */
+  shuffle: boolean;
+  /** The part (0 to 1) of all events that never arrive, or the types that never do. */
+  lose: number | string[];
+  /** Nothing is sent until this is false again, or a flush. */
+  paused: boolean;
+};
+
+export function calmWeather(): WebhookSwitches {
+  return { delayMs: 0, duplicates: 0, shuffle: false, lose: 0, paused: false };
+}

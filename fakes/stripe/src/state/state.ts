@@ -1,0 +1,77 @@
+import type Stripe from 'stripe';
+import { Collection } from './collection.js';
+import {
+  calmWeather,
+  type Delivery,
+  type DeliveryAttempt,
+  type IdempotentAnswer,
+  type WebhookSwitches,
+} from './records.js';
+
+/** What a session needs beside the object that the API shows. */
+export type SessionDetail = {
+  /** The session's id. */
+  id: string;
+  lineItems: Stripe.LineItem[];
+  paymentIntentData: { metadata: Stripe.Metadata; description: string | null; receiptEmail: string | null };
+  /** What the buyer typed, kept while a second step waits for an answer. */
+  waiting: { cardNumber: string; cardCountry: string | null; buyer: Buyer } | null;
+};
+
+export type Buyer = { email: string; name: string | null; country: string };
+
+/**
+ * All that the stand-in remembers. A further kind of object is one more collection here, one more file in
+ * `resources/` and one more line in `resources/registry.ts`.
+ */
+export type State = {
+  customers: Collection<Stripe.Customer>;
+  products: Collection<Stripe.Product>;
+  prices: Collection<Stripe.Price>;
+  sessions: Collection<Stripe.Checkout.Session>;
+  sessionDetails: Collection<SessionDetail>;
+  paymentIntents: Collection<Stripe.PaymentIntent>;
+  paymentMethods: Collection<Stripe.PaymentMethod>;
+  charges: Collection<Stripe.Charge>;
+  refunds: Collection<Stripe.Refund>;
+  disputes: Collection<Stripe.Dispute>;
+  events: Collection<Stripe.Event>;
+  idempotentAnswers: Collection<IdempotentAnswer>;
+  deliveries: Collection<Delivery>;
+  attempts: DeliveryAttempt[];
+  switches: WebhookSwitches;
+  clockOffsetMs: number;
+  idRandomState: number;
+  weatherRandomState: number;
+};
+
+/** The state of a stand-in just started, or the one that `saved` (a parsed snapshot) describes. */
+export function openState(seed: number, saved: Partial<Record<keyof State, unknown>> = {}): State {
+  const collection = <T extends { id: string }>(key: keyof State) =>
+    new Collection<T>((saved[key] as T[] | undefined) ?? []);
+  return {
+    customers: collection('customers'),
+    products: collection('products'),
+    prices: collection('prices'),
+    sessions: collection('sessions'),
+    sessionDetails: collection('sessionDetails'),
+    paymentIntents: collection('paymentIntents'),
+    paymentMethods: collection('paymentMethods'),
+    charges: collection('charges'),
+    refunds: collection('refunds'),
+    disputes: collection('disputes'),
+    events: collection('events'),
+    // A call that was under way when the process ended will never be answered: its key is free again.
+    idempotentAnswers: new Collection(
+      ((saved.idempotentAnswers as IdempotentAnswer[] | undefined) ?? []).filter(
+        (kept) => kept.answer !== null,
+      ),
+    ),
+    deliveries: collection('deliveries'),
+    attempts: (saved.attempts as DeliveryAttempt[] | undefined) ?? [],
+    switches: { ...calmWeather(), ...(saved.switches as Partial<WebhookSwitches> | undefined) },
+    clockOffsetMs: (saved.clockOffsetMs as number | undefined) ?? 0,
+    idRandomState: (saved.idRandomState as number | undefined) ?? seed,
+    weatherRandomState: (saved.weatherRandomState as number | undefined) ?? seed,
+  };
+}
