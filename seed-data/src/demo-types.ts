@@ -1,0 +1,141 @@
+import type { Voice } from '@windchest/voicing';
+import type { Solid } from './geometry/solid.js';
+
+export type FilamentColour = 'orange' | 'teal' | 'violet' | 'ochre' | 'blue' | 'rose' | 'moss';
+export type OrientationRule = 'as-exported' | 'may-turn' | 'may-lie';
+export type LicenceKind = 'personal' | 'small-run' | 'classroom';
+export type DemoRole = 'owner' | 'maker' | 'helper' | 'bookkeeper' | 'buyer';
+
+/** A voice with the note it is meant to give; `widthMm` is for drawing a bar or tine, it changes no pitch. */
+export type DemoVoice = Voice & { note: string; widthMm?: number };
+
+export interface DemoPrintSpec {
+  nozzleMm: number;
+  layerMm: number;
+  perimeters: number;
+  topLayers: number;
+  bottomLayers: number;
+  /** 0..1 */
+  infill: number;
+  material: string;
+  supports: 'none';
+  remarks: string;
+}
+
+export interface DemoPart {
+  code: string;
+  name: string;
+  quantity: number;
+  orientation: OrientationRule;
+  /** Only where it differs from the revision's. */
+  printSpec: DemoPrintSpec | null;
+  voice: DemoVoice | null;
+  fileName: string;
+  fileFormat: 'stl' | '3mf';
+}
+
+export interface DemoHardware {
+  quantity: number;
+  unit: string;
+  name: string;
+  remark: string;
+}
+
+/** What buyers of an earlier revision should do about a changed part. */
+export interface DemoMark {
+  code: string;
+  mark: 'reprint needed' | 'reprint if it troubles you';
+  reason: string;
+}
+
+export interface DemoRevision {
+  mark: number;
+  issue: number;
+  /** `Mk 1.0` */
+  label: string;
+  state: 'released';
+  assemblyNotes: string;
+  changeNotes: string;
+  cautions: string;
+  printSpec: DemoPrintSpec;
+  hardware: DemoHardware[];
+  buildVolume: { xMm: number; yMm: number; zMm: number };
+  declaredCents: number;
+  room: { temperatureC: number };
+  parts: DemoPart[];
+  marks: DemoMark[];
+}
+
+export interface DemoLicence {
+  kind: LicenceKind;
+  name: string;
+  terms: string;
+  priceMinor: number;
+  yearlyLimit: number | null;
+}
+
+export interface DemoKit {
+  slug: string;
+  name: string;
+  tagline: string;
+  description: string;
+  colour: FilamentColour;
+  licences: DemoLicence[];
+  /** Oldest first. */
+  revisions: DemoRevision[];
+}
+
+export interface DemoCoupon {
+  code: string;
+  label: string;
+  off: { kind: 'fraction'; numerator: number; denominator: number } | { kind: 'amount'; minor: number };
+  kitSlugs: string[];
+  cap: number | null;
+  perBuyer: number | null;
+  isAnnounced: boolean;
+}
+
+export interface DemoPerson {
+  role: DemoRole;
+  name: string;
+  email: string;
+  countryCode: string;
+  isVerified: boolean;
+}
+
+export interface DemoPurchase {
+  buyerEmail: string;
+  lines: { kitSlug: string; licence: LicenceKind }[];
+  couponCode: string | null;
+  /** The newest revision of the first kit when it was bought, and so the one the buyer holds. */
+  boughtAt: string;
+}
+
+export interface DemoWorkshop {
+  workshop: {
+    name: string;
+    motto: string;
+    about: string;
+    currency: 'EUR';
+    countryCode: string;
+    legalName: string;
+    addressLines: string[];
+    email: string;
+  };
+  people: DemoPerson[];
+  kits: DemoKit[];
+  coupons: DemoCoupon[];
+  purchases: DemoPurchase[];
+}
+
+/** A part together with what draws its mesh. */
+export interface PlannedPart {
+  part: DemoPart;
+  shape: () => Solid;
+}
+
+export interface KitPlan {
+  kit: DemoKit;
+  /** By revision label. */
+  planned: ReadonlyMap<string, readonly PlannedPart[]>;
+}

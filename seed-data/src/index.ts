@@ -1,0 +1,18 @@
+export { demoWorkshop } from './demo-workshop.js';
+export type {
+  DemoCoupon,
+  DemoHardware,
+  DemoKit,
+  DemoLicence,
+  DemoMark,
+  DemoPart,
+  DemoPerson,
+  DemoPrintSpec,
+  DemoPurchase,
+  DemoRevision,
+  DemoRole,
+  DemoVoice,
+  DemoWorkshop,
+} from './demo-types.js';
+export { generateFiles, type GeneratedFile } from './generate-files.js';
+export { demoSignIns, type DemoSignIn } from './sign-ins.js';

@@ -1,0 +1,66 @@
+import type { DemoPerson, DemoPurchase } from './demo-types.js';
+
+export const people: DemoPerson[] = [
+  {
+    role: 'owner',
+    name: 'Merrin Holloway',
+    email: 'merrin@saltmarsh.example',
+    countryCode: 'IE',
+    isVerified: true,
+  },
+  {
+    role: 'maker',
+    name: 'Tamsin Quill',
+    email: 'tamsin@saltmarsh.example',
+    countryCode: 'IE',
+    isVerified: true,
+  },
+  {
+    role: 'helper',
+    name: 'Odo Fenwick',
+    email: 'odo@saltmarsh.example',
+    countryCode: 'IE',
+    isVerified: true,
+  },
+  {
+    role: 'bookkeeper',
+    name: 'Ines Varga',
+    email: 'ines@saltmarsh.example',
+    countryCode: 'IE',
+    isVerified: true,
+  },
+  { role: 'buyer', name: 'Pia Lund', email: 'pia.lund@mail.example', countryCode: 'DK', isVerified: true },
+  {
+    role: 'buyer',
+    name: 'Jonas Abara',
+    email: 'jonas.abara@mail.example',
+    countryCode: 'DE',
+    isVerified: true,
+  },
+  { role: 'buyer', name: 'Rhea Moss', email: 'rhea.moss@mail.example', countryCode: 'FR', isVerified: false },
+];
+
+/** Pia bought Curlew before its second issue came out: she has parts to reprint. */
+export const purchases: DemoPurchase[] = [
+  {
+    buyerEmail: 'pia.lund@mail.example',
+    lines: [{ kitSlug: 'curlew', licence: 'personal' }],
+    couponCode: 'WINDFALL',
+    boughtAt: 'Mk 1.0',
+  },
+  {
+    buyerEmail: 'jonas.abara@mail.example',
+    lines: [
+      { kitSlug: 'teal', licence: 'personal' },
+      { kitSlug: 'godwit', licence: 'personal' },
+    ],
+    couponCode: 'CHIME2',
+    boughtAt: 'Mk 1.0',
+  },
+  {
+    buyerEmail: 'jonas.abara@mail.example',
+    lines: [{ kitSlug: 'dunlin', licence: 'personal' }],
+    couponCode: null,
+    boughtAt: 'Mk 1.0',
+  },
+];
