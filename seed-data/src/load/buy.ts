@@ -1,0 +1,66 @@
+import type { DemoPerson, DemoPurchase } from '../demo-types.js';
+import { waitFor, type ShopBrowser } from './shop-browser.js';
+
+interface KitAnswer {
+  licences: { id: string; kind: string }[];
+}
+interface ShelfAnswer {
+  newest: { id: string };
+}
+
+/** Buys as a person would: basket, checkout, payment page, shelf, bundle. */
+export const buy = async (
+  buyer: ShopBrowser,
+  person: DemoPerson,
+  purchase: DemoPurchase,
+  stripeUrl: string,
+): Promise<void> => {
+  const items = await Promise.all(
+    purchase.lines.map(async ({ kitSlug, licence }) => {
+      const { licences } = await buyer.get<KitAnswer>(`/kits/${kitSlug}`);
+      const found = licences.find((one) => one.kind === licence);
+      if (!found) throw new Error(`${kitSlug} has no licence of the kind ${licence}.`);
+      return { licenceId: found.id };
+    }),
+  );
+  const { orderId, orderKey, paymentUrl } = await buyer.post<{
+    orderId: string;
+    orderKey: string;
+    paymentUrl: string | null;
+  }>('/checkout', {
+    items,
+    ...(purchase.couponCode ? { couponCode: purchase.couponCode } : {}),
+    email: person.email,
+    country: person.countryCode,
+    hasConsented: true,
+    attempt: crypto.randomUUID(),
+  });
+  if (paymentUrl) await pay(stripeUrl, paymentUrl, person);
+  await waitFor(
+    'The payment',
+    () => buyer.get<{ state: string }>(`/orders/${orderId}?key=${orderKey}`),
+    (order) => order.state === 'paid',
+  );
+
+  for (const { kitSlug } of purchase.lines) {
+    const { newest } = await buyer.get<ShelfAnswer>(`/shelf/${kitSlug}`);
+    const grant = await buyer.post<{ url: string }>('/shelf/grants', { kitSlug, revisionId: newest.id });
+    await buyer.download(grant.url);
+  }
+};
+
+const pay = async (stripeUrl: string, paymentUrl: string, person: DemoPerson): Promise<void> => {
+  const session = /\/(cs_[A-Za-z0-9_]+)/.exec(paymentUrl)?.[1];
+  const response = await fetch(`${stripeUrl}/control/sessions/${session}/pay`, {
+    method: 'POST',
+    headers: { 'Content-Type': 'application/json' },
+    body: JSON.stringify({
+      country: person.countryCode,
+      cardCountry: person.countryCode,
+      email: person.email,
+      outcome: 'succeed',
+    }),
+  });
+  if (!response.ok)
+    throw new Error(`The payment stand-in answered ${response.status}: ${await response.text()}`);
+};
