@@ -2,6 +2,7 @@ import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import { getConnectionToken } from '@nestjs/sequelize';
 import { SwaggerModule } from '@nestjs/swagger';
+import compression from 'compression';
 import passport from 'passport';
 import type { Sequelize } from 'sequelize';
 import { sessions } from './accounts/session-middleware.js';
@@ -31,6 +32,13 @@ export const furnishApp = async (
   app.disable('x-powered-by');
   app.use(requestLog(logger));
   app.use(securityHeaders(config.BASE_URL));
+  // Files go out as they are: compressing them would break ranges and hashes.
+  app.use(
+    compression({
+      filter: (request, response) =>
+        !request.path.startsWith('/api/files/') && compression.filter(request, response),
+    }),
+  );
   app.useBodyParser('json', { limit: '1mb' });
   app.use('/api', ...sessions(config, database), passport.initialize(), passport.session());
   app.setGlobalPrefix('api');

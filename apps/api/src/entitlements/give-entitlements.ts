@@ -1,9 +1,12 @@
 import { Injectable, type OnModuleInit } from '@nestjs/common';
-import { InjectModel } from '@nestjs/sequelize';
+import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { AddressVerifiedSteps } from '../accounts/people.js';
 import { newId } from '../database/columns.js';
+import { selectRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
+import { OrderFacts } from '../orders/order-facts.js';
 import { OrderPaidSteps, type PaidOrder } from '../orders/order-paid-steps.js';
 import { DownloadLinks } from './download-links.js';
 import { Entitlement } from './entitlement.model.js';
@@ -12,14 +15,17 @@ import { Entitlement } from './entitlement.model.js';
 @Injectable()
 export class GiveEntitlements implements OnModuleInit {
   constructor(
+    @InjectConnection() private readonly database: Sequelize,
     @InjectModel(Entitlement) private readonly entitlements: typeof Entitlement,
     private readonly links: DownloadLinks,
     private readonly orderPaid: OrderPaidSteps,
+    private readonly orderFacts: OrderFacts,
     private readonly addressVerified: AddressVerifiedSteps,
     private readonly clock: Clock,
   ) {}
 
   onModuleInit(): void {
+    this.orderFacts.registerDownloads((orderId) => this.countDownloads(orderId));
     this.orderPaid.register({ name: 'entitlements', order: 20, run: (tx, order) => this.give(tx, order) });
     this.addressVerified.register({
       name: 'entitlements',
@@ -47,6 +53,16 @@ export class GiveEntitlements implements OnModuleInit {
       { transaction: tx },
     );
     order.facts.linkId = await this.links.issue(tx, order.id, order.email);
+  }
+
+  private async countDownloads(orderId: string): Promise<number> {
+    const [row] = await selectRows<{ count: number | string }>(
+      this.database,
+      `SELECT COUNT(*) AS count FROM downloads d JOIN entitlements e ON e.id = d.entitlement_id
+       WHERE e.order_id = :orderId AND d.completed_at IS NOT NULL`,
+      { orderId },
+    );
+    return Number(row?.count ?? 0);
   }
 
   private async claim(tx: Tx, personId: string, email: string): Promise<void> {

@@ -1,17 +1,7 @@
 import type { Answer } from '@windchest/contracts';
+import type { ReleasedRevision } from '../catalogue/catalogue-reader.js';
 
 type ShelfRevision = Answer<'GET /shelf/:slug'>['newest'];
-
-/** A released revision as the catalogue tells of it. */
-export interface ReleasedRevision {
-  id: string;
-  label: string;
-  releasedAt: Date;
-  bundleSha256: string;
-  bundleBytes: number;
-  changeNotes: string;
-  isWithdrawn: boolean;
-}
 
 export const toShelfRevision = (revision: ReleasedRevision): ShelfRevision => ({
   id: revision.id,
