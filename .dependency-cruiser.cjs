@@ -21,7 +21,7 @@ const mayUse = {
   letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
   journal: ['accounts', 'catalogue'],
   ledger: ['accounts', 'catalogue', 'orders'],
-  workshop: [...'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' ')],
+  workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),
 };
 const lowerLayers = 'adapters database jobs mails http config'.split(' ');
 

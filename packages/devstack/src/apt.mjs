@@ -8,11 +8,7 @@ import { step } from './report.mjs';
  */
 
 /** @type {DebianPackage} */
-const mariadb = {
-  name: 'mariadb-server',
-  programs: ['mariadbd', 'mariadb-install-db', 'mariadb-dump'],
-  service: 'mariadb',
-};
+const mariadb = { name: 'mariadb-server', programs: ['mariadbd', 'mariadb-install-db'], service: 'mariadb' };
 /** @type {DebianPackage} */
 const chromium = { name: 'chromium', programs: ['chromium'] };
 /** @type {DebianPackage} */
@@ -32,7 +28,7 @@ export async function ensurePackages(packages, { supervisor, logFile }) {
   const names = missing.map((debianPackage) => debianPackage.name);
   const prefix = rootPrefix();
   if (findProgram('apt-get') === undefined || prefix === undefined) {
-    throw new StandFailure(needsSentence(names));
+    throw new StandFailure(needsSentence(missing));
   }
   await step(`Installing ${names.join(', ')} with apt-get`, async () => {
     const [command = 'sh', ...args] = [...prefix, 'sh', '-c', installScript(missing)];
@@ -42,7 +38,7 @@ export async function ensurePackages(packages, { supervisor, logFile }) {
     }
   });
   const still = missingPackages(packages);
-  if (still.length > 0) throw new StandFailure(needsSentence(still.map(({ name }) => name)));
+  if (still.length > 0) throw new StandFailure(needsSentence(still));
 }
 
 /**
@@ -58,9 +54,10 @@ export function missingPackages(packages, find = findProgram) {
  * distribution's own means) forbids that, and the service is switched off, for this start and the next ones.
  * `--no-remove` keeps a server of another make from being replaced.
  * @param {readonly DebianPackage[]} packages
+ * @param {(debianPackage: DebianPackage) => boolean} [isWhollyMissing] a server that was there stays as it is
  */
-export function installScript(packages) {
-  const services = packages.flatMap(({ service }) => (service === undefined ? [] : [service]));
+export function installScript(packages, isWhollyMissing = ({ programs }) => !programs.some(findProgram)) {
+  const services = packages.filter((each) => isWhollyMissing(each)).flatMap(({ service }) => service ?? []);
   return [
     'set -eu',
     'guard=/usr/sbin/policy-rc.d',
@@ -81,13 +78,21 @@ export function installScript(packages) {
   ].join('\n');
 }
 
-/** @param {string[]} names */
-function needsSentence(names) {
+/** @param {readonly DebianPackage[]} packages */
+function needsSentence(packages) {
+  const names = packages.map(({ name }) => name);
+  const services = packages.flatMap(({ service }) => service ?? []);
   const what =
     names.length === 1 ? `the Debian package ${names[0]}` : `the Debian packages ${names.join(', ')}`;
   return (
     `Windchest needs ${what} and may not install it itself here. ` +
-    `Run "sudo apt-get install --no-install-recommends ${names.join(' ')}" and try again.`
+    `Run "sudo apt-get install --no-install-recommends ${names.join(' ')}" and try again.` +
+    services
+      .map(
+        (service) =>
+          ` Debian then starts a server that Windchest does not use; "sudo systemctl disable --now ${service}" stops it.`,
+      )
+      .join('')
   );
 }
 

@@ -30,8 +30,11 @@ await runCommand(async (supervisor) => {
     const isPrepared = await count(() => suites.asTally(() => prepare(run)));
     if (isPrepared) await runSuites(run, wish.suites, count);
   } catch (error) {
-    const reason = error instanceof Interrupted ? 'The run was interrupted' : 'The run broke off';
-    tally = addUp(tally, failedOnce(reason, error instanceof Error ? error.stack : String(error)));
+    const failure =
+      error instanceof Interrupted
+        ? failedOnce('The run was interrupted', error.message)
+        : failedOnce('The run broke off', error instanceof Error ? error.stack : String(error));
+    tally = addUp(tally, failure);
   }
 
   for (const { title, detail } of tally.failures) say(`\n✗ ${title}\n${detail.replace(/^/gm, '    ')}`);
