@@ -1,0 +1,12 @@
+export type { LengthUnit, Mesh } from './mesh.js';
+export { MeshError, type MeshErrorCode } from './mesh-error.js';
+export { readMesh, type ReadMeshOptions } from './read-mesh.js';
+export { measure, type Measurement } from './measure.js';
+export type { UnitGuess } from './unit-guess.js';
+export type { Vector3 } from './bounds.js';
+export { writeBinaryStl } from './write-stl.js';
+export { geometryHash } from './geometry-hash.js';
+export { compare, isSameGeometry, type Comparison } from './compare.js';
+export { outline, outlines, type Outline, type OutlineOptions } from './outline.js';
+export type { View } from './projection.js';
+export { preview } from './preview.js';
