@@ -3,7 +3,7 @@ import { InjectConnection } from '@nestjs/sequelize';
 import type { Sequelize } from 'sequelize';
 import type { z } from 'zod';
 import { Clock } from '../adapters/clock/clock.js';
-import { touchRows } from '../database/rows.js';
+import { selectRows, touchRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
 import type { JobDefinition } from './job.js';
 import { JobBell } from './job-bell.js';
@@ -44,5 +44,14 @@ export class JobQueue {
       tx,
     );
     if (!options.runAt || options.runAt <= now) tx.afterCommit(() => this.bell.ring());
+  }
+
+  /** Jobs that were tried as often as they may be: somebody has to look. */
+  async countDead(): Promise<number> {
+    const [row] = await selectRows<{ count: number | string }>(
+      this.database,
+      `SELECT COUNT(*) AS count FROM jobs WHERE state = 'dead'`,
+    );
+    return Number(row?.count ?? 0);
   }
 }
