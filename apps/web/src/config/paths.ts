@@ -1,0 +1,78 @@
+type ParamNames<P extends string> = P extends `${infer Head}/${infer Tail}`
+  ? ParamNames<Head> | ParamNames<Tail>
+  : P extends `:${infer Name}`
+    ? Name
+    : never;
+type Query = Readonly<Record<string, string | number | undefined>>;
+type LinkArguments<P extends string> = [ParamNames<P>] extends [never]
+  ? [params?: Record<string, never>, query?: Query]
+  : [params: Record<ParamNames<P>, string>, query?: Query];
+
+export interface RoutePath<P extends string> {
+  /** For the router. */
+  readonly path: P;
+  /** For links: `to({slug: 'curlew'}, {page: 2})`. */
+  readonly to: (...args: LinkArguments<P>) => string;
+}
+
+function route<const P extends string>(path: P): RoutePath<P> {
+  return {
+    path,
+    to: (...[params, query]) => {
+      const filled = path.replace(/:(\w+)/g, (_, name: string) =>
+        encodeURIComponent((params as Record<string, string>)[name] ?? ''),
+      );
+      const pairs = Object.entries(query ?? {}).filter(([, value]) => value !== undefined && value !== '');
+      return pairs.length ? `${filled}?${new URLSearchParams(pairs as [string, string][])}` : filled;
+    },
+  };
+}
+
+/** Every address of the web application. */
+export const paths = {
+  home: route('/'),
+  kit: route('/kits/:slug'),
+  basket: route('/basket'),
+  order: route('/orders/:orderId'),
+  collect: route('/collect/:token'),
+  shelf: route('/shelf'),
+  shelfKit: route('/shelf/:slug'),
+  cautions: route('/cautions'),
+
+  join: route('/join'),
+  signIn: route('/sign-in'),
+  signInLink: route('/sign-in/link'),
+  forgot: route('/forgot'),
+  reset: route('/reset'),
+  verify: route('/verify'),
+  account: route('/account'),
+
+  workshop: {
+    overview: route('/workshop'),
+    kits: route('/workshop/kits'),
+    newKit: route('/workshop/kits/new'),
+    kit: route('/workshop/kits/:kitId'),
+    revision: route('/workshop/kits/:kitId/revisions/:revisionId'),
+    parts: route('/workshop/kits/:kitId/revisions/:revisionId/parts'),
+    notes: route('/workshop/kits/:kitId/revisions/:revisionId/notes'),
+    specification: route('/workshop/kits/:kitId/revisions/:revisionId/specification'),
+    changes: route('/workshop/kits/:kitId/revisions/:revisionId/changes'),
+    files: route('/workshop/kits/:kitId/revisions/:revisionId/files'),
+    gates: route('/workshop/kits/:kitId/revisions/:revisionId/gates'),
+    coupons: route('/workshop/coupons'),
+    newCoupon: route('/workshop/coupons/new'),
+    coupon: route('/workshop/coupons/:couponId'),
+    orders: route('/workshop/orders'),
+    order: route('/workshop/orders/:orderId'),
+    holders: route('/workshop/holders'),
+    people: route('/workshop/people'),
+    log: route('/workshop/log'),
+  },
+} as const;
+
+/** Sign-in, coming back to where one was afterwards. */
+export const signInThenBack = (from: string): string => paths.signIn.to({}, { from });
+
+/** Where to go after signing in: an address of this shop only, so that no link can send a person elsewhere. */
+export const comeBackTo = (from: string | null): string =>
+  from !== null && /^\/(?![/\\])/.test(from) ? from : paths.shelf.to();

@@ -1,0 +1,15 @@
+export const printerTexts = {
+  title: 'My printer',
+  why: 'The shop then says of every kit whether it fits, on how many plates, and how long it prints. The card stays in this browser.',
+  x: 'Width',
+  y: 'Depth',
+  z: 'Height',
+  nozzle: 'Nozzle',
+  material: 'Filament',
+  materialHint: 'PLA, PETG, ABS …',
+  lengthRefused: (most: number) => `Write a length in mm, more than 0 and at most ${most}.`,
+  materialRefused: 'Write which filament you print with, for instance PETG.',
+  keep: 'Keep this printer',
+  forget: 'Forget it',
+  cancel: 'Leave it',
+};

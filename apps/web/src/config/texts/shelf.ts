@@ -1,0 +1,195 @@
+import type { Collection, ShelfItem } from '@windchest/contracts';
+
+const parts = (n: number) => `${n} ${n === 1 ? 'part' : 'parts'}`;
+
+export const sourceTexts: Record<ShelfItem['source'], string> = {
+  purchase: 'Purchase',
+  pledge: 'Pledge',
+  gift: 'Gift',
+  staff: 'Workshop',
+};
+
+export const shelfTexts = {
+  title: 'My shelf',
+  failed: 'The shelf cannot be shown',
+  empty: 'No kits on your shelf yet',
+  emptyDetail: 'What you buy stands here, with every later revision and what to reprint for it.',
+  seeKits: 'See the kits',
+
+  hold: 'You hold',
+  nothingYet: 'Nothing yet',
+  newest: 'Newest',
+  since: (source: string, date: string) => `${source}, ${date}`,
+  get: (label: string) => `Get ${label}`,
+  seeReprint: 'See what to reprint',
+  upToDate: 'You hold the newest',
+  open: 'Open',
+  of: (kit: string) => `of ${kit}`,
+  withdrawn: 'withdrawn',
+
+  signedOutLead: 'What you bought stands here, with every later revision and what to reprint for it.',
+  signIn: 'Sign in',
+  join: 'Join',
+};
+
+export const lostTexts = {
+  title: 'Bought without an account?',
+  why: 'Lost your link? Write the address you bought with. We mail fresh links for its orders; the earlier links then end.',
+  email: 'E-mail of the order',
+  send: 'Mail me fresh links',
+  sending: 'Mailing …',
+  sentTitle: 'Look in your mail',
+  sent: (email: string) => `If ${email} bought kits here, fresh links are on their way to it.`,
+  failed: 'No links were mailed',
+};
+
+export const shelfKitTexts = {
+  failed: 'This kit cannot be shown',
+  notYours: 'This kit is not on your shelf',
+  toShelf: 'To my shelf',
+  back: 'My shelf',
+
+  hold: (label: string) => `You hold ${label}.`,
+  holdNothing: (newest: string) => `${newest} is yours.`,
+  getIt: (count: number) => `Get the bundle and print ${parts(count)}.`,
+  upToDate: 'It is the newest: nothing to reprint.',
+  isOut: (newest: string) => `${newest} is out:`,
+  reprint: (needed: number, all: number) => `reprint ${needed} of ${parts(all)}`,
+  reprintNone: 'nothing to reprint',
+  optional: (count: number, hasNeeded: boolean) =>
+    hasNeeded
+      ? `, ${count} more if ${count === 1 ? 'it troubles' : 'they trouble'} you`
+      : `, ${count} if ${count === 1 ? 'it troubles' : 'they trouble'} you`,
+  rest: (count: number) =>
+    count === 1
+      ? 'The other part is the same; leave it as it is.'
+      : `The other ${count} parts are the same; leave them as they are.`,
+  heldIsNewer: (held: string, newest: string) =>
+    `You hold ${held}. The workshop has withdrawn it; the newest that stands is ${newest}.`,
+  heldWithdrawnTitle: (held: string) => `${held} was withdrawn`,
+  heldWithdrawn: (newest: string) =>
+    `The workshop no longer hands it out. Take ${newest}; its change notes say why.`,
+
+  sheet: (kit: string) => `Parts of ${kit}`,
+  differences: 'What differs',
+  part: 'Part',
+  print: 'Print',
+  times: (count: number) => `× ${count}`,
+  noPrint: 'none',
+  whatDiffers: 'What differs',
+  why: 'Why',
+  ifItTroubles: 'Reprint if it troubles you',
+  newPart: 'A new part',
+  dropped: 'No longer in the kit',
+  unmarked: 'The workshop does not ask for a reprint',
+
+  actions: 'What you can do',
+  getBundle: 'Get the whole bundle',
+  getting: 'Making ready …',
+  getFailed: 'The download did not start',
+  printed: (label: string) => `I have printed ${label}`,
+  printedThis: 'I have printed this',
+  printedTitle: (label: string) => `You have printed ${label}?`,
+  printedDetail: (label: string) =>
+    `The shelf then compares new revisions with ${label} and says what to reprint from there. You can change it again.`,
+  printedConfirm: (label: string) => `Yes, I hold ${label}`,
+  printedFailed: 'What you hold was not changed',
+  changeNotes: 'Change notes',
+  licence: 'Licence',
+  cautions: 'Cautions',
+  receipt: 'Order and receipt',
+  kitPage: 'The kit in the shop',
+  downloads: 'Downloads',
+
+  blockHold: 'You hold',
+  blockNothing: 'Nothing yet',
+  blockNewest: 'Newest',
+  blockSource: 'Yours by',
+  blockSince: 'Since',
+  newestOf: (label: string, date: string) => `${label}, ${date}`,
+
+  noNotes: 'No change notes were written for this revision.',
+  isWithdrawn: 'withdrawn',
+  youHold: 'you hold this',
+  getRevision: (label: string) => `Get ${label}`,
+
+  noTerms: 'The terms stand in the bundle, in LICENCE.txt.',
+  noDownloads: 'Nothing was downloaded yet.',
+  file: 'File',
+  revision: 'Revision',
+  when: 'When',
+  complete: 'Complete',
+  isComplete: 'complete',
+  isNotComplete: 'not complete',
+};
+
+export const collectTexts = {
+  title: 'Your files',
+  failed: 'The link cannot be opened',
+  unknown: 'This link is not one of ours',
+  unknownDetail: 'Check that the whole address was copied from the mail.',
+  order: (number: string) => `Order ${number}`,
+  lead: (kits: number) =>
+    kits === 1
+      ? 'The bundle holds the parts, the build book and the licence.'
+      : 'Each bundle holds the parts, the build book and the licence of its kit.',
+
+  states: {
+    open: { title: '', detail: '' },
+    expired: {
+      title: 'This link has expired',
+      detail: 'Your kits are still yours. A fresh link goes to the address of the order.',
+    },
+    'used-up': {
+      title: 'This link has been used as often as it may be',
+      detail: 'Your kits are still yours. A fresh link goes to the address of the order.',
+    },
+    replaced: {
+      title: 'A newer link has replaced this one',
+      detail: 'Look for it in your mail, or have another mailed to the address of the order.',
+    },
+    ended: {
+      title: 'This order gives no files any more',
+      detail:
+        'It was refunded, or its payment is in dispute. Answer the mail of your order if you think this is wrong.',
+    },
+  } satisfies Record<Collection['state'], { title: string; detail: string }>,
+
+  get: 'Get the bundle',
+  getting: 'Making ready …',
+  getFailed: 'The download did not start',
+  checksum: 'SHA-256',
+  copyChecksum: 'Copy the SHA-256',
+  of: (kit: string) => `of ${kit}`,
+
+  aside: 'About this link',
+  stateName: 'Link',
+  stateWords: {
+    open: 'open',
+    expired: 'expired',
+    'used-up': 'used up',
+    replaced: 'replaced',
+    ended: 'ended',
+  } satisfies Record<Collection['state'], string>,
+  usesLeft: 'Downloads left',
+  goodUntil: 'Good until',
+  endedOn: 'Was good until',
+  orderName: 'Order',
+
+  fresh: 'Mail me a fresh link',
+  freshWhy: 'It goes to the address of the order. This link then ends.',
+  sending: 'Mailing …',
+  freshSentTitle: 'Look in your mail',
+  freshSent: 'A fresh link is on its way to the address of the order.',
+  freshFailed: 'No link was mailed',
+
+  account: 'Keep it on a shelf',
+  accountWhy:
+    'Join with the address of the order, and these kits stand on your shelf with every later revision.',
+  join: 'Join',
+  toShelf: 'Go to my shelf',
+
+  cautions:
+    'Air the room while you print. Wear eye protection when you stretch bands or strings. Small parts: not for children under three.',
+  allCautions: 'All cautions',
+};

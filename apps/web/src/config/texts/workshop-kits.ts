@@ -1,0 +1,137 @@
+import type { FilamentColour, Licence } from '@windchest/contracts';
+
+export const kitsTexts = {
+  title: 'Kits',
+  new: 'Draft a kit',
+  caption: 'Kits of the workshop',
+  search: 'Name or address',
+  columns: {
+    name: 'Kit',
+    newest: 'Newest',
+    draft: 'Draft',
+    price: 'From',
+    listed: 'In the shop',
+    updated: 'Changed',
+  },
+  listed: 'listed',
+  hidden: 'hidden',
+  none: '—',
+  empty: 'No kits yet',
+  emptyDetail: 'A kit starts with a name and a colour; its first revision takes the files.',
+};
+
+export const kitFormTexts = {
+  name: 'Name',
+  slug: 'Address',
+  slugHint: 'The end of the kit’s address in the shop. Small letters, digits and hyphens.',
+  tagline: 'Tagline',
+  taglineHint: 'One sentence: what it is and what is special about it.',
+  description: 'Description',
+  descriptionHint: 'Markdown. How it is played, how it is built, what it takes.',
+  colour: 'Filament colour',
+  colourHint: 'The kit wears it everywhere: its rank, its parts to reprint.',
+  colours: {
+    orange: 'Orange',
+    teal: 'Teal',
+    violet: 'Violet',
+    ochre: 'Ochre',
+    blue: 'Blue',
+    rose: 'Rose',
+    moss: 'Moss',
+  } satisfies Record<FilamentColour, string>,
+  swatch: (colour: string) => `A rank in ${colour.toLowerCase()}`,
+  draft: 'Draft the kit',
+  save: 'Save the words',
+  failed: 'The kit was not saved',
+};
+
+export const newKitTexts = {
+  title: 'Draft a kit',
+  lead: 'It stays hidden until a revision is released and you list it.',
+};
+
+export const kitTexts = {
+  kits: 'Kits',
+  notFound: 'The kit could not be read',
+  words: 'Words and colour',
+  wordsLead: 'Read by everybody who comes to the shop.',
+  revisions: 'Revisions',
+  revisionsCaption: 'Revisions of this kit',
+  revisionColumns: { label: 'Revision', state: 'State', parts: 'Parts', bundle: 'Bundle', date: 'Date' },
+  states: { draft: 'draft', proving: 'in proof', released: 'released', withdrawn: 'withdrawn' },
+  noRevision: 'No revision yet',
+  noRevisionDetail: 'The first one is Mk 1.0. It takes the files, the notes and the print specification.',
+  startFirst: 'Start Mk 1.0',
+  startIssue: (label: string) => `Start ${label} (issue)`,
+  startMark: (label: string) => `Start ${label} (mark)`,
+  issueRule:
+    'An issue: every changed part still fits what people have printed, so old and new parts can be mixed.',
+  markRule:
+    'A mark: some printed parts no longer interchange, so that people who print a new part need others with it.',
+  carried: 'Parts, files, notes and specification are carried over.',
+  openDraft: (label: string) =>
+    `${label} is still in the making. Release it or throw it away before the next one.`,
+  toDraft: (label: string) => `Go on with ${label}`,
+  startFailed: 'The revision was not started',
+
+  licences: 'Licences and prices',
+  licencesCaption: 'Licences of this kit',
+  licenceColumns: {
+    name: 'Licence',
+    price: 'Price',
+    limit: 'Prints a year',
+    offered: 'In the shop',
+    edit: 'Edit',
+  },
+  noLicence: 'No licence yet. A kit is sold by its licences; a gate asks for at least one with a price.',
+  addLicence: 'Add a licence',
+  editLicence: 'Edit',
+  editLicenceOf: (name: string) => `Edit ${name}`,
+  offered: 'offered',
+  notOffered: 'not offered',
+  unlimited: '—',
+
+  shop: 'In the shop',
+  isListed: 'Listed',
+  isHidden: 'Hidden',
+  list: 'List it in the shop',
+  hide: 'Hide it from the shop',
+  listAsk: (kit: string) => `List ${kit} in the shop?`,
+  listWhat: 'Everybody sees it on the front page and can buy it, with its newest released revision.',
+  hideAsk: (kit: string) => `Hide ${kit} from the shop?`,
+  hideWhat:
+    'It leaves the front page and can no longer be bought. Those who hold it keep it, with its files and updates.',
+  listConfirm: 'List it',
+  hideConfirm: 'Hide it',
+  listFailed: 'Nothing was changed',
+  seeInShop: 'See it in the shop',
+  holders: 'Holders',
+  seeHolders: 'See who holds it',
+  newest: 'Newest',
+  from: 'From',
+  none: '—',
+  saved: 'Saved.',
+};
+
+export const licenceTexts = {
+  addTitle: 'Add a licence',
+  editTitle: (name: string) => name,
+  kind: 'Kind',
+  kinds: {
+    personal: 'Personal prints',
+    'small-run': 'Small-run selling',
+    classroom: 'Classroom',
+  } satisfies Record<Licence['kind'], string>,
+  name: 'Name',
+  nameHint: 'As buyers read it: “For my own prints”.',
+  terms: 'Terms',
+  termsHint: 'What it allows, in plain words.',
+  price: (currency: string) => `Price in ${currency}`,
+  priceHint: 'With tax, as 24.00. 0 makes it free.',
+  yearlyLimit: 'Prints a year',
+  yearlyLimitHint: 'Leave it empty where there is no limit.',
+  isOffered: 'Offered in the shop',
+  add: 'Add the licence',
+  save: 'Save the licence',
+  failed: 'The licence was not saved',
+};

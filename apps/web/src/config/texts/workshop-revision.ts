@@ -1,0 +1,78 @@
+import type { Gate } from '@windchest/contracts';
+
+export const revisionTexts = {
+  title: (kit: string, label: string) => `${kit} ${label}`,
+  states: { draft: 'draft', proving: 'in proof', released: 'released', withdrawn: 'withdrawn' },
+  tabs: {
+    label: 'Revision',
+    parts: 'Parts',
+    notes: 'Assembly notes',
+    specification: 'Print specification',
+    changes: 'Change notes',
+    files: 'Files',
+  },
+  final: (label: string, released: string) =>
+    `${label} was released on ${released}. A released revision never changes: people have printed it. A mistake is mended by a new revision.`,
+  withdrawn: (label: string) => `${label} was withdrawn and can no longer be changed.`,
+  toKit: 'Start the next revision',
+  noWriting: 'Your role reads revisions; makers change them.',
+  aside: 'Release',
+  notFound: 'The revision could not be read',
+};
+
+export const gateTexts = {
+  heading: 'Before it can be released',
+  headingReleased: 'What it was released with',
+  names: {
+    'parts-measured': 'Every part measured',
+    watertight: 'Watertight',
+    'fits-build-volume': 'Fits the build volume',
+    'voices-in-tune': 'Voices in tune',
+    'assembly-notes': 'Assembly notes',
+    'change-notes': 'Change notes',
+    'changes-marked': 'Changed parts marked',
+    cautions: 'Cautions',
+    'licence-and-price': 'Licence and price',
+    'proof-round': 'Proof round',
+  } satisfies Record<Gate['name'], string>,
+  states: { passed: 'passed', open: 'open', waived: 'waived', 'not-needed': 'not needed' } satisfies Record<
+    Gate['state'],
+    string
+  >,
+  waivedBy: (who: string, when: string, why: string) => `${who} waived it on ${when}: ${why}`,
+};
+
+const spelled = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten'];
+
+export const releaseTexts = {
+  holders: (kit: string) => `Holders of ${kit}`,
+  toReprint: 'Will be told to reprint',
+  parts: (count: number) => `${count} ${count === 1 ? 'part' : 'parts'}`,
+  release: (label: string) => `Release ${label}`,
+  gatesOpen: (label: string, count: number) =>
+    `Release ${label} — ${spelled[count] ?? count} ${count === 1 ? 'gate' : 'gates'} open`,
+  notAllowed: (label: string) => `${label} is released by a maker`,
+  ask: (kit: string, label: string) => `Release ${label} of ${kit}?`,
+  what: (label: string, holders: string) =>
+    `The gates are checked once more and the bundle is built. Then ${label} is the newest revision: it is on sale, and ${holders} see on their shelf what to reprint.`,
+  final: (label: string) =>
+    `${label} cannot be changed after that, nor taken back. A mistake is mended by a new revision.`,
+  holdersCounted: (count: number) => (count === 1 ? 'its one holder' : `its ${count} holders`),
+  holdersUnknown: 'those who hold the kit',
+  keep: 'Not yet',
+  waiting: 'Waiting for its turn',
+  building: 'Building the bundle',
+  failed: (label: string) => `${label} was not released`,
+  released: 'Released',
+  bundle: 'Bundle',
+  partsName: 'Parts',
+  noBundle: '—',
+};
+
+export const throwAwayTexts = {
+  ask: (label: string) => `Throw the draft ${label} away?`,
+  what: 'Its parts, notes and specification are lost. Files that other revisions use stay. This cannot be taken back.',
+  open: 'Throw the draft away',
+  confirm: (label: string) => `Throw ${label} away`,
+  failed: 'The draft was not thrown away',
+};

@@ -1,0 +1,42 @@
+export const uploadTexts = {
+  label: 'Upload',
+  drop: 'Drop files here, or',
+  choose: 'choose files',
+  dropNow: 'Let go to add these files',
+  accepted: 'STL, 3MF, STEP, PDF, text, pictures and sounds.',
+  limit: (perFile: string, left: string) => `Up to ${perFile} a file; ${left} left in this revision.`,
+  goesOn:
+    'You may go on working in the workshop meanwhile. Closing this tab breaks the upload off; drop the same files again and it goes on where it stopped.',
+  reading: (done: number, total: number) => `Reading ${done} of ${total} files`,
+  overall: (done: number, total: number, percent: number) => `${done} of ${total} files, ${percent} %`,
+  failed: (count: number) => (count === 1 ? '1 failed' : `${count} failed`),
+  sending: 'Sending',
+  finished: 'Sent',
+  finishedWithFaults: 'Finished, not everything arrived',
+  retry: 'Try again',
+  retryOf: (fileName: string) => `Try ${fileName} again`,
+  retryAll: 'Try all failed ones again',
+  clear: 'Clear the list',
+  files: 'Files of this upload',
+  showAll: (count: number) => `Show all ${count} files`,
+  showFewer: 'Show only what needs a look',
+  states: {
+    waiting: 'waiting',
+    hashing: (percent: number) => `hashing ${percent} %`,
+    hashed: 'hashed',
+    stored: 'stored already',
+    queued: 'waiting to be sent',
+    sending: (percent: number) => `sending ${percent} %`,
+    sent: 'sent',
+    refused: 'refused',
+    broken: 'not sent',
+    measuring: 'measuring …',
+    measured: 'measured',
+  },
+  tooLarge: (fileName: string, bytes: string, limit: string) =>
+    `${fileName} has ${bytes}; ${limit} a file are the most. Reduce the mesh or split the part.`,
+  unreadable: (fileName: string) =>
+    `${fileName} cannot be read. It may have been moved or changed meanwhile; drop it again.`,
+  tooLargeTogether: (fileName: string, limit: string) =>
+    `With ${fileName} the revision would hold more than ${limit}. Take files out first.`,
+};
