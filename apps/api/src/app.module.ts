@@ -2,11 +2,18 @@ import { Module } from '@nestjs/common';
 import { ScheduleModule } from '@nestjs/schedule';
 import { AccountsModule } from './accounts/accounts.module.js';
 import { AdaptersModule } from './adapters/adapters.module.js';
+import { CatalogueModule } from './catalogue/catalogue.module.js';
 import { ConfigModule } from './config/config.module.js';
+import { CouponsModule } from './coupons/coupons.module.js';
 import { DatabaseModule } from './database/database.module.js';
+import { EntitlementsModule } from './entitlements/entitlements.module.js';
 import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
+import { LedgerModule } from './ledger/ledger.module.js';
 import { MailsModule } from './mails/mails.module.js';
+import { MeasuringModule } from './measuring/measuring.module.js';
+import { OrdersModule } from './orders/orders.module.js';
+import { WorkshopModule } from './workshop/workshop.module.js';
 
 @Module({
   imports: [
@@ -19,6 +26,13 @@ import { MailsModule } from './mails/mails.module.js';
     ScheduleModule.forRoot(),
     // The rooms, lower ones first.
     AccountsModule,
+    CatalogueModule,
+    MeasuringModule,
+    CouponsModule,
+    OrdersModule,
+    LedgerModule,
+    EntitlementsModule,
+    WorkshopModule,
   ],
 })
 export class AppModule {}

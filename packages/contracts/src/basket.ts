@@ -49,12 +49,19 @@ export type Quote = z.output<typeof quote>;
 
 export const quoteBody = z.object({ items: z.array(basketItem).max(30), couponCode: couponCode.optional() });
 
+/**
+ * What the buyer ticks before files are handed over at once (Directive 2011/83/EU, art. 16 m). The page
+ * shows these very words and the order keeps them.
+ */
+export const consentText =
+  'Hand the files over at once. I know that I lose my right to withdraw from the purchase when they are handed over.';
+
 export const checkoutBody = z.object({
   items: z.array(basketItem).min(1, 'The basket is empty.').max(30),
   couponCode: couponCode.optional(),
   email,
   country: countryCode,
-  /** The buyer asks for supply at once and knows the right of withdrawal ends with it (Directive 2011/83/EU, art. 16 m). */
+  /** To `consentText`. */
   hasConsented: z.literal(true, 'Tick the box: files can only be handed over at once with your consent.'),
   /** Sent again after a broken connection, it opens the same checkout, not a second one. */
   attempt: id,

@@ -35,9 +35,13 @@ export const hardwareItem = z.object({
 export const hardwareList = z.array(hardwareItem).max(200);
 export type HardwareItem = z.output<typeof hardwareItem>;
 
-/** A drawing made from a mesh: an SVG path in mm. */
+/**
+ * A drawing made from a mesh: SVG paths in mm. `path` is the silhouette with its holes (fill it even-odd,
+ * stroke it), `edges` what is seen inside it (stroke only).
+ */
 export const drawing = z.object({
   path: z.string(),
+  edges: z.string().default(''),
   widthMm: z.number(),
   heightMm: z.number(),
   viewBox: z.string(),

@@ -152,6 +152,8 @@ export const workshopSalesEndpoints = {
     summary: 'Orders, filtered, searched, paged',
     query: pageQuery.extend({
       state: orderState.optional(),
+      /** `1`: only those that staff should look at. */
+      flagged: z.enum(['1']).optional(),
       sort: z.enum(['placedAt', 'total', 'number']).default('placedAt'),
       order: z.enum(['asc', 'desc']).default('desc'),
     }),
@@ -160,7 +162,7 @@ export const workshopSalesEndpoints = {
   'GET /workshop/orders.csv': endpoint({
     access: 'orders:read',
     summary: 'The same orders as CSV',
-    query: pageQuery.extend({ state: orderState.optional() }),
+    query: pageQuery.extend({ state: orderState.optional(), flagged: z.enum(['1']).optional() }),
     response: 'stream',
   }),
   'GET /workshop/orders/:orderId': endpoint({

@@ -4,12 +4,16 @@ import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
+import * as releasedIsFinal from './migrations/0005-released-is-final.js';
+import * as taxRates from './migrations/0006-tax-rates.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
   '0002-outbox': outbox,
   '0003-catalogue': catalogue,
   '0004-sales': sales,
+  '0005-released-is-final': releasedIsFinal,
+  '0006-tax-rates': taxRates,
 };
 
 /**

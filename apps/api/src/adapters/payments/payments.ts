@@ -41,7 +41,7 @@ export interface PaymentEvent {
 
 /** What the shop asks of the payment service. */
 export abstract class Payments {
-  /** Opens a payment page; the same order asked twice gives the same page. */
+  /** Opens a payment page; the same order with the same end, asked twice, gives the same page. */
   abstract openSession(request: SessionRequest): Promise<PaymentSession>;
   abstract session(sessionId: string): Promise<PaymentSession>;
   /** Closes an open page for good; answers how it stands then, which may be `paid`. */

@@ -27,6 +27,7 @@ export class StripePayments extends Payments {
   }
 
   async openSession(request: SessionRequest): Promise<PaymentSession> {
+    const expiresAt = Math.ceil(request.expiresAt.getTime() / 1000);
     return toSession(
       await calling(
         this.stripe.checkout.sessions.create(
@@ -47,9 +48,9 @@ export class StripePayments extends Payments {
             payment_intent_data: { metadata: { order: request.orderId, number: request.orderNumber } },
             success_url: request.successUrl,
             cancel_url: request.cancelUrl,
-            expires_at: Math.ceil(request.expiresAt.getTime() / 1000),
+            expires_at: expiresAt,
           },
-          { idempotencyKey: `open-${request.orderId}` },
+          { idempotencyKey: `open-${request.orderId}-${expiresAt}` },
         ),
       ),
     );

@@ -1,10 +1,19 @@
-import { randomUUID } from 'node:crypto';
+import { createHash, randomUUID } from 'node:crypto';
 import { createReadStream, createWriteStream } from 'node:fs';
 import { mkdir, open, rename, rm, stat } from 'node:fs/promises';
 import { dirname, join, resolve } from 'node:path';
-import type { Readable } from 'node:stream';
+import { Transform, type Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
-import { assertSafeKey, Storage, StorageFault, type ByteRange, type StoredObject } from './storage.js';
+import {
+  assertSafeKey,
+  keyOf,
+  Storage,
+  StorageFault,
+  type ByteRange,
+  type HashedObject,
+  type Shelf,
+  type StoredObject,
+} from './storage.js';
 
 const CHUNK_BYTES = 1024 ** 2;
 
@@ -18,13 +27,45 @@ export class LocalDiskStorage extends Storage {
   }
 
   async put(key: string, source: Readable): Promise<StoredObject> {
-    const target = this.localPath(key);
+    assertSafeKey(key);
+    return this.write(source, () => key);
+  }
+
+  async putHashed(
+    shelf: Shelf,
+    source: Readable,
+    { expectedSha256 }: { expectedSha256?: string | undefined } = {},
+  ): Promise<HashedObject> {
+    const hash = createHash('sha256');
+    const hashing = new Transform({
+      transform: (chunk: Buffer, _, done) => {
+        hash.update(chunk);
+        done(null, chunk);
+      },
+    });
+    let sha256 = '';
+    const keyWhenWhole = (): string => {
+      sha256 = hash.digest('hex');
+      if (expectedSha256 !== undefined && sha256 !== expectedSha256)
+        throw new StorageFault('hash-mismatch', 'The contents have another hash than was announced.');
+      return keyOf(shelf, sha256);
+    };
+    const { bytes } = await this.write(source, keyWhenWhole, hashing);
+    return { sha256, bytes, key: keyOf(shelf, sha256) };
+  }
+
+  /** Writes to a temporary file; its key is asked for once everything has been written. */
+  private async write(source: Readable, keyWhenWhole: () => string, way?: Transform): Promise<StoredObject> {
     const half = join(this.root, 'incoming', randomUUID());
+    // A source may break off before the pipeline stands; the pipeline then tells of it.
+    source.on('error', () => undefined);
     await mkdir(dirname(half), { recursive: true });
     try {
-      await pipeline(source, createWriteStream(half, { highWaterMark: CHUNK_BYTES }));
+      const sink = createWriteStream(half, { highWaterMark: CHUNK_BYTES });
+      await (way ? pipeline(source, way, sink) : pipeline(source, sink));
       await flushToDisk(half);
       const { size } = await stat(half);
+      const target = this.localPath(keyWhenWhole());
       await mkdir(dirname(target), { recursive: true });
       await rename(half, target);
       await flushToDisk(dirname(target));

@@ -29,6 +29,39 @@ export const storageContract = (
       expect(await storage.head(key)).toEqual({ bytes: 300_000 });
     });
 
+    it('hashes what is put without a key and stands it under its hash', async () => {
+      const other = Buffer.concat([contents, Buffer.from('more')]);
+      const sha256 = createHash('sha256').update(other).digest('hex');
+      const stored = await storage.putHashed(
+        'bundles',
+        Readable.from([other.subarray(0, 7), other.subarray(7)]),
+      );
+      expect(stored).toEqual({ sha256, bytes: 300_004, key: keyOf('bundles', sha256) });
+      expect(await buffer(await storage.get(stored.key))).toEqual(other);
+      expect(await storage.putHashed('bundles', Readable.from([other]))).toEqual(stored);
+      await storage.delete(stored.key);
+    });
+
+    it('keeps nothing where another hash was expected', async () => {
+      const other = contents.subarray(0, 9000);
+      await expect(
+        storage.putHashed('files', Readable.from([other]), { expectedSha256: 'ef'.repeat(32) }),
+      ).rejects.toMatchObject({ code: 'hash-mismatch' });
+      expect(await storage.head(keyOf('files', createHash('sha256').update(other).digest('hex')))).toBeNull();
+    });
+
+    it('shows nothing of a hashed put that broke off', async () => {
+      const start = contents.subarray(0, 5000);
+      const broken = Readable.from(
+        (async function* () {
+          yield start;
+          throw new Error('the sender went away');
+        })(),
+      );
+      await expect(storage.putHashed('files', broken)).rejects.toThrow('the sender went away');
+      expect(await storage.head(keyOf('files', createHash('sha256').update(start).digest('hex')))).toBeNull();
+    });
+
     it('takes the same key twice without a fault', async () => {
       await storage.put(key, Readable.from([contents]));
       expect(await buffer(await storage.get(key))).toEqual(contents);

@@ -3,6 +3,10 @@ import type { Readable } from 'node:stream';
 export interface StoredObject {
   readonly bytes: number;
 }
+export interface HashedObject extends StoredObject {
+  readonly sha256: string;
+  readonly key: string;
+}
 
 /** Bytes `start` to `end`, both counted from 0 and both included. */
 export interface ByteRange {
@@ -17,6 +21,15 @@ export interface ByteRange {
 export abstract class Storage {
   /** Takes a stream in and makes it visible under its key at once or not at all. */
   abstract put(key: string, source: Readable): Promise<StoredObject>;
+  /**
+   * The same for contents whose hash is not known yet: hashed on the way, visible under their hash when whole.
+   * @throws StorageFault `hash-mismatch` where a hash was expected and another came out; nothing is kept
+   */
+  abstract putHashed(
+    shelf: Shelf,
+    source: Readable,
+    options?: { expectedSha256?: string | undefined },
+  ): Promise<HashedObject>;
   /** @throws StorageFault `missing` */
   abstract get(key: string, range?: ByteRange): Promise<Readable>;
   /** @returns null where nothing stands under the key */
@@ -33,7 +46,7 @@ export abstract class Storage {
 
 export class StorageFault extends Error {
   constructor(
-    readonly code: 'missing' | 'unsafe-key' | 'not-writable',
+    readonly code: 'missing' | 'unsafe-key' | 'not-writable' | 'hash-mismatch',
     message: string,
   ) {
     super(message);

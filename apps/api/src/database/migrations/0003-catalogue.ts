@@ -3,7 +3,10 @@ import { inOrder } from './statements.js';
 const ID = 'CHAR(36) CHARACTER SET ascii COLLATE ascii_bin';
 const SHA = 'CHAR(64) CHARACTER SET ascii COLLATE ascii_bin';
 
-/** Kits, licences, revisions with their parts and files, and what the files measure. */
+/**
+ * Kits, licences, revisions with their parts and files, and what the files measure. File names that differ
+ * in capitals alone would overwrite each other on many disks and are one; accents do tell them apart.
+ */
 export const up = inOrder(
   `CREATE TABLE kits (
     id ${ID} NOT NULL PRIMARY KEY,
@@ -74,7 +77,7 @@ export const up = inOrder(
     id ${ID} NOT NULL PRIMARY KEY,
     revision_id ${ID} NOT NULL,
     sha256 ${SHA} NOT NULL,
-    file_name VARCHAR(200) NOT NULL,
+    file_name VARCHAR(200) COLLATE utf8mb4_uca1400_as_ci NOT NULL,
     created_at DATETIME(6) NOT NULL,
     UNIQUE KEY revision_files_name (revision_id, file_name),
     KEY revision_files_sha (sha256),
@@ -104,6 +107,7 @@ export const up = inOrder(
     sha256 ${SHA} NOT NULL PRIMARY KEY,
     state ENUM('waiting','measuring','measured','refused') NOT NULL DEFAULT 'waiting',
     measurer_version INT UNSIGNED NOT NULL,
+    tries INT UNSIGNED NOT NULL DEFAULT 0,
     measurement JSON NULL,
     geometry_hash VARCHAR(128) CHARACTER SET ascii COLLATE ascii_bin NULL,
     drawings JSON NULL,

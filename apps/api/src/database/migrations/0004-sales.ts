@@ -55,6 +55,8 @@ export const up = inOrder(
     payment_intent_id VARCHAR(120) CHARACTER SET ascii COLLATE ascii_bin NULL,
     payment_url TEXT NULL,
     pay_until DATETIME(6) NULL,
+    receipt_number VARCHAR(30) CHARACTER SET ascii COLLATE ascii_bin NULL,
+    tax JSON NULL,
     paid_at DATETIME(6) NULL,
     closed_at DATETIME(6) NULL,
     created_at DATETIME(6) NOT NULL,
@@ -65,7 +67,9 @@ export const up = inOrder(
     KEY orders_intent (payment_intent_id),
     KEY orders_email (email, state),
     KEY orders_person (person_id, created_at),
-    KEY orders_state (state, created_at)
+    KEY orders_state (state, created_at),
+    KEY orders_created (created_at, id),
+    KEY orders_paid (paid_at)
   )`,
   `CREATE TABLE order_lines (
     id ${ID} NOT NULL PRIMARY KEY,
@@ -76,6 +80,7 @@ export const up = inOrder(
     revision_id ${ID} NOT NULL,
     kit_name VARCHAR(60) NOT NULL,
     licence_name VARCHAR(120) NOT NULL,
+    revision_label VARCHAR(20) NOT NULL,
     price_minor INT UNSIGNED NOT NULL,
     discount_minor INT UNSIGNED NOT NULL,
     total_minor INT UNSIGNED NOT NULL,

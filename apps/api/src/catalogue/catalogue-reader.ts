@@ -1,0 +1,158 @@
+import { Injectable } from '@nestjs/common';
+import { InjectModel } from '@nestjs/sequelize';
+import type { FilamentColour } from '@windchest/contracts';
+import { Op } from 'sequelize';
+import type { Tx } from '../database/transactions.js';
+import { Differences, type ReprintRow } from './comparison/differences.js';
+import { contentTypes } from './files/file-kind.js';
+import { Kit } from './kits/kit.model.js';
+import { Licence } from './kits/licence.model.js';
+import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
+import { bundleName, servable, type ServableFile } from './release/stored-file-of.js';
+import { RevisionContents } from './revisions/revision-contents.js';
+import { Revision } from './revisions/revision.model.js';
+
+export type { OfferedLicence, ReprintRow, ServableFile };
+
+export interface KitFacts {
+  readonly id: string;
+  readonly slug: string;
+  readonly name: string;
+  readonly tagline: string;
+  readonly colour: FilamentColour;
+  readonly newestRevisionId: string | null;
+}
+export interface ReleasedRevision {
+  readonly id: string;
+  readonly kitId: string;
+  readonly label: string;
+  readonly releasedAt: Date;
+  readonly bundleSha256: string;
+  readonly bundleBytes: number;
+  readonly changeNotes: string;
+  readonly isWithdrawn: boolean;
+}
+
+/** What other rooms may know of the catalogue: plain facts, nothing of a draft. */
+@Injectable()
+export class CatalogueReader {
+  constructor(
+    @InjectModel(Kit) private readonly kits: typeof Kit,
+    @InjectModel(Licence) private readonly licences: typeof Licence,
+    @InjectModel(Revision) private readonly revisions: typeof Revision,
+    private readonly offered: OfferedLicences,
+    private readonly contents: RevisionContents,
+    private readonly changes: Differences,
+  ) {}
+
+  /** Those of the licences that can be bought now. */
+  offeredLicences(licenceIds: readonly string[], tx?: Tx): Promise<OfferedLicence[]> {
+    return this.offered.byIds(licenceIds, tx);
+  }
+
+  allOfferedLicences(tx?: Tx): Promise<OfferedLicence[]> {
+    return this.offered.all(tx);
+  }
+
+  async kitsByIds(ids: readonly string[]): Promise<KitFacts[]> {
+    if (ids.length === 0) return [];
+    return (await this.kits.findAll({ where: { id: [...new Set(ids)] }, order: [['name', 'ASC']] })).map(
+      toKit,
+    );
+  }
+
+  async kitBySlug(slug: string): Promise<KitFacts | null> {
+    const kit = await this.kits.findOne({ where: { slug } });
+    return kit && toKit(kit);
+  }
+
+  async licencesByIds(
+    ids: readonly string[],
+  ): Promise<{ id: string; kitId: string; kind: Licence['kind']; name: string; terms: string }[]> {
+    if (ids.length === 0) return [];
+    const rows = await this.licences.findAll({ where: { id: [...new Set(ids)] } });
+    return rows.map(({ id, kitId, kind, name, terms }) => ({ id, kitId, kind, name, terms }));
+  }
+
+  /** Released and withdrawn revisions of a kit, newest first. */
+  async revisionsOf(kitId: string): Promise<ReleasedRevision[]> {
+    const rows = await this.revisions.findAll({
+      where: { kitId, ...FINAL },
+      order: [
+        ['mark', 'DESC'],
+        ['issue', 'DESC'],
+      ],
+    });
+    return rows.map(toReleased);
+  }
+
+  async revisionById(id: string): Promise<ReleasedRevision | null> {
+    const revision = await this.finalById(id);
+    return revision && toReleased(revision);
+  }
+
+  async bundleFile(revisionId: string): Promise<ServableFile | null> {
+    const revision = await this.finalById(revisionId);
+    const kit = revision && (await this.kits.findByPk(revision.kitId));
+    if (!kit || !revision?.bundleSha256) return null;
+    return servable('bundles', {
+      sha256: revision.bundleSha256,
+      bytes: revision.bundleBytes ?? 0,
+      fileName: bundleName(kit.slug, revision),
+      contentType: 'application/zip',
+    });
+  }
+
+  /** Any file of a released revision by its hash: a part, a document, a picture, a sound. */
+  async fileOf(revisionId: string, sha256: string): Promise<ServableFile | null> {
+    if (!(await this.finalById(revisionId))) return null;
+    const file = (await this.contents.filesOf(revisionId)).find((one) => one.sha256 === sha256);
+    if (!file) return null;
+    const { bytes, fileName, kind } = file;
+    return servable('files', { sha256, bytes, fileName, contentType: contentTypes[kind] });
+  }
+
+  async documentsOf(revisionId: string): Promise<{ sha256: string; fileName: string; bytes: number }[]> {
+    if (!(await this.finalById(revisionId))) return [];
+    return (await this.contents.documentsOf(revisionId)).map(({ sha256, fileName, bytes }) => ({
+      sha256,
+      fileName,
+      bytes,
+    }));
+  }
+
+  async cautionsOf(revisionId: string): Promise<string> {
+    return (await this.finalById(revisionId))?.cautions ?? '';
+  }
+
+  /** Part by part, what differs between a revision held (or none) and another one of the same kit. */
+  differences(fromRevisionId: string | null, toRevisionId: string): Promise<ReprintRow[]> {
+    return this.changes.reprintRows(fromRevisionId, toRevisionId);
+  }
+
+  private finalById(id: string): Promise<Revision | null> {
+    return this.revisions.findOne({ where: { id, ...FINAL } });
+  }
+}
+
+const FINAL = { state: { [Op.in]: ['released', 'withdrawn'] } };
+
+const toKit = ({ id, slug, name, tagline, colour, newestRevisionId }: Kit): KitFacts => ({
+  id,
+  slug,
+  name,
+  tagline,
+  colour,
+  newestRevisionId,
+});
+
+const toReleased = (revision: Revision): ReleasedRevision => ({
+  id: revision.id,
+  kitId: revision.kitId,
+  label: revision.label,
+  releasedAt: revision.releasedAt ?? revision.updatedAt,
+  bundleSha256: revision.bundleSha256 ?? '',
+  bundleBytes: revision.bundleBytes ?? 0,
+  changeNotes: revision.changeNotes,
+  isWithdrawn: revision.state === 'withdrawn',
+});

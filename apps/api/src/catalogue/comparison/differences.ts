@@ -1,0 +1,135 @@
+import { Injectable } from '@nestjs/common';
+import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { Answer, Comparison } from '@windchest/contracts';
+import { Op, type Sequelize } from 'sequelize';
+import { selectRows } from '../../database/rows.js';
+import type { Tx } from '../../database/transactions.js';
+import { tellingDrawing } from '../files/measured-mesh.js';
+import type { ReprintMark } from '../revisions/part.model.js';
+import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
+import { Revision } from '../revisions/revision.model.js';
+import { comparePart } from './compare-parts.js';
+
+/** One part on a person's reprint list. */
+export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
+
+interface Pair {
+  readonly row: Comparison['rows'][number];
+  readonly after: PartOfRevision | null;
+}
+type Verdict = { mark: ReprintMark; reasons: string[] };
+
+/** What differs between two revisions of a kit, part by part, with what the maker says to do about it. */
+@Injectable()
+export class Differences {
+  constructor(
+    @InjectConnection() private readonly database: Sequelize,
+    @InjectModel(Revision) private readonly revisions: typeof Revision,
+    private readonly contents: RevisionContents,
+  ) {}
+
+  async rows(from: Revision | null, to: Revision, tx?: Tx): Promise<Comparison['rows']> {
+    return (await this.pairs(from, to, tx)).map(({ row }) => row);
+  }
+
+  async reprintRows(fromRevisionId: string | null, toRevisionId: string): Promise<ReprintRow[]> {
+    const to = await this.revisions.findByPk(toRevisionId);
+    if (!to) return [];
+    const from = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
+    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to);
+    return pairs.map(({ row, after }) => ({
+      code: row.code,
+      name: row.name,
+      quantity: row.quantity,
+      difference: row.difference,
+      mark: row.mark,
+      reason: row.reason,
+      whatDiffers: row.whatDiffers,
+      drawing: tellingDrawing(after?.file?.drawings ?? null),
+    }));
+  }
+
+  /** What buyers hold now: the newest revision before this one that was released. */
+  lastReleasedBefore(revision: Revision, tx?: Tx): Promise<Revision | null> {
+    const { kitId, mark, issue } = revision;
+    return this.revisions.findOne({
+      where: {
+        kitId,
+        state: { [Op.in]: ['released', 'withdrawn'] },
+        [Op.or]: [{ mark: { [Op.lt]: mark } }, { mark, issue: { [Op.lt]: issue } }],
+      },
+      order: [
+        ['mark', 'DESC'],
+        ['issue', 'DESC'],
+      ],
+      transaction: tx ?? null,
+    });
+  }
+
+  private async pairs(from: Revision | null, to: Revision, tx?: Tx): Promise<Pair[]> {
+    const before = new Map(
+      from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
+    );
+    const after = await this.contents.partsOf(to.id, tx);
+    const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
+    const now = after.map((part) => pairOf(before.get(part.code) ?? null, part, verdicts.get(part.code)));
+    const codes = new Set(after.map((part) => part.code));
+    const gone = [...before.values()].filter((part) => !codes.has(part.code));
+    return [...now, ...gone.map((part) => pairOf(part, null, undefined))];
+  }
+
+  /**
+   * The maker marks a part against the revision before. Over several revisions the strongest of the marks
+   * since the held one counts, with every reason, newest first.
+   */
+  private async verdictsBetween(from: Revision, to: Revision, tx?: Tx): Promise<Map<string, Verdict>> {
+    const rows = await selectRows<{ code: string; mark: ReprintMark; reason: string }>(
+      this.database,
+      `SELECT p.code, p.reprint_mark AS mark, p.reprint_reason AS reason
+       FROM parts p JOIN revisions r ON r.id = p.revision_id
+       WHERE r.kit_id = :kitId AND p.reprint_mark IS NOT NULL
+         AND (r.id = :toId OR r.state IN ('released', 'withdrawn'))
+         AND (r.mark > :fromMark OR (r.mark = :fromMark AND r.issue > :fromIssue))
+         AND (r.mark < :toMark OR (r.mark = :toMark AND r.issue <= :toIssue))
+       ORDER BY r.mark DESC, r.issue DESC`,
+      {
+        kitId: to.kitId,
+        toId: to.id,
+        fromMark: from.mark,
+        fromIssue: from.issue,
+        toMark: to.mark,
+        toIssue: to.issue,
+      },
+      tx,
+    );
+    const verdicts = new Map<string, Verdict>();
+    for (const { code, mark, reason } of rows) {
+      const known = verdicts.get(code) ?? { mark, reasons: [] };
+      if (mark === 'reprint needed') known.mark = mark;
+      if (reason !== '' && !known.reasons.includes(reason)) known.reasons.push(reason);
+      verdicts.set(code, known);
+    }
+    return verdicts;
+  }
+}
+
+const pairOf = (
+  before: PartOfRevision | null,
+  after: PartOfRevision | null,
+  verdict: Verdict | undefined,
+): Pair => {
+  const part = (after ?? before)!;
+  const difference = comparePart(before, after);
+  const counts = difference.difference === 'changed' && verdict !== undefined;
+  return {
+    after,
+    row: {
+      code: part.code,
+      name: part.name,
+      quantity: part.quantity,
+      ...difference,
+      mark: counts ? verdict.mark : null,
+      reason: counts ? verdict.reasons.join(' · ') : '',
+    },
+  };
+};

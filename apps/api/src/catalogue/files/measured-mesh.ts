@@ -1,0 +1,26 @@
+import type { Measurement as MeshMeasurement } from '@windchest/meshes';
+
+/** What the measuring room finds out about a mesh, as it is kept. */
+export type MeasuredMesh = MeshMeasurement;
+
+export interface Drawing {
+  path: string;
+  edges: string;
+  widthMm: number;
+  heightMm: number;
+  viewBox: string;
+}
+export interface Drawings {
+  front: Drawing;
+  side: Drawing;
+  top: Drawing;
+}
+
+/** The side that tells most about a part: the one that shows most of it. */
+export const tellingDrawing = (drawings: Drawings | null): Drawing | null => {
+  if (!drawings) return null;
+  const sides = [drawings.front, drawings.side, drawings.top];
+  return sides.reduce((best, one) =>
+    one.widthMm * one.heightMm > best.widthMm * best.heightMm ? one : best,
+  );
+};

@@ -1,0 +1,24 @@
+import { Controller } from '@nestjs/common';
+import type { Answer, Handled } from '@windchest/contracts';
+import { Endpoint, Input } from '../../http/endpoint.js';
+import { ShopKits } from './shop-kits.js';
+
+@Controller()
+export class KitsController {
+  constructor(private readonly kits: ShopKits) {}
+
+  @Endpoint('GET /kits')
+  list(@Input() input: Handled<'GET /kits'>): Promise<Answer<'GET /kits'>> {
+    return this.kits.list(input);
+  }
+
+  @Endpoint('GET /kits/:slug')
+  read(@Input() { params }: Handled<'GET /kits/:slug'>): Promise<Answer<'GET /kits/:slug'>> {
+    return this.kits.read(params.slug);
+  }
+
+  @Endpoint('GET /kits/:slug/parts')
+  parts(@Input() { params }: Handled<'GET /kits/:slug/parts'>): Promise<Answer<'GET /kits/:slug/parts'>> {
+    return this.kits.parts(params.slug);
+  }
+}

@@ -1,0 +1,16 @@
+import type { Licence } from '../kits/licence.model.js';
+import type { FileOfRevision, PartOfRevision } from '../revisions/revision-contents.js';
+import type { Revision } from '../revisions/revision.model.js';
+
+/** A file of a bundle: words made here, or contents from the storage. */
+export type BundleEntry = { readonly path: string; readonly sha256: string; readonly bytes: number } & (
+  { readonly contents: Buffer } | { readonly storageKey: string }
+);
+
+export interface BundleSource {
+  readonly kit: { readonly slug: string; readonly name: string };
+  readonly revision: Revision;
+  readonly parts: readonly PartOfRevision[];
+  readonly files: readonly FileOfRevision[];
+  readonly licences: readonly Licence[];
+}

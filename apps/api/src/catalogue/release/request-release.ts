@@ -1,0 +1,54 @@
+import { Injectable } from '@nestjs/common';
+import { InjectModel } from '@nestjs/sequelize';
+import { StaffLog } from '../../accounts/staff-log.js';
+import { Clock } from '../../adapters/clock/clock.js';
+import { Transactions } from '../../database/transactions.js';
+import type { SignedIn } from '../../http/person.js';
+import { notFound, Refusal } from '../../http/refusal.js';
+import { JobQueue } from '../../jobs/job-queue.js';
+import { Gates } from '../gates/gates.js';
+import { Drafts } from '../revisions/drafts.js';
+import { Revision } from '../revisions/revision.model.js';
+import { buildRelease } from './build-release.job.js';
+
+/** Checks the gates and sends a draft to have its bundle built; from then on the draft stands still. */
+@Injectable()
+export class RequestRelease {
+  constructor(
+    @InjectModel(Revision) private readonly revisions: typeof Revision,
+    private readonly transactions: Transactions,
+    private readonly drafts: Drafts,
+    private readonly gates: Gates,
+    private readonly queue: JobQueue,
+    private readonly staffLog: StaffLog,
+    private readonly clock: Clock,
+  ) {}
+
+  async request(person: SignedIn, revisionId: string): Promise<void> {
+    await this.transactions.run(async (tx) => {
+      const standing = await this.revisions.findByPk(revisionId, { transaction: tx, lock: tx.LOCK.UPDATE });
+      if (!standing) throw notFound('revision');
+      // Asked twice, it is built once.
+      if (standing.state === 'draft' && ['waiting', 'building'].includes(standing.releaseState)) return;
+      const { revision, subject } = await this.drafts.lock(tx, revisionId);
+      const open = (await this.gates.of(revision, tx)).filter((gate) => gate.state === 'open');
+      if (open.length > 0)
+        throw new Refusal(
+          'gates-are-open',
+          `${revision.label} cannot be released yet: ${open.map((gate) => `${gate.name}: ${gate.reason}`).join(' ')}`,
+        );
+      await revision.update(
+        {
+          releaseState: 'waiting',
+          releasePercent: 0,
+          releaseFault: null,
+          releasedBy: person.id,
+          updatedAt: this.clock.now(),
+        },
+        { transaction: tx },
+      );
+      await this.queue.add(tx, buildRelease, { revisionId });
+      await this.staffLog.record(tx, person, { what: 'asked for a release', subject });
+    });
+  }
+}

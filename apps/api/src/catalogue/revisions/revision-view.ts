@@ -1,0 +1,128 @@
+import { Injectable } from '@nestjs/common';
+import { InjectModel } from '@nestjs/sequelize';
+import type { Part as PartShape, RevisionDetail, RevisionFile as FileShape } from '@windchest/contracts';
+import { InjectConfig, type Config } from '../../config/config.js';
+import { notFound } from '../../http/refusal.js';
+import { Gates } from '../gates/gates.js';
+import { isMeshKind } from '../files/file-kind.js';
+import { Kit } from '../kits/kit.model.js';
+import { RevisionContents, type FileOfRevision, type PartOfRevision } from './revision-contents.js';
+import { Revision } from './revision.model.js';
+
+/** One revision in full, as the workshop works on it. */
+@Injectable()
+export class RevisionView {
+  constructor(
+    @InjectConfig() private readonly config: Config,
+    @InjectModel(Kit) private readonly kits: typeof Kit,
+    @InjectModel(Revision) private readonly revisions: typeof Revision,
+    private readonly contents: RevisionContents,
+    private readonly gates: Gates,
+  ) {}
+
+  async read(revisionId: string): Promise<RevisionDetail> {
+    const revision = await this.revisions.findByPk(revisionId);
+    const kit = revision && (await this.kits.findByPk(revision.kitId));
+    if (!revision || !kit) throw notFound('revision');
+    const [files, parts, gates] = await Promise.all([
+      this.contents.filesOf(revisionId),
+      this.contents.partsOf(revisionId),
+      this.gates.of(revision),
+    ]);
+    const partOfFile = partIds(parts);
+    return {
+      id: revision.id,
+      kit: { id: kit.id, slug: kit.slug, name: kit.name, colour: kit.colour },
+      label: revision.label,
+      state: revision.state,
+      createdAt: revision.createdAt.toISOString(),
+      releasedAt: revision.releasedAt?.toISOString() ?? null,
+      assemblyNotes: revision.assemblyNotes,
+      changeNotes: revision.changeNotes,
+      cautions: revision.cautions,
+      printSpec: revision.printSpec,
+      hardware: revision.hardware,
+      buildVolume: revision.buildVolume,
+      declaredCents: revision.declaredCents,
+      room: revision.room,
+      parts: parts.map((part) => toPart(part, partOfFile)),
+      documents: files.filter((file) => !isMeshKind(file.kind)).map((file) => toFile(file, partOfFile)),
+      gates,
+      release: {
+        state: revision.releaseState,
+        percent: revision.releasePercent,
+        fault: revision.releaseFault,
+      },
+      bundle:
+        revision.bundleSha256 === null
+          ? null
+          : { sha256: revision.bundleSha256, bytes: revision.bundleBytes ?? 0 },
+      totalBytes: files.reduce((sum, file) => sum + file.bytes, 0),
+      limits: { fileBytes: this.config.MAX_FILE_BYTES, revisionBytes: this.config.MAX_REVISION_BYTES },
+    };
+  }
+
+  async file(revisionId: string, fileId: string): Promise<FileShape> {
+    const [files, parts] = await Promise.all([
+      this.contents.filesOf(revisionId),
+      this.contents.partsOf(revisionId),
+    ]);
+    const file = files.find((one) => one.id === fileId);
+    if (!file) throw notFound('file');
+    return toFile(file, partIds(parts));
+  }
+
+  async part(revisionId: string, partId: string): Promise<PartShape> {
+    const parts = await this.contents.partsOf(revisionId);
+    const part = parts.find((one) => one.id === partId);
+    if (!part) throw notFound('part');
+    return toPart(part, partIds(parts));
+  }
+}
+
+const partIds = (parts: readonly PartOfRevision[]): Map<string, string> =>
+  new Map(parts.flatMap((part) => (part.file ? [[part.file.id, part.id] as const] : [])));
+
+const toPart = (part: PartOfRevision, partOfFile: Map<string, string>): PartShape => ({
+  id: part.id,
+  code: part.code,
+  name: part.name,
+  quantity: part.quantity,
+  orientation: part.orientation,
+  printSpec: part.printSpec,
+  voice: part.voice,
+  file: part.file && toFile(part.file, partOfFile),
+  drawings: part.file?.drawings ?? null,
+});
+
+const toFile = (file: FileOfRevision, partOfFile: Map<string, string>): FileShape => ({
+  id: file.id,
+  sha256: file.sha256,
+  fileName: file.fileName,
+  bytes: file.bytes,
+  kind: file.kind,
+  measuring: file.measuring,
+  measurement: measurementOf(file),
+  fault: file.fault,
+  partId: partOfFile.get(file.id) ?? null,
+  addedAt: file.addedAt.toISOString(),
+});
+
+const measurementOf = ({ measured }: FileOfRevision): FileShape['measurement'] => {
+  if (!measured) return null;
+  const [x, y, z] = measured.sizeMm;
+  return {
+    format: measured.format,
+    triangles: measured.triangles,
+    shells: measured.shells,
+    sizeMm: { x, y, z },
+    volumeCm3: measured.volumeMm3 / 1000,
+    areaCm2: measured.areaMm2 / 100,
+    openEdges: measured.openEdges,
+    nonManifoldEdges: measured.nonManifoldEdges,
+    windingFaults: measured.windingFaults,
+    degenerateTriangles: measured.degenerateTriangles,
+    isWatertight: measured.watertight,
+    unitRemark: measured.unitGuess.sentence,
+  };
+};

@@ -1,0 +1,154 @@
+import { Injectable } from '@nestjs/common';
+import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { Sequelize } from 'sequelize';
+import { Clock } from '../adapters/clock/clock.js';
+import { InjectConfig, type Config } from '../config/config.js';
+import { newId } from '../database/columns.js';
+import { selectRows, touchRows } from '../database/rows.js';
+import type { Tx } from '../database/transactions.js';
+import { Refusal } from '../http/refusal.js';
+import { CouponKit } from './coupon-kit.model.js';
+import { discountsOf, faultOf, placesLeft, unknownCoupon, usedUp, type CouponFault } from './coupon-rules.js';
+import { Coupon } from './coupon.model.js';
+
+export interface CouponBuyer {
+  readonly email: string | null;
+  readonly personId: string | null;
+}
+
+export interface PricedCoupon {
+  readonly id: string;
+  readonly code: string;
+  readonly label: string;
+  readonly cap: number | null;
+  readonly left: number | null;
+  /** In minor units, in the order of the lines. */
+  readonly discounts: readonly number[];
+}
+
+export interface HoldRequest {
+  readonly couponId: string;
+  readonly orderId: string;
+  readonly email: string;
+  readonly personId: string | null;
+  readonly discountMinor: number;
+}
+
+/**
+ * Coupons as orders use them. A place goes from held to redeemed or is given back, once: the state of its
+ * row decides, so whatever runs twice does nothing the second time.
+ */
+@Injectable()
+export class Coupons {
+  constructor(
+    @InjectConnection() private readonly database: Sequelize,
+    @InjectModel(Coupon) private readonly coupons: typeof Coupon,
+    @InjectModel(CouponKit) private readonly couponKits: typeof CouponKit,
+    @InjectConfig() private readonly config: Config,
+    private readonly clock: Clock,
+  ) {}
+
+  /** @throws Refusal with a `coupon-…` code where the coupon cannot be used for these lines by this buyer */
+  async priceFor(
+    code: string,
+    lines: readonly { readonly kitId: string; readonly priceMinor: number }[],
+    buyer: CouponBuyer,
+    tx?: Tx,
+  ): Promise<PricedCoupon> {
+    const coupon = await this.coupons.findOne({ where: { code }, transaction: tx ?? null });
+    if (!coupon) throw refusalOf(unknownCoupon(code));
+    const fault = faultOf(coupon, this.clock.now());
+    if (fault) throw refusalOf(fault);
+    const kits = await this.couponKits.findAll({ where: { couponId: coupon.id }, transaction: tx ?? null });
+    const kitIds = new Set(kits.map((one) => one.kitId));
+    const isForKit = (kitId: string): boolean => kitIds.size === 0 || kitIds.has(kitId);
+    if (!lines.some((line) => isForKit(line.kitId)))
+      throw new Refusal('coupon-does-not-apply', `The coupon ${coupon.code} is for other kits.`);
+    await this.checkBuyer(coupon, buyer, tx);
+    return {
+      id: coupon.id,
+      code: coupon.code,
+      label: coupon.label,
+      cap: coupon.cap,
+      left: placesLeft(coupon),
+      discounts: discountsOf(coupon.off, lines, isForKit, this.config.WORKSHOP_CURRENCY),
+    };
+  }
+
+  /**
+   * Takes a place for an order. One conditional update decides, so that however many arrive at once, no
+   * more than the cap get in; its row lock then makes the count of the buyer's own places exact.
+   * Best called late in a transaction at `read-committed`: all who want this coupon wait for that lock.
+   * @throws Refusal `coupon-is-used-up` and the like
+   */
+  async hold(tx: Tx, { couponId, orderId, email, personId, discountMinor }: HoldRequest): Promise<void> {
+    const now = this.clock.now();
+    const taken = await touchRows(
+      this.database,
+      `UPDATE coupons SET held = held + 1
+       WHERE id = :couponId AND is_active AND (starts_at IS NULL OR starts_at <= :now)
+         AND (ends_at IS NULL OR ends_at > :now) AND (cap IS NULL OR held + redeemed < cap)`,
+      { couponId, now },
+      tx,
+    );
+    const coupon = await this.coupons.findByPk(couponId, { transaction: tx });
+    if (!coupon) throw new Error('An order was priced with a coupon that does not exist.');
+    if (taken !== 1) throw refusalOf(faultOf(coupon, now) ?? usedUp(coupon));
+    await this.checkBuyer(coupon, { email, personId }, tx);
+    await touchRows(
+      this.database,
+      `INSERT INTO coupon_places (id, coupon_id, order_id, email, person_id, discount_minor, created_at, updated_at)
+       VALUES (:id, :couponId, :orderId, :email, :personId, :discountMinor, :now, :now)`,
+      { id: newId(), couponId, orderId, email, personId, discountMinor, now },
+      tx,
+    );
+  }
+
+  /** The order is paid: its place is used for good. */
+  async redeem(tx: Tx, orderId: string): Promise<void> {
+    await this.leaveHold(tx, orderId, 'redeemed');
+  }
+
+  /** The order came to nothing: its place is free for somebody else. */
+  async giveBack(tx: Tx, orderId: string): Promise<void> {
+    await this.leaveHold(tx, orderId, 'given-back');
+  }
+
+  private async leaveHold(tx: Tx, orderId: string, state: 'redeemed' | 'given-back'): Promise<void> {
+    const left = await touchRows(
+      this.database,
+      `UPDATE coupon_places SET state = :state, updated_at = :now WHERE order_id = :orderId AND state = 'held'`,
+      { state, orderId, now: this.clock.now() },
+      tx,
+    );
+    if (left !== 1) return;
+    await touchRows(
+      this.database,
+      `UPDATE coupons SET held = held - 1, redeemed = redeemed + :redeemed
+       WHERE id = (SELECT coupon_id FROM coupon_places WHERE order_id = :orderId)`,
+      { redeemed: state === 'redeemed' ? 1 : 0, orderId },
+      tx,
+    );
+  }
+
+  private async checkBuyer(coupon: Coupon, { email, personId }: CouponBuyer, tx?: Tx): Promise<void> {
+    if (coupon.perBuyer === null || (!email && !personId)) return;
+    const [own] = await selectRows<{ held: number | string | null; redeemed: number | string | null }>(
+      this.database,
+      `SELECT SUM(state = 'held') AS held, SUM(state = 'redeemed') AS redeemed FROM coupon_places
+       WHERE coupon_id = :couponId AND (email = :email OR person_id = :personId)`,
+      { couponId: coupon.id, email, personId },
+      tx,
+    );
+    const held = Number(own?.held ?? 0);
+    if (held + Number(own?.redeemed ?? 0) < coupon.perBuyer) return;
+    const times = coupon.perBuyer === 1 ? 'once' : `${coupon.perBuyer} times`;
+    const mend = held > 0 ? ' An open order holds it: pay that order or give it up.' : '';
+    throw new Refusal(
+      'coupon-buyer-limit',
+      `The coupon ${coupon.code} can be used ${times} by each buyer.${mend}`,
+    );
+  }
+}
+
+const refusalOf = ({ code, detail }: CouponFault): Refusal => new Refusal(code, detail);

@@ -1,0 +1,16 @@
+import { Module } from '@nestjs/common';
+import { SequelizeModule } from '@nestjs/sequelize';
+import { OrdersModule } from '../orders/orders.module.js';
+import { ExportOrders } from './export-orders.js';
+import { LedgerController } from './ledger.controller.js';
+import { NumberSeries } from './number-series.js';
+import { Receipt } from './receipt.model.js';
+import { TaxRates } from './tax-rates.js';
+import { WriteReceipt } from './write-receipt.js';
+
+@Module({
+  imports: [OrdersModule, SequelizeModule.forFeature([Receipt])],
+  controllers: [LedgerController],
+  providers: [TaxRates, NumberSeries, WriteReceipt, ExportOrders],
+})
+export class LedgerModule {}

@@ -1,0 +1,25 @@
+import { Column, DataType, Model, Table } from 'sequelize-typescript';
+import { IdColumn, MomentColumn } from '../database/columns.js';
+
+/** A line of a receipt's tax: one rate of one country. */
+export interface ReceiptTax {
+  readonly country: string;
+  readonly ratePercent: string;
+  readonly netMinor: number;
+  readonly taxMinor: number;
+}
+
+@Table({ tableName: 'receipts', timestamps: false })
+export class Receipt extends Model {
+  @IdColumn() declare id: string;
+  @Column(DataType.CHAR(36)) declare orderId: string;
+  @Column(DataType.STRING(20)) declare series: string;
+  @Column(DataType.SMALLINT.UNSIGNED) declare year: number;
+  @Column(DataType.INTEGER.UNSIGNED) declare number: number;
+  @Column(DataType.STRING(30)) declare label: string;
+  @Column(DataType.CHAR(3)) declare currency: string;
+  @Column(DataType.INTEGER.UNSIGNED) declare totalMinor: number;
+  @Column(DataType.CHAR(2)) declare country: string;
+  @Column(DataType.JSON) declare tax: ReceiptTax[];
+  @MomentColumn() declare issuedAt: Date;
+}

@@ -1,0 +1,58 @@
+import { createWriteStream } from 'node:fs';
+import { mkdtemp, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { pipeline } from 'node:stream/promises';
+import { Injectable, type OnApplicationShutdown } from '@nestjs/common';
+import type { z } from 'zod';
+import { Storage } from '../adapters/storage/storage.js';
+import { measureFile } from '../catalogue/files/measure-file.job.js';
+import { MeasurementRecords } from '../catalogue/files/measurement-records.js';
+import { HandlesJob, type JobHandler } from '../jobs/job.js';
+import { MeshRunner, type MeshOutcome } from './mesh-runner.js';
+
+/** After so many runs that ended without an answer a file counts as one that ends the process. */
+const MOST_TRIES = 4;
+
+/** Measures one stored mesh and keeps what was found. */
+@Injectable()
+@HandlesJob(measureFile)
+export class MeasureFile implements JobHandler<typeof measureFile.payload>, OnApplicationShutdown {
+  constructor(
+    private readonly records: MeasurementRecords,
+    private readonly storage: Storage,
+    private readonly runner: MeshRunner,
+  ) {}
+
+  async handle({ sha256, fileName }: z.output<typeof measureFile.payload>): Promise<void> {
+    const work = await this.records.begin(sha256);
+    if (!work) return;
+    if (work.tries > MOST_TRIES)
+      return this.records.keepRefused(
+        sha256,
+        'worker-ended',
+        `could not be measured in ${MOST_TRIES} tries. Export it with fewer triangles.`,
+      );
+    const outcome = await this.measure(work.storageKey, fileName);
+    if (!outcome.isMeasured) return this.records.keepRefused(sha256, outcome.code, outcome.fault);
+    const { measurement, geometryHash, drawings } = outcome;
+    await this.records.keepMeasured(sha256, { measurement, geometryHash, drawings });
+  }
+
+  onApplicationShutdown(): Promise<void> {
+    return this.runner.close();
+  }
+
+  private async measure(storageKey: string, fileName: string): Promise<MeshOutcome> {
+    const path = this.storage.localPath(storageKey);
+    if (path) return this.runner.run({ path, fileName });
+    const folder = await mkdtemp(join(tmpdir(), 'windchest-mesh-'));
+    try {
+      const copy = join(folder, 'mesh');
+      await pipeline(await this.storage.get(storageKey), createWriteStream(copy));
+      return await this.runner.run({ path: copy, fileName });
+    } finally {
+      await rm(folder, { recursive: true, force: true });
+    }
+  }
+}

@@ -1,0 +1,66 @@
+import { Injectable } from '@nestjs/common';
+import type { Answer, Handled } from '@windchest/contracts';
+import { InjectConfig, type Config } from '../config/config.js';
+import { isChargeable } from '../coupons/smallest-charge.js';
+import type { SignedIn } from '../http/person.js';
+import { RateLimits } from '../http/rate-limits.js';
+import { Refusal } from '../http/refusal.js';
+import { PriceBasket, type PricedBasket } from './price-basket.js';
+import { tooLittleToCharge } from './too-little-to-charge.js';
+
+type Quote = Answer<'POST /basket/quote'>;
+
+/** Prices a basket for its page. A coupon that cannot be used is a fault in the answer, not an error. */
+@Injectable()
+export class QuoteBasket {
+  constructor(
+    @InjectConfig() private readonly config: Config,
+    private readonly basket: PriceBasket,
+    private readonly limits: RateLimits,
+  ) {}
+
+  async quote(
+    { items, couponCode }: Handled<'POST /basket/quote'>['body'],
+    person: SignedIn | null,
+    network: string,
+  ): Promise<Quote> {
+    // Codes can be guessed by trying.
+    if (couponCode) await this.limits.take('coupon', network);
+    const ids = items.map((item) => item.licenceId);
+    const buyer = { email: person?.email ?? null, personId: person?.id ?? null };
+    try {
+      const priced = await this.basket.price(ids, couponCode, buyer);
+      if (isChargeable(priced.totalMinor, this.config.WORKSHOP_CURRENCY)) return this.show(priced, null);
+      const { code, detail } = tooLittleToCharge(priced.totalMinor, this.config);
+      return this.show(priced, { code, detail });
+    } catch (fault) {
+      if (!(fault instanceof Refusal) || !fault.code.startsWith('coupon-')) throw fault;
+      const full = await this.basket.price(ids, undefined, buyer);
+      return this.show(full, { code: fault.code, detail: fault.detail });
+    }
+  }
+
+  private show(priced: PricedBasket, couponFault: Quote['couponFault']): Quote {
+    const money = (minor: number) => ({ minor, currency: this.config.WORKSHOP_CURRENCY });
+    const { coupon } = priced;
+    return {
+      lines: priced.lines.map(({ licence, ...line }) => ({
+        licenceId: licence.licenceId,
+        kitSlug: licence.kitSlug,
+        kitName: licence.kitName,
+        colour: licence.colour,
+        licenceName: licence.licenceName,
+        revision: licence.revisionLabel,
+        price: money(line.priceMinor),
+        discount: money(line.discountMinor),
+        total: money(line.totalMinor),
+      })),
+      gone: [...priced.gone],
+      subtotal: money(priced.subtotalMinor),
+      discount: money(priced.discountMinor),
+      total: money(priced.totalMinor),
+      coupon: coupon && { code: coupon.code, label: coupon.label, cap: coupon.cap, left: coupon.left },
+      couponFault,
+    };
+  }
+}

@@ -1,0 +1,11 @@
+import { z } from 'zod';
+import { defineJob } from '../jobs/job.js';
+
+export const FIRST_LOOK_SECONDS = 60;
+
+/** Looks after one order until it is final, whatever became of browser, events and processes. */
+export const reconcileOrder = defineJob({
+  name: 'orders.reconcile',
+  payload: z.object({ orderId: z.uuid() }),
+  attempts: 100,
+});
