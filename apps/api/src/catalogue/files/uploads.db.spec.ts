@@ -5,7 +5,16 @@ import { join } from 'node:path';
 import { keyOf, Storage } from '../../adapters/storage/storage.js';
 import { CONFIG, type Config } from '../../config/config.js';
 import { selectRows } from '../../database/rows.js';
-import { BOUNDARY, multipart, boxStl, draftKit, readRevision, sendFile, startRevision, upload } from '../../testing/maker.js';
+import {
+  BOUNDARY,
+  multipart,
+  boxStl,
+  draftKit,
+  readRevision,
+  sendFile,
+  startRevision,
+  upload,
+} from '../../testing/maker.js';
 import { signInAs } from '../../testing/sign-in.js';
 import { startTestApp, type Browser, type TestApp } from '../../testing/test-app.js';
 
@@ -140,23 +149,26 @@ describe('uploads', () => {
     const stl = boxStl(3, 4, 55);
     const body = multipart('X-01 Half.stl', stl);
     const { cookie } = await sessionOf(maker);
-    await new Promise<void>((resolve) => {
-      const half = request(new URL(`/api/workshop/revisions/${revisionId}/files`, shop.url), {
-        method: 'POST',
-        headers: {
-          'X-Windchest': '1',
-          Cookie: cookie,
-          'Content-Type': `multipart/form-data; boundary=${BOUNDARY}`,
-          'Content-Length': body.length,
-        },
-      });
-      half.on('error', () => resolve());
-      half.write(body.subarray(0, body.length - 200), () => setTimeout(() => half.destroy(new Error('gone')), 100));
-    });
     const incoming = join(shop.app.get<Config>(CONFIG).FILES_DIR, 'incoming');
-    for (let wait = 0; wait < 100 && (await readdir(incoming)).length > 0; wait++)
-      await new Promise((resolve) => setTimeout(resolve, 50));
-    expect(await readdir(incoming)).toEqual([]);
+    const untilHalves = async (count: number): Promise<void> => {
+      for (let wait = 0; wait < 200 && (await readdir(incoming)).length !== count; wait++)
+        await new Promise((resolve) => setTimeout(resolve, 25));
+      expect(await readdir(incoming)).toHaveLength(count);
+    };
+    const half = request(new URL(`/api/workshop/revisions/${revisionId}/files`, shop.url), {
+      method: 'POST',
+      headers: {
+        'X-Windchest': '1',
+        Cookie: cookie,
+        'Content-Type': `multipart/form-data; boundary=${BOUNDARY}`,
+        'Content-Length': body.length,
+      },
+    });
+    half.on('error', () => undefined);
+    half.write(body.subarray(0, body.length - 200));
+    await untilHalves(1);
+    half.destroy();
+    await untilHalves(0);
     expect((await readRevision(maker, revisionId)).parts).toEqual([]);
     expect(await upload(maker, revisionId, 'X-01 Half.stl', stl)).toMatchObject({ sha256: sha256(stl) });
   });
