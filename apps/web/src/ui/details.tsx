@@ -16,9 +16,10 @@ const Summary = chakra('summary', {
     textUnderlineOffset: '0.2em',
     _hover: { textDecorationColor: 'currentColor' },
     '&::-webkit-details-marker': { display: 'none' },
-    'details[open] > & > svg': { transform: 'rotate(90deg)' },
   },
 });
+
+const Opening = chakra('details', { base: { '&[open] > summary > svg': { transform: 'rotate(90deg)' } } });
 
 export interface DetailsProps {
   /** What opens it. */
@@ -30,7 +31,7 @@ export interface DetailsProps {
 
 /** Something to look at when wanted. The browser’s own: a link to something inside opens it. */
 export const Details = ({ summary, children, gap = '3' }: DetailsProps) => (
-  <details>
+  <Opening>
     <Summary>
       <chakra.svg
         viewBox="0 0 8 12"
@@ -49,5 +50,5 @@ export const Details = ({ summary, children, gap = '3' }: DetailsProps) => (
       {summary}
     </Summary>
     <chakra.div marginTop={gap}>{children}</chakra.div>
-  </details>
+  </Opening>
 );

@@ -1,3 +1,92 @@
-import type { RouteObject } from 'react-router-dom';
+import { Navigate, type RouteObject, useParams } from 'react-router-dom';
+import { paths } from '../../config/paths.js';
+import { lazyPage } from '../lazy-page.js';
 
-export const workshopRoutes: RouteObject[] = [];
+/** Parts and gates stand on the revision's first view; addresses that name them lead there. */
+const ToRevision = () => {
+  const { kitId = '', revisionId = '' } = useParams();
+  return <Navigate to={paths.workshop.revision.to({ kitId, revisionId })} replace />;
+};
+
+const revisionTabs: RouteObject[] = [
+  {
+    index: true,
+    element: lazyPage(async () => (await import('../../features/catalogue/parts-tab.js')).PartsTab),
+  },
+  { path: paths.workshop.parts.path, element: <ToRevision /> },
+  { path: paths.workshop.gates.path, element: <ToRevision /> },
+  {
+    path: paths.workshop.notes.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/notes-tab.js')).NotesTab),
+  },
+  {
+    path: paths.workshop.specification.path,
+    element: lazyPage(
+      async () => (await import('../../features/catalogue/specification-tab.js')).SpecificationTab,
+    ),
+  },
+  {
+    path: paths.workshop.changes.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/changes-tab.js')).ChangesTab),
+  },
+  {
+    path: paths.workshop.files.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/files-tab.js')).FilesTab),
+  },
+];
+
+export const workshopRoutes: RouteObject[] = [
+  {
+    path: paths.workshop.overview.path,
+    element: lazyPage(async () => (await import('../../features/workshop/overview.page.js')).OverviewPage),
+  },
+  {
+    path: paths.workshop.kits.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/kits.page.js')).WorkshopKitsPage),
+  },
+  {
+    path: paths.workshop.newKit.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/new-kit.page.js')).NewKitPage),
+  },
+  {
+    path: paths.workshop.kit.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/kit.page.js')).WorkshopKitPage),
+  },
+  {
+    path: paths.workshop.revision.path,
+    element: lazyPage(async () => (await import('../../features/catalogue/revision.page.js')).RevisionPage),
+    children: revisionTabs,
+  },
+  {
+    path: paths.workshop.coupons.path,
+    element: lazyPage(async () => (await import('../../features/coupons/coupons.page.js')).CouponsPage),
+  },
+  {
+    path: paths.workshop.newCoupon.path,
+    element: lazyPage(async () => (await import('../../features/coupons/new-coupon.page.js')).NewCouponPage),
+  },
+  {
+    path: paths.workshop.coupon.path,
+    element: lazyPage(async () => (await import('../../features/coupons/coupon.page.js')).CouponPage),
+  },
+  {
+    path: paths.workshop.orders.path,
+    element: lazyPage(async () => (await import('../../features/ledger/orders.page.js')).WorkshopOrdersPage),
+  },
+  {
+    path: paths.workshop.order.path,
+    element: lazyPage(async () => (await import('../../features/ledger/order.page.js')).WorkshopOrderPage),
+  },
+  {
+    path: paths.workshop.holders.path,
+    element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
+  },
+  {
+    path: paths.workshop.people.path,
+    element: lazyPage(async () => (await import('../../features/workshop/people.page.js')).PeoplePage),
+  },
+  {
+    path: paths.workshop.log.path,
+    element: lazyPage(async () => (await import('../../features/workshop/log.page.js')).LogPage),
+  },
+];

@@ -2,12 +2,17 @@ export const kitTexts = {
   loading: 'Kit',
   failed: 'The kit cannot be shown',
   unknown: 'No kit stands at this address',
-  unknownDetail: 'It may have been taken off sale, or the link is cut off. The kits are all on the front page.',
+  unknownDetail:
+    'It may have been taken off sale, or the link is cut off. The kits are all on the front page.',
   seeKits: 'See the kits',
 
   buy: 'Buy this kit',
   bundle: (parts: string, size: string) =>
     `The bundle holds ${parts}, the assembly notes, the print specification and the hardware list, ${size} in all.`,
+  onePart: 'part',
+  manyParts: 'parts',
+  onePiece: 'piece to print',
+  manyPieces: 'pieces to print',
   later: 'All later revisions are yours.',
   licences: 'Licence',
   termsOf: (name: string) => `Terms: ${name}`,

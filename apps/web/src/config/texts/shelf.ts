@@ -46,6 +46,8 @@ export const lostTexts = {
 export const shelfKitTexts = {
   failed: 'This kit cannot be shown',
   notYours: 'This kit is not on your shelf',
+  notYoursDetail:
+    'What you buy with this account stands there. A kit bought with another address comes when you sign in with that one.',
   toShelf: 'To my shelf',
   back: 'My shelf',
 
@@ -177,7 +179,7 @@ export const collectTexts = {
   orderName: 'Order',
 
   fresh: 'Mail me a fresh link',
-  freshWhy: 'It goes to the address of the order. This link then ends.',
+  freshWhy: 'Need another link? It goes to the address of the order, and this one then ends.',
   sending: 'Mailing …',
   freshSentTitle: 'Look in your mail',
   freshSent: 'A fresh link is on its way to the address of the order.',

@@ -22,6 +22,7 @@ export const kitsTexts = {
 
 export const kitFormTexts = {
   name: 'Name',
+  kitNameHint: 'A word or two. It stands on everything of the kit.',
   slug: 'Address',
   slugHint: 'The end of the kit’s address in the shop. Small letters, digits and hyphens.',
   tagline: 'Tagline',

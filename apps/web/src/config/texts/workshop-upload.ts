@@ -37,6 +37,6 @@ export const uploadTexts = {
     `${fileName} has ${bytes}; ${limit} a file are the most. Reduce the mesh or split the part.`,
   unreadable: (fileName: string) =>
     `${fileName} cannot be read. It may have been moved or changed meanwhile; drop it again.`,
-  tooLargeTogether: (fileName: string, limit: string) =>
-    `With ${fileName} the revision would hold more than ${limit}. Take files out first.`,
+  brokenOff: (fileName: string) =>
+    `The connection broke off before ${fileName} had arrived. Check it and try again.`,
 };

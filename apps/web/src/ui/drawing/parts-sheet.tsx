@@ -42,8 +42,9 @@ const PartDrawing = ({
 }) => (
   <chakra.svg
     viewBox={part.viewBox}
-    width={Math.max(2, part.widthMm * pxPerMm)}
-    height={Math.max(2, part.heightMm * pxPerMm)}
+    // With their unit: a bare 32 would be the token of that name.
+    width={`${Math.max(2, part.widthMm * pxPerMm)}px`}
+    height={`${Math.max(2, part.heightMm * pxPerMm)}px`}
     overflow="visible"
     display="block"
     marginInline="auto"
@@ -128,8 +129,8 @@ export const PartThumb = ({ part, sizePx = 40 }: { part: Omit<DrawnPart, 'code'>
   return (
     <chakra.svg
       viewBox={part.viewBox}
-      width={part.widthMm * pxPerMm}
-      height={part.heightMm * pxPerMm}
+      width={`${part.widthMm * pxPerMm}px`}
+      height={`${part.heightMm * pxPerMm}px`}
       overflow="visible"
       display="block"
       aria-hidden

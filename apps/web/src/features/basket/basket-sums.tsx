@@ -1,0 +1,62 @@
+import { Box } from '@chakra-ui/react/box';
+import type { Quote } from '@windchest/contracts';
+import { basketTexts } from '../../config/texts/basket.js';
+import { priceTexts } from '../../config/texts/shared.js';
+import { price } from '../../lib/format.js';
+import { Text } from '../../ui/text.js';
+
+interface SumProps {
+  name: string;
+  value: string;
+  isMain?: boolean;
+}
+
+const Sum = ({ name, value, isMain }: SumProps) => (
+  <Box
+    display="flex"
+    justifyContent="space-between"
+    gap="6"
+    paddingBlock="1.5"
+    fontWeight={isMain ? 'bold' : undefined}
+    fontSize={isMain ? 'lg' : undefined}
+    borderTopWidth={isMain ? '1px' : undefined}
+    borderColor="ink"
+    color={isMain ? 'ink' : 'ink.soft'}
+  >
+    <dt>{name}</dt>
+    <Box as="dd" whiteSpace="nowrap">
+      {value}
+    </Box>
+  </Box>
+);
+
+/** What the basket comes to; faint while a new price is on its way. */
+export function BasketSums({ quote, isCurrent }: { quote: Quote; isCurrent: boolean }) {
+  const { subtotal, discount, total, coupon } = quote;
+  return (
+    <Box
+      aria-busy={!isCurrent}
+      marginLeft="auto"
+      maxWidth={{ md: '22rem' }}
+      opacity={isCurrent ? 1 : 0.55}
+      transition="opacity"
+      transitionDuration="fast"
+    >
+      <dl>
+        {coupon && (
+          <>
+            <Sum name={basketTexts.subtotal} value={price(subtotal)} />
+            <Sum
+              name={basketTexts.discount(coupon.code)}
+              value={price({ ...discount, minor: -discount.minor })}
+            />
+          </>
+        )}
+        <Sum name={basketTexts.total} value={total.minor === 0 ? priceTexts.free : price(total)} isMain />
+      </dl>
+      <Text look="small" isSoft textAlign="end">
+        {basketTexts.taxNote}
+      </Text>
+    </Box>
+  );
+}

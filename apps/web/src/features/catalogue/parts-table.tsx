@@ -1,0 +1,129 @@
+import { Box } from '@chakra-ui/react/box';
+import { partsTexts } from '../../config/texts/workshop-parts.js';
+import { Button } from '../../ui/button.js';
+import { PartThumb } from '../../ui/drawing/parts-sheet.js';
+import { StatusMark } from '../../ui/status-mark.js';
+import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
+import type { SignName } from '../../ui/sign.js';
+import { MarkField } from './mark-field.js';
+import { MeasuredCell } from './measured-cell.js';
+import type { Difference, PartRow } from './part-rows.js';
+
+const signs: Record<Difference, SignName> = {
+  changed: 'warn',
+  new: 'ok',
+  dropped: 'stop',
+  're-exported': 'none',
+  same: 'none',
+};
+
+/** Of front and top view the one that shows more: a flat plate seen from the front is a line. */
+const drawingOf = ({ part }: PartRow) => {
+  if (!part?.drawings) return null;
+  const { front, top } = part.drawings;
+  return front.widthMm * front.heightMm >= top.widthMm * top.heightMm ? front : top;
+};
+
+const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => void) | undefined }) => {
+  const drawing = drawingOf(row);
+  const { part } = row;
+  return (
+    <Box id={`part-${row.code}`} display="flex" gap="3.5" alignItems="center" scrollMarginTop="4">
+      <Box width="2.75rem" flex="none" display="grid" placeItems="center">
+        {drawing && <PartThumb part={drawing} />}
+      </Box>
+      <Box minWidth="0" lineHeight="1.4">
+        <Box fontWeight="bold">{row.code}</Box>
+        <Box color="ink.soft" fontWeight="normal">
+          {row.name}
+        </Box>
+        {onEdit && part && (
+          <Button
+            look="plain"
+            size="sm"
+            minHeight="1.5rem"
+            paddingBlock="0"
+            onClick={() => onEdit(part.id)}
+            aria-label={partsTexts.editOf(row.code)}
+          >
+            {partsTexts.edit}
+          </Button>
+        )}
+      </Box>
+    </Box>
+  );
+};
+
+const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
+  comparison && (
+    <Box>
+      <StatusMark
+        state={signs[comparison.difference]}
+        fontWeight={
+          comparison.difference === 'same' || comparison.difference === 're-exported' ? 'normal' : 'semibold'
+        }
+      >
+        {partsTexts.differences[comparison.difference]}
+      </StatusMark>
+      {comparison.whatDiffers && comparison.difference !== 'dropped' && comparison.difference !== 'new' && (
+        <Box lineHeight="snug">{comparison.whatDiffers}</Box>
+      )}
+    </Box>
+  );
+
+export interface PartsTableProps {
+  rows: readonly PartRow[];
+  comparedWith: string | undefined;
+  revisionId: string;
+  /** Left out where nothing may be changed. */
+  onEdit: ((partId: string) => void) | undefined;
+}
+
+/** Every part with its drawing, what it measures, what changed, and what buyers should do about it. */
+export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTableProps) {
+  const columns: Column<PartRow>[] = [
+    {
+      key: 'part',
+      header: partsTexts.columns.part,
+      isHeading: true,
+      cell: (row) => <PartCell row={row} onEdit={onEdit} />,
+    },
+    {
+      key: 'quantity',
+      header: partsTexts.columns.quantity,
+      isNumeric: true,
+      cell: (row) => (
+        <Box as="span" whiteSpace="nowrap">
+          {partsTexts.pieces(row.quantity)}
+        </Box>
+      ),
+    },
+    {
+      key: 'measured',
+      header: partsTexts.columns.measured,
+      cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
+    },
+    {
+      key: 'since',
+      header: partsTexts.columns.since(comparedWith),
+      cell: (row) => <SinceCell row={row} />,
+    },
+    {
+      key: 'should',
+      header: partsTexts.columns.should,
+      width: '27%',
+      cell: (row) =>
+        row.comparison && (
+          <MarkField
+            key={row.code}
+            revisionId={revisionId}
+            row={row.comparison}
+            isWritable={onEdit !== undefined}
+          />
+        ),
+    },
+  ];
+  return (
+    <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+  );
+}

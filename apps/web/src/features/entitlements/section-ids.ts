@@ -1,0 +1,7 @@
+/** Places on the page of a kit on the shelf. */
+export const sectionIds = {
+  changeNotes: 'change-notes',
+  licence: 'licence',
+  cautions: 'cautions',
+  downloads: 'downloads',
+} as const;

@@ -1,0 +1,70 @@
+import { Box } from '@chakra-ui/react/box';
+import type { ShelfKit } from '@windchest/contracts';
+import { paths } from '../../config/paths.js';
+import { shelfKitTexts } from '../../config/texts/shelf.js';
+import { bytes } from '../../lib/format.js';
+import { Button } from '../../ui/button.js';
+import { Fault } from '../../ui/fault.js';
+import { RowAnchor, RowButton, RowLink } from './ruled-rows.js';
+import { sectionIds } from './section-ids.js';
+import type { Download } from './use-download.js';
+
+export interface ShelfKitActionsProps {
+  kit: ShelfKit;
+  download: Download;
+  onPrinted: (revision: ShelfKit['newest']) => void;
+}
+
+/** What one does with a kit on the shelf: fetch it, say what is printed, read about it. */
+export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsProps) {
+  const { newest, held } = kit;
+  const bundle = { kitSlug: kit.slug, revisionId: newest.id };
+  return (
+    <>
+      <Box display="grid" gap="3" marginBottom="4">
+        <Button
+          onClick={() => void download.start(bundle)}
+          isBusy={download.isStarting(bundle)}
+          busyWords={shelfKitTexts.getting}
+        >
+          <span>
+            {shelfKitTexts.getBundle}
+            <Box as="span" fontWeight="normal">
+              {' '}
+              · {bytes(newest.bundleBytes)}
+            </Box>
+          </span>
+        </Button>
+        {held?.id !== newest.id && (
+          <Button look="outline" onClick={() => onPrinted(newest)}>
+            {shelfKitTexts.printed(newest.label)}
+          </Button>
+        )}
+      </Box>
+      {download.fault && <Fault level={2} what={shelfKitTexts.getFailed} fault={download.fault} />}
+      {kit.documents.map((document) => {
+        const wish = { ...bundle, file: document.sha256 };
+        return (
+          <RowButton
+            key={document.sha256 + document.fileName}
+            onClick={() => void download.start(wish)}
+            aria-busy={download.isStarting(wish)}
+          >
+            {document.fileName}
+            <Box as="span" color="ink.soft" whiteSpace="nowrap">
+              {bytes(document.bytes)}
+            </Box>
+          </RowButton>
+        );
+      })}
+      <RowAnchor href={`#${sectionIds.changeNotes}`}>{shelfKitTexts.changeNotes}</RowAnchor>
+      <RowAnchor href={`#${sectionIds.licence}`}>{shelfKitTexts.licence}</RowAnchor>
+      {kit.cautions && <RowAnchor href={`#${sectionIds.cautions}`}>{shelfKitTexts.cautions}</RowAnchor>}
+      <RowAnchor href={`#${sectionIds.downloads}`}>{shelfKitTexts.downloads}</RowAnchor>
+      {kit.orderId && (
+        <RowLink to={paths.order.to({ orderId: kit.orderId })}>{shelfKitTexts.receipt}</RowLink>
+      )}
+      <RowLink to={paths.kit.to({ slug: kit.slug })}>{shelfKitTexts.kitPage}</RowLink>
+    </>
+  );
+}

@@ -1,0 +1,141 @@
+import { Box } from '@chakra-ui/react/box';
+import type { ShelfKit } from '@windchest/contracts';
+import { useState } from 'react';
+import { Navigate, useParams } from 'react-router-dom';
+import { paths, signInThenBack } from '../../config/paths.js';
+import { shelfKitTexts, sourceTexts } from '../../config/texts/shelf.js';
+import { date } from '../../lib/format.js';
+import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
+import { useEndpoint } from '../../lib/use-endpoint.js';
+import { LinkButton } from '../../ui/button.js';
+import { PartsSheet } from '../../ui/drawing/parts-sheet.js';
+import { Fault } from '../../ui/fault.js';
+import { Notice } from '../../ui/notice.js';
+import { PageTitle } from '../../ui/page-title.js';
+import { Band, SplitSheet } from '../../ui/sheet.js';
+import { SkeletonLines } from '../../ui/skeleton-lines.js';
+import { Heading, Text } from '../../ui/text.js';
+import { KitColour } from '../../ui/theme/kit-colour.js';
+import { TitleBlock } from '../../ui/title-block.js';
+import { PrintedDialog } from './printed-dialog.js';
+import { adviceFor } from './reprint-list.js';
+import { ReprintTable } from './reprint-table.js';
+import { ShelfKitActions } from './shelf-kit-actions.js';
+import { ShelfKitHeadline } from './shelf-kit-headline.js';
+import { ShelfKitSections } from './shelf-kit-sections.js';
+import { useShelfDownload } from './use-download.js';
+
+/** A download that has not ended yet is looked after for this long, so that the page learns what is held. */
+const watchedMs = 10 * 60_000;
+const hasRunningDownload = (kit: ShelfKit | undefined): boolean =>
+  kit?.downloads.some((one) => !one.isComplete && Date.now() - Date.parse(one.at) < watchedMs) ?? false;
+
+const drawnParts = (kit: ShelfKit) =>
+  kit.parts.flatMap((part) =>
+    part.drawing
+      ? {
+          ...part.drawing,
+          code: part.code,
+          name: part.name,
+          isToReprint: kit.held !== null && adviceFor(part) === 'print',
+        }
+      : [],
+  );
+
+function Kit({ kit }: { kit: ShelfKit }) {
+  const download = useShelfDownload();
+  const [printed, setPrinted] = useState<ShelfKit['newest']>();
+  const { held, newest } = kit;
+  const drawn = drawnParts(kit);
+  return (
+    <KitColour palette={kit.colour}>
+      <SplitSheet
+        asideLabel={shelfKitTexts.actions}
+        main={
+          <>
+            <Heading level={1} look="display" overflowWrap="anywhere">
+              {kit.name}
+            </Heading>
+            <ShelfKitHeadline kit={kit} />
+            {held?.isWithdrawn && (
+              <Box marginTop="5">
+                <Notice tone="warn" title={shelfKitTexts.heldWithdrawnTitle(held.label)}>
+                  {shelfKitTexts.heldWithdrawn(newest.label)}
+                </Notice>
+              </Box>
+            )}
+            {drawn.length > 0 && (
+              <Box marginTop="8">
+                <PartsSheet parts={drawn} label={shelfKitTexts.sheet(kit.name)} />
+              </Box>
+            )}
+            {held && <ReprintTable parts={kit.parts} />}
+          </>
+        }
+        aside={<ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />}
+        block={
+          <TitleBlock
+            columns={2}
+            fields={[
+              { name: shelfKitTexts.blockHold, value: held?.label ?? shelfKitTexts.blockNothing },
+              {
+                name: shelfKitTexts.blockNewest,
+                value: shelfKitTexts.newestOf(newest.label, date(newest.releasedAt)),
+              },
+              { name: shelfKitTexts.blockSource, value: sourceTexts[kit.source] },
+              { name: shelfKitTexts.blockSince, value: date(kit.since) },
+            ]}
+          />
+        }
+      />
+      <ShelfKitSections kit={kit} download={download} onPrinted={setPrinted} />
+      <PrintedDialog slug={kit.slug} revision={printed} onClose={() => setPrinted(undefined)} />
+    </KitColour>
+  );
+}
+
+/** One kit on the shelf: the revision held, the newest one, and what to reprint between them. */
+export function ShelfKitPage() {
+  const { slug = '' } = useParams();
+  const state = useSignInState();
+  const { data, fault, mutate } = useEndpoint(
+    'GET /shelf/:slug',
+    state === 'signed-in' ? { params: { slug } } : null,
+    { refreshInterval: (kit) => (hasRunningDownload(kit) ? 4000 : 0) },
+  );
+  useEndedSession(fault);
+  if (state === 'signed-out') return <Navigate to={signInThenBack(paths.shelfKit.to({ slug }))} replace />;
+  if (data)
+    return (
+      <>
+        <PageTitle title={data.name} />
+        <Kit kit={data} />
+      </>
+    );
+  if (fault?.code === 'not-found')
+    return (
+      <Band>
+        <PageTitle title={shelfKitTexts.notYours} />
+        <Heading level={1}>{shelfKitTexts.notYours}</Heading>
+        <Text look="lead" marginTop="2" marginBottom="6">
+          {shelfKitTexts.notYoursDetail}
+        </Text>
+        <LinkButton to={paths.shelf.to()}>{shelfKitTexts.toShelf}</LinkButton>
+      </Band>
+    );
+  if (!fault)
+    return (
+      <Band>
+        <SkeletonLines lines={5} />
+      </Band>
+    );
+  return (
+    <Band>
+      <PageTitle title={shelfKitTexts.failed} />
+      <Heading level={1} marginBottom="6">
+        {shelfKitTexts.failed}
+      </Heading>
+      <Fault level={2} fault={fault} onAgain={() => void mutate()} />
+    </Band>
+  );
+}

@@ -1,0 +1,46 @@
+import { Box } from '@chakra-ui/react/box';
+import type { KitPage, KitPart } from '@windchest/contracts';
+import { kitTexts } from '../../config/texts/kit.js';
+import { number } from '../../lib/format.js';
+import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
+import { Text } from '../../ui/text.js';
+import { ownSettings } from './own-settings.js';
+
+const sizeWords = ({ sizeMm: { x, y, z } }: KitPart) => [x, y, z].map((side) => number(side, 1)).join(' × ');
+
+/** The parts of a kit by their codes; assembly and change notes link here. */
+export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitPage }) {
+  const columns: Column<KitPart>[] = [
+    {
+      key: 'part',
+      header: kitTexts.partName,
+      isHeading: true,
+      cell: (part) => {
+        const own = part.printSpec ? ownSettings(part.printSpec, kit.printSpec) : [];
+        return (
+          <Box id={`part-${part.code}`} scrollMarginTop="4" _target={{ textDecoration: 'underline' }}>
+            <Box as="span" fontWeight="semibold">
+              {part.code}
+            </Box>{' '}
+            {part.name}
+            {own.length > 0 && (
+              <Text look="small" isSoft fontWeight="normal">
+                {kitTexts.ownSettings(own.join(', '))}
+              </Text>
+            )}
+          </Box>
+        );
+      },
+    },
+    { key: 'quantity', header: kitTexts.quantity, isNumeric: true, cell: (part) => number(part.quantity) },
+    { key: 'size', header: kitTexts.size, isNumeric: true, cell: sizeWords },
+  ];
+  return (
+    <HairlineTable
+      caption={kitTexts.partsLabel(kit.name)}
+      columns={columns}
+      rows={parts}
+      rowKey={(part) => part.code}
+    />
+  );
+}

@@ -1,0 +1,56 @@
+import { Box } from '@chakra-ui/react/box';
+import { chakra } from '@chakra-ui/react/styled-system';
+import type { KitPage, KitPart } from '@windchest/contracts';
+import { kitTexts } from '../../config/texts/kit.js';
+import { counted } from '../../lib/format.js';
+import type { Answered } from '../../lib/use-endpoint.js';
+import { Details } from '../../ui/details.js';
+import { type DrawnPart, PartsSheet } from '../../ui/drawing/parts-sheet.js';
+import { Fault } from '../../ui/fault.js';
+import { SkeletonLines } from '../../ui/skeleton-lines.js';
+import { Text } from '../../ui/text.js';
+import { PartsList } from './parts-list.js';
+
+const PartLink = chakra('a', {
+  base: { display: 'block', borderRadius: 'sm', _hover: { '& path': { stroke: 'ink' } } },
+});
+
+const drawnParts = (parts: readonly KitPart[]): DrawnPart[] =>
+  parts.flatMap(({ code, name, drawing }) => (drawing ? [{ code, name, ...drawing }] : []));
+
+export interface PartsSectionProps {
+  kit: KitPage;
+  parts: Answered<KitPart[]>;
+}
+
+/** Every part drawn from its mesh, and the list of them. */
+export function PartsSection({ kit, parts: { data: parts, fault, mutate } }: PartsSectionProps) {
+  if (!parts)
+    return fault ? (
+      <Fault what={kitTexts.partsLoading} fault={fault} onAgain={() => void mutate()} />
+    ) : (
+      <SkeletonLines lines={4} />
+    );
+  const pieces = parts.reduce((sum, part) => sum + part.quantity, 0);
+  return (
+    <>
+      <Text isSoft marginBottom="6">
+        {kitTexts.partsLead(
+          counted(parts.length, kitTexts.onePart, kitTexts.manyParts),
+          counted(pieces, kitTexts.onePiece, kitTexts.manyPieces),
+        )}
+      </Text>
+      <PartsSheet
+        parts={drawnParts(parts)}
+        label={kitTexts.partsLabel(kit.name)}
+        maxHeightPx={150}
+        linkOf={({ code }, drawn) => <PartLink href={`#part-${code}`}>{drawn}</PartLink>}
+      />
+      <Box marginTop="7">
+        <Details summary={kitTexts.partsList(parts.length)}>
+          <PartsList parts={parts} kit={kit} />
+        </Details>
+      </Box>
+    </>
+  );
+}
