@@ -127,9 +127,7 @@ test('a maker uploads a new revision, sees every part measured and compared, and
   await test.step('its holder reads on the shelf what to reprint', async () => {
     await page.goto('/account');
     await page.getByRole('button', { name: 'Sign out' }).first().click();
-    const { demoSignIns } = (await import('../seed-data/dist/sign-ins.js')) as {
-      demoSignIns: { email: string; passphrase: string }[];
-    };
+    const { demoSignIns } = await import('../seed-data/dist/sign-ins.js');
     await signIn(
       page,
       demoSignIns.find((one) => one.email.startsWith('jonas')) ?? { email: '', passphrase: '' },
