@@ -24,6 +24,7 @@ import { PriceLicence } from './kits/price-licence.js';
 import { ShopKits } from './kits/shop-kits.js';
 import { WorkshopKitsController } from './kits/workshop-kits.controller.js';
 import { WorkshopKits } from './kits/workshop-kits.js';
+import { PrintPlans } from './print/print-plans.js';
 import { BuildRelease } from './release/build-release.js';
 import { RequestRelease } from './release/request-release.js';
 import { ChangeRevision } from './revisions/change-revision.js';
@@ -65,8 +66,9 @@ import { StartRevision } from './revisions/start-revision.js';
     BuildRelease,
     CatalogueReader,
     CatalogueWaiting,
+    PrintPlans,
   ],
   // The measuring room writes what it finds through the records.
-  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords],
+  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans],
 })
 export class CatalogueModule {}

@@ -1,5 +1,6 @@
 import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
+import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
@@ -14,6 +15,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0004-sales': sales,
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
+  '0007-print-profiles': printProfiles,
 };
 
 /**

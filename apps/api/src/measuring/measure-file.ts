@@ -35,8 +35,8 @@ export class MeasureFile implements JobHandler<typeof measureFile.payload>, OnAp
       );
     const outcome = await this.measure(work.storageKey, fileName);
     if (!outcome.isMeasured) return this.records.keepRefused(sha256, outcome.code, outcome.fault);
-    const { measurement, geometryHash, drawings } = outcome;
-    await this.records.keepMeasured(sha256, { measurement, geometryHash, drawings });
+    const { isMeasured: _, ...findings } = outcome;
+    await this.records.keepMeasured(sha256, findings);
   }
 
   onApplicationShutdown(): Promise<void> {

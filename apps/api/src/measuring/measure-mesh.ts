@@ -1,5 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { geometryHash, measure, MeshError, outlines, readMesh, type Mesh } from '@windchest/meshes';
+import { footprintOf, profileOf } from '@windchest/plates';
 import type { Drawing, Drawings } from '../catalogue/files/measured-mesh.js';
 import type { MeshOutcome, MeshTask } from './mesh-runner.js';
 
@@ -12,6 +13,8 @@ export const measureMesh = async ({ path, fileName }: MeshTask): Promise<MeshOut
       measurement: measure(mesh),
       geometryHash: geometryHash(mesh),
       drawings: drawingsOf(mesh),
+      printProfile: profileOf(mesh),
+      footprint: footprintOf(mesh),
     };
   } catch (fault) {
     if (fault instanceof MeshError)

@@ -3,6 +3,7 @@ import { Module } from '@nestjs/common';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { CONFIG, type Config } from '../config/config.js';
 import { InlineMeshRunner } from './inline-mesh-runner.js';
+import { EstimatePrint } from './estimate-print.js';
 import { MeasureFile } from './measure-file.js';
 import { MeshRunner } from './mesh-runner.js';
 import { ThreadMeshRunner } from './thread-mesh-runner.js';
@@ -14,6 +15,7 @@ const MAX_HEAP_MB = 2048;
   imports: [CatalogueModule],
   providers: [
     MeasureFile,
+    EstimatePrint,
     {
       provide: MeshRunner,
       inject: [CONFIG],

@@ -1,4 +1,4 @@
-import type { Drawings, MeasuredMesh } from '../catalogue/files/measured-mesh.js';
+import type { MeshFindings } from '../catalogue/files/measured-mesh.js';
 
 export interface MeshTask {
   /** Where the bytes lie on this machine. */
@@ -8,12 +8,7 @@ export interface MeshTask {
 
 /** What came of measuring; `fault` follows the file's name in a sentence. */
 export type MeshOutcome =
-  | {
-      readonly isMeasured: true;
-      readonly measurement: MeasuredMesh;
-      readonly geometryHash: string;
-      readonly drawings: Drawings;
-    }
+  | ({ readonly isMeasured: true } & MeshFindings)
   | { readonly isMeasured: false; readonly code: string; readonly fault: string };
 
 /** Does the mesh work somewhere that cannot take the API down. */

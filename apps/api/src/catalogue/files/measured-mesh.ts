@@ -1,4 +1,5 @@
 import type { Measurement as MeshMeasurement } from '@windchest/meshes';
+import type { PrintProfile } from '@windchest/plates';
 
 /** What the measuring room finds out about a mesh, as it is kept. */
 export type MeasuredMesh = MeshMeasurement;
@@ -14,6 +15,16 @@ export interface Drawings {
   front: Drawing;
   side: Drawing;
   top: Drawing;
+}
+
+/** All that is kept of one mesh. */
+export interface MeshFindings {
+  readonly measurement: MeasuredMesh;
+  readonly geometryHash: string;
+  readonly drawings: Drawings;
+  /** What estimates of filament and time need, and the convex outline from above. */
+  readonly printProfile: PrintProfile;
+  readonly footprint: readonly (readonly [number, number])[];
 }
 
 /** The side that tells most about a part: the one that shows most of it. */

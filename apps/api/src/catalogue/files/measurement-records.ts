@@ -7,12 +7,12 @@ import { touchRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { measureFile } from './measure-file.job.js';
-import type { Drawings, MeasuredMesh } from './measured-mesh.js';
+import type { MeshFindings } from './measured-mesh.js';
 import { MeasurementRecord } from './measurement.model.js';
 import { StoredFile } from './stored-file.model.js';
 
 /** Goes up when the same bytes would measure differently; files are then measured again as they are used. */
-const MEASURER_VERSION = 1;
+const MEASURER_VERSION = 2;
 
 /** Faults of the measuring, not of the file: sending the file again tries again. */
 export const passingFaults = ['timed-out', 'out-of-memory', 'worker-ended'] as const;
@@ -70,10 +70,7 @@ export class MeasurementRecords {
     return { tries: record.tries, storageKey: keyOf('files', sha256), bytes: file.bytes };
   }
 
-  async keepMeasured(
-    sha256: string,
-    result: { measurement: MeasuredMesh; geometryHash: string; drawings: Drawings },
-  ): Promise<void> {
+  async keepMeasured(sha256: string, result: MeshFindings): Promise<void> {
     await this.records.update(
       { ...result, state: 'measured', fault: null, faultCode: null, measuredAt: this.clock.now() },
       { where: { sha256, state: 'measuring' } },

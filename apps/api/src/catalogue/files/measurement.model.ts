@@ -1,3 +1,4 @@
+import type { PrintProfile } from '@windchest/plates';
 import { Column, DataType, Model, Table } from 'sequelize-typescript';
 import { MomentColumn } from '../../database/columns.js';
 import type { Drawings, MeasuredMesh } from './measured-mesh.js';
@@ -11,6 +12,8 @@ export class MeasurementRecord extends Model {
   @Column(DataType.JSON) declare measurement: MeasuredMesh | null;
   @Column(DataType.STRING(128)) declare geometryHash: string | null;
   @Column(DataType.JSON) declare drawings: Drawings | null;
+  @Column(DataType.JSON) declare printProfile: PrintProfile | null;
+  @Column(DataType.JSON) declare footprint: readonly (readonly [number, number])[] | null;
   @Column(DataType.CHAR(64)) declare previewSha256: string | null;
   @Column(DataType.STRING(60)) declare faultCode: string | null;
   /** What is wrong, without the file's name: the same bytes may have several. */

@@ -8,9 +8,11 @@ import { Clock } from '../../adapters/clock/clock.js';
 import { Storage, type HashedObject } from '../../adapters/storage/storage.js';
 import { touchRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
+import { JobQueue } from '../../jobs/job-queue.js';
 import { HandlesJob, type Finish, type JobHandler } from '../../jobs/job.js';
 import { Kit } from '../kits/kit.model.js';
 import { Licence } from '../kits/licence.model.js';
+import { estimatePrint } from '../print/estimate-print.job.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
 import { isFinal, Revision } from '../revisions/revision.model.js';
 import { buildRelease } from './build-release.job.js';
@@ -40,6 +42,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly storage: Storage,
     private readonly people: People,
     private readonly staffLog: StaffLog,
+    private readonly jobs: JobQueue,
     private readonly clock: Clock,
   ) {}
 
@@ -105,6 +108,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
       },
       { transaction: tx },
     );
+    await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
