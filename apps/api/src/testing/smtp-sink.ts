@@ -1,13 +1,25 @@
 import { createServer, type AddressInfo, type Server, type Socket } from 'node:net';
 
+export interface SmtpSink {
+  readonly server: Server;
+  readonly port: number;
+  /** Those whose last line arrived. */
+  readonly mails: string[];
+  /** What has arrived of the mail under way. */
+  pending(): string;
+  /** How many connections were opened so far. */
+  connections(): number;
+}
+
 /** The least of an SMTP server (RFC 5321): keeps each mail whose last line arrived. */
-export const startSmtpSink = async (
-  answerToData = '250 2.0.0 taken',
-): Promise<{ server: Server; port: number; mails: string[] }> => {
+export const startSmtpSink = async (answerToData = '250 2.0.0 taken'): Promise<SmtpSink> => {
   const mails: string[] = [];
+  let opened = 0;
+  let unfinished = '';
   const server = createServer((socket: Socket) => {
     let data: string | null = null;
     let rest = '';
+    opened += 1;
     socket.write('220 sink ESMTP\r\n');
     socket.on('error', () => socket.destroy());
     socket.on('data', (chunk: Buffer) => {
@@ -25,6 +37,7 @@ export const startSmtpSink = async (
           else socket.write('250 ok\r\n');
         } else {
           const end = rest.indexOf('\r\n.\r\n');
+          unfinished = rest;
           if (end < 0) return;
           mails.push(rest.slice(0, end));
           rest = rest.slice(end + 5);
@@ -35,5 +48,11 @@ export const startSmtpSink = async (
     });
   });
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
-  return { server, port: (server.address() as AddressInfo).port, mails };
+  return {
+    server,
+    port: (server.address() as AddressInfo).port,
+    mails,
+    pending: () => unfinished,
+    connections: () => opened,
+  };
 };

@@ -12,14 +12,21 @@ const mail = {
 
 describe('sending over SMTP', () => {
   it('hands over before the last line, and the server takes the mail after it', async () => {
-    const { server, port, mails } = await startSmtpSink();
+    const { server, port, mails, pending, connections } = await startSmtpSink();
     const mailer = new SmtpMailer(`smtp://127.0.0.1:${port}`, 'Workshop <bench@saltmarsh.example>');
     const steps: string[] = [];
-    await mailer.send(mail, {
-      beforeLastLine: async () => void steps.push(`handed over, taken ${mails.length}`),
-    });
-    expect(steps).toEqual(['handed over, taken 0']);
+    const beforeLastLine = async (): Promise<void> => {
+      // Long enough for all but the last line to have arrived.
+      await new Promise((resolve) => setTimeout(resolve, 100));
+      steps.push(
+        `handed over, all but the last line is there: ${/one/.test(pending())}, taken ${mails.length}`,
+      );
+    };
+    await mailer.send(mail, { beforeLastLine });
+    expect(steps).toEqual(['handed over, all but the last line is there: true, taken 0']);
     expect(mails).toHaveLength(1);
+    await mailer.send({ ...mail, messageId: '<c@d.example>' }, { beforeLastLine });
+    expect([mails.length, connections()]).toEqual([2, 1]);
     expect(mails[0]).toMatch(/^Message-ID: <a@b\.example>$/im);
     expect(mails[0]).toMatch(/^Auto-Submitted: auto-generated$/im);
     expect(mails[0]).toMatch(/\r\n\.\.two/);

@@ -1,18 +1,22 @@
 import { Readable } from 'node:stream';
-import { createTransport, type Transporter } from 'nodemailer';
-import MailComposer from 'nodemailer/lib/mail-composer/index.js';
+import MailComposer from 'nodemailer/lib/mail-composer';
+import type SMTPConnection from 'nodemailer/lib/smtp-connection';
 import { Mailer, MailRefused, type OutgoingMail, type SendingSteps } from './mailer.js';
+import { SmtpConnections } from './smtp-connections.js';
 
-/** Over SMTP with a pool of connections. */
+/**
+ * Over SMTP. The transports of the library begin to read a mail before the server is ready for it, so
+ * the mail goes out through its connection directly, which reads it only after `354`.
+ */
 export class SmtpMailer extends Mailer {
-  private readonly transport: Transporter;
+  private readonly connections: SmtpConnections;
 
   constructor(
     url: string,
     private readonly from: string,
   ) {
     super();
-    this.transport = createTransport({ url, pool: true, maxConnections: 4, maxMessages: 500 } as never);
+    this.connections = new SmtpConnections(url);
   }
 
   async send(mail: OutgoingMail, steps: SendingSteps): Promise<void> {
@@ -25,26 +29,40 @@ export class SmtpMailer extends Mailer {
       messageId: mail.messageId,
       headers: { 'Auto-Submitted': 'auto-generated', ...mail.headers },
     }).compile();
-    const envelope = composed.getEnvelope();
+    const { from, to } = composed.getEnvelope();
     const whole = await composed.build();
-    const raw = Readable.from(
-      (async function* () {
-        yield whole;
-        await steps.beforeLastLine();
-      })(),
-      { objectMode: false },
+    await this.connections.with((connection) =>
+      deliver(connection, { from: from || '', to }, withLastLineHeld(whole, steps)),
     );
-    try {
-      await this.transport.sendMail({ envelope: { from: envelope.from || '', to: envelope.to }, raw });
-    } catch (fault) {
-      const { responseCode } = fault as { responseCode?: number };
-      if (responseCode && responseCode >= 500) throw new MailRefused((fault as Error).message);
-      throw fault;
-    }
   }
 
   close(): Promise<void> {
-    this.transport.close();
+    this.connections.close();
     return Promise.resolve();
   }
 }
+
+/** The bytes of a mail; its end, and with it the last line, waits for the hand-over. */
+const withLastLineHeld = (whole: Buffer, steps: SendingSteps): Readable =>
+  Readable.from(
+    (async function* () {
+      yield whole;
+      await steps.beforeLastLine();
+    })(),
+    { objectMode: false },
+  );
+
+const deliver = (
+  connection: SMTPConnection,
+  envelope: { from: string; to: string[] },
+  message: Readable,
+): Promise<void> =>
+  new Promise((resolve, reject) => {
+    connection.send(envelope, message, (fault) => {
+      if (!fault) return resolve();
+      const { responseCode } = fault as { responseCode?: number };
+      reject(
+        responseCode && responseCode >= 500 ? new MailRefused((fault as Error).message) : (fault as Error),
+      );
+    });
+  });

@@ -31,8 +31,10 @@ const stepDepth = (blocks: readonly NoteBlock[]): number | null => {
 };
 
 const stepsOfHeadings = (blocks: readonly NoteBlock[], depth: number): (AssemblyStep | BetweenSteps)[] => {
-  const found: ({ kind: 'step'; title: readonly NoteSpan[]; blocks: NoteBlock[] } | { kind: 'between'; blocks: NoteBlock[] })[] =
-    [];
+  const found: (
+    | { kind: 'step'; title: readonly NoteSpan[]; blocks: NoteBlock[] }
+    | { kind: 'between'; blocks: NoteBlock[] }
+  )[] = [];
   for (const block of blocks) {
     const last = found.at(-1);
     if (block.kind === 'heading' && block.depth === depth)

@@ -12,7 +12,11 @@ export interface BuildBook {
   };
   readonly revision: { readonly label: string; readonly releasedAt: Date };
   readonly declaredCents: number;
-  readonly room: { readonly temperatureC: number; readonly relativeHumidity?: number; readonly a4Hz?: number };
+  readonly room: {
+    readonly temperatureC: number;
+    readonly relativeHumidity?: number;
+    readonly a4Hz?: number;
+  };
   readonly buildVolume: { readonly xMm: number; readonly yMm: number; readonly zMm: number };
   /** `C5–F6`; empty for a kit without voices. */
   readonly compass: string;

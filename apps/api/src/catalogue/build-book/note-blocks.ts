@@ -4,7 +4,11 @@ import type { Span } from './text-lines.js';
 export type NoteBlock =
   | { readonly kind: 'heading'; readonly depth: number; readonly spans: readonly NoteSpan[] }
   | { readonly kind: 'paragraph'; readonly spans: readonly NoteSpan[] }
-  | { readonly kind: 'list'; readonly start: number | null; readonly items: readonly (readonly NoteBlock[])[] }
+  | {
+      readonly kind: 'list';
+      readonly start: number | null;
+      readonly items: readonly (readonly NoteBlock[])[];
+    }
   | { readonly kind: 'quote'; readonly blocks: readonly NoteBlock[] }
   | { readonly kind: 'code'; readonly text: string }
   | { readonly kind: 'table'; readonly rows: readonly (readonly (readonly NoteSpan[])[])[] }

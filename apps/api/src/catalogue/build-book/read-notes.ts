@@ -31,7 +31,10 @@ const blocksOf = (node: RootContent): NoteBlock[] => {
       return [{ kind: 'code', text: node.value }];
     case 'table':
       return [
-        { kind: 'table', rows: node.children.map((row) => row.children.map((cell) => spansOf(cell.children))) },
+        {
+          kind: 'table',
+          rows: node.children.map((row) => row.children.map((cell) => spansOf(cell.children))),
+        },
       ];
     case 'footnoteDefinition':
       return node.children.flatMap(blocksOf);
@@ -57,7 +60,11 @@ const picturesIn = (node: Nodes): NoteBlock[] => {
 };
 
 const fileNameOf = (url: string): string => {
-  const last = url.replace(/[?#].*$/, '').split('/').at(-1) ?? '';
+  const last =
+    url
+      .replace(/[?#].*$/, '')
+      .split('/')
+      .at(-1) ?? '';
   try {
     return decodeURIComponent(last);
   } catch {
@@ -109,5 +116,7 @@ const withCodes = (text: string, look: Look): NoteSpan[] =>
   text.split(partCode).flatMap((piece, at): NoteSpan[] => {
     if (piece === '') return [];
     // Every second piece is what the brackets held.
-    return at % 2 === 0 ? [{ ...look, text: piece }] : [{ ...look, text: piece, face: 'semibold', code: piece }];
+    return at % 2 === 0
+      ? [{ ...look, text: piece }]
+      : [{ ...look, text: piece, face: 'semibold', code: piece }];
   });

@@ -26,13 +26,15 @@ export const writeTable = (sheet: Sheet, table: Table): void => {
     sheet.ensure(headHeight + 2 * (style.leading + 2 * padding));
     writeHead(sheet, table, width, false);
     for (const row of table.rows) {
-      const cells = table.columns.map((column, at) =>
-        sheet.lines(row[at] ?? '', style, column.width - gutter),
-      );
+      const cells = table.columns.map((_, at) => sheet.lines(row[at] ?? '', style, cellWidth(table, at)));
       writeRow(sheet, table, width, cells);
     }
   });
 };
+
+/** The last column reaches to the table's edge. */
+const cellWidth = ({ columns }: Table, at: number): number =>
+  (columns[at]?.width ?? 0) - (at === columns.length - 1 ? 0 : gutter);
 
 const headHeight = styles.label.leading + 2 * padding;
 
@@ -81,16 +83,12 @@ const writeRow = (sheet: Sheet, table: Table, width: number, cells: readonly Tex
 };
 
 const inColumns = (
-  { x, columns }: Table,
-  visit: (
-    column: Column,
-    place: { x: number; width: number; align: 'left' | 'right' },
-    at: number,
-  ) => void,
+  table: Table,
+  visit: (column: Column, place: { x: number; width: number; align: 'left' | 'right' }, at: number) => void,
 ): void => {
-  let left = x;
-  columns.forEach((column, at) => {
-    visit(column, { x: left, width: column.width - gutter, align: column.align ?? 'left' }, at);
+  let left = table.x;
+  table.columns.forEach((column, at) => {
+    visit(column, { x: left, width: cellWidth(table, at), align: column.align ?? 'left' }, at);
     left += column.width;
   });
 };

@@ -114,7 +114,10 @@ const merged = (pieces: readonly Piece[]): Piece[] => {
   for (const piece of pieces) {
     const last = result.at(-1);
     if (last?.run.font && last.run.font === piece.run.font && last.span === piece.span)
-      result[result.length - 1] = { ...last, run: { font: last.run.font, text: last.run.text + piece.run.text } };
+      result[result.length - 1] = {
+        ...last,
+        run: { font: last.run.font, text: last.run.text + piece.run.text },
+      };
     else result.push(piece);
   }
   return result;

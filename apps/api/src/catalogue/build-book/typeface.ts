@@ -12,7 +12,8 @@ const nameOf = (face: Face, script: Script): string => `${face} ${script}`;
 export const plainFont = nameOf('regular', 'latin');
 
 /** Signs that stand for nothing to be seen. */
-const unseen = /[\u0000-\u0008\u000B-\u001F\u007F-\u009F\u00AD\u200B-\u200F\u2028-\u202E\u2060-\u2069\uFE0E\uFE0F\uFEFF]/gu;
+const unseen =
+  /[\u0000-\u0008\u000B-\u001F\u007F-\u009F\u00AD\u200B-\u200F\u2028-\u202E\u2060-\u2069\uFE0E\uFE0F\uFEFF]/gu;
 
 /** The typeface within one document: which font has a letter, how wide a text is, how it is put down. */
 export class Typeface {
@@ -47,7 +48,12 @@ export class Typeface {
   }
 
   /** Puts a run down with its left end and baseline where told. */
-  put(run: Run, x: number, baselineY: number, style: { size: number; colour: string; spacing?: number }): void {
+  put(
+    run: Run,
+    x: number,
+    baselineY: number,
+    style: { size: number; colour: string; spacing?: number },
+  ): void {
     const { doc } = this;
     const { size, colour, spacing = 0 } = style;
     if (!run.sign) {

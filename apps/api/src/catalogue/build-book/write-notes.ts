@@ -132,7 +132,13 @@ const writePicture = (
   const picture = openPicture(sheet, pictures.get(name));
   if (!picture) {
     const words = alt === '' ? name : `${alt} (${name})`;
-    writeText(sheet, 'P', [{ text: `Picture: ${words}`, face: 'italic', colour: inks.soft }], styles.body, place);
+    writeText(
+      sheet,
+      'P',
+      [{ text: `Picture: ${words}`, face: 'italic', colour: inks.soft }],
+      styles.body,
+      place,
+    );
     return;
   }
   // 150 dots to the inch at least: a small picture is not blown up.

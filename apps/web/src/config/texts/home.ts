@@ -12,7 +12,7 @@ export const homeTexts = {
   plates: (count: number) => (count === 1 ? 'plate' : 'plates'),
   filament: 'filament',
   drawn: (kit: string, voices: string) => `${kit}: ${voices}, drawn to scale`,
-  left: (count: string) => `${count} left`,
+  left: (count: string) => `${count}\u00a0left`,
   empty: 'No kits on sale yet',
   emptyDetail: 'What the workshop releases will stand here, drawn to scale, ready to be heard.',
   emptyStaff: 'Draft the first kit',

@@ -63,6 +63,9 @@ export const kitTexts = {
     `On a bed of ${volume} mm: ${plates}, about ${hours}, ${mass} of filament (${metres}).`,
 
   about: 'About this kit',
+  voices: 'What it sounds',
+  voicesLead: (temperature: string, cents: string, noun: string) =>
+    `Voiced for a room of ${temperature}. The workshop declares that each ${noun} can be set to within ${cents} cents of its note.`,
   partsHeading: 'What you print',
   partsLead: (codes: string, pieces: string) => `${codes}, ${pieces}, drawn to one scale from their files.`,
   partsLoading: 'The parts cannot be shown',

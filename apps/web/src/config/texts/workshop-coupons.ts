@@ -7,7 +7,7 @@ export const couponsTexts = {
     code: 'Code',
     off: 'Takes off',
     kits: 'Kits',
-    window: 'Holds',
+    window: 'When',
     places: 'Places',
     takenOff: 'Took off',
     state: 'State',

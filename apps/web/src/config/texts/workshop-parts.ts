@@ -51,6 +51,7 @@ export const partsTexts = {
   edit: 'Edit',
   editOf: (code: string) => `Edit ${code}`,
   noFile: 'no file',
+  refused: 'refused',
   waiting: 'waiting to be measured',
   measuring: 'measuring …',
   watertight: 'watertight',

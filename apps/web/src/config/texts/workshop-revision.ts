@@ -17,6 +17,7 @@ export const revisionTexts = {
   toKit: 'Start the next revision',
   noWriting: 'Your role reads revisions; makers change them.',
   aside: 'Release',
+  toRelease: (label: string) => `What ${label} waits for`,
   notFound: 'The revision could not be read',
 };
 

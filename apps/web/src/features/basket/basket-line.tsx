@@ -34,19 +34,14 @@ export const BasketLine = ({ line, isOwned, onRemove }: BasketLineProps) => (
   >
     <FilamentSwatch />
     <Box flex="1" minWidth="0" display="flex" flexWrap="wrap" columnGap="6" rowGap="1">
-      <Box flex="1 1 12rem" minWidth="0">
+      <Box flex="1 1 9rem" minWidth="0">
         <Box fontSize="lg" fontWeight="semibold" lineHeight="snug">
           <TextLink to={paths.kit.to({ slug: line.kitSlug })}>{line.kitName}</TextLink> {line.revision}
         </Box>
         <Box color="ink.soft">{line.licenceName}</Box>
         {isOwned && <StatusMark state="note">{basketTexts.alreadyYours}</StatusMark>}
       </Box>
-      <Box
-        flex="none"
-        display="flex"
-        flexDirection="column"
-        alignItems={{ base: 'flex-start', sm: 'flex-end' }}
-      >
+      <Box flex="none" display="flex" flexDirection="column" alignItems="flex-end" marginLeft="auto">
         <Price
           size="md"
           align="end"
@@ -66,6 +61,9 @@ export const BasketLine = ({ line, isOwned, onRemove }: BasketLineProps) => (
   </KitColour>
 );
 
+/** All the browser knows of a kit that is sold no more is how it stood in the address. */
+const nameFromSlug = (slug: string) => slug.charAt(0).toUpperCase() + slug.slice(1).replaceAll('-', ' ');
+
 /** A licence that was sold when it was chosen, and is no more. */
 export const GoneLine = ({ kitSlug, onRemove }: { kitSlug: string; onRemove: () => void }) => (
   <Box
@@ -79,7 +77,7 @@ export const GoneLine = ({ kitSlug, onRemove }: { kitSlug: string; onRemove: () 
   >
     <Box>
       <Box fontSize="lg" fontWeight="semibold" lineHeight="snug">
-        {kitSlug}
+        {nameFromSlug(kitSlug)}
       </Box>
       <StatusMark state="warn">{basketTexts.gone}</StatusMark>{' '}
       <Box as="span" fontSize="sm" color="ink.soft">
@@ -89,7 +87,7 @@ export const GoneLine = ({ kitSlug, onRemove }: { kitSlug: string; onRemove: () 
     <Button
       look="plain"
       size="sm"
-      aria-label={basketTexts.removeSpoken(kitSlug, basketTexts.gone)}
+      aria-label={basketTexts.removeSpoken(nameFromSlug(kitSlug), basketTexts.gone)}
       onClick={onRemove}
     >
       {basketTexts.remove}

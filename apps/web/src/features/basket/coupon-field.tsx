@@ -89,7 +89,7 @@ export function CouponField({ quote, code }: CouponFieldProps) {
         />
       </Box>
       {/* In line with the field, below its label. */}
-      <Button type="submit" look="outline" marginTop="1.625rem" whiteSpace="nowrap">
+      <Button type="submit" look="outline" marginTop="calc(0.875rem * 1.3 + 0.375rem)" whiteSpace="nowrap">
         {basketTexts.use}
       </Button>
     </Box>

@@ -40,6 +40,10 @@ function sizeOf({ voice }: RankVoice): { lengthMm: number; widthMm: number } {
   }
 }
 
+/** Whether a rank is drawn in its parts’ own sizes; a vessel is drawn as the ball of its air. */
+export const hasTrueSizes = (rank: readonly RankVoice[]): boolean =>
+  rank.every(({ voice }) => voice.kind !== 'vessel');
+
 /** The voices of a kit as its rank is drawn, to scale. */
 export const drawnVoices = (rank: readonly RankVoice[]): DrawnVoice[] =>
   rank.map((one) => ({

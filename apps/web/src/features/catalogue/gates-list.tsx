@@ -19,7 +19,7 @@ const reasonOf = ({ waiver, reason }: Gate): string =>
 /** What a release waits for: a sign, the gate, how it stands, and why. */
 export const GatesList = ({ revision }: { revision: RevisionDetail }) => (
   <>
-    <Heading level={2} look="subsection" marginBottom="2">
+    <Heading level={2} look="subsection" marginBottom="2" id="release" scrollMarginTop="4">
       {revision.releasedAt ? gateTexts.headingReleased : gateTexts.heading}
     </Heading>
     <Box as="ul" listStyle="none">

@@ -21,7 +21,15 @@ export const meshFaults = (mesh: Measurement): string =>
 /** What a part's file measures, or how far the measuring is, or why it was refused. */
 export function MeasuredCell({ file }: { file: RevisionFile | null }) {
   if (!file) return <StatusMark state="stop">{partsTexts.noFile}</StatusMark>;
-  if (file.measuring === 'refused') return <StatusMark state="stop">{file.fault}</StatusMark>;
+  if (file.measuring === 'refused')
+    return (
+      <Box>
+        <StatusMark state="stop">{partsTexts.refused}</StatusMark>
+        <Box fontSize="sm" lineHeight="snug">
+          {file.fault}
+        </Box>
+      </Box>
+    );
   const mesh = file.measurement;
   if (!mesh)
     return (

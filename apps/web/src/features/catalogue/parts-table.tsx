@@ -85,6 +85,7 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
     {
       key: 'part',
       header: partsTexts.columns.part,
+      width: '23%',
       isHeading: true,
       cell: (row) => <PartCell row={row} onEdit={onEdit} />,
     },
@@ -101,11 +102,13 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
     {
       key: 'measured',
       header: partsTexts.columns.measured,
+      width: '22%',
       cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
     },
     {
       key: 'since',
       header: partsTexts.columns.since(comparedWith),
+      width: '22%',
       cell: (row) => <SinceCell row={row} />,
     },
     {

@@ -6,7 +6,7 @@ import { revisionTexts } from '../../config/texts/workshop-revision.js';
 import { date } from '../../lib/format.js';
 import { useSession } from '../../lib/session.js';
 import { Fault } from '../../ui/fault.js';
-import { TextLink } from '../../ui/link.js';
+import { TextAnchor, TextLink } from '../../ui/link.js';
 import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band, SplitSheet } from '../../ui/sheet.js';
@@ -86,6 +86,11 @@ export function RevisionPage() {
             <Box marginTop="5" marginBottom="5">
               <Tabs label={revisionTexts.tabs.label} tabs={tabsOf({ kitId, revisionId })} />
             </Box>
+            {isWritable && (
+              <Text display={{ lg: 'none' }} marginBottom="5">
+                <TextAnchor href="#release">{revisionTexts.toRelease(revision.label)}</TextAnchor>
+              </Text>
+            )}
             {!isWritable && (
               <Box marginBottom="5">
                 <ReadOnlyLine revision={revision} />

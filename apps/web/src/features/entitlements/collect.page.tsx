@@ -36,7 +36,9 @@ function Files({ token, collection }: { token: string; collection: Collection })
               <FreshLink token={token} isMain />
             </Box>
           )}
-          {download.fault && <Fault level={2} what={collectTexts.getFailed} fault={download.fault} />}
+          {isOpen && download.fault && (
+            <Fault level={2} what={collectTexts.getFailed} fault={download.fault} />
+          )}
           {kits.length > 0 && (
             <Box as="ul" listStyle="none" borderTopWidth="1px" borderColor="hairline">
               {kits.map((kit) => (

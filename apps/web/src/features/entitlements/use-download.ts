@@ -1,7 +1,8 @@
 import type { OutputOf } from '@windchest/contracts';
 import { useState } from 'react';
+import { useSWRConfig } from 'swr';
 import type { ApiFault } from '../../lib/api-fault.js';
-import { type Outcome, useAction } from '../../lib/use-action.js';
+import { isAnswerOf, type Outcome, useAction } from '../../lib/use-action.js';
 
 /** A revision's bundle, or one document of it. */
 export interface Wish {
@@ -43,5 +44,11 @@ export function useShelfDownload(): Download {
 /** By a mailed link: each counts as one use of it. */
 export function useLinkDownload(token: string): Download {
   const { run, fault } = useAction('POST /collect/:token/grants', ['GET /collect/:token']);
-  return useGrants((body) => run({ params: { token }, body }), fault);
+  const { mutate } = useSWRConfig();
+  return useGrants(async (body) => {
+    const outcome = await run({ params: { token }, body });
+    // Used up or replaced meanwhile, elsewhere: the page then says so.
+    if (!outcome.isDone) await mutate(isAnswerOf(['GET /collect/:token']));
+    return outcome;
+  }, fault);
 }

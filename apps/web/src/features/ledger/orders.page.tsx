@@ -78,13 +78,25 @@ const columns: Column<OrderRow>[] = [
       </Box>
     ),
   },
-  { key: 'receipt', header: texts.columns.receipt, cell: (order) => order.receiptNumber ?? texts.none },
+  {
+    key: 'receipt',
+    header: texts.columns.receipt,
+    cell: (order) => (
+      <Box as="span" whiteSpace={{ lg: 'nowrap' }}>
+        {order.receiptNumber ?? texts.none}
+      </Box>
+    ),
+  },
   {
     key: 'total',
     header: texts.columns.total,
     isNumeric: true,
     isSortable: true,
-    cell: (order) => price(order.total),
+    cell: (order) => (
+      <Box as="span" whiteSpace="nowrap">
+        {price(order.total)}
+      </Box>
+    ),
   },
 ];
 

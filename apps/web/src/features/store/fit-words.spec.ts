@@ -25,8 +25,8 @@ describe('a kit against a printer, in words', () => {
     );
     expect(lines.map((line) => line.words)).toEqual([
       '1 of 3 parts fit 100 × 100 × 100 mm.',
-      'G-02 Lid is 12.5 mm too wide.',
-      'G-03 Lid is 0.1 mm too tall.',
+      'G-02 (Lid) is 12.5 mm too wide.',
+      'G-03 (Lid) is 0.1 mm too tall.',
     ]);
     expect(lines.every((line) => line.state === 'stop')).toBe(true);
   });

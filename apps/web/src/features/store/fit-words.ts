@@ -12,7 +12,7 @@ const leastOverMm = 0.1;
 
 const overWords = ({ code, name, fit: { overMm } }: PartFit): string =>
   overMm
-    ? kitTexts.fitOver[overMm.axis](`${code} ${name}`, millimetres(Math.max(leastOverMm, overMm.mm)))
+    ? kitTexts.fitOver[overMm.axis](`${code} (${name})`, millimetres(Math.max(leastOverMm, overMm.mm)))
     : '';
 
 const turnWords = ({ code, fit: { turnedDegrees } }: PartFit): string =>

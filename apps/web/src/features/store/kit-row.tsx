@@ -34,7 +34,7 @@ const RowLink = chakra(RouterLink, {
 const rankHeightPx = 100;
 
 const offerWords = ({ label, left }: Offer) =>
-  left === null ? label : `${label} · ${homeTexts.left(number(left))}`;
+  left === null ? label : `${label}, ${homeTexts.left(number(left))}`;
 
 export interface KitRowProps {
   kit: KitCard;

@@ -3,6 +3,13 @@ import type { KitPage, KitPart } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
 import { kitTexts } from '../../config/texts/kit.js';
 import type { Answered } from '../../lib/use-endpoint.js';
+import { number } from '../../lib/format.js';
+import { roomTexts } from '../../config/texts/room.js';
+import { Details } from '../../ui/details.js';
+import { Text } from '../../ui/text.js';
+import type { RankInRoom } from '../bench/use-predicted-rank.js';
+import { voiceNoun } from '../bench/voice-noun.js';
+import { VoicesTable } from '../bench/voices-table.js';
 import { TextLink } from '../../ui/link.js';
 import { Markdown } from '../../ui/markdown.js';
 import { Band } from '../../ui/sheet.js';
@@ -16,10 +23,11 @@ import { RuledSection } from './ruled-section.js';
 export interface KitSectionsProps {
   kit: KitPage;
   parts: Answered<KitPart[]>;
+  inRoom: RankInRoom;
 }
 
 /** What stands under the kit's sheet. */
-export const KitSections = ({ kit, parts }: KitSectionsProps) => (
+export const KitSections = ({ kit, parts, inRoom }: KitSectionsProps) => (
   <Band paddingTop={{ base: '2', md: '4' }}>
     <RuledSection title={kitTexts.fit}>
       <FitSection kit={kit} parts={parts.data} />
@@ -27,6 +35,20 @@ export const KitSections = ({ kit, parts }: KitSectionsProps) => (
     {kit.description.trim() && (
       <RuledSection title={kitTexts.about}>
         <Markdown text={kit.description} />
+      </RuledSection>
+    )}
+    {kit.rank.length > 0 && (
+      <RuledSection title={kitTexts.voices}>
+        <Text isSoft marginBottom="2">
+          {kitTexts.voicesLead(
+            roomTexts.degrees(kit.room.temperatureC),
+            number(kit.declaredCents),
+            voiceNoun(kit.rank).one,
+          )}
+        </Text>
+        <Details summary={roomTexts.table}>
+          <VoicesTable rank={kit.rank} predicted={inRoom.predicted} temperatureC={inRoom.room.temperatureC} />
+        </Details>
       </RuledSection>
     )}
     <RuledSection title={kitTexts.partsHeading} isWide>

@@ -8,9 +8,10 @@ import { useSession } from '../../lib/session.js';
 import { scaleText } from '../../ui/drawing/rank-layout.js';
 import { SplitSheet } from '../../ui/sheet.js';
 import { Heading, Text } from '../../ui/text.js';
-import { drawnVoices } from '../bench/drawn-voices.js';
+import { drawnVoices, hasTrueSizes } from '../bench/drawn-voices.js';
 import { RankBoard } from '../bench/rank-board.js';
 import { useRankScale } from '../bench/rank-scale.js';
+import type { RankInRoom } from '../bench/use-predicted-rank.js';
 import { BasketCell } from './basket-cell.js';
 import { KitTitleBlock } from './kit-title-block.js';
 import { LicenceChoice } from './licence-choice.js';
@@ -20,7 +21,7 @@ import { OwnedNotice } from './owned-notice.js';
 const rankHeightPx = 316;
 
 /** The kit's drawing, what can be bought, and the title block with the price. */
-export function KitSheet({ kit }: { kit: KitPage }) {
+export function KitSheet({ kit, inRoom }: { kit: KitPage; inRoom: RankInRoom }) {
   const { isSignedIn } = useSession();
   const offers = useEndpoint('GET /offers');
   const owned = useEndpoint('GET /shelf/owned', isSignedIn ? {} : null);
@@ -50,7 +51,7 @@ export function KitSheet({ kit }: { kit: KitPage }) {
               layout={layout}
               measured={measured}
               maxHeightPx={rankHeightPx}
-              room={kit.room}
+              inRoom={inRoom}
             />
           )}
         </>
@@ -60,7 +61,7 @@ export function KitSheet({ kit }: { kit: KitPage }) {
           <Text isSoft>
             {kitTexts.bundle(
               counted(kit.partCount, kitTexts.onePart, kitTexts.manyParts),
-              bytes(kit.bundleBytes),
+              bytes(kit.bundleBytes).replace(' ', '\u00a0'),
             )}{' '}
             {kitTexts.later}
           </Text>
@@ -71,7 +72,7 @@ export function KitSheet({ kit }: { kit: KitPage }) {
       block={
         <KitTitleBlock
           kit={kit}
-          scale={layout.pxPerMm > 0 ? scaleText(layout.pxPerMm) : ''}
+          scale={layout.pxPerMm > 0 && hasTrueSizes(kit.rank) ? scaleText(layout.pxPerMm) : ''}
           licence={licence}
           offer={offer}
           action={licence && <BasketCell kit={kit} licence={licence} offer={offer} isOwned={isOwned} />}

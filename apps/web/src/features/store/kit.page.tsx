@@ -9,7 +9,8 @@ import { Band } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
-import { KitSections } from './kit-sections.js';
+import { usePredictedRank } from '../bench/use-predicted-rank.js';
+import { KitSections, type KitSectionsProps } from './kit-sections.js';
 import { KitSheet } from './kit-sheet.js';
 
 const NoKit = () => (
@@ -23,6 +24,16 @@ const NoKit = () => (
   </Band>
 );
 
+function Kit({ kit, parts }: Omit<KitSectionsProps, 'inRoom'>) {
+  const inRoom = usePredictedRank(kit.rank, kit.room);
+  return (
+    <>
+      <KitSheet kit={kit} inRoom={inRoom} />
+      <KitSections kit={kit} parts={parts} inRoom={inRoom} />
+    </>
+  );
+}
+
 /** One kit: to see, to hear, to measure against one's printer, to buy. */
 export function KitPage() {
   const { slug = '' } = useParams();
@@ -34,8 +45,7 @@ export function KitPage() {
     return (
       <KitColour palette={kit.colour} key={kit.slug}>
         <PageTitle title={kit.name} />
-        <KitSheet kit={kit} />
-        <KitSections kit={kit} parts={parts} />
+        <Kit kit={kit} parts={parts} />
       </KitColour>
     );
   // A slug nobody could have made is refused as such; to a reader it is an address like any other.

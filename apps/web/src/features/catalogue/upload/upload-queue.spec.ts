@@ -154,6 +154,21 @@ describe('UploadQueue', () => {
   });
 });
 
+describe('a second upload', () => {
+  it('starts a list of its own, with what failed in the first', async () => {
+    const { queue } = stand({
+      send: async (one) => {
+        if (one.name === 'bad.stl') throw unreachable();
+      },
+    });
+    queue.add([file('good.stl'), file('bad.stl')], limits);
+    await untilQuiet(queue);
+    queue.add([file('next.stl')], limits);
+    await untilQuiet(queue);
+    expect(queue.items.map((item) => item.file.name)).toEqual(['bad.stl', 'next.stl']);
+  });
+});
+
 describe('progressOf', () => {
   it('counts by bytes and leaves refused files out of the measure', async () => {
     const { queue } = stand({

@@ -2,7 +2,7 @@ import type { OutputOf } from '@windchest/contracts';
 import { uploadTexts } from '../../../config/texts/workshop-upload.js';
 import { ApiFault } from '../../../lib/api-fault.js';
 import { bytes } from '../../../lib/format.js';
-import { isUnderWay, type UploadItem, type UploadState } from './upload-item.js';
+import { isFailed, isUnderWay, type UploadItem, type UploadState } from './upload-item.js';
 
 type OfferAnswer = OutputOf<'POST /workshop/revisions/:revisionId/offers'>[number];
 export interface Offer {
@@ -78,7 +78,12 @@ export class UploadQueue {
             }
           : { step: 'waiting' },
     }));
-    this.list = [...this.list.filter((item) => isUnderWay(item) || !names.has(item.file.name)), ...added];
+    // A new upload begins where the last one came to its end; only what failed then still wants a look.
+    const isNewUpload = !this.list.some(isUnderWay);
+    const kept = this.list.filter(
+      (item) => isUnderWay(item) || (!names.has(item.file.name) && (!isNewUpload || isFailed(item))),
+    );
+    this.list = [...kept, ...added];
     this.onChange();
     this.start(added.filter((item) => item.state.step === 'waiting').map((item) => item.key));
   }
