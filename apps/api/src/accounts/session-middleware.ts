@@ -18,18 +18,19 @@ interface SessionFacts {
  */
 export const sessions = (config: Config, database: Sequelize): RequestHandler[] => {
   const Store = connectSessionSequelize(session.Store);
-  const store = new Store({
+  // The package knows `disableTouch`, its types do not.
+  const options: ConstructorParameters<typeof Store>[0] & { disableTouch: true } = {
     db: database,
     table: 'SessionRecord',
-    // The package knows `disableTouch`, its types do not.
-    ...{ disableTouch: true },
+    disableTouch: true,
     expiration: LIFE_MS,
     checkExpirationInterval: -1,
     extendDefaultFields: (defaults: object, facts: SessionFacts) => ({
       ...defaults,
       personId: facts.passport?.user ?? null,
     }),
-  });
+  };
+  const store = new Store(options);
   return [
     session({
       name: 'windchest',

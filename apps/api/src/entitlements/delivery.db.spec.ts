@@ -222,7 +222,7 @@ describe('delivery', () => {
 
     it('a forged or altered address', async () => {
       const url = await grantOf(buyer.browser);
-      const [text, signature] = url.split('/').at(-1)?.split('.') as [string, string];
+      const [text, signature] = (url.split('/').at(-1) ?? '').split('.') as [string, string];
       const facts = JSON.parse(Buffer.from(text, 'base64url').toString()) as Record<string, unknown>;
       const altered = Buffer.from(JSON.stringify({ ...facts, expires: 9_999_999_999 })).toString('base64url');
       await buyer.browser.get(`/api/files/${altered}.${signature}`).expect(404);

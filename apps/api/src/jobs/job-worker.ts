@@ -56,7 +56,7 @@ export class JobWorker implements OnApplicationBootstrap, BeforeApplicationShutd
     clearInterval(this.timer);
     this.stopListening?.();
     while (this.isClaiming) await new Promise((resolve) => setTimeout(resolve, 5));
-    await Promise.allSettled([...this.underWay]);
+    await Promise.allSettled(this.underWay);
   }
 
   /** Runs everything that is due, until nothing is; for tests and commands that do not poll. */
