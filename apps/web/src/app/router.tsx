@@ -3,17 +3,15 @@ import { BrowserRouter, type RouteObject, useLocation, useRoutes } from 'react-r
 import { paths } from '../config/paths.js';
 import { lazyPage } from './lazy-page.js';
 import { ShopLayout } from './layouts/shop-layout.js';
-import { accountRoutes } from './routes/account-routes.js';
 import { shopRoutes } from './routes/shop-routes.js';
 
-const notFound: RouteObject = {
+/** The table of the rarer addresses comes when one of them is opened: each entry weighs on the first page. */
+const further: RouteObject = {
   path: '*',
-  element: lazyPage(async () => (await import('./not-found.page.js')).NotFoundPage),
+  element: lazyPage(async () => (await import('./further-pages.js')).FurtherPages),
 };
 
-const shop: RouteObject[] = [
-  { element: <ShopLayout />, children: [...shopRoutes, ...accountRoutes, notFound] },
-];
+const shop: RouteObject[] = [{ element: <ShopLayout />, children: [...shopRoutes, further] }];
 
 const ShopRouter = () => useRoutes(shop);
 const WorkshopRouter = lazy(async () => ({ default: (await import('./workshop-router.js')).WorkshopRouter }));

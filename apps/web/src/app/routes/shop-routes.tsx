@@ -15,16 +15,4 @@ export const shopRoutes: RouteObject[] = [
     path: paths.basket.path,
     element: lazyPage(async () => (await import('../../features/basket/basket.page.js')).BasketPage),
   },
-  {
-    path: paths.cautions.path,
-    element: lazyPage(async () => (await import('../../features/store/cautions.page.js')).CautionsPage),
-  },
-  {
-    path: paths.order.path,
-    element: lazyPage(async () => (await import('../../features/orders/order.page.js')).OrderPage),
-  },
-  {
-    path: paths.collect.path,
-    element: lazyPage(async () => (await import('../../features/entitlements/collect.page.js')).CollectPage),
-  },
 ];

@@ -59,6 +59,8 @@ export const kitTexts = {
   fitUnmeasured: (codes: string) => `Without a size yet: ${codes}.`,
   fitNozzle: (drawnFor: string, yours: string) =>
     `The kit is drawn for a ${drawnFor} nozzle; yours is ${yours}.`,
+  onePlate: 'plate',
+  manyPlates: 'plates',
   fitEstimate: (volume: string, plates: string, hours: string, mass: string, metres: string) =>
     `On a bed of ${volume} mm: ${plates}, about ${hours}, ${mass} of filament (${metres}).`,
 

@@ -7,7 +7,7 @@ import { Rank } from '../../ui/drawing/rank.js';
 import type { DrawnVoice } from '../../ui/drawing/rank-layout.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { kitPalettes } from '../../ui/theme/kit-palette.js';
-import { sampleVoices } from './drawn-voices.js';
+import { sampleVoices } from './drawn-parts.js';
 
 const Input = chakra('input', { base: { srOnly: true } });
 const Swatch = chakra('span', {

@@ -17,7 +17,7 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { TitleBlock } from '../../ui/title-block.js';
-import { drawnVoices } from './drawn-voices.js';
+import { voicesOfParts } from './drawn-parts.js';
 import { KitLicences } from './kit-licences.js';
 import { KitRevisions } from './kit-revisions.js';
 import { ListingSwitch } from './listing-switch.js';
@@ -38,7 +38,7 @@ function useVoices(kit: WorkshopKit | undefined) {
     'GET /workshop/revisions/:revisionId',
     revisionId ? { params: { revisionId } } : null,
   );
-  return drawnVoices(data?.parts ?? []);
+  return voicesOfParts(data?.parts ?? []);
 }
 
 function KitBlock({ kit }: { kit: WorkshopKit }) {

@@ -6,7 +6,6 @@ import { buildVolume, counted, grams, hoursRange, number } from '../../lib/forma
 import { usePrinterCard } from '../../lib/printer-card.js';
 import { Button } from '../../ui/button.js';
 import { Text } from '../../ui/text.js';
-import { homeTexts } from '../../config/texts/home.js';
 import { FitLines } from './fit-lines.js';
 
 const PrinterCardDialog = lazy(async () => ({
@@ -17,7 +16,7 @@ const Estimate = ({ estimate }: { estimate: NonNullable<KitPage['printEstimate']
   <Text isSoft>
     {kitTexts.fitEstimate(
       buildVolume(estimate.bed),
-      counted(estimate.plates, homeTexts.plates(1), homeTexts.plates(2)),
+      counted(estimate.plates, kitTexts.onePlate, kitTexts.manyPlates),
       hoursRange(estimate.hoursLow, estimate.hoursHigh),
       grams(estimate.massG),
       `${number(estimate.lengthM)} m`,

@@ -1,19 +1,22 @@
+import { lazy, Suspense } from 'react';
+import { useSearchParams } from 'react-router-dom';
 import { homeTexts } from '../../config/texts/home.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { Fault } from '../../ui/fault.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band } from '../../ui/sheet.js';
-import { useTableState } from '../../ui/table/use-table-state.js';
 import { HomeHero } from './home-hero.js';
-import { kitListQuery, kitsPerPage, newestKits } from './kit-list-query.js';
+import { kitListAddress, kitListQuery, newestKits } from './kit-list-query.js';
 import { KitList } from './kit-list.js';
 import { KitRowsSkeleton } from './kit-rows-skeleton.js';
-import { NoKits } from './no-kits.js';
+
+// Seldom seen, so not part of a first visit.
+const NoKits = lazy(async () => ({ default: (await import('./no-kits.js')).NoKits }));
 
 /** The shop's front: the newest kit to play on, then all kits to one scale. */
 export function HomePage() {
-  const table = useTableState({ sort: newestKits.sort, size: kitsPerPage });
-  const query = kitListQuery(table.state);
+  const [address, setAddress] = useSearchParams();
+  const query = kitListQuery(address);
   // With the usual sorting both are one question.
   const newest = useEndpoint('GET /kits', { query: newestKits });
   const list = useEndpoint('GET /kits', { query }, { keepPreviousData: true });
@@ -30,11 +33,12 @@ export function HomePage() {
               answer={list.data}
               offers={offers.data ?? []}
               sort={query.sort}
-              onSort={(sort) => table.change({ sort })}
-              addressOf={table.addressOf}
+              onSort={(sort) => setAddress(kitListAddress({ sort, page: 1 }), { replace: true })}
             />
           ) : (
-            <NoKits page={query.page} onAgain={() => void list.mutate()} />
+            <Suspense>
+              <NoKits page={query.page} onAgain={() => void list.mutate()} />
+            </Suspense>
           )
         ) : list.fault ? (
           <Fault

@@ -1,15 +1,17 @@
 import { Box } from '@chakra-ui/react/box';
 import type { OutputOf } from '@windchest/contracts';
-import { useMemo } from 'react';
+import { lazy, Suspense, useMemo } from 'react';
 import { homeTexts } from '../../config/texts/home.js';
 import { extentOfAll } from '../../ui/drawing/rank-layout.js';
 import { InlineSelect } from '../../ui/inline-select.js';
-import { Pager } from '../../ui/table/pager.js';
 import { Heading } from '../../ui/text.js';
 import { drawnVoices } from '../bench/drawn-voices.js';
-import { kitSorts, type KitSort } from './kit-list-query.js';
+import { kitListAddress, kitSorts, type KitSort } from './kit-list-query.js';
 import { KitRow } from './kit-row.js';
 import { type Offer, offerForCard } from './offers.js';
+
+// Few shops have more kits than one page holds.
+const Pager = lazy(async () => ({ default: (await import('../../ui/table/pager.js')).Pager }));
 
 const sortOptions = kitSorts.map((value) => ({ value, label: homeTexts.sorts[value] }));
 
@@ -18,11 +20,10 @@ export interface KitListProps {
   offers: readonly Offer[];
   sort: KitSort;
   onSort: (sort: KitSort) => void;
-  addressOf: (change: { page: number }) => string;
 }
 
 /** All kits of a page, drawn to one scale, so that one sees at once what is big. */
-export function KitList({ answer, offers, sort, onSort, addressOf }: KitListProps) {
+export function KitList({ answer, offers, sort, onSort }: KitListProps) {
   const { items, total, page, size } = answer;
   const ranks = useMemo(() => items.map((kit) => drawnVoices(kit.rank)), [items]);
   const extent = useMemo(() => extentOfAll(ranks), [ranks]);
@@ -62,7 +63,16 @@ export function KitList({ answer, offers, sort, onSort, addressOf }: KitListProp
           />
         ))}
       </Box>
-      <Pager page={page} size={size} total={total} addressOf={addressOf} />
+      {total > size && (
+        <Suspense>
+          <Pager
+            page={page}
+            size={size}
+            total={total}
+            addressOf={(change) => kitListAddress({ sort, ...change })}
+          />
+        </Suspense>
+      )}
     </>
   );
 }

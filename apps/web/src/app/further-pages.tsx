@@ -1,0 +1,13 @@
+import { type RouteObject, useRoutes } from 'react-router-dom';
+import { lazyPage } from './lazy-page.js';
+import { accountRoutes } from './routes/account-routes.js';
+import { orderRoutes } from './routes/order-routes.js';
+
+const pages: RouteObject[] = [
+  ...accountRoutes,
+  ...orderRoutes,
+  { path: '*', element: lazyPage(async () => (await import('./not-found.page.js')).NotFoundPage) },
+];
+
+/** Pages a first visit seldom opens, and the one for addresses nobody has. */
+export const FurtherPages = () => useRoutes(pages);
