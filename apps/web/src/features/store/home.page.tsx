@@ -15,7 +15,7 @@ const NoKits = lazy(async () => ({ default: (await import('./no-kits.js')).NoKit
 
 /** The shop's front: the newest kit to play on, then all kits to one scale. */
 export function HomePage() {
-  const [address, setAddress] = useSearchParams();
+  const [address] = useSearchParams();
   const query = kitListQuery(address);
   // With the usual sorting both are one question.
   const newest = useEndpoint('GET /kits', { query: newestKits });
@@ -29,12 +29,7 @@ export function HomePage() {
       <Band paddingTop={{ base: '6', md: '7' }}>
         {list.data ? (
           list.data.items.length > 0 ? (
-            <KitList
-              answer={list.data}
-              offers={offers.data ?? []}
-              sort={query.sort}
-              onSort={(sort) => setAddress(kitListAddress({ sort, page: 1 }), { replace: true })}
-            />
+            <KitList answer={list.data} offers={offers.data ?? []} sort={query.sort} />
           ) : (
             <Suspense>
               <NoKits page={query.page} onAgain={() => void list.mutate()} />

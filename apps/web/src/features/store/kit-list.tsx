@@ -3,27 +3,24 @@ import type { OutputOf } from '@windchest/contracts';
 import { lazy, Suspense, useMemo } from 'react';
 import { homeTexts } from '../../config/texts/home.js';
 import { extentOfAll } from '../../ui/drawing/rank-layout.js';
-import { InlineSelect } from '../../ui/inline-select.js';
 import { Heading } from '../../ui/text.js';
 import { drawnVoices } from '../bench/drawn-voices.js';
-import { kitListAddress, kitSorts, type KitSort } from './kit-list-query.js';
+import { kitListAddress, type KitSort } from './kit-list-query.js';
 import { KitRow } from './kit-row.js';
 import { type Offer, offerForCard } from './offers.js';
+import { SortLinks } from './sort-links.js';
 
 // Few shops have more kits than one page holds.
 const Pager = lazy(async () => ({ default: (await import('../../ui/table/pager.js')).Pager }));
-
-const sortOptions = kitSorts.map((value) => ({ value, label: homeTexts.sorts[value] }));
 
 export interface KitListProps {
   answer: OutputOf<'GET /kits'>;
   offers: readonly Offer[];
   sort: KitSort;
-  onSort: (sort: KitSort) => void;
 }
 
 /** All kits of a page, drawn to one scale, so that one sees at once what is big. */
-export function KitList({ answer, offers, sort, onSort }: KitListProps) {
+export function KitList({ answer, offers, sort }: KitListProps) {
   const { items, total, page, size } = answer;
   const ranks = useMemo(() => items.map((kit) => drawnVoices(kit.rank)), [items]);
   const extent = useMemo(() => extentOfAll(ranks), [ranks]);
@@ -43,14 +40,7 @@ export function KitList({ answer, offers, sort, onSort }: KitListProps) {
         <Heading level={2} look="body" fontWeight="normal" color="ink.soft">
           {homeTexts.heading(total)}
         </Heading>
-        {total > 1 && (
-          <InlineSelect
-            label={homeTexts.sortBy}
-            value={sort}
-            options={sortOptions}
-            onChange={(event) => onSort(event.target.value as KitSort)}
-          />
-        )}
+        {total > 1 && <SortLinks sort={sort} />}
       </Box>
       <Box as="ul" listStyle="none">
         {items.map((kit, at) => (

@@ -47,6 +47,8 @@ const Cell = chakra('td', {
     paddingInline: { base: '0', md: '2.5' },
     paddingBlock: { base: '0.5', md: '2.5' },
     overflowWrap: 'anywhere',
+    // A long word would else hold its flex item wider than the window.
+    '& > *': { minWidth: '0' },
     // Stacked, a cell brings its column's name along.
     '&[data-head]::before': {
       content: { base: 'attr(data-head)', md: 'none' },
