@@ -13,7 +13,7 @@ import mysql from 'mysql2/promise';
  * of the same file, by nginx alone, and by nginx after the shop's check (`X-Accel-Redirect`).
  */
 const BYTES = 200 * 1024 ** 2;
-const ROUNDS = 6;
+const ROUNDS = 20;
 const PLAIN = `import express from 'express';
 const [, file, port] = process.argv;
 express().get('/file', (_, response) => response.sendFile(file)).listen(Number(port), '127.0.0.1', () => console.log('ready'));`;

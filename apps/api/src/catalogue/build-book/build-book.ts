@@ -39,7 +39,8 @@ export interface BookPart {
   readonly name: string;
   readonly quantity: number;
   readonly orientation: 'as-exported' | 'may-turn' | 'may-lie';
-  readonly sizeMm: { readonly x: number; readonly y: number; readonly z: number } | null;
+  /** x, y, z as the part stands in its file. */
+  readonly sizeMm: readonly [number, number, number] | null;
   readonly volumeCm3: number | null;
   readonly drawing: PartDrawing | null;
   /** Only where it differs from the book's. */

@@ -11,7 +11,7 @@ interface Box {
 /** Nodes of a free bar's first mode lie at 0.224 of its length from each end; there it rests or hangs. */
 const nodeOfLength = 0.224;
 /** Between layer lines, in points: near enough to read as a print. */
-const layerPitch = 2.6;
+const layerPitch = 3.4;
 
 /** One voice of the rank, with what tells its kind: a cap, an open mouth, a bar's nodes, a tine's clamp. */
 export const drawVoice = (

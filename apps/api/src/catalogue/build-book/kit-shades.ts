@@ -23,22 +23,25 @@ const filaments: Record<FilamentColour, Oklch> = {
   moss: [0.62, 0.12, 125],
 };
 
-export const filamentHex = (colour: FilamentColour): string => toHex(filaments[colour]);
+export const filamentHex = (colour: FilamentColour): string => oklchToHex(filaments[colour]);
 
-/** @param colourHex `#rrggbb` */
+/**
+ * @param colourHex `#rrggbb`
+ * @throws Error that names what is no such colour
+ */
 export const kitShades = (colourHex: string): KitShades => {
-  const [lightness, chroma, hueDeg] = fromHex(colourHex);
+  const [lightness, chroma, hueDeg] = hexToOklch(colourHex);
   return {
     kit: colourHex,
-    lit: toHex([Math.min(0.97, lightness + 0.07), chroma * 0.78, hueDeg]),
-    line: toHex([lightness - 0.06, chroma * 0.9, hueDeg]),
-    deep: toHex([0.46, chroma * 0.75, hueDeg]),
-    wash: toHex([0.955, Math.min(chroma, 0.022), hueDeg]),
+    lit: oklchToHex([Math.min(0.97, lightness + 0.07), chroma * 0.78, hueDeg]),
+    line: oklchToHex([lightness - 0.06, chroma * 0.9, hueDeg]),
+    deep: oklchToHex([0.46, chroma * 0.75, hueDeg]),
+    wash: oklchToHex([0.955, Math.min(chroma, 0.022), hueDeg]),
   };
 };
 
 /** OKLCH to sRGB: CSS Color Module Level 4, 10.1 (the matrices are Björn Ottosson's). Clipped to the gamut. */
-const toHex = ([lightness, chroma, hueDeg]: Oklch): string => {
+export const oklchToHex = ([lightness, chroma, hueDeg]: Oklch): string => {
   const a = chroma * Math.cos((hueDeg * Math.PI) / 180);
   const b = chroma * Math.sin((hueDeg * Math.PI) / 180);
   const l = (lightness + 0.3963377774 * a + 0.2158037573 * b) ** 3;
@@ -59,7 +62,8 @@ const toHex = ([lightness, chroma, hueDeg]: Oklch): string => {
   return `#${bytes.join('')}`;
 };
 
-const fromHex = (hex: string): Oklch => {
+export const hexToOklch = (hex: string): Oklch => {
+  if (!/^#[0-9a-f]{6}$/i.test(hex)) throw new Error(`"${hex}" is no colour: write it as #rrggbb.`);
   const [r = 0, g = 0, b = 0] = [1, 3, 5].map((at) => {
     const coded = Number.parseInt(hex.slice(at, at + 2), 16) / 255;
     return coded <= 0.04045 ? coded / 12.92 : ((coded + 0.055) / 1.055) ** 2.4;

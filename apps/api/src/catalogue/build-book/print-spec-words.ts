@@ -26,15 +26,46 @@ export const specRows = (spec: PrintSpecification): [name: string, value: string
   ['Supports', supportWords[spec.supports]],
 ];
 
-/** What a part's own specification has different from the book's: `Perimeters 3, infill 100 %`. */
+/** What a part's own specification has different from the book's: `Perimeters 3, infill 100 %.` and its remarks. */
 export const specDifference = (own: PrintSpecification | null, common: PrintSpecification): string => {
   if (!own) return '';
   const usual = new Map(specRows(common));
-  const words = specRows(own)
+  const settings = specRows(own)
     .filter(([name, value]) => usual.get(name) !== value)
-    .map(([name, value]) => `${name.toLowerCase()} ${name === 'Supports' ? value.toLowerCase() : value}`);
+    .map(([name, value]) => `${name.toLowerCase()} ${name === 'Supports' ? value.toLowerCase() : value}`)
+    .join(', ');
   const remarks = own.remarks.trim();
-  if (remarks !== '' && remarks !== common.remarks.trim()) words.push(remarks);
-  const text = words.join(', ');
-  return text.charAt(0).toUpperCase() + text.slice(1);
+  return [
+    ...(settings === '' ? [] : [`${settings.charAt(0).toUpperCase()}${settings.slice(1)}.`]),
+    ...(remarks === '' || remarks === common.remarks.trim() ? [] : [remarks]),
+  ].join(' ');
 };
+
+export interface SpecDifferences {
+  /** The letter of a part's settings; empty where it has the book's. */
+  readonly letterOf: ReadonlyMap<string, string>;
+  /** Each set of settings once. */
+  readonly sets: readonly {
+    readonly letter: string;
+    readonly words: string;
+    readonly codes: readonly string[];
+  }[];
+}
+
+/** Settings that differ, lettered in the order of the parts: many parts of a kit often share one set. */
+export const specDifferences = (parts: readonly BookPart[], common: PrintSpecification): SpecDifferences => {
+  const codesOf = new Map<string, string[]>();
+  for (const { code, printSpec } of parts) {
+    const words = specDifference(printSpec, common);
+    if (words !== '') codesOf.set(words, [...(codesOf.get(words) ?? []), code]);
+  }
+  const sets = [...codesOf].map(([words, codes], at) => ({ letter: letterAt(at), words, codes }));
+  return {
+    sets,
+    letterOf: new Map(sets.flatMap(({ letter, codes }) => codes.map((code) => [code, letter] as const))),
+  };
+};
+
+/** a … z, aa, ab … */
+const letterAt = (at: number): string =>
+  (at < 26 ? '' : letterAt(Math.floor(at / 26) - 1)) + String.fromCharCode(97 + (at % 26));

@@ -123,6 +123,16 @@ export class Sheet {
     return lines.length * style.leading;
   }
 
+  /** Sets one line always: what is too long for its place is set smaller. */
+  putOneLine(spans: readonly Span[] | string, style: TextStyle, place: TextPlace, top: number): void {
+    const [line] = this.lines(spans, style, Number.POSITIVE_INFINITY);
+    if (!line) return;
+    const share = Math.min(1, place.width / line.width);
+    const fitted = { ...style, size: style.size * share, spacing: (style.spacing ?? 0) * share };
+    for (const one of this.lines(spans, fitted, Number.POSITIVE_INFINITY))
+      this.putLine(one, fitted, place, top);
+  }
+
   /** Writes down the page, never leaving one line alone at the foot or the head of a page. */
   write(lines: readonly TextLine[], style: TextStyle, place: TextPlace): void {
     let at = 0;

@@ -1,48 +1,56 @@
 import { drawPart } from './draw-part.js';
-import { mm, pointsPerMm } from './page-geometry.js';
+import { mm } from './page-geometry.js';
 import type { DrawnPart } from './parts-sheet-layout.js';
 import type { Sheet } from './sheet.js';
 import { styles } from './text-styles.js';
 import { partPlace } from './write-notes.js';
 
-const cellWidth = mm(14.3);
-const mostHeight = mm(21);
+const mostWidth = mm(20);
+const mostHeight = mm(23);
+/** Of the longer side: a part that would be smaller is drawn larger than the others. */
+const leastSize = mm(6);
+const mostRatio = 0.5;
+const leastCellWidth = mm(8.4);
+const columnGap = mm(3);
 const labelHeight = 12;
 const rowGap = 9;
-/** On its longest side, in mm on paper: a part of 40 mm and more takes all the room, a tiny one a third of it. */
-const fullSizeMm = 40;
-const leastShare = 0.33;
 
 interface SidePart {
   readonly part: DrawnPart;
   readonly ratio: number;
   readonly width: number;
   readonly height: number;
+  readonly cellX: number;
+  readonly cellWidth: number;
 }
 interface SideRow {
-  readonly parts: readonly SidePart[];
-  readonly height: number;
+  readonly parts: SidePart[];
+  width: number;
+  height: number;
 }
 
-/** Small drawings in rows, not to scale, though what is small stays smaller. */
-export const layOutSideParts = (parts: readonly DrawnPart[], width: number): SideRow[] => {
-  const aRow = Math.max(1, Math.floor(width / cellWidth));
+/** Small drawings in rows: those of one step to one scale, but for what would be too small to see. */
+export const layOutSideParts = (parts: readonly DrawnPart[], roomWidth: number): SideRow[] => {
+  const widestMm = Math.max(0, ...parts.map(({ drawing }) => drawing.widthMm));
+  const tallestMm = Math.max(0, ...parts.map(({ drawing }) => drawing.heightMm));
+  const common = Math.min(mostRatio, mostWidth / mm(widestMm), mostHeight / mm(tallestMm));
   const rows: SideRow[] = [];
-  for (let at = 0; at < parts.length; at += aRow) {
-    const row = parts.slice(at, at + aRow).map(sized);
-    rows.push({ parts: row, height: Math.max(...row.map(({ height }) => height)) });
+  for (const part of parts) {
+    const { widthMm, heightMm } = part.drawing;
+    const ratio = Math.max(common, Math.min(mostRatio * 2, leastSize / mm(Math.max(widthMm, heightMm))));
+    const [width, height] = [mm(widthMm * ratio), mm(heightMm * ratio)];
+    const cellWidth = Math.max(leastCellWidth, width);
+    let row = rows.at(-1);
+    if (!row || row.width + columnGap + cellWidth > roomWidth) {
+      row = { parts: [], width: -columnGap, height: 0 };
+      rows.push(row);
+    }
+    const cellX = row.width + columnGap;
+    row.parts.push({ part, ratio, width, height, cellX, cellWidth });
+    row.width = cellX + cellWidth;
+    row.height = Math.max(row.height, height);
   }
   return rows;
-};
-
-const sized = (part: DrawnPart): SidePart => {
-  const { widthMm, heightMm } = part.drawing;
-  const share = Math.max(leastShare, Math.min(1, Math.sqrt(Math.max(widthMm, heightMm) / fullSizeMm)));
-  const points = Math.min(
-    ((cellWidth - 8) * share) / Math.max(0.1, widthMm),
-    (mostHeight * share) / Math.max(0.1, heightMm),
-  );
-  return { part, ratio: points / pointsPerMm, width: widthMm * points, height: heightMm * points };
 };
 
 export const sideHeight = (rows: readonly SideRow[]): number =>
@@ -52,17 +60,13 @@ export const sideHeight = (rows: readonly SideRow[]): number =>
 export const drawSideParts = (sheet: Sheet, rows: readonly SideRow[], x: number, top: number): number => {
   let y = top;
   for (const row of rows) {
-    row.parts.forEach(({ part, ratio, width, height }, at) => {
-      const left = x + at * cellWidth;
+    for (const { part, ratio, width, height, cellX, cellWidth } of row.parts) {
+      const left = x + cellX;
       sheet.block(
         'Figure',
         () => {
-          drawPart(
-            sheet.doc,
-            part.drawing,
-            { x: left + (cellWidth - width) / 2, y: y + row.height - height, ratio },
-            sheet.shades,
-          );
+          const corner = { x: left + (cellWidth - width) / 2, y: y + row.height - height };
+          drawPart(sheet.doc, part.drawing, { ...corner, ratio }, sheet.shades);
           sheet.put(
             [{ text: part.code, goTo: partPlace(part.code) }],
             styles.partCode,
@@ -72,7 +76,7 @@ export const drawSideParts = (sheet: Sheet, rows: readonly SideRow[], x: number,
         },
         `${part.code} ${part.name}`,
       );
-    });
+    }
     y += row.height + labelHeight + rowGap;
   }
   return y - top;

@@ -15,7 +15,7 @@ export interface Table {
   readonly rows: readonly (readonly (readonly Span[] | string)[])[];
 }
 
-const gutter = 9;
+const gutter = 12;
 const padding = 3.2;
 const style = styles.table;
 

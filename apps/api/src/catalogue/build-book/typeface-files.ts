@@ -1,5 +1,6 @@
 import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
+import { unwrapWoff } from './unwrap-woff.js';
 
 /** The cuts a build book is set in. */
 export const faces = ['regular', 'italic', 'semibold', 'bold'] as const;
@@ -24,6 +25,7 @@ const cuts: Record<Face, string> = {
   bold: '700-normal',
 };
 
+/** One font as pdfkit reads it. */
 export interface FontFile {
   readonly face: Face;
   readonly script: Script;
@@ -48,8 +50,10 @@ const readAll = (): Promise<FontFile[]> => {
       scripts.map(async (script) => ({
         face,
         script,
-        bytes: await readFile(
-          resolve(`@fontsource/source-sans-3/files/source-sans-3-${script}-${cuts[face]}.woff`),
+        bytes: unwrapWoff(
+          await readFile(
+            resolve(`@fontsource/source-sans-3/files/source-sans-3-${script}-${cuts[face]}.woff`),
+          ),
         ),
       })),
     ),

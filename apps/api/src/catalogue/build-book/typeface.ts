@@ -12,8 +12,7 @@ const nameOf = (face: Face, script: Script): string => `${face} ${script}`;
 export const plainFont = nameOf('regular', 'latin');
 
 /** Signs that stand for nothing to be seen. */
-const unseen =
-  /[\u0000-\u0008\u000B-\u001F\u007F-\u009F\u00AD\u200B-\u200F\u2028-\u202E\u2060-\u2069\uFE0E\uFE0F\uFEFF]/gu;
+const unseen = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}\p{Variation_Selector}]/gu;
 
 /** The typeface within one document: which font has a letter, how wide a text is, how it is put down. */
 export class Typeface {
@@ -67,11 +66,7 @@ export class Typeface {
     }
     doc.save();
     run.sign.draw(doc, x, baselineY, size, colour);
-    doc.markContent('Span', { actual: run.text });
-    doc.addContent('3 Tr');
-    doc.font(plainFont).fontSize(size * 0.8);
-    doc.text(run.sign.standIn, x, baselineY, { lineBreak: false, baseline: 'alphabetic' });
-    doc.endMarkedContent();
+    this.setUnseen(run.sign, run.text, { x, baselineY, size });
     doc.restore();
   }
 
@@ -86,11 +81,41 @@ export class Typeface {
     return font;
   }
 
-  private hasGlyph(font: string, codePoint: number): boolean {
-    // pdfkit keeps the font it opened, which alone knows its letters, and has no other door to it.
-    const opened = this.doc.font(font) as unknown as {
-      _font: { font: { hasGlyphForCodePoint(codePoint: number): boolean } };
-    };
-    return opened._font.font.hasGlyphForCodePoint(codePoint);
+  /**
+   * Sets a letter that is not painted and says which sign it stands for. pdfkit's own `text` would leave the
+   * coordinates of the letter before the mark ends, and readers then look for the sign elsewhere on the page.
+   */
+  private setUnseen(
+    { standIn, widthEm }: DrawnSign,
+    sign: string,
+    { x, baselineY, size }: { x: number; baselineY: number; size: number },
+  ): void {
+    const { doc } = this;
+    const font = this.opened(plainFont);
+    const stretch = (100 * widthEm * size) / doc.fontSize(size).widthOfString(standIn);
+    doc.page.fonts[font.id] ??= font.ref();
+    doc.transform(1, 0, 0, -1, 0, doc.page.height);
+    doc.markContent('Span', { actual: sign });
+    doc.addContent(
+      `BT 1 0 0 1 ${x.toFixed(3)} ${(doc.page.height - baselineY).toFixed(3)} Tm 3 Tr ` +
+        `/${font.id} ${size.toFixed(3)} Tf ${stretch.toFixed(2)} Tz <${font.encode(standIn)[0].join('')}> Tj ET`,
+    );
+    doc.endMarkedContent();
   }
+
+  private hasGlyph(font: string, codePoint: number): boolean {
+    return this.opened(font).font.hasGlyphForCodePoint(codePoint);
+  }
+
+  /** pdfkit keeps the font it opened, which alone knows its letters, and has no other door to it. */
+  private opened(font: string): OpenedFont {
+    return (this.doc.font(font) as unknown as { _font: OpenedFont })._font;
+  }
+}
+
+interface OpenedFont {
+  readonly id: string;
+  readonly font: { hasGlyphForCodePoint(codePoint: number): boolean };
+  ref(): unknown;
+  encode(text: string): [glyphs: string[], positions: unknown];
 }

@@ -70,6 +70,7 @@ const writeBook = (sheet: Sheet, book: BuildBook): (() => void) => {
   const context: NotesContext = {
     pictures: book.pictures ?? new Map<string, Buffer>(),
     drawnCodes: new Set(drawnParts(book.parts).map(({ code }) => code)),
+    headingTag: 'H2',
   };
   const scale = writeCover(sheet, book);
   const fillFirstPage = sheet.reserve('Sect');
@@ -83,7 +84,7 @@ const writeBook = (sheet: Sheet, book: BuildBook): (() => void) => {
   sections.write('Print specification', { least: mm(75) }, () => writePrintSpecification(sheet, book));
   writeProse('Cautions', book.cautions);
   if (book.assemblyNotes.trim() !== '')
-    sections.write('Assembly', { least: 0, isOnNewPage: true }, () => {
+    sections.write('Assembly', { least: mm(110) }, () => {
       if (context.drawnCodes.size > 0) {
         sheet.block('P', () => {
           sheet.y += sheet.put(
@@ -122,7 +123,7 @@ const writeFeet = (sheet: Sheet, { kit, revision, workshop }: BuildBook): void =
   for (let at = 1; at < pageCount; at += 1) {
     doc.switchToPage(at);
     doc.markContent('Artifact', { type: 'Pagination' });
-    sheet.put(
+    sheet.putOneLine(
       [
         { text: `${kit.name} ${revision.label}`, face: 'semibold' },
         { text: `, build book. ${workshop.name}` },

@@ -20,15 +20,20 @@ export const writeAssembly = (
   parts: readonly BookPart[],
   context: NotesContext,
 ): void => {
-  const drawn = new Map(drawnParts(parts).map((part) => [part.code, part]));
+  const drawn = drawnParts(parts);
   assemblySteps(notes).forEach((one, at) => {
     if (at > 0) sheet.y += stepGap;
     if (one.kind === 'between') {
       writeNotes(sheet, one.blocks, place, context);
       return;
     }
-    const codes = codesIn([{ kind: 'paragraph', spans: one.title }, ...one.blocks]);
-    writeStep(sheet, sections, one, { ...context, side: codes.flatMap((code) => drawn.get(code) ?? []) });
+    const codes = new Set(codesIn([{ kind: 'paragraph', spans: one.title }, ...one.blocks]));
+    // In the order of the parts sheet, so that like stands beside like.
+    writeStep(sheet, sections, one, {
+      ...context,
+      headingTag: 'H3',
+      side: drawn.filter(({ code }) => codes.has(code)),
+    });
   });
 };
 

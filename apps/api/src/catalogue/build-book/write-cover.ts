@@ -21,11 +21,11 @@ export const contentsTop = titleBlockTop - contentsHeight;
 /** The first page but for its contents and title block; returns the scale of its drawing, if it has one. */
 export const writeCover = (sheet: Sheet, book: BuildBook): string | null => {
   const place = { x: page.left, width: contentWidth };
-  sheet.block('P', () => sheet.put(book.workshop.name, styles.fact, place, workshopTop));
+  sheet.block('P', () => sheet.putOneLine(book.workshop.name, styles.fact, place, workshopTop));
   sheet.y = nameTop;
-  sheet.block('Title', () => {
-    // A long name is set smaller rather than broken.
-    const size = Math.min(1, contentWidth / widthAtFullSize(sheet, book.kit.name));
+  sheet.block('H1', () => {
+    // A long name is set smaller before it is broken.
+    const size = Math.min(1, Math.max(0.5, contentWidth / widthAtFullSize(sheet, book.kit.name)));
     const style = {
       ...styles.kitName,
       size: styles.kitName.size * size,

@@ -1,7 +1,7 @@
-import type { BookPart, BookVoice, BuildBook } from './build-book.js';
+import type { BookVoice, BuildBook } from './build-book.js';
 import { boxText, fixedText, numberText, signedText } from './number-text.js';
 import { contentWidth, mm, page, textWidth } from './page-geometry.js';
-import { orientationWords, specDifference, specRows } from './print-spec-words.js';
+import { orientationWords, specDifferences, specRows, type SpecDifferences } from './print-spec-words.js';
 import type { Sheet } from './sheet.js';
 import { writeTable } from './table.js';
 import { styles } from './text-styles.js';
@@ -13,28 +13,48 @@ const lead = (sheet: Sheet, words: string): void => {
 };
 
 export const writePartsList = (sheet: Sheet, { parts, printSpec }: BuildBook): void => {
+  const { letterOf, sets } = specDifferences(parts, printSpec);
   writeTable(sheet, {
     x: page.left,
     columns: [
       { title: 'Code', width: mm(14) },
-      { title: 'Part', width: mm(37) },
-      { title: 'Print', width: mm(12), align: 'right' },
+      { title: 'Part', width: mm(40) },
+      { title: 'Print', width: mm(11), align: 'right' },
       { title: 'Size x × y × z, mm', width: mm(34), align: 'right' },
-      { title: 'Each, cm³', width: mm(15), align: 'right' },
-      { title: 'Placing, and settings that differ', width: mm(38) },
+      { title: 'Each, cm³', width: mm(16), align: 'right' },
+      { title: sets.length === 0 ? 'Placing' : 'Placing, and settings of its own', width: mm(35) },
     ],
-    rows: parts.map((part) => [
-      [{ text: part.code, face: 'semibold' as const }],
-      part.name,
-      `${part.quantity}`,
-      part.sizeMm ? boxText(part.sizeMm.x, part.sizeMm.y, part.sizeMm.z) : '–',
-      part.volumeCm3 === null ? '–' : fixedText(part.volumeCm3, 1),
-      [placing(part), specDifference(part.printSpec, printSpec)].filter((words) => words !== '').join('. '),
-    ]),
+    rows: parts.map((part) => {
+      const letter = letterOf.get(part.code);
+      return [
+        [{ text: part.code, face: 'semibold' as const }],
+        part.name,
+        `${part.quantity}`,
+        part.sizeMm ? part.sizeMm.map((sideMm) => fixedText(sideMm, 1)).join(' × ') : '–',
+        part.volumeCm3 === null ? '–' : fixedText(part.volumeCm3, 1),
+        [
+          { text: orientationWords[part.orientation] },
+          ...(letter === undefined ? [] : [{ text: `, ${letter}`, face: 'semibold' as const }]),
+        ],
+      ];
+    }),
   });
+  writeOwnSettings(sheet, sets);
 };
 
-const placing = ({ orientation }: BookPart): string => orientationWords[orientation];
+/** The legend of the letters in the list: what is set otherwise for those parts. */
+const writeOwnSettings = (sheet: Sheet, sets: SpecDifferences['sets']): void => {
+  const style = styles.table;
+  const place = { x: page.left + mm(14), width: textWidth };
+  for (const { letter, words } of sets) {
+    sheet.y += 7;
+    sheet.ensure(2 * style.leading);
+    sheet.block('P', () => {
+      sheet.put([{ text: letter, face: 'semibold' }], style, { x: page.left, width: mm(12) }, sheet.y);
+      sheet.write(sheet.lines(words, style, place.width), style, place);
+    });
+  }
+};
 
 export const writeHardware = (sheet: Sheet, { hardware }: BuildBook): void => {
   if (hardware.length === 0) {
@@ -68,16 +88,12 @@ export const writePrintSpecification = (sheet: Sheet, { printSpec, parts, buildV
       ['Build volume', `${boxText(buildVolume.xMm, buildVolume.yMm, buildVolume.zMm)} mm`] as const,
     ].map(([name, value]) => [name, [{ text: value, face: 'semibold' as const }]]),
   });
-  const differing = parts.filter((part) => specDifference(part.printSpec, printSpec) !== '');
-  const remarks = [
-    printSpec.remarks.trim(),
-    differing.length === 0
-      ? ''
-      : `Other settings, named in the list of parts: ${differing.map(({ code }) => code).join(', ')}.`,
-  ].filter((words) => words !== '');
-  for (const words of remarks) {
+  const differing = specDifferences(parts, printSpec).sets.map(
+    ({ letter, words, codes }) => `${codes.join(', ')} (${letter} in the list of parts): ${words}`,
+  );
+  const style = styles.body;
+  for (const words of [printSpec.remarks.trim(), ...differing].filter((one) => one !== '')) {
     sheet.y += 9;
-    const style = styles.body;
     sheet.block('P', () =>
       sheet.write(sheet.lines(words, style, textWidth), style, { x: page.left, width: textWidth }),
     );
@@ -105,12 +121,12 @@ export const writeVoicing = (sheet: Sheet, { voices, room, declaredCents }: Buil
   writeTable(sheet, {
     x: page.left,
     columns: [
-      { title: 'Note', width: mm(14) },
-      { title: 'Part', width: mm(16) },
-      { title: 'Kind and sizes', width: contentWidth - mm(112) },
-      { title: 'Length, mm', width: mm(24), align: 'right' },
-      { title: 'Pitch, Hz', width: mm(24), align: 'right' },
-      { title: 'Cents', width: mm(34), align: 'right' },
+      { title: 'Note', width: mm(13) },
+      { title: 'Part', width: mm(15) },
+      { title: 'Kind and sizes', width: contentWidth - mm(92) },
+      { title: 'Length, mm', width: mm(21), align: 'right' },
+      { title: 'Pitch, Hz', width: mm(20), align: 'right' },
+      { title: 'Cents', width: mm(23), align: 'right' },
     ],
     rows: voices.map(({ code, note, kind, dimensions, lengthMm, predicted }) => [
       [{ text: note.replace('#', '♯').replace(/^([A-G])b/, '$1♭'), face: 'semibold' as const }],

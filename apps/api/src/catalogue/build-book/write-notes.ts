@@ -1,5 +1,5 @@
 import type { NoteBlock, NoteSpan } from './note-blocks.js';
-import { inks, mm, page } from './page-geometry.js';
+import { inks, mm } from './page-geometry.js';
 import type { Sheet } from './sheet.js';
 import { writeTable } from './table.js';
 import type { TextLine, TextStyle } from './text-lines.js';
@@ -13,6 +13,8 @@ export interface NotesContext {
   readonly pictures: ReadonlyMap<string, Buffer>;
   /** Codes of the parts that have a place on the parts sheet to lead to. */
   readonly drawnCodes: ReadonlySet<string>;
+  /** Of headings within the notes: one below what they stand under. */
+  readonly headingTag: 'H2' | 'H3';
 }
 
 const indent = mm(5);
@@ -44,7 +46,7 @@ const writeBlock = (sheet: Sheet, block: NoteBlock, place: NotesPlace, context: 
   switch (block.kind) {
     case 'heading':
       sheet.ensure(styles.subheading.leading + 2 * styles.body.leading);
-      writeText(sheet, 'H3', withPlaces(block.spans, context), styles.subheading, place);
+      writeText(sheet, context.headingTag, withPlaces(block.spans, context), styles.subheading, place);
       sheet.y += -paragraphGap + 2;
       return;
     case 'paragraph':
@@ -178,6 +180,3 @@ const openPicture = (
     return null;
   }
 };
-
-/** The height a page gives to text. */
-export const pageHeight = page.bottom - page.top;

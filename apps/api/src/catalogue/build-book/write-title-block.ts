@@ -32,7 +32,7 @@ export const drawTitleBlock = (
       const place = { x: x + padding, width: cellWidth - 2 * padding };
       sheet.block('P', () => {
         sheet.put(label, styles.label, place, top + 5);
-        putFitting(sheet, value, place, top + 15);
+        sheet.putOneLine(value, styles.fact, place, top + 15);
       });
       if (at > 0) drawUpright(sheet, x, top);
       x += cellWidth;
@@ -83,16 +83,6 @@ const titleRows = (book: BuildBook, scale: string | null, pageCount: number): Ce
       },
     ],
   ];
-};
-
-/** One line always: what is too long for its cell is set smaller. */
-const putFitting = (sheet: Sheet, value: string, place: { x: number; width: number }, top: number): void => {
-  const unbroken = value.replaceAll(' ', '\u00a0');
-  const [line] = sheet.lines(unbroken, styles.fact, Number.POSITIVE_INFINITY);
-  if (!line) return;
-  const share = Math.min(1, place.width / line.width);
-  const style = { ...styles.fact, size: styles.fact.size * share };
-  sheet.put(value, style, { ...place, width: place.width + 1 }, top);
 };
 
 const drawUpright = (sheet: Sheet, x: number, top: number): void => {

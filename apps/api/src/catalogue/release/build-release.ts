@@ -6,6 +6,7 @@ import { People, toSignedIn } from '../../accounts/people.js';
 import { StaffLog } from '../../accounts/staff-log.js';
 import { Clock } from '../../adapters/clock/clock.js';
 import { Storage, type HashedObject } from '../../adapters/storage/storage.js';
+import { InjectConfig, type Config } from '../../config/config.js';
 import { touchRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
@@ -19,6 +20,7 @@ import { buildRelease } from './build-release.job.js';
 import { bundleEntries } from './bundle-entries.js';
 import { ReleaseProgress } from './release-progress.js';
 import { verifyBundle } from './verify-bundle.js';
+import { writeBuildBook } from './write-build-book.js';
 import { writeBundle } from './write-bundle.js';
 
 /** Writing takes the first part of the progress shown, reading back the rest. */
@@ -38,6 +40,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     @InjectModel(Kit) private readonly kits: typeof Kit,
     @InjectModel(Licence) private readonly licences: typeof Licence,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
+    @InjectConfig() private readonly config: Config,
     private readonly contents: RevisionContents,
     private readonly storage: Storage,
     private readonly people: People,
@@ -78,7 +81,8 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
       this.contents.filesOf(revision.id),
       this.licences.findAll({ where: { kitId: kit.id, isOffered: true } }),
     ]);
-    const entries = bundleEntries({ kit, revision, parts, files, licences });
+    const buildBook = await writeBuildBook({ workshop: this.config.WORKSHOP_NAME, kit, revision, parts });
+    const entries = bundleEntries({ kit, revision, parts, files, licences, buildBook });
     const total = entries.reduce((sum, entry) => sum + entry.bytes, 1);
     const progress = new ReleaseProgress(this.database, revision.id);
     const bundle = await writeBundle(this.storage, entries, (writtenBytes) =>

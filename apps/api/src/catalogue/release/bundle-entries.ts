@@ -18,6 +18,7 @@ export const bundleEntries = (source: BundleSource): BundleEntry[] => {
     storageKey: keyOf('files', file.sha256),
   }));
   const words = [
+    ...(source.buildBook ? [made('build-book.pdf', source.buildBook)] : []),
     text('assembly-notes.md', revision.assemblyNotes),
     ...(revision.changeNotes.trim() === '' ? [] : [text('change-notes.md', revision.changeNotes)]),
     text('print-specification.md', printSpecificationText(kit.name, revision, parts)),
@@ -38,15 +39,15 @@ export const bundleEntries = (source: BundleSource): BundleEntry[] => {
 /** By code units, the same on every machine. */
 const order = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
 
-const text = (path: string, words: string): BundleEntry => {
-  const contents = Buffer.from(words.endsWith('\n') || words === '' ? words : `${words}\n`, 'utf8');
-  return {
-    path,
-    contents,
-    bytes: contents.length,
-    sha256: createHash('sha256').update(contents).digest('hex'),
-  };
-};
+const made = (path: string, contents: Buffer): BundleEntry => ({
+  path,
+  contents,
+  bytes: contents.length,
+  sha256: createHash('sha256').update(contents).digest('hex'),
+});
+
+const text = (path: string, words: string): BundleEntry =>
+  made(path, Buffer.from(words.endsWith('\n') || words === '' ? words : `${words}\n`, 'utf8'));
 
 const licenceName = (licence: Licence, at: number, all: readonly Licence[]): string => {
   const earlier = all.slice(0, at).filter((one) => one.kind === licence.kind).length;

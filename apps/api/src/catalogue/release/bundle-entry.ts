@@ -13,4 +13,6 @@ export interface BundleSource {
   readonly parts: readonly PartOfRevision[];
   readonly files: readonly FileOfRevision[];
   readonly licences: readonly Licence[];
+  /** The typeset build book, a PDF. */
+  readonly buildBook?: Buffer;
 }

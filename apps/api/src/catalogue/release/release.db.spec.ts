@@ -87,6 +87,7 @@ describe('releases', () => {
     expect([...files.keys()]).toEqual([
       'LICENCE-personal.md',
       'assembly-notes.md',
+      'build-book.pdf',
       'cautions.md',
       'documents/Tuning table.md',
       'hardware.md',
@@ -117,7 +118,7 @@ describe('releases', () => {
         await writeFile(join(folder, name), contents);
       }
       const { stdout } = await run('sha256sum', ['--check', '--strict', 'SHA256SUMS'], { cwd: folder });
-      expect(stdout.trim().split('\n')).toHaveLength(9);
+      expect(stdout.trim().split('\n')).toHaveLength(10);
       expect(stdout).not.toContain('FAILED');
       expect(await readFile(join(folder, 'SHA256SUMS'), 'utf8')).toMatch(
         /^[0-9a-f]{64} {2}LICENCE-personal\.md$/m,

@@ -40,6 +40,7 @@ export class RequestRelease {
       await revision.update(
         {
           releaseState: 'waiting',
+          releaseAskedAt: revision.releaseAskedAt ?? this.clock.now(),
           releasePercent: 0,
           releaseFault: null,
           releasedBy: person.id,

@@ -26,6 +26,7 @@ export class Revision extends Model {
   @Column(DataType.JSON) declare printEstimate: unknown;
   @Column(DataType.STRING(20)) declare releaseState: RevisionDetail['release']['state'];
   @Column(DataType.TINYINT.UNSIGNED) declare releasePercent: number;
+  @MomentColumn({ isNullable: true }) declare releaseAskedAt: Date | null;
   @Column(DataType.TEXT) declare releaseFault: string | null;
   @Column(DataType.CHAR(64)) declare bundleSha256: string | null;
   @NumberColumn('bundleBytes', DataType.BIGINT.UNSIGNED) declare bundleBytes: number | null;

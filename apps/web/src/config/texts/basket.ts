@@ -6,7 +6,6 @@ export const basketTexts = {
   linesLabel: 'Kits in your basket',
   failed: 'The basket cannot be priced',
   startAfresh: 'Empty the basket',
-  addingUp: 'Adding up …',
   remove: 'Take out',
   removeSpoken: (kit: string, licence: string) => `Take out ${kit}, ${licence}`,
   removed: (kit: string) => `${kit} is taken out.`,

@@ -8,7 +8,7 @@ export const kitTexts = {
 
   buy: 'Buy this kit',
   bundle: (parts: string, size: string) =>
-    `The bundle holds ${parts}, the assembly notes, the print specification and the hardware list, ${size} in all.`,
+    `The bundle holds ${parts}, the build book, the print specification and the hardware list, ${size} in all.`,
   onePart: 'part',
   manyParts: 'parts',
   onePiece: 'piece to print',
@@ -73,7 +73,6 @@ export const kitTexts = {
   partsLoading: 'The parts cannot be shown',
   partsList: (count: number) => (count === 1 ? 'The part, with its size' : `All ${count} parts, with sizes`),
   partsLabel: (name: string) => `Parts of ${name}`,
-  code: 'Code',
   partName: 'Part',
   quantity: 'Quantity',
   size: 'Size, mm',

@@ -6,7 +6,7 @@ import { Fault } from '../../ui/fault.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band } from '../../ui/sheet.js';
 import { HomeHero } from './home-hero.js';
-import { kitListAddress, kitListQuery, newestKits } from './kit-list-query.js';
+import { kitListQuery, newestKits } from './kit-list-query.js';
 import { KitList } from './kit-list.js';
 import { KitRowsSkeleton } from './kit-rows-skeleton.js';
 
