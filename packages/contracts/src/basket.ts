@@ -119,7 +119,6 @@ export const basketEndpoints = {
     summary: 'Price a basket, with a coupon',
     body: quoteBody,
     response: quote,
-    isQuestion: true,
   }),
   'POST /checkout': endpoint({
     access: 'public',

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
-import { differenceKind } from './workshop-kits.js';
+import { differenceKind } from './workshop-revisions.js';
 import { email, filamentColour, id, moment, secret, sha256, slug, slugParams } from './values.js';
 
 /** What may be fetched: the whole bundle of a revision, or one document of it. */

@@ -18,8 +18,6 @@ export interface EndpointDefinition {
   readonly response: z.ZodType | null | 'stream';
   /** Answered with this status instead of 200 (204 without a body). */
   readonly status?: number;
-  /** Requests that change nothing though they are not GET: no log entry, no cache key. */
-  readonly isQuestion?: boolean;
   /** Unsafe methods are refused without the shop's own header; a signed call from outside needs none. */
   readonly isCalledFromOutside?: boolean;
 }

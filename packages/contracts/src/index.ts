@@ -9,6 +9,7 @@ export * from './kits.js';
 export * from './basket.js';
 export * from './delivery.js';
 export * from './workshop-kits.js';
+export * from './workshop-revisions.js';
 export * from './workshop-sales.js';
 export * from './people.js';
 export * from './health.js';

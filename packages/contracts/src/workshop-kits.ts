@@ -1,16 +1,6 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.js';
-import {
-  buildVolume,
-  drawings,
-  hardwareList,
-  licence,
-  licenceKinds,
-  orientations,
-  printSpec,
-  revisionState,
-  sizeMm,
-} from './kits.js';
+import { licence, licenceKinds, revisionState } from './kits.js';
 import {
   filamentColour,
   id,
@@ -22,10 +12,19 @@ import {
   pageOf,
   pageQuery,
   prose,
-  sha256,
   slug,
 } from './values.js';
-import { room, voice } from './voices.js';
+import {
+  revisionFile,
+  part,
+  partBody,
+  comparison,
+  markBody,
+  revisionDetail,
+  revisionBody,
+  fileOffer,
+  offerAnswer,
+} from './workshop-revisions.js';
 
 export const revisionSummary = z.object({
   id,
@@ -78,176 +77,6 @@ export const licenceBody = z.object({
   priceMinor: minor,
   yearlyLimit: z.int().min(1).max(1_000_000).nullable(),
   isOffered: z.boolean().default(true),
-});
-
-export const measuringState = z.enum(['not-a-mesh', 'waiting', 'measuring', 'measured', 'refused']);
-export const measurement = z.object({
-  format: z.enum(['stl-binary', 'stl-ascii', '3mf']),
-  triangles: z.int(),
-  shells: z.int(),
-  sizeMm,
-  volumeCm3: z.number(),
-  areaCm2: z.number(),
-  openEdges: z.int(),
-  nonManifoldEdges: z.int(),
-  windingFaults: z.int(),
-  degenerateTriangles: z.int(),
-  isWatertight: z.boolean(),
-  unitRemark: z.string().nullable(),
-});
-export type Measurement = z.output<typeof measurement>;
-
-export const fileKinds = [
-  'stl',
-  '3mf',
-  'step',
-  'pdf',
-  'text',
-  'png',
-  'jpeg',
-  'webp',
-  'wav',
-  'mp3',
-  'ogg',
-  'flac',
-] as const;
-export const revisionFile = z.object({
-  id,
-  sha256,
-  fileName: z.string(),
-  bytes: z.int(),
-  kind: z.enum(fileKinds),
-  measuring: measuringState,
-  measurement: measurement.nullable(),
-  /** Why a mesh was refused, in a sentence that names the file and the fault. */
-  fault: z.string().nullable(),
-  partId: id.nullable(),
-  addedAt: moment,
-});
-export type RevisionFile = z.output<typeof revisionFile>;
-
-export const part = z.object({
-  id,
-  code: z.string(),
-  name: z.string(),
-  quantity: z.int(),
-  orientation: z.enum(orientations),
-  printSpec: printSpec.nullable(),
-  voice: voice.nullable(),
-  file: revisionFile.nullable(),
-  drawings: drawings.nullable(),
-});
-export type Part = z.output<typeof part>;
-
-export const partBody = z.object({
-  code: z
-    .string()
-    .trim()
-    .regex(/^[A-Z]{1,3}-[0-9]{1,3}[a-z]?$/, 'Write a part code as H-03.'),
-  name: line.max(120),
-  quantity: z.int().min(1).max(999),
-  orientation: z.enum(orientations),
-  printSpec: printSpec.nullable(),
-  voice: voice.nullable(),
-});
-
-export const differenceKind = z.enum(['same', 're-exported', 'changed', 'new', 'dropped']);
-export const reprintMark = z.enum(['reprint needed', 'reprint if it troubles you']);
-export const comparisonRow = z.object({
-  code: z.string(),
-  name: z.string(),
-  quantity: z.int(),
-  difference: differenceKind,
-  /** What differs, in words with numbers: "+1.50 mm height, +3.1 % volume". */
-  whatDiffers: z.string(),
-  sizeChangeMm: sizeMm.nullable(),
-  volumeChangePercent: z.number().nullable(),
-  areaChangePercent: z.number().nullable(),
-  mark: reprintMark.nullable(),
-  reason: z.string(),
-});
-export const comparison = z.object({
-  with: z.object({ id, label: z.string() }).nullable(),
-  rows: z.array(comparisonRow),
-});
-export type Comparison = z.output<typeof comparison>;
-export const markBody = z.object({
-  code: z.string(),
-  mark: reprintMark.nullable(),
-  reason: z.string().trim().max(300),
-});
-
-export const gate = z.object({
-  name: z.enum([
-    'parts-measured',
-    'watertight',
-    'fits-build-volume',
-    'voices-in-tune',
-    'assembly-notes',
-    'change-notes',
-    'changes-marked',
-    'cautions',
-    'licence-and-price',
-    'proof-round',
-  ]),
-  state: z.enum(['passed', 'open', 'waived', 'not-needed']),
-  reason: z.string(),
-  mayBeWaived: z.boolean(),
-  waiver: z.object({ by: z.string(), at: moment, reason: z.string() }).nullable(),
-});
-export type Gate = z.output<typeof gate>;
-
-export const releaseProgress = z.object({
-  state: z.enum(['not-started', 'waiting', 'building', 'failed', 'done']),
-  percent: z.int(),
-  fault: z.string().nullable(),
-});
-
-export const revisionDetail = z.object({
-  id,
-  kit: z.object({ id, slug, name: z.string(), colour: filamentColour }),
-  label: z.string(),
-  state: revisionState,
-  createdAt: moment,
-  releasedAt: moment.nullable(),
-  assemblyNotes: z.string(),
-  changeNotes: z.string(),
-  cautions: z.string(),
-  printSpec,
-  hardware: hardwareList,
-  buildVolume,
-  declaredCents: z.number(),
-  room,
-  parts: z.array(part),
-  /** Files that belong to no part: documents, pictures, sounds. */
-  documents: z.array(revisionFile),
-  gates: z.array(gate),
-  release: releaseProgress,
-  bundle: z.object({ sha256, bytes: z.int() }).nullable(),
-  totalBytes: z.int(),
-  limits: z.object({ fileBytes: z.int(), revisionBytes: z.int() }),
-});
-export type RevisionDetail = z.output<typeof revisionDetail>;
-
-export const revisionBody = z
-  .object({
-    assemblyNotes: prose,
-    changeNotes: prose,
-    cautions: prose,
-    printSpec,
-    hardware: hardwareList,
-    buildVolume,
-    declaredCents: z.number().min(0).max(600),
-    room,
-  })
-  .partial();
-
-export const fileOffer = z.object({ fileName: z.string().min(1).max(300), sha256, bytes: z.int().min(0) });
-export const offerAnswer = z.object({
-  fileName: z.string(),
-  sha256,
-  answer: z.enum(['attached', 'send', 'refused']),
-  detail: z.string(),
 });
 
 const inKit = idParams('kitId');
