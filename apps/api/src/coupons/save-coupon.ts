@@ -15,7 +15,7 @@ import { CouponKit } from './coupon-kit.model.js';
 import { discountsOf } from './coupon-rules.js';
 import { CouponView } from './coupon-view.js';
 import { Coupon } from './coupon.model.js';
-import { isChargeable, smallestChargeOf } from './smallest-charge.js';
+import { isChargeable, smallestChargeOf } from '../payments/smallest-charge.js';
 
 type Body = Handled<'POST /workshop/coupons'>['body'];
 

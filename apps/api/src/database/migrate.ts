@@ -7,6 +7,7 @@ import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as supporters from './migrations/0012-supporters.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -16,6 +17,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
+  '0012-supporters': supporters,
 };
 
 /**
@@ -45,9 +47,10 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
       logger: undefined,
     });
     const done = await umzug.up();
-    await database.query("SELECT RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     return done.map((one) => one.name);
   } finally {
+    // Also after a fault: the pooled connection would keep the lock, and with it every other process waiting.
+    await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }
 };

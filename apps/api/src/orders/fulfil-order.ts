@@ -6,7 +6,7 @@ import type { PaymentSession } from '../adapters/payments/payments.js';
 import { Coupons } from '../coupons/coupons.js';
 import { Transactions, type Tx } from '../database/transactions.js';
 import { FlagOrder } from './flag-order.js';
-import { locate } from './location-evidence.js';
+import { locate } from '../payments/location-evidence.js';
 import { OrderHistory } from './order-history.js';
 import { OrderLine } from './order-line.model.js';
 import { OrderPaidMail } from './order-paid-mail.js';

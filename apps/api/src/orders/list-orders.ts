@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Handled } from '@windchest/contracts';
 import { literal, Op, type Order as Sorting, type WhereOptions } from 'sequelize';
-import { locate } from './location-evidence.js';
+import { locate } from '../payments/location-evidence.js';
 import { OrderLine } from './order-line.model.js';
 import type { OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';

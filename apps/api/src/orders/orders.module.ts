@@ -26,7 +26,6 @@ import { OwnOrders } from './own-orders.js';
 import { PlaceOrder } from './place-order.js';
 import { PriceBasket } from './price-basket.js';
 import { QuoteBasket } from './quote-basket.js';
-import { ReceivePaymentEvent } from './receive-payment-event.js';
 import { ReconcileOrder } from './reconcile-order.js';
 import { RefreshOrder } from './refresh-order.js';
 import { SettleOrder } from './settle-order.js';
@@ -48,7 +47,6 @@ import { ShowOrder } from './show-order.js';
     CloseOrder,
     SettleOrder,
     ReconcileOrder,
-    ReceivePaymentEvent,
     HandlePaymentEvent,
     OrderHistory,
     OrderFacts,

@@ -5,7 +5,7 @@ import { Clock } from '../adapters/clock/clock.js';
 import { LinkTokens } from '../adapters/secrets/link-tokens.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { Coupons } from '../coupons/coupons.js';
-import { isChargeable } from '../coupons/smallest-charge.js';
+import { isChargeable } from '../payments/smallest-charge.js';
 import { newId } from '../database/columns.js';
 import { isDuplicate } from '../database/errors.js';
 import { Transactions, type Tx } from '../database/transactions.js';

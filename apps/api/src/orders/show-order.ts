@@ -3,7 +3,7 @@ import { InjectModel } from '@nestjs/sequelize';
 import type { WorkshopOrder } from '@windchest/contracts';
 import { notFound } from '../http/refusal.js';
 import { MailOutbox } from '../mails/mail-outbox.js';
-import { locate } from './location-evidence.js';
+import { locate } from '../payments/location-evidence.js';
 import { OrderFacts } from './order-facts.js';
 import { OrderHistory } from './order-history.js';
 import { OrderView } from './order-view.js';
