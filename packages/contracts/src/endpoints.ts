@@ -5,6 +5,7 @@ import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
 import { sessionEndpoints } from './session.js';
+import { supporterEndpoints } from './supporters.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
 
@@ -16,6 +17,7 @@ export const endpoints = {
   ...deliveryEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
+  ...supporterEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

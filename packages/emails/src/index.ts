@@ -22,3 +22,4 @@ export type {
   TaxLine,
   VerifyAddressMessage,
 } from './email-message.js';
+export type { PledgeMessage } from './pledge-message.js';

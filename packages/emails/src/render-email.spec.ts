@@ -97,6 +97,16 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'staff-invite': true,
     'revision-released': true,
     'gift-received': true,
+    'pledge-began': true,
+    'pledge-receipt': true,
+    'pledge-payment-failed': true,
+    'pledge-grace-ends-soon': true,
+    'pledge-lapsed': true,
+    'pledge-will-end': true,
+    'pledge-ended': true,
+    'pledge-paused': true,
+    'pledge-resumes-soon': true,
+    'pledge-plan-changes': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(
     new Set(Object.keys(templates)),
@@ -226,7 +236,7 @@ describe('hostile input', () => {
       return Object.fromEntries(
         Object.entries(value).map(([key, item]: [string, unknown]) => [
           key,
-          key === 'template' || key === 'currency' ? item : poisoned(item),
+          ['template', 'currency', 'keeps'].includes(key) ? item : poisoned(item),
         ]),
       );
     };

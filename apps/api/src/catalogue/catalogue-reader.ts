@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { FilamentColour } from '@windchest/contracts';
+import type { FilamentColour, KitCard } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { Differences, type ReprintRow } from './comparison/differences.js';
@@ -8,6 +8,7 @@ import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
+import { ShopKits } from './kits/shop-kits.js';
 import { bundleName, servable, type ServableFile } from './release/stored-file-of.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision } from './revisions/revision.model.js';
@@ -43,6 +44,7 @@ export class CatalogueReader {
     private readonly offered: OfferedLicences,
     private readonly contents: RevisionContents,
     private readonly changes: Differences,
+    private readonly shop: ShopKits,
   ) {}
 
   /** Those of the licences that can be bought now. */
@@ -59,6 +61,21 @@ export class CatalogueReader {
     return (await this.kits.findAll({ where: { id: [...new Set(ids)] }, order: [['name', 'ASC']] })).map(
       toKit,
     );
+  }
+
+  /** Kits that stand in the shop with a released revision, by name. */
+  async kitsInShop(tx?: Tx): Promise<KitFacts[]> {
+    const rows = await this.kits.findAll({
+      where: { isListed: true, newestRevisionId: { [Op.ne]: null } },
+      order: [['name', 'ASC']],
+      transaction: tx ?? null,
+    });
+    return rows.map(toKit);
+  }
+
+  /** The shop's cards of those kits that are on sale. */
+  shopCards(kitIds: readonly string[]): Promise<(KitCard & { id: string })[]> {
+    return this.shop.cardsByIds(kitIds);
   }
 
   async kitBySlug(slug: string): Promise<KitFacts | null> {

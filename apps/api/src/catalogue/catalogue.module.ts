@@ -15,6 +15,7 @@ import { StoredFile } from './files/stored-file.model.js';
 import { UploadFile } from './files/upload-file.js';
 import { Gates } from './gates/gates.js';
 import { DraftKit } from './kits/draft-kit.js';
+import { KitInShopSteps } from './kits/kit-in-shop-steps.js';
 import { KitPageHead } from './kits/kit-page-head.js';
 import { Kit } from './kits/kit.model.js';
 import { KitsController } from './kits/kits.controller.js';
@@ -44,6 +45,7 @@ import { StartRevision } from './revisions/start-revision.js';
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
   providers: [
     ShopKits,
+    KitInShopSteps,
     KitPageHead,
     WorkshopKits,
     DraftKit,
@@ -69,6 +71,6 @@ import { StartRevision } from './revisions/start-revision.js';
     PrintPlans,
   ],
   // The measuring room writes what it finds through the records.
-  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans],
+  exports: [CatalogueReader, KitInShopSteps, CatalogueWaiting, MeasurementRecords, PrintPlans],
 })
 export class CatalogueModule {}

@@ -16,7 +16,7 @@ import { OrderHistory } from './order-history.js';
 import { OrderLine } from './order-line.model.js';
 import { newOrderNumber } from './order-number.js';
 import { Order } from './order.model.js';
-import { payUntil } from './pay-until.js';
+import { payUntil } from '../payments/pay-until.js';
 import { PriceBasket, type PricedBasket } from './price-basket.js';
 import { FIRST_LOOK_SECONDS, reconcileOrder } from './reconcile-order.job.js';
 import { tooLittleToCharge } from './too-little-to-charge.js';

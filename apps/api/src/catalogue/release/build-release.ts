@@ -11,6 +11,7 @@ import { touchRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { HandlesJob, type Finish, type JobHandler } from '../../jobs/job.js';
+import { KitInShopSteps } from '../kits/kit-in-shop-steps.js';
 import { Kit } from '../kits/kit.model.js';
 import { Licence } from '../kits/licence.model.js';
 import { estimatePrint } from '../print/estimate-print.job.js';
@@ -46,6 +47,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly people: People,
     private readonly staffLog: StaffLog,
     private readonly jobs: JobQueue,
+    private readonly inShop: KitInShopSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -114,6 +116,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     );
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
+    if (kit.isListed) await this.inShop.run(tx, { kitId: kit.id });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
       what: 'released a revision',

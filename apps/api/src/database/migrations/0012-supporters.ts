@@ -18,6 +18,7 @@ export const up = inOrder(
     keeps_after ${KEEPS} NOT NULL,
     is_offered BOOLEAN NOT NULL DEFAULT TRUE,
     kits_version INT UNSIGNED NOT NULL DEFAULT 1,
+    followed_version INT UNSIGNED NOT NULL DEFAULT 1,
     created_at DATETIME(6) NOT NULL,
     updated_at DATETIME(6) NOT NULL,
     UNIQUE KEY pledge_plans_name (name),
@@ -32,6 +33,7 @@ export const up = inOrder(
   )`,
   // `live_person_id` lets a person have one pledge that is open or under way, and any number that are over. Without
   // RTRIM the database refuses it: how a CHAR column reads depends on a session's mode.
+  // A wish is written down before the payment service hears of it and stays until the service agrees.
   // `looks` counts the times the payment service was asked, `followed_look` is the last of them that was followed.
   `CREATE TABLE pledges (
     id ${ID} NOT NULL PRIMARY KEY,
@@ -42,6 +44,7 @@ export const up = inOrder(
     keeps_after ${KEEPS} NOT NULL,
     next_plan_id ${ID} NULL,
     next_amount_minor INT UNSIGNED NULL,
+    next_keeps_after ${KEEPS} NULL,
     next_plan_from DATETIME(6) NULL,
     state VARCHAR(10) CHARACTER SET ascii COLLATE ascii_bin NOT NULL DEFAULT 'opening',
     live_person_id ${ID} AS (CASE WHEN state = 'lapsed' OR state = 'ended' THEN NULL ELSE RTRIM(person_id) END) STORED,
@@ -67,6 +70,11 @@ export const up = inOrder(
     failing_since DATETIME(6) NULL,
     grace_until DATETIME(6) NULL,
     settle_url TEXT NULL,
+    end_wish ENUM('end','keep') NULL,
+    pause_wish ENUM('pause','resume') NULL,
+    amount_wish INT UNSIGNED NULL,
+    card_page_id ${SERVICE_ID} NULL,
+    rights_until DATETIME(6) NULL,
     ended_at DATETIME(6) NULL,
     looks INT UNSIGNED NOT NULL DEFAULT 0,
     followed_look INT UNSIGNED NOT NULL DEFAULT 0,
@@ -96,6 +104,7 @@ export const up = inOrder(
     paid_at DATETIME(6) NOT NULL,
     receipt_number VARCHAR(30) CHARACTER SET ascii COLLATE ascii_bin NULL,
     tax JSON NULL,
+    dispute_state VARCHAR(20) CHARACTER SET ascii COLLATE ascii_bin NULL,
     created_at DATETIME(6) NOT NULL,
     UNIQUE KEY pledge_payments_invoice (invoice_id),
     KEY pledge_payments_pledge (pledge_id, period_start),
