@@ -76,7 +76,7 @@ export const pledgeTexts = {
     heading: (day: string): string => `Your pledge ends on ${day}`,
     body: (day: string): string =>
       `Nothing more is charged. Until ${day} everything stays as it is, and you can take the end back.`,
-    then: leaves,
+    shelf: leaves,
   },
   ended: {
     subject: (plan: string): string => `Your pledge has ended: ${plan}`,

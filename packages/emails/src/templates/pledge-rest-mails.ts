@@ -38,12 +38,12 @@ export function pledgeOver(message: PledgeLapsedMessage | PledgeEndedMessage): E
 
 export function pledgeWillEnd(message: PledgeWillEndMessage, workshop: EmailWorkshop): EmailContent {
   const day = showDay(message.endsAt, workshop.locale);
-  const { subject, preheader, heading, body, then } = words.willEnd;
+  const { subject, preheader, heading, body, shelf } = words.willEnd;
   return {
     subject: subject(day),
     preheader,
     heading: heading(day),
-    blocks: [hello(message.name), say(body(day)), say(then[message.keeps]), openPledge(message.pledgeLink)],
+    blocks: [hello(message.name), say(body(day)), say(shelf[message.keeps]), openPledge(message.pledgeLink)],
     reason: words.reason,
   };
 }

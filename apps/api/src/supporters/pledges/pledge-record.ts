@@ -72,6 +72,8 @@ export interface PledgeView {
   readonly isPageExpired: boolean;
   readonly billingCountry: string | null;
   readonly invoices: readonly InvoiceView[];
+  /** Asked only where the service spoke of a dispute. */
+  readonly disputes: readonly { readonly invoiceId: string; readonly state: 'open' | 'lost' | null }[] | null;
 }
 
 export interface InvoiceView {
