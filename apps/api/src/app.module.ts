@@ -14,6 +14,7 @@ import { MailsModule } from './mails/mails.module.js';
 import { MeasuringModule } from './measuring/measuring.module.js';
 import { OrdersModule } from './orders/orders.module.js';
 import { PaymentsModule } from './payments/payments.module.js';
+import { SupportersModule } from './supporters/supporters.module.js';
 import { WorkshopModule } from './workshop/workshop.module.js';
 
 @Module({
@@ -32,6 +33,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     MeasuringModule,
     CouponsModule,
     OrdersModule,
+    SupportersModule,
     LedgerModule,
     EntitlementsModule,
     WorkshopModule,

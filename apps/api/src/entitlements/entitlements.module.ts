@@ -3,6 +3,7 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { OrdersModule } from '../orders/orders.module.js';
+import { SupportersModule } from '../supporters/supporters.module.js';
 import { Collections } from './collections.js';
 import { DeliveryController } from './delivery.controller.js';
 import { DownloadLink } from './download-link.model.js';
@@ -12,6 +13,7 @@ import { Entitlement } from './entitlement.model.js';
 import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holders } from './holders.js';
+import { PledgeEntitlements } from './pledge-entitlements.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -22,6 +24,7 @@ import { SignedAddress } from './signed-address.js';
     AccountsModule,
     CatalogueModule,
     OrdersModule,
+    SupportersModule,
     SequelizeModule.forFeature([Entitlement, DownloadLink, Download]),
   ],
   controllers: [ShelfController, DeliveryController],
@@ -31,6 +34,7 @@ import { SignedAddress } from './signed-address.js';
     FileGrants,
     ServeFile,
     GiveEntitlements,
+    PledgeEntitlements,
     Collections,
     Shelf,
     Holders,

@@ -12,6 +12,7 @@ import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { browserMark } from './file-grants.js';
+import { covers } from './may-download.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
 
@@ -49,7 +50,7 @@ export class ServeFile {
       );
     const download = await this.downloads.findByPk(downloadId);
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
-    if (!download || entitlement?.state !== 'active')
+    if (!download || !entitlement || !(await this.isStillTheirs(entitlement, download.revisionId)))
       throw new Refusal('forbidden', 'The right to this file has ended.');
     const file = download.isBundle
       ? await this.catalogue.bundleFile(download.revisionId)
@@ -62,6 +63,13 @@ export class ServeFile {
       fileAddressSeconds: this.config.FILE_ADDRESS_MINUTES * 60,
     });
     if (!isHead) await this.countSent(download, sent.bytes, sent.reachedEnd);
+  }
+
+  private async isStillTheirs(entitlement: Entitlement, revisionId: string): Promise<boolean> {
+    if (entitlement.state !== 'active') return false;
+    const isBounded = entitlement.releasedFrom !== null || entitlement.releasedBefore !== null;
+    const revision = isBounded ? await this.catalogue.revisionById(revisionId) : null;
+    return covers(entitlement, revision?.releasedAt ?? null);
   }
 
   private async countRequest(id: string): Promise<void> {

@@ -12,7 +12,9 @@ export interface ReceiptTax {
 @Table({ tableName: 'receipts', timestamps: false })
 export class Receipt extends Model {
   @IdColumn() declare id: string;
-  @Column(DataType.CHAR(36)) declare orderId: string;
+  /** A receipt is of an order or of one payment of a pledge. */
+  @Column(DataType.CHAR(36)) declare orderId: string | null;
+  @Column(DataType.CHAR(36)) declare pledgePaymentId: string | null;
   @Column(DataType.STRING(20)) declare series: string;
   @Column(DataType.SMALLINT.UNSIGNED) declare year: number;
   @Column(DataType.INTEGER.UNSIGNED) declare number: number;

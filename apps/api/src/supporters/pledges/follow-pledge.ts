@@ -43,7 +43,8 @@ export class FollowPledge {
       const pledge = await this.pledges.findByPk(pledgeId, { transaction: tx, lock: tx.LOCK.UPDATE });
       if (!pledge || look <= pledge.followedLook) return pledge?.state ?? null;
       const known = await this.payments.findAll({ where: { pledgeId }, transaction: tx });
-      const before = pledge.get({ plain: true }) as PledgeRecord;
+      // A copy: the instance's own values change with it.
+      const before = { ...(pledge.get({ plain: true }) as PledgeRecord) };
       const found = consequencesOf(before, view, {
         now: this.clock.now(),
         graceDays: this.config.PLEDGE_GRACE_DAYS,

@@ -12,6 +12,16 @@ import { Pledge } from './pledge.model.js';
 
 const AGAIN_SECONDS = 30;
 
+/** Events that tell of a change here; the service sends others beside each of them, and one look is enough. */
+const TELLING: ReadonlySet<string> = new Set([
+  'customer.subscription.updated',
+  'customer.subscription.deleted',
+  'invoice.paid',
+  'invoice.payment_failed',
+  'invoice.voided',
+  'invoice.marked_uncollectible',
+]);
+
 /**
  * Works on events of pledges: of their pages, subscriptions and invoices, and of money that goes back. An event is
  * a hint to look, not the news itself; so one that comes late, twice or before another does no harm.
@@ -38,7 +48,7 @@ export class PledgeEvents implements OnModuleInit {
         return facts.pageKind === 'order' ? null : this.lookAt(await this.pledgeOf(facts));
       case 'subscription':
       case 'invoice':
-        return this.lookAt(await this.pledgeOf(facts));
+        return TELLING.has(event.type) ? this.lookAt(await this.pledgeOf(facts)) : 'nothing to do';
       case 'charge':
       case 'refund':
       case 'dispute':

@@ -1,0 +1,51 @@
+import { Injectable, type OnModuleInit } from '@nestjs/common';
+import { InjectModel } from '@nestjs/sequelize';
+import { money, percent, taxFromGross } from '@windchest/money';
+import type { Tx } from '../database/transactions.js';
+import { PledgePaidSteps, type PaidMonth } from '../supporters/pledges/pledge-steps.js';
+import { NumberSeries } from './number-series.js';
+import { Receipt } from './receipt.model.js';
+import { TaxRates } from './tax-rates.js';
+import { RECEIPT_SERIES } from './write-receipt.js';
+
+/** Numbers a receipt for each month of a pledge, in the series of all receipts and in the payment's transaction. */
+@Injectable()
+export class WritePledgeReceipt implements OnModuleInit {
+  constructor(
+    @InjectModel(Receipt) private readonly receipts: typeof Receipt,
+    private readonly numbers: NumberSeries,
+    private readonly rates: TaxRates,
+    private readonly pledgePaid: PledgePaidSteps,
+  ) {}
+
+  onModuleInit(): void {
+    this.pledgePaid.register({ name: 'receipt', order: 10, run: (tx, month) => this.write(tx, month) });
+  }
+
+  private async write(tx: Tx, month: PaidMonth): Promise<void> {
+    // The rate of the day of payment; the number of the day of writing, or a late one would stand out of order.
+    const ratePercent = await this.rates.rateOn(month.country, 'electronic-service', month.paidAt, tx);
+    const split = taxFromGross(money(month.amountMinor, month.currency), percent(ratePercent));
+    const line = { ratePercent, netMinor: split.net.minor, taxMinor: split.tax.minor };
+    const year = month.writtenAt.getUTCFullYear();
+    const number = await this.numbers.next(tx, RECEIPT_SERIES, year);
+    const label = `${year}-${String(number).padStart(6, '0')}`;
+    await this.receipts.create(
+      {
+        pledgePaymentId: month.paymentId,
+        series: RECEIPT_SERIES,
+        year,
+        number,
+        label,
+        currency: month.currency,
+        totalMinor: month.amountMinor,
+        country: month.country,
+        tax: [{ country: month.country, ...line }],
+        issuedAt: month.writtenAt,
+      },
+      { transaction: tx },
+    );
+    month.facts.receiptNumber = label;
+    month.facts.tax = [line];
+  }
+}
