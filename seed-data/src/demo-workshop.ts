@@ -4,6 +4,7 @@ import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { people, purchases } from './people.js';
+import { plans, pledges } from './pledges.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
 
@@ -43,4 +44,6 @@ export const demoWorkshop: DemoWorkshop = {
     },
   ],
   purchases,
+  plans,
+  pledges,
 };

@@ -2,6 +2,7 @@ import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { makePeople } from './load/make-people.js';
+import { beginPledge, makePlan } from './load/pledge.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
 
@@ -48,6 +49,21 @@ const main = async (): Promise<void> => {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
     if (person) await buy(await signIn(person.email), person, purchase, stripeUrl);
     say(`${person?.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+  }
+
+  const planIds = new Map<string, string>();
+  for (const plan of demoWorkshop.plans) planIds.set(plan.name, await makePlan(maker, plan, kitIds));
+  for (const pledge of demoWorkshop.pledges) {
+    const person = demoWorkshop.people.find((one) => one.email === pledge.supporterEmail);
+    if (person)
+      await beginPledge(
+        await signIn(person.email),
+        person,
+        planIds.get(pledge.planName) ?? '',
+        pledge,
+        stripeUrl,
+      );
+    say(`${person?.name} pledges to ${pledge.planName}`);
   }
 
   for (const kit of demoWorkshop.kits)

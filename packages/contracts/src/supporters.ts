@@ -107,6 +107,8 @@ export const pledge = z.object({
   /** The supporter ended it: the last day. */
   endsAt: moment.nullable(),
   pausedUntil: moment.nullable(),
+  /** The next payment if the pause were dropped now. */
+  resumesAt: moment.nullable(),
   graceUntil: moment.nullable(),
   /** Where the payment that failed can be made with any card. */
   settleUrl: z.string().nullable(),
@@ -115,6 +117,8 @@ export const pledge = z.object({
   endedAt: moment.nullable(),
   /** What can be done with it now. */
   deeds: z.array(pledgeDeed),
+  /** The payment with which it would go on, for each length of a pause. */
+  pauses: z.array(z.object({ months: pauseMonths, nextPaymentAt: moment })),
 });
 export type Pledge = z.output<typeof pledge>;
 
@@ -147,19 +151,21 @@ export const supporterRow = z.object({
 });
 export type SupporterRow = z.output<typeof supporterRow>;
 
-export const supporter = pledge.omit({ deeds: true, paymentUrl: true, settleUrl: true }).extend({
-  name: z.string(),
-  email: z.string(),
-  country: countryCode,
-  flags: z.array(z.string()),
-  consentText: z.string(),
-  consentAt: moment,
-  customerId: z.string().nullable(),
-  subscriptionId: z.string().nullable(),
-  paid: money,
-  history: z.array(z.object({ at: moment, what: z.string(), detail: z.string() })),
-  mails: z.array(z.object({ id, subject: z.string(), state: z.string(), sentAt: moment.nullable() })),
-});
+export const supporter = pledge
+  .omit({ deeds: true, pauses: true, paymentUrl: true, settleUrl: true })
+  .extend({
+    name: z.string(),
+    email: z.string(),
+    country: countryCode,
+    flags: z.array(z.string()),
+    consentText: z.string(),
+    consentAt: moment,
+    customerId: z.string().nullable(),
+    subscriptionId: z.string().nullable(),
+    paid: money,
+    history: z.array(z.object({ at: moment, what: z.string(), detail: z.string() })),
+    mails: z.array(z.object({ id, subject: z.string(), state: z.string(), sentAt: moment.nullable() })),
+  });
 export type Supporter = z.output<typeof supporter>;
 
 export const supporterFigures = z.object({

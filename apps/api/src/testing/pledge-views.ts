@@ -78,6 +78,7 @@ export const pledgeRecord = (changes: Partial<PledgeRecord> = {}): PledgeRecord 
   subscriptionId: null,
   beganAt: null,
   paidUntil: null,
+  periodEnd: null,
   nextPaymentAt: null,
   endsAt: null,
   pausedUntil: null,

@@ -46,6 +46,8 @@ export const paths = {
   reset: route('/reset'),
   verify: route('/verify'),
   account: route('/account'),
+  pledge: route('/account/pledge'),
+  support: route('/support'),
 
   workshop: {
     overview: route('/workshop'),
@@ -65,6 +67,11 @@ export const paths = {
     orders: route('/workshop/orders'),
     order: route('/workshop/orders/:orderId'),
     holders: route('/workshop/holders'),
+    supporters: route('/workshop/supporters'),
+    supporter: route('/workshop/supporters/:pledgeId'),
+    plans: route('/workshop/plans'),
+    newPlan: route('/workshop/plans/new'),
+    plan: route('/workshop/plans/:planId'),
     people: route('/workshop/people'),
     log: route('/workshop/log'),
   },

@@ -63,6 +63,7 @@ export const up = inOrder(
     subscription_id ${SERVICE_ID} NULL,
     began_at DATETIME(6) NULL,
     paid_until DATETIME(6) NULL,
+    period_end DATETIME(6) NULL,
     next_payment_at DATETIME(6) NULL,
     ends_at DATETIME(6) NULL,
     paused_until DATETIME(6) NULL,

@@ -16,7 +16,7 @@ import { OwnPledges } from './own-pledges.js';
 import { paymentAfter } from './payment-days.js';
 import { PledgeHistory } from './pledge-history.js';
 import { PledgeMails } from './pledge-mails.js';
-import { PledgePayment } from './pledge-payment.model.js';
+import { PledgeView } from './pledge-view.js';
 import { Pledge } from './pledge.model.js';
 
 const PASS_ON_SECONDS = 10;
@@ -29,10 +29,10 @@ const PASS_ON_SECONDS = 10;
 export class ChangePledge {
   constructor(
     @InjectModel(Pledge) private readonly pledges: typeof Pledge,
-    @InjectModel(PledgePayment) private readonly payments: typeof PledgePayment,
     @InjectModel(PledgePlan) private readonly plans: typeof PledgePlan,
     private readonly transactions: Transactions,
     private readonly own: OwnPledges,
+    private readonly view: PledgeView,
     private readonly looking: LookAtPledge,
     private readonly mails: PledgeMails,
     private readonly history: PledgeHistory,
@@ -57,13 +57,10 @@ export class ChangePledge {
 
   pause(pledgeId: string, person: SignedIn, months: number): Promise<PledgeAnswer> {
     return this.wish(pledgeId, person, 'pause', async (tx, pledge) => {
-      const first = await this.payments.min<Date, PledgePayment>('periodStart', {
-        where: { pledgeId },
-        transaction: tx,
-      });
+      const first = (await this.view.firstPayments([pledgeId], tx)).get(pledgeId);
       if (!pledge.nextPaymentAt || !pledge.paidUntil || !first)
         throw new Refusal('pledge-cannot', 'The next payment is not known yet. Try again in a minute.');
-      const pausedUntil = paymentAfter(pledge.nextPaymentAt, months, new Date(first));
+      const pausedUntil = paymentAfter(pledge.nextPaymentAt, months, first);
       await pledge.update({ pauseWish: 'pause', pausedUntil }, { transaction: tx });
       await this.history.add(tx, pledge.id, 'pause asked for', `until ${pausedUntil.toISOString()}`);
       await this.mails.paused(tx, pledge, pledge.paidUntil, pausedUntil);
@@ -86,7 +83,8 @@ export class ChangePledge {
       const plan = await this.plans.findByPk(body.planId, { transaction: tx });
       if (!plan?.isOffered || plan.currency !== pledge.currency)
         throw new Refusal('plan-refused', 'This plan is not offered any more. Choose another one.');
-      const from = pledge.pausedUntil ?? pledge.nextPaymentAt;
+      // A pause may be dropped later: whatever is paid after the month that runs is of the new plan.
+      const from = pledge.periodEnd;
       if (!from)
         throw new Refusal('pledge-cannot', 'The next payment is not known yet. Try again in a minute.');
       await pledge.update(
@@ -100,7 +98,7 @@ export class ChangePledge {
         { transaction: tx },
       );
       await this.history.add(tx, pledge.id, 'plan chosen', `${plan.name} from ${from.toISOString()}`);
-      await this.mails.planChanges(tx, pledge, plan, from);
+      await this.mails.planChanges(tx, pledge, plan, pledge.pausedUntil ?? from);
     });
   }
 

@@ -65,6 +65,7 @@ export const consequencesOf = (
     state: standing.state,
     beganAt: first,
     paidUntil: standing.paidUntil,
+    periodEnd: view.subscription?.currentPeriodEnd ?? before.periodEnd,
     nextPaymentAt: standing.nextPaymentAt,
     endsAt: standing.endsAt,
     failedInvoiceId: standing.failing?.invoiceId ?? null,

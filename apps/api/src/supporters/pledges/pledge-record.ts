@@ -38,6 +38,8 @@ export interface PledgeRecord {
   readonly subscriptionId: string | null;
   readonly beganAt: Date | null;
   readonly paidUntil: Date | null;
+  /** Of the month that runs at the payment service, paid or not. */
+  readonly periodEnd: Date | null;
   readonly nextPaymentAt: Date | null;
   readonly endsAt: Date | null;
   /** The day of the payment with which a pause is over. */

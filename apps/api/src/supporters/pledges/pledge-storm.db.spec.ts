@@ -15,7 +15,7 @@ const DAY = 86_400;
 describe('a storm of events about pledges', () => {
   let shop: PaymentShop;
   let plan: WorkshopPlan;
-  const PLEDGES = 9;
+  const PLEDGES = 6;
   beforeAll(async () => {
     shop = await startPaymentShop();
     const knot = await putKitOnSale(shop, { name: 'Knot', priceMinor: 900 });

@@ -3,9 +3,11 @@ import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Pledge as PledgeAnswer } from '@windchest/contracts';
 import { CatalogueReader } from '../../catalogue/catalogue-reader.js';
 import { Clock } from '../../adapters/clock/clock.js';
+import type { Tx } from '../../database/transactions.js';
 import { PlanKits } from '../plans/plan-kits.js';
 import { PledgePlan } from '../plans/pledge-plan.model.js';
 import { deedsOf, isEnding } from './deeds.js';
+import { paymentAfter } from './payment-days.js';
 import { PledgePayment } from './pledge-payment.model.js';
 import { Pledge } from './pledge.model.js';
 
@@ -37,6 +39,7 @@ export class PledgeView {
       ),
     );
     const nameOf = new Map(plans.map((plan) => [plan.id, plan.name]));
+    const firstPayments = await this.firstPayments(pledges.map(({ id }) => id));
     const now = this.clock.now();
     return pledges.map((pledge) => {
       const isPayable = pledge.state === 'opening' && pledge.payUntil !== null && pledge.payUntil > now;
@@ -54,14 +57,29 @@ export class PledgeView {
         nextPaymentAt: ends ? null : iso(pledge.pausedUntil ?? pledge.nextPaymentAt),
         endsAt: iso(ends),
         pausedUntil: iso(pledge.pausedUntil),
+        resumesAt: deedsOf(pledge).includes('resume') ? iso(pledge.periodEnd) : null,
         graceUntil: iso(pledge.graceUntil),
         settleUrl: pledge.state === 'grace' ? pledge.settleUrl : null,
         paymentUrl: isPayable ? pledge.paymentUrl : null,
         cardLast4: pledge.cardLast4,
         endedAt: iso(pledge.endedAt),
         deeds: deedsOf(pledge),
+        pauses: deedsOf(pledge).includes('pause')
+          ? pausesOf(pledge.nextPaymentAt, firstPayments.get(pledge.id))
+          : [],
       };
     });
+  }
+
+  /** The day of a pledge's first payment says on which day of a month the others are. */
+  async firstPayments(pledgeIds: readonly string[], tx?: Tx): Promise<Map<string, Date>> {
+    const rows = await this.paymentRows.findAll({
+      attributes: ['pledgeId', 'periodStart'],
+      where: { pledgeId: [...pledgeIds] },
+      order: [['periodStart', 'DESC']],
+      transaction: tx ?? null,
+    });
+    return new Map(rows.map((row) => [row.pledgeId, row.periodStart]));
   }
 
   async payments(
@@ -100,6 +118,18 @@ export class PledgeView {
   }
 }
 
+export const pausesOf = (
+  nextPaymentAt: Date | null,
+  firstPayment: Date | undefined,
+): PledgeAnswer['pauses'] =>
+  nextPaymentAt && firstPayment
+    ? PAUSE_MONTHS.map((months) => ({
+        months,
+        nextPaymentAt: paymentAfter(nextPaymentAt, months, firstPayment).toISOString(),
+      }))
+    : [];
+const PAUSE_MONTHS = [1, 2, 3] as const;
+
 const iso = (moment: Date | null): string | null => moment?.toISOString() ?? null;
 
 const nextPlanOf = (pledge: Pledge, nameOf: ReadonlyMap<string, string>): PledgeAnswer['nextPlan'] =>
@@ -108,6 +138,6 @@ const nextPlanOf = (pledge: Pledge, nameOf: ReadonlyMap<string, string>): Pledge
         id: pledge.nextPlanId,
         name: nameOf.get(pledge.nextPlanId) ?? '',
         amount: { minor: pledge.nextAmountMinor ?? pledge.amountMinor, currency: pledge.currency },
-        from: pledge.nextPlanFrom.toISOString(),
+        from: (pledge.pausedUntil ?? pledge.nextPlanFrom).toISOString(),
       }
     : null;

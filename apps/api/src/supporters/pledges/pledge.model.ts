@@ -31,6 +31,7 @@ export class Pledge extends Model {
   @Column(DataType.STRING(120)) declare subscriptionId: string | null;
   @MomentColumn({ isNullable: true }) declare beganAt: Date | null;
   @MomentColumn({ isNullable: true }) declare paidUntil: Date | null;
+  @MomentColumn({ isNullable: true }) declare periodEnd: Date | null;
   @MomentColumn({ isNullable: true }) declare nextPaymentAt: Date | null;
   @MomentColumn({ isNullable: true }) declare endsAt: Date | null;
   @MomentColumn({ isNullable: true }) declare pausedUntil: Date | null;

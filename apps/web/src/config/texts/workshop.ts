@@ -10,6 +10,7 @@ export const workshopTexts = {
   kits: 'Kits',
   orders: 'Orders',
   coupons: 'Coupons',
+  supporters: 'Supporters',
   holders: 'Holders',
   people: 'People',
   toShop: 'To the shop',
