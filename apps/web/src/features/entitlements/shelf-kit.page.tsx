@@ -3,13 +3,14 @@ import type { ShelfKit } from '@windchest/contracts';
 import { useState } from 'react';
 import { Navigate, useParams } from 'react-router-dom';
 import { paths, signInThenBack } from '../../config/paths.js';
-import { shelfKitTexts, sourceTexts } from '../../config/texts/shelf.js';
+import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { date } from '../../lib/format.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
 import { PartsSheet } from '../../ui/drawing/parts-sheet.js';
 import { Fault } from '../../ui/fault.js';
+import { TextLink } from '../../ui/link.js';
 import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band, SplitSheet } from '../../ui/sheet.js';
@@ -23,6 +24,7 @@ import { ReprintTable } from './reprint-table.js';
 import { ShelfKitActions } from './shelf-kit-actions.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
+import { sourceWords } from './source-words.js';
 import { useShelfDownload } from './use-download.js';
 
 /** A download that has not ended yet is looked after for this long, so that the page learns what is held. */
@@ -64,6 +66,15 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 </Notice>
               </Box>
             )}
+            {kit.newerNotIncluded && (
+              <Box marginTop="5">
+                <Notice title={shelfKitTexts.notIncludedTitle(kit.newerNotIncluded)}>
+                  {shelfKitTexts.notIncluded(newest.label)}{' '}
+                  <TextLink to={paths.support.to()}>{shelfKitTexts.pledgeAgain}</TextLink>{' '}
+                  <TextLink to={paths.kit.to({ slug: kit.slug })}>{shelfKitTexts.buyKit}</TextLink>
+                </Notice>
+              </Box>
+            )}
             {drawn.length > 0 && (
               <Box marginTop="8">
                 <PartsSheet parts={drawn} label={shelfKitTexts.sheet(kit.name)} />
@@ -82,8 +93,10 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 name: shelfKitTexts.blockNewest,
                 value: shelfKitTexts.newestOf(newest.label, date(newest.releasedAt)),
               },
-              { name: shelfKitTexts.blockSource, value: sourceTexts[kit.source] },
-              { name: shelfKitTexts.blockSince, value: date(kit.since) },
+              {
+                name: shelfKitTexts.blockSource,
+                value: sourceWords(kit).map((words) => <Box key={words}>{words}</Box>),
+              },
             ]}
           />
         }
