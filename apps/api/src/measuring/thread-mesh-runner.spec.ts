@@ -22,6 +22,18 @@ describe('the threads that measure', () => {
     expect(await run('next.stl')).toMatchObject({ fault: 'next.stl' });
   });
 
+  it('compare beside measuring, and make a sentence of what goes wrong there too', async () => {
+    const compare = (afterPath: string, runner = patient) =>
+      runner.compare({ beforePath: '/nowhere', afterPath });
+    expect(await compare('b.stl')).toEqual({ isCompared: false, code: 'fine', fault: 'b.stl' });
+    expect(await compare('fill')).toMatchObject({ isCompared: false, code: 'out-of-memory' });
+    expect(await compare('hang', hurried)).toMatchObject({
+      isCompared: false,
+      code: 'timed-out',
+      fault: 'comparing the two files takes longer than 1 s. Export the part with fewer triangles.',
+    });
+  });
+
   it('give up on work that takes too long, and go on with the next file', async () => {
     const outcome = await run('hang', hurried);
     expect(outcome).toMatchObject({ isMeasured: false, code: 'timed-out' });
