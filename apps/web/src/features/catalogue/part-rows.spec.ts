@@ -21,6 +21,7 @@ const row = (code: string, difference: Comparison['rows'][number]['difference'])
   sizeChangeMm: null,
   volumeChangePercent: null,
   areaChangePercent: null,
+  deviation: null,
   mark: null,
   reason: '',
 });

@@ -1,13 +1,17 @@
 import { Box } from '@chakra-ui/react/box';
+import type { RevisionDetail } from '@windchest/contracts';
+import { paths } from '../../config/paths.js';
 import { partsTexts } from '../../config/texts/workshop-parts.js';
 import { Button } from '../../ui/button.js';
 import { PartThumb } from '../../ui/drawing/parts-sheet.js';
+import { TextLink } from '../../ui/link.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
 import { MarkField } from './mark-field.js';
 import { MeasuredCell } from './measured-cell.js';
 import type { Difference, PartRow } from './part-rows.js';
+import { useComparedWith } from './use-compared-with.js';
 
 const signs: Record<Difference, SignName> = {
   changed: 'warn',
@@ -54,7 +58,13 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
   );
 };
 
-const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
+const SinceCell = ({
+  row: { comparison, code },
+  toDrawing,
+}: {
+  row: PartRow;
+  toDrawing: (code: string) => string;
+}) =>
   comparison && (
     <Box>
       <StatusMark
@@ -68,19 +78,41 @@ const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
       {comparison.whatDiffers && comparison.difference !== 'dropped' && comparison.difference !== 'new' && (
         <Box lineHeight="snug">{comparison.whatDiffers}</Box>
       )}
+      {comparison.difference === 'changed' && comparison.deviation && (
+        <Box marginTop="1" lineHeight="snug">
+          {comparison.deviation.state === 'waiting' ? (
+            <StatusMark state="wait" fontWeight="normal">
+              {partsTexts.comparingOne}
+            </StatusMark>
+          ) : (
+            <>
+              {comparison.deviation.where}{' '}
+              <TextLink to={toDrawing(code)} aria-label={partsTexts.drawnOf(code)}>
+                {partsTexts.drawn}
+              </TextLink>
+            </>
+          )}
+        </Box>
+      )}
     </Box>
   );
 
 export interface PartsTableProps {
   rows: readonly PartRow[];
   comparedWith: string | undefined;
-  revisionId: string;
+  revision: RevisionDetail;
   /** Left out where nothing may be changed. */
   onEdit: ((partId: string) => void) | undefined;
+  isMarkable: boolean;
 }
 
 /** Every part with its drawing, what it measures, what changed, and what buyers should do about it. */
-export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTableProps) {
+export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }: PartsTableProps) {
+  const { withId } = useComparedWith();
+  const changes = paths.workshop.changes.to(
+    { kitId: revision.kit.id, revisionId: revision.id },
+    { with: withId },
+  );
   const columns: Column<PartRow>[] = [
     {
       key: 'part',
@@ -109,7 +141,7 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
       key: 'since',
       header: partsTexts.columns.since(comparedWith),
       width: '22%',
-      cell: (row) => <SinceCell row={row} />,
+      cell: (row) => <SinceCell row={row} toDrawing={(code) => `${changes}#change-${code}`} />,
     },
     {
       key: 'should',
@@ -117,12 +149,7 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
       width: '27%',
       cell: (row) =>
         row.comparison && (
-          <MarkField
-            key={row.code}
-            revisionId={revisionId}
-            row={row.comparison}
-            isWritable={onEdit !== undefined}
-          />
+          <MarkField key={row.code} revisionId={revision.id} row={row.comparison} isWritable={isMarkable} />
         ),
     },
   ];
