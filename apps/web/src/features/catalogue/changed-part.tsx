@@ -13,7 +13,7 @@ import { ChangedSizes } from './changed-sizes.js';
 import { MarkField } from './mark-field.js';
 import type { ComparisonRow, PartRow } from './part-rows.js';
 
-const sizeText = (mm: number) => number(mm, mm < 10 ? 2 : 1);
+const sizeText = (mm: number) => number(mm, 2);
 
 /** Where the shapes lie farthest apart, with the sign that marks it on the drawing; or how far the comparing is. */
 export const Where = ({ deviation }: { deviation: NonNullable<ComparisonRow['deviation']> }) => {

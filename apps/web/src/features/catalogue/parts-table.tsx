@@ -86,10 +86,12 @@ const SinceCell = ({
             </StatusMark>
           ) : (
             <>
-              {comparison.deviation.where}{' '}
-              <TextLink to={toDrawing(code)} aria-label={partsTexts.drawnOf(code)}>
-                {partsTexts.drawn}
-              </TextLink>
+              {comparison.deviation.where}
+              <Box>
+                <TextLink to={toDrawing(code)} aria-label={partsTexts.drawnOf(code)}>
+                  {partsTexts.drawn}
+                </TextLink>
+              </Box>
             </>
           )}
         </Box>
@@ -117,7 +119,7 @@ export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }:
     {
       key: 'part',
       header: partsTexts.columns.part,
-      width: '23%',
+      width: '21%',
       isHeading: true,
       cell: (row) => <PartCell row={row} onEdit={onEdit} />,
     },
@@ -134,19 +136,19 @@ export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }:
     {
       key: 'measured',
       header: partsTexts.columns.measured,
-      width: '22%',
+      width: '20%',
       cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
     },
     {
       key: 'since',
       header: partsTexts.columns.since(comparedWith),
-      width: '22%',
+      width: '29%',
       cell: (row) => <SinceCell row={row} toDrawing={(code) => `${changes}#change-${code}`} />,
     },
     {
       key: 'should',
       header: partsTexts.columns.should,
-      width: '27%',
+      width: '24%',
       cell: (row) =>
         row.comparison && (
           <MarkField key={row.code} revisionId={revision.id} row={row.comparison} isWritable={isMarkable} />

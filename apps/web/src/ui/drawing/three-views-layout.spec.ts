@@ -28,7 +28,7 @@ describe('the three views of a part', () => {
 
   it('do not make a small part look large', () => {
     const nut = { min: { x: 0, y: 0, z: 0 }, max: { x: 4, y: 4, z: 3 } };
-    expect(layOutThreeViews(nut, { widthPx: 800, maxHeightPx: 800 }).pxPerMm).toBe(5);
+    expect(layOutThreeViews(nut, { widthPx: 800, maxHeightPx: 800 }).pxPerMm).toBe(6);
   });
 
   it('show a place of the file from above, from the front and from the right', () => {

@@ -25,12 +25,13 @@ export interface ThreeViewsLayout {
   views: Record<ViewName, PlacedView>;
 }
 
-/** Room for the lettered sizes at the left and below, and between views for a callout. */
-const left = 26;
-const below = 24;
-const between = 64;
+/** Room for the lettered sizes at the left and below, and for a callout at the right of the front view. */
+const left = 32;
+const below = 30;
+const beside = 64;
+const above = 28;
 /** Larger than this a small part looks like a large one. */
-const mostPxPerMm = 5;
+const mostPxPerMm = 6;
 
 export const boxAround = (a: Box3, b: Box3): Box3 => ({
   min: { x: Math.min(a.min.x, b.min.x), y: Math.min(a.min.y, b.min.y), z: Math.min(a.min.z, b.min.z) },
@@ -52,21 +53,21 @@ export function layOutThreeViews(
   const pxPerMm = Math.max(
     0,
     Math.min(
-      (room.widthPx - left - between - 1) / (x + y),
-      (room.maxHeightPx - below - between - 1) / (y + z),
+      (room.widthPx - left - beside - 1) / (x + y),
+      (room.maxHeightPx - below - above - 2) / (y + z),
       mostPxPerMm,
     ),
   );
   const [width, depth, height] = [x * pxPerMm, y * pxPerMm, z * pxPerMm];
-  const underTop = depth + between;
+  const underTop = 1 + depth + above;
   return {
     pxPerMm,
-    widthPx: left + width + between + depth + 1,
+    widthPx: left + width + beside + depth + 1,
     heightPx: underTop + height + below + 1,
     views: {
       top: { x: left, y: 1, widthPx: width, heightPx: depth },
       front: { x: left, y: underTop, widthPx: width, heightPx: height },
-      side: { x: left + width + between, y: underTop, widthPx: depth, heightPx: height },
+      side: { x: left + width + beside, y: underTop, widthPx: depth, heightPx: height },
     },
   };
 }

@@ -43,7 +43,7 @@ export interface ThreeViewsProps {
 }
 
 /** A part from above, from the front and from the right, to one scale, with its sizes. */
-export function ThreeViews({ shape, earlier, place, label, sizeText, maxHeightPx = 300 }: ThreeViewsProps) {
+export function ThreeViews({ shape, earlier, place, label, sizeText, maxHeightPx = 340 }: ThreeViewsProps) {
   const [ref, widthPx] = useWidth<HTMLDivElement>();
   const around = earlier ? boxAround(shape.boxMm, earlier.boxMm) : shape.boxMm;
   const layout = layOutThreeViews(around, { widthPx, maxHeightPx });
@@ -59,7 +59,7 @@ export function ThreeViews({ shape, earlier, place, label, sizeText, maxHeightPx
   const size = sizeOf(shape.boxMm);
   const corners = cornersInViews(shape.boxMm, around);
   const [front, side] = [at('front', corners.front), at('side', corners.side)];
-  const foot = views.front.y + views.front.heightPx + 14;
+  const foot = views.front.y + views.front.heightPx + 22;
   const marks = place && placeInViews(place.atMm, around);
   return (
     <Box ref={ref} width="full" minHeight="1px">
@@ -77,15 +77,14 @@ export function ThreeViews({ shape, earlier, place, label, sizeText, maxHeightPx
           {viewNames.map((view) => (
             <g key={view}>
               {earlier && (
-                <Line
-                  d={earlier.drawings[view].path}
-                  transform={transform(earlier, view)}
-                  stroke="edge"
-                  strokeDasharray="3 3"
-                />
+                <g transform={transform(earlier, view)}>
+                  <Line d={earlier.drawings[view].path} stroke="ink.soft" strokeDasharray="3 3" />
+                </g>
               )}
               <g transform={transform(shape, view)}>
                 <Line d={shape.drawings[view].edges} stroke="edge" strokeWidth="0.75" />
+                {/* Keeps the dashes clear of the lines they run along. */}
+                <Line d={shape.drawings[view].path} stroke="sheet" strokeWidth="4" />
                 <Line d={shape.drawings[view].path} stroke="ink" strokeWidth="1.25" />
               </g>
             </g>
