@@ -3,7 +3,7 @@ import type { z } from 'zod';
 import { keyOf, Storage } from '../adapters/storage/storage.js';
 import { compareMeshes } from '../catalogue/comparison/compare-meshes.job.js';
 import { MeshComparisons } from '../catalogue/comparison/mesh-comparisons.js';
-import { HandlesJob, type JobHandler } from '../jobs/job.js';
+import { HandlesJob, TryLater, type JobHandler } from '../jobs/job.js';
 import { withLocalPaths } from './local-copy.js';
 import { MeshRunner } from './mesh-runner.js';
 
@@ -23,6 +23,8 @@ export class CompareMeshes implements JobHandler<typeof compareMeshes.payload> {
   ) {}
 
   async handle(pair: z.output<typeof compareMeshes.payload>): Promise<void> {
+    // Comparing takes its time; measuring and the mails to buyers go first.
+    if (this.runner.isCrowded) throw new TryLater(1);
     const work = await this.comparisons.begin(pair);
     if (!work) return;
     if (work.tries > MOST_TRIES)

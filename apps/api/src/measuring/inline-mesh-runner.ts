@@ -18,6 +18,10 @@ export class InlineMeshRunner extends MeshRunner {
     return compareMeshFiles(task);
   }
 
+  get isCrowded(): boolean {
+    return false;
+  }
+
   close(): Promise<void> {
     return Promise.resolve();
   }

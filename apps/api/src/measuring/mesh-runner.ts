@@ -29,5 +29,7 @@ export abstract class MeshRunner {
   abstract run(task: MeshTask): Promise<MeshOutcome>;
   /** The same for comparing two. */
   abstract compare(task: MeshPairTask): Promise<MeshPairOutcome>;
+  /** More work than threads: what can wait had better come back later than hold a place among the jobs. */
+  abstract get isCrowded(): boolean;
   abstract close(): Promise<void>;
 }

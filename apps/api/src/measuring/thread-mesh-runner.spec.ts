@@ -41,6 +41,14 @@ describe('the threads that measure', () => {
     expect(await run('next.stl', hurried)).toMatchObject({ fault: 'next.stl' });
   });
 
+  it('say when there is more work than threads', async () => {
+    const both = [run('one.stl'), run('two.stl')];
+    await new Promise(setImmediate);
+    expect(patient.isCrowded).toBe(true);
+    await Promise.all(both);
+    expect(patient.isCrowded).toBe(false);
+  });
+
   it('give each file its whole time, however long it waited for a thread', async () => {
     const outcomes = await Promise.all([
       run('hang', hurried),

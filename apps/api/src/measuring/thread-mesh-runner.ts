@@ -68,6 +68,10 @@ export class ThreadMeshRunner extends MeshRunner {
     }
   }
 
+  get isCrowded(): boolean {
+    return this.waiting.length > 0;
+  }
+
   close(): Promise<void> {
     return this.pool.destroy();
   }

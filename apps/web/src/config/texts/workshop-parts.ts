@@ -17,7 +17,7 @@ export const partsTexts = {
     'Drop the mesh files of the kit above. A file named “J-01 Locking tongue.stl” becomes part J-01; other names get the next free code.',
   emptyReadOnly: 'This revision has no parts.',
   compareWith: 'Compare with',
-  lastReleased: (label: string) => `${label}, the last released`,
+  oneBefore: (label: string) => `${label}, the one before`,
   marksAgainst: (label: string) => `What buyers should do is said against ${label}.`,
   comparing: 'Comparing shapes',
   comparedShapes: (done: number, total: number) => `${done} of ${total}`,

@@ -78,7 +78,7 @@ export const releaseTexts = {
   notAllowed: (label: string) => `${label} is released by a maker`,
   ask: (kit: string, label: string) => `Release ${label} of ${kit}?`,
   what: (label: string, holders: string) =>
-    `The gates are checked once more and the bundle is built. Then ${label} is the newest revision: it is on sale, and ${holders} see on their shelf what to reprint.`,
+    `The gates are checked once more and the bundle is built. Then ${label} is the newest revision: it is on sale, and the shelf tells ${holders} what to reprint.`,
   waived: (gates: readonly string[]) =>
     `It goes out with ${gates.length === 1 ? 'one gate' : `${gates.length} gates`} waived: ${gates.join(', ')}.`,
   final: (label: string) =>

@@ -67,7 +67,7 @@ export function ComparisonLine({ revision, comparison, children }: ComparisonLin
               label={partsTexts.compareWith}
               value={withId === last.id ? '' : (withId ?? '')}
               onChange={(event) => change({ with: event.target.value })}
-              emptyLabel={partsTexts.lastReleased(last.label)}
+              emptyLabel={partsTexts.oneBefore(last.label)}
               options={older.map((one) => ({ value: one.id, label: one.label }))}
             />
           </Box>
