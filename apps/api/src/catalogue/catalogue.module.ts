@@ -5,6 +5,9 @@ import { CatalogueReader } from './catalogue-reader.js';
 import { CatalogueWaiting } from './catalogue-waiting.js';
 import { Comparison } from './comparison/comparison.js';
 import { Differences } from './comparison/differences.js';
+import { MeshComparisonRecord } from './comparison/mesh-comparison.model.js';
+import { MeshComparisons } from './comparison/mesh-comparisons.js';
+import { QueueComparisons } from './comparison/queue-comparisons.js';
 import { AttachFile } from './files/attach-file.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
@@ -13,7 +16,9 @@ import { RemoveFile } from './files/remove-file.js';
 import { RevisionFile } from './files/revision-file.model.js';
 import { StoredFile } from './files/stored-file.model.js';
 import { UploadFile } from './files/upload-file.js';
+import { GateWaiver } from './gates/gate-waiver.model.js';
 import { Gates } from './gates/gates.js';
+import { WaiveGate } from './gates/waive-gate.js';
 import { DraftKit } from './kits/draft-kit.js';
 import { KitPageHead } from './kits/kit-page-head.js';
 import { Kit } from './kits/kit.model.js';
@@ -27,6 +32,7 @@ import { WorkshopKits } from './kits/workshop-kits.js';
 import { PrintPlans } from './print/print-plans.js';
 import { BuildRelease } from './release/build-release.js';
 import { RequestRelease } from './release/request-release.js';
+import { TidyDraft } from './release/tidy-draft.js';
 import { ChangeRevision } from './revisions/change-revision.js';
 import { Drafts } from './revisions/drafts.js';
 import { Part } from './revisions/part.model.js';
@@ -39,7 +45,17 @@ import { StartRevision } from './revisions/start-revision.js';
 @Module({
   imports: [
     AccountsModule,
-    SequelizeModule.forFeature([Kit, Licence, Revision, Part, RevisionFile, StoredFile, MeasurementRecord]),
+    SequelizeModule.forFeature([
+      Kit,
+      Licence,
+      Revision,
+      Part,
+      RevisionFile,
+      StoredFile,
+      MeasurementRecord,
+      MeshComparisonRecord,
+      GateWaiver,
+    ]),
   ],
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
   providers: [
@@ -55,20 +71,24 @@ import { StartRevision } from './revisions/start-revision.js';
     StartRevision,
     ChangeRevision,
     Differences,
+    MeshComparisons,
+    QueueComparisons,
     Comparison,
     Gates,
+    WaiveGate,
     MeasurementRecords,
     AttachFile,
     OfferFiles,
     UploadFile,
     RemoveFile,
     RequestRelease,
+    TidyDraft,
     BuildRelease,
     CatalogueReader,
     CatalogueWaiting,
     PrintPlans,
   ],
   // The measuring room writes what it finds through the records.
-  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans],
+  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, MeshComparisons, PrintPlans],
 })
 export class CatalogueModule {}
