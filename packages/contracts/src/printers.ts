@@ -108,6 +108,7 @@ export const printerCardFields = z.object({
 export type PrinterCardFields = z.output<typeof printerCardFields>;
 
 export const printerCardBody = printerCardFields.extend({ isMain: z.boolean() });
+export type PrinterCardBody = z.output<typeof printerCardBody>;
 export const printerCard = printerCardBody.extend({ id });
 export type PrinterCard = z.output<typeof printerCard>;
 
