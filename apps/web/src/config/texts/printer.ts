@@ -16,7 +16,7 @@ export const printerTexts = {
   nozzle: 'Nozzle',
   filaments: 'Filaments',
   filamentsHint: (known: string) =>
-    `The weight of ${known} is known here. Any other word is kept too, but without grams and cost.`,
+    `The weight of ${known} is known here. Any other word is kept too, but without grams and cost. Prices may be left empty.`,
   filament: 'Filament',
   filamentOf: (at: number) => `Filament ${at}`,
   pricePerKg: (currency: string) => `Price per kg, ${currency}`,
@@ -32,7 +32,7 @@ export const printerTexts = {
     zero: '0 as drawn',
     plus: '+ looser than drawn',
   } satisfies Record<Clearance, string>,
-  isMain: 'This is the one I mostly print on',
+  isMain: 'This is my main printer',
   keep: 'Keep this printer',
   keeping: 'Keeping …',
   forget: 'Forget it',
@@ -47,7 +47,7 @@ export const printerTexts = {
   clearanceOf: (which: string) => `clearance ${which}`,
   writeAnother: 'Write down another',
 
-  offerTitle: 'This printer is written down in this browser only',
+  offerTitle: 'One printer is written down in this browser only',
   offer: 'On your account it is at hand wherever you sign in.',
   offerKeep: 'Keep it on my account',
   offerFailed: 'The printer was not kept on your account',
@@ -62,7 +62,7 @@ export const ownPrintersTexts = {
     'With a printer written down, every kit says whether it fits, on how many plates, and how long it prints.',
   add: 'Write down a printer',
   full: (most: number) => `An account keeps ${most} printers. Throw one away to write down another.`,
-  main: 'mostly printed on',
+  main: 'main printer',
   change: 'Change',
   changeOf: (name: string) => `Change ${name}`,
   makeMain: 'Make it the main one',
@@ -72,6 +72,6 @@ export const ownPrintersTexts = {
   removeOf: (name: string) => `Throw ${name} away`,
   removeTitle: (name: string) => `Throw ${name} away?`,
   removeDetail: 'Its card is gone then, prices and clearance too. Nothing you bought or printed changes.',
-  removeMainDetail: (next: string) => `${next} becomes the printer you mostly print on.`,
+  removeMainDetail: (next: string) => `${next} becomes the main printer.`,
   removeFailed: 'The printer is still there',
 };

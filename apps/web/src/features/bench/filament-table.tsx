@@ -54,7 +54,7 @@ export function FilamentTable({ needs, card, currency, spoolG, onSpool, onChoose
         const options = optionsOf(row, card);
         if (options.length === 1) return row.printedIn;
         return (
-          <Box width="full" maxWidth="16rem" marginTop={{ md: '-2' }}>
+          <Box width="full" maxWidth="16rem" marginTop={{ md: '-2.5' }}>
             <SelectField
               label={
                 <Box as="span" srOnly>

@@ -1,5 +1,5 @@
 import { Box } from '@chakra-ui/react/box';
-import type { PrinterCardFields, PrintSheetPart, PrintSpecification } from '@windchest/contracts';
+import type { PrinterCardFields } from '@windchest/contracts';
 import { type ReactNode, useMemo, useState } from 'react';
 import { platesTexts as texts } from '../../config/texts/plates.js';
 import { Details } from '../../ui/details.js';
@@ -18,23 +18,22 @@ import {
 } from './plan-figures.js';
 import { certaintyWords, filamentNotes, specsOf, summaryWords } from './plan-words.js';
 import { PlatePages } from './plate-pages.js';
-import type { PlateLayout } from './layout-fields.js';
-import type { PlatesAnswer } from './plates-work.js';
+import type { PlatesAnswer, PlatesQuestion } from './plates-work.js';
 
 export interface PlanSectionsProps {
   answer: PlatesAnswer;
-  parts: readonly PrintSheetPart[];
+  question: PlatesQuestion;
   unmeasured: readonly string[];
-  printSpec: PrintSpecification;
   printer: PrinterCardFields;
-  layout: PlateLayout;
   currency: string;
-  layoutFields: ReactNode;
+  /** What changes the plates, to stand under them. */
+  settings: ReactNode;
 }
 
 /** Plates, and what those on them take. */
 export function PlanSections(props: PlanSectionsProps) {
-  const { answer, parts, unmeasured, printSpec, printer, layout, currency, layoutFields } = props;
+  const { answer, question, unmeasured, printer, currency, settings } = props;
+  const { parts, printSpec } = question;
   const [chosen, setChosen] = useState<Record<string, string>>({});
   const [spoolG, setSpoolG] = useState<SpoolSizeG>(1000);
   const estimates = useMemo(
@@ -72,15 +71,15 @@ export function PlanSections(props: PlanSectionsProps) {
       ) : (
         <>
           <Text>{texts.nothing}</Text>
-          {layoutFields}
+          {settings}
         </>
       )}
       <PlatePages
         plates={answer.plates}
-        bed={printer.bed}
-        marginMm={layout.marginMm}
-        gapMm={layout.gapMm}
-        settings={layoutFields}
+        bed={question.bed}
+        marginMm={question.marginMm}
+        gapMm={question.gapMm}
+        settings={settings}
         nameOf={(code) => parts.find((part) => part.code === code)?.name ?? ''}
         hoursOf={(some) => hoursOf(some, estimates)}
         massOf={(some) => {

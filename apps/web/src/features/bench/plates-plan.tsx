@@ -32,20 +32,26 @@ export function PlatesPlan({ parts, unmeasured = [], printSpec, printer }: Plate
   const [layout, setLayout] = useState({ gapMm: usual.gapMm as number, marginMm: usual.marginMm as number });
   const { bed } = printer;
   const question = useMemo(() => ({ parts, printSpec, bed, ...layout }), [parts, printSpec, bed, layout]);
-  const { answer, done, refusal } = usePlates(question);
+  const { last, done, refusal } = usePlates(question);
   const names = useMemo(() => new Map(parts.map(({ code, name }) => [code, name])), [parts]);
   const lines = useMemo(
     () =>
-      answer &&
+      last &&
       fitWords({
-        parts: answer.parts.map((part) => ({ ...part, name: names.get(part.code) ?? '' })),
+        parts: last.answer.parts.map((part) => ({ ...part, name: names.get(part.code) ?? '' })),
         unmeasured,
-        volume: buildVolume(bed),
-        marginMm: layout.marginMm,
+        volume: buildVolume(last.question.bed),
+        marginMm: last.question.marginMm,
       }),
-    [answer, names, unmeasured, bed, layout.marginMm],
+    [last, names, unmeasured],
   );
 
+  const settings = (
+    <Box display="grid" gap="4" maxWidth="measure" minHeight={last && { md: '7rem' }}>
+      {(last || refusal) && <LayoutFields layout={layout} onChange={setLayout} refusal={refusal} />}
+      {done !== undefined && <Progress label={texts.packing} done={done} />}
+    </Box>
+  );
   return (
     <Box display="grid" gap="6" gridTemplateColumns="minmax(0, 1fr)" width="full">
       {lines && (
@@ -62,30 +68,18 @@ export function PlatesPlan({ parts, unmeasured = [], printSpec, printer }: Plate
           )}
         </Box>
       )}
-      {done !== undefined && (
-        <Box maxWidth="measure">
-          <Progress label={texts.packing} done={done} />
-        </Box>
-      )}
-      {answer && session && (
+      {!last && refusal && <Text role="alert">{texts.refused}</Text>}
+      {last && session ? (
         <PlanSections
-          answer={answer}
-          parts={parts}
+          answer={last.answer}
+          question={last.question}
           unmeasured={unmeasured}
-          printSpec={printSpec}
           printer={printer}
-          layout={layout}
           currency={session.workshop.currency}
-          layoutFields={<LayoutFields layout={layout} onChange={setLayout} refusal={refusal} />}
+          settings={settings}
         />
-      )}
-      {!answer && refusal && (
-        <>
-          <Text color="stop" role="alert">
-            {texts.refused}
-          </Text>
-          <LayoutFields layout={layout} onChange={setLayout} refusal={refusal} />
-        </>
+      ) : (
+        settings
       )}
     </Box>
   );

@@ -73,7 +73,6 @@ export function PrinterFilaments({ form, currency }: PrinterFilamentsProps) {
           />
           <TextField
             label={texts.pricePerKg(currency)}
-            isOptional={false}
             inputMode="decimal"
             error={priceFault(at)}
             {...register(`materials.${at}.price`)}
