@@ -99,7 +99,7 @@ export const printerCardFields = z.object({
   materials: z
     .array(cardMaterial)
     .min(1, 'Write down at least one filament.')
-    .max(mostCardMaterials, `Ten filaments are the most a card holds.`)
+    .max(mostCardMaterials, 'Ten filaments are the most a card holds.')
     .refine(hasEachOnce, 'One filament stands here twice; keep one of the two.'),
   /** What a gauge part told; null until one was printed. */
   clearance: z.enum(clearances).nullable(),
