@@ -29,7 +29,9 @@ import { PriceLicence } from './kits/price-licence.js';
 import { ShopKits } from './kits/shop-kits.js';
 import { WorkshopKitsController } from './kits/workshop-kits.controller.js';
 import { WorkshopKits } from './kits/workshop-kits.js';
+import { KitsTooBig } from './print/kits-too-big.js';
 import { PrintPlans } from './print/print-plans.js';
+import { PrintSheets } from './print/print-sheets.js';
 import { BuildRelease } from './release/build-release.js';
 import { RequestRelease } from './release/request-release.js';
 import { TidyDraft } from './release/tidy-draft.js';
@@ -87,6 +89,8 @@ import { StartRevision } from './revisions/start-revision.js';
     CatalogueReader,
     CatalogueWaiting,
     PrintPlans,
+    PrintSheets,
+    KitsTooBig,
   ],
   // The measuring room writes what it finds through the records.
   exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, MeshComparisons, PrintPlans],
