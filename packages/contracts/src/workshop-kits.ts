@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { variantClearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { licence, licenceKinds, revisionState } from './kits.js';
 import {
@@ -24,6 +25,7 @@ import {
   revisionBody,
   fileOffer,
   offerAnswer,
+  variantBody,
 } from './workshop-revisions.js';
 
 export const revisionSummary = z.object({
@@ -81,6 +83,7 @@ export const licenceBody = z.object({
 
 const inKit = idParams('kitId');
 const inRevision = idParams('revisionId');
+const ofVariant = idParams('revisionId', 'partId').extend({ clearance: variantClearance });
 
 export const workshopKitEndpoints = {
   'GET /workshop/kits': endpoint({
@@ -186,6 +189,19 @@ export const workshopKitEndpoints = {
     params: idParams('revisionId', 'partId'),
     response: null,
     status: 204,
+  }),
+  'PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
+    access: 'revisions:write',
+    summary: 'Give a part of a draft another clearance: a mesh of the draft becomes its file',
+    params: ofVariant,
+    body: variantBody,
+    response: part,
+  }),
+  'DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
+    access: 'revisions:write',
+    summary: 'Take a clearance of a part, with its file, out of a draft',
+    params: ofVariant,
+    response: part,
   }),
   'GET /workshop/revisions/:revisionId/comparison': endpoint({
     access: 'kits:read',

@@ -6,6 +6,7 @@ import { CatalogueWaiting } from './catalogue-waiting.js';
 import { Comparison } from './comparison/comparison.js';
 import { Differences } from './comparison/differences.js';
 import { AttachFile } from './files/attach-file.js';
+import { MeshPlaces } from './files/mesh-places.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
 import { OfferFiles } from './files/offer-files.js';
@@ -26,9 +27,13 @@ import { WorkshopKitsController } from './kits/workshop-kits.controller.js';
 import { WorkshopKits } from './kits/workshop-kits.js';
 import { PrintPlans } from './print/print-plans.js';
 import { BuildRelease } from './release/build-release.js';
+import { ReleasedBundles } from './release/released-bundles.js';
 import { RequestRelease } from './release/request-release.js';
+import { RevisionBundle } from './release/revision-bundle.model.js';
 import { ChangeRevision } from './revisions/change-revision.js';
+import { ChangeVariants } from './revisions/change-variants.js';
 import { Drafts } from './revisions/drafts.js';
+import { PartVariant } from './revisions/part-variant.model.js';
 import { Part } from './revisions/part.model.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { RevisionView } from './revisions/revision-view.js';
@@ -39,7 +44,17 @@ import { StartRevision } from './revisions/start-revision.js';
 @Module({
   imports: [
     AccountsModule,
-    SequelizeModule.forFeature([Kit, Licence, Revision, Part, RevisionFile, StoredFile, MeasurementRecord]),
+    SequelizeModule.forFeature([
+      Kit,
+      Licence,
+      Revision,
+      RevisionBundle,
+      Part,
+      PartVariant,
+      RevisionFile,
+      StoredFile,
+      MeasurementRecord,
+    ]),
   ],
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
   providers: [
@@ -54,14 +69,17 @@ import { StartRevision } from './revisions/start-revision.js';
     RevisionView,
     StartRevision,
     ChangeRevision,
+    ChangeVariants,
     Differences,
     Comparison,
     Gates,
     MeasurementRecords,
+    MeshPlaces,
     AttachFile,
     OfferFiles,
     UploadFile,
     RemoveFile,
+    ReleasedBundles,
     RequestRelease,
     BuildRelease,
     CatalogueReader,

@@ -7,6 +7,7 @@ import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as partVariants from './migrations/0010-part-variants.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -16,6 +17,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
+  '0010-part-variants': partVariants,
 };
 
 /**

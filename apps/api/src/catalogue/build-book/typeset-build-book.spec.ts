@@ -21,6 +21,8 @@ const part = (code: string, over: Partial<BookPart> = {}): BookPart => ({
   code,
   name: `Pipe of ${code}`,
   quantity: 1,
+  isGauge: false,
+  clearances: [],
   orientation: 'may-turn',
   sizeMm: [14, 14, 160.25],
   volumeCm3: 9.4,

@@ -1,14 +1,15 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer, Comparison } from '@windchest/contracts';
+import type { Answer, Clearance, Comparison } from '@windchest/contracts';
 import { Op, type Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
 import type { ReprintMark } from '../revisions/part.model.js';
+import { hasVariants } from '../revisions/part-files.js';
 import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
 import { Revision } from '../revisions/revision.model.js';
-import { comparePart } from './compare-parts.js';
+import { asPrinted, compareVariants } from './compare-variants.js';
 
 /** One part on a person's reprint list. */
 export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
@@ -16,6 +17,7 @@ export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
 interface Pair {
   readonly row: Comparison['rows'][number];
   readonly after: PartOfRevision | null;
+  readonly hasChoice: boolean;
 }
 type Verdict = { mark: ReprintMark; reasons: string[] };
 
@@ -29,18 +31,24 @@ export class Differences {
   ) {}
 
   async rows(from: Revision | null, to: Revision, tx?: Tx): Promise<Comparison['rows']> {
-    return (await this.pairs(from, to, tx)).map(({ row }) => row);
+    return (await this.pairs(from, to, { tx })).map(({ row }) => row);
   }
 
-  async reprintRows(fromRevisionId: string | null, toRevisionId: string): Promise<ReprintRow[]> {
+  /** @param clearance what the reader prints: only that of a part counts; null counts all of them */
+  async reprintRows(
+    fromRevisionId: string | null,
+    toRevisionId: string,
+    clearance: Clearance | null = null,
+  ): Promise<ReprintRow[]> {
     const to = await this.revisions.findByPk(toRevisionId);
     if (!to) return [];
     const from = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
-    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to);
-    return pairs.map(({ row, after }) => ({
+    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to, { clearance });
+    return pairs.map(({ row, after, hasChoice }) => ({
       code: row.code,
       name: row.name,
       quantity: row.quantity,
+      clearance: hasChoice ? clearance : null,
       difference: row.difference,
       mark: row.mark,
       reason: row.reason,
@@ -66,16 +74,22 @@ export class Differences {
     });
   }
 
-  private async pairs(from: Revision | null, to: Revision, tx?: Tx): Promise<Pair[]> {
+  private async pairs(
+    from: Revision | null,
+    to: Revision,
+    { tx, clearance = null }: { tx?: Tx | undefined; clearance?: Clearance | null },
+  ): Promise<Pair[]> {
     const before = new Map(
       from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
     );
     const after = await this.contents.partsOf(to.id, tx);
     const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
-    const now = after.map((part) => pairOf(before.get(part.code) ?? null, part, verdicts.get(part.code)));
+    const now = after.map((part) =>
+      pairOf(before.get(part.code) ?? null, part, verdicts.get(part.code), clearance),
+    );
     const codes = new Set(after.map((part) => part.code));
     const gone = [...before.values()].filter((part) => !codes.has(part.code));
-    return [...now, ...gone.map((part) => pairOf(part, null, undefined))];
+    return [...now, ...gone.map((part) => pairOf(part, null, undefined, clearance))];
   }
 
   /**
@@ -115,14 +129,17 @@ export class Differences {
 
 const pairOf = (
   before: PartOfRevision | null,
-  after: PartOfRevision | null,
+  whole: PartOfRevision | null,
   verdict: Verdict | undefined,
+  clearance: Clearance | null,
 ): Pair => {
-  const part = (after ?? before)!;
-  const difference = comparePart(before, after);
+  const part = (whole ?? before)!;
+  const after = asPrinted(whole, clearance);
+  const difference = compareVariants(asPrinted(before, clearance), after);
   const counts = difference.difference === 'changed' && verdict !== undefined;
   return {
     after,
+    hasChoice: whole !== null && hasVariants(whole),
     row: {
       code: part.code,
       name: part.name,

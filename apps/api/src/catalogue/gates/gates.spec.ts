@@ -51,6 +51,8 @@ const part = (over: Partial<PartOfRevision> = {}): PartOfRevision => ({
   voice: null,
   mark: null,
   reason: '',
+  isGauge: false,
+  variants: [],
   file: file(),
   ...over,
 });

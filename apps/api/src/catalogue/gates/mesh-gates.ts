@@ -1,3 +1,4 @@
+import { eachMesh } from '../revisions/part-files.js';
 import type { PartOfRevision } from '../revisions/revision-contents.js';
 import type { BuildVolume } from '../revisions/revision.model.js';
 import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
@@ -5,11 +6,12 @@ import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
 export const partsMeasured: GateCheck = ({ parts }) => {
   const name = 'parts-measured';
   if (parts.length === 0) return open(name, 'There are no parts yet. Upload their meshes.');
+  const meshes = eachMesh(parts);
   const faults = [
     ...saying(parts, (part) => !part.file, 'has no file', 'have no file'),
-    ...parts.flatMap(({ file }) => (file?.measuring === 'refused' && file.fault ? [file.fault] : [])),
+    ...meshes.flatMap(({ file }) => (file?.measuring === 'refused' && file.fault ? [file.fault] : [])),
     ...saying(
-      parts,
+      meshes,
       ({ file }) => file?.measuring === 'waiting' || file?.measuring === 'measuring',
       'is being measured',
       'are being measured',
@@ -22,7 +24,7 @@ export const partsMeasured: GateCheck = ({ parts }) => {
 
 export const watertight: GateCheck = ({ parts }) => {
   const name = 'watertight';
-  const leaks = parts.flatMap(({ code, file }) => {
+  const leaks = eachMesh(parts).flatMap(({ code, file }) => {
     if (!file?.measured || file.measured.watertight) return [];
     const { openEdges, nonManifoldEdges, windingFaults, shells } = file.measured;
     const faults = [
@@ -52,7 +54,7 @@ export const watertight: GateCheck = ({ parts }) => {
 export const fitsBuildVolume: GateCheck = ({ parts, revision: { buildVolume } }) => {
   const name = 'fits-build-volume';
   const volume = `${buildVolume.xMm} × ${buildVolume.yMm} × ${buildVolume.zMm} mm`;
-  const tooBig = parts.flatMap((part) => {
+  const tooBig = eachMesh(parts).flatMap((part) => {
     const excess = part.file?.measured && excessOf(part, part.file.measured.sizeMm, buildVolume);
     return excess ? [`${part.code} is ${excess}`] : [];
   });
@@ -93,7 +95,7 @@ const excessOf = (
 };
 
 const allMeasured = (parts: readonly PartOfRevision[]): boolean =>
-  parts.length > 0 && parts.every((part) => part.file?.measured);
+  parts.length > 0 && eachMesh(parts).every((part) => part.file?.measured);
 
 const saying = (
   parts: readonly PartOfRevision[],
