@@ -6,10 +6,18 @@ interface RevisionAnswer {
   id: string;
   label: string;
   state: string;
-  parts: { id: string; code: string; file: { measuring: string; fault: string | null } | null }[];
+  parts: {
+    id: string;
+    code: string;
+    file: { measuring: string } | null;
+    variants: { file: { measuring: string } }[];
+  }[];
   gates: { name: string; state: string; reason: string }[];
   release: { state: string; fault: string | null };
 }
+
+const isMeasured = (file: { measuring: string } | null): boolean =>
+  file?.measuring === 'measured' || file?.measuring === 'refused';
 
 /** Drafts a kit with its licences. @returns its id */
 export const draftKit = async (maker: ShopBrowser, kit: DemoKit): Promise<string> => {
@@ -56,15 +64,26 @@ export const releaseRevision = async (
   });
 
   const { parts } = await maker.get<RevisionAnswer>(at);
-  for (const { code, name, quantity, orientation, printSpec: own, voice } of revision.parts) {
+  for (const { code, name, quantity, orientation, printSpec: own, voice, isGauge } of revision.parts) {
     const part = parts.find((one) => one.code === code);
     if (!part) throw new Error(`${kit.name} ${revision.label}: no uploaded file became part ${code}.`);
-    await maker.put(`${at}/parts/${part.id}`, { code, name, quantity, orientation, printSpec: own, voice });
+    await maker.put(`${at}/parts/${part.id}`, {
+      code,
+      name,
+      quantity,
+      orientation,
+      printSpec: own,
+      voice,
+      isGauge,
+    });
   }
   await waitFor(
     'The measuring',
     () => maker.get<RevisionAnswer>(at),
-    (one) => one.parts.every(({ file }) => file?.measuring === 'measured' || file?.measuring === 'refused'),
+    (one) =>
+      one.parts.every(({ file, variants }) =>
+        [file, ...variants.map((variant) => variant.file)].every((each) => isMeasured(each)),
+      ),
   );
   if (!isFirst)
     for (const { code, mark, reason } of revision.marks)
