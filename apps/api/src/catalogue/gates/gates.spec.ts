@@ -84,6 +84,7 @@ const changed = (over: Partial<Comparison['rows'][number]>): Comparison['rows'][
   areaChangePercent: null,
   mark: null,
   reason: '',
+  variants: [],
   ...over,
 });
 

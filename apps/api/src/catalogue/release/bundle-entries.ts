@@ -12,7 +12,7 @@ import { bundledFiles } from './bundled-files.js';
 
 /** Everything a bundle holds, sorted by path; SHA256SUMS last, for it lists all others. */
 export const bundleEntries = (source: BundleSource): BundleEntry[] => {
-  const { kit, revision, licences, parts } = source;
+  const { kit, revision, licences } = source;
   const isLeftOut = leftOut(source);
   const files = source.files.filter((file) => !isLeftOut.has(file.id));
   const stored = files.map((file): BundleEntry => ({

@@ -10,6 +10,8 @@ const part = (code: string, x: number, y: number, z: number, rest: Partial<KitPa
   volumeMm3: 1,
   areaMm2: 1,
   printSpec: null,
+  isGauge: false,
+  clearances: [],
   drawing: null,
   ...rest,
 });

@@ -7,6 +7,7 @@ import { useEndpoint } from '../../lib/use-endpoint.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
 import { ComparisonLine } from './comparison-line.js';
+import { meshesOf } from './part-meshes.js';
 import { partRows } from './part-rows.js';
 import { PartsTable } from './parts-table.js';
 import { useRevision } from './revision-context.js';
@@ -17,7 +18,13 @@ const PartDialog = lazy(async () => ({ default: (await import('./part-dialog.js'
 /** What a comparison was made from; when it changes, the comparison is old. */
 const fingerprint = (parts: readonly Part[]) =>
   parts
-    .map((part) => `${part.code} ${part.quantity} ${part.file?.sha256} ${part.file?.measuring}`)
+    .map((part) =>
+      [
+        part.code,
+        part.quantity,
+        ...meshesOf(part).map(({ clearance, file }) => `${clearance} ${file.sha256} ${file.measuring}`),
+      ].join(' '),
+    )
     .sort()
     .join();
 

@@ -6,7 +6,7 @@ import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
 import { MarkField } from './mark-field.js';
-import { MeasuredCell } from './measured-cell.js';
+import { MeasuredMeshes } from './measured-meshes.js';
 import type { Difference, PartRow } from './part-rows.js';
 
 const signs: Record<Difference, SignName> = {
@@ -37,6 +37,11 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
         <Box color="ink.soft" fontWeight="normal">
           {row.name}
         </Box>
+        {part?.isGauge && (
+          <Box fontSize="sm" fontWeight="normal">
+            {partsTexts.gauge}
+          </Box>
+        )}
         {onEdit && part && (
           <Button
             look="plain"
@@ -103,7 +108,7 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
       key: 'measured',
       header: partsTexts.columns.measured,
       width: '22%',
-      cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
+      cell: (row) => row.part && <MeasuredMeshes part={row.part} />,
     },
     {
       key: 'since',

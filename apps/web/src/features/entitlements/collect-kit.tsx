@@ -1,5 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import type { Collection } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { collectTexts } from '../../config/texts/shelf.js';
 import { bytes, date } from '../../lib/format.js';
 import { Button } from '../../ui/button.js';
@@ -30,6 +31,32 @@ const Checksum = ({ kit }: { kit: CollectKitProps['kit'] }) => (
         look="plain"
         aria-description={collectTexts.of(kit.name)}
       />
+    </Box>
+  </Box>
+);
+
+/** For those who know which clearance their printer needs. */
+const OneClearance = ({ kit, download }: Required<CollectKitProps>) => (
+  <Box marginTop="4">
+    <Text look="small" isSoft>
+      {collectTexts.clearances}
+    </Text>
+    <Box display="flex" flexWrap="wrap" gap="2" marginTop="2">
+      {kit.newest.bundles.map(({ clearance, bytes: size }) => {
+        const wish = { kitSlug: kit.slug, revisionId: kit.newest.id, clearance };
+        return (
+          <Button
+            key={clearance}
+            look="outline"
+            size="sm"
+            onClick={() => void download.start(wish)}
+            isBusy={download.isStarting(wish)}
+            busyWords={collectTexts.getting}
+          >
+            {collectTexts.getOne(clearanceTexts.named(clearance))} · {bytes(size)}
+          </Button>
+        );
+      })}
     </Box>
   </Box>
 );
@@ -84,6 +111,7 @@ export function CollectKit({ kit, download }: CollectKitProps) {
             </Button>
           )}
         </Box>
+        {download && kit.newest.bundles.length > 0 && <OneClearance kit={kit} download={download} />}
         {download && <Checksum kit={kit} />}
       </Box>
     </KitColour>
