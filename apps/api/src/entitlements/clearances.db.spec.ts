@@ -244,7 +244,7 @@ describe('a kit with a part in three clearances', () => {
       {
         code: 'J-01',
         difference: 'changed',
-        whatDiffers: expect.stringMatching(/^\+: −0\.20 mm width/),
+        whatDiffers: expect.stringMatching(/^in \+: −0\.20 mm width/),
         variants: [
           { clearance: 'minus', difference: 'same' },
           { clearance: 'zero', difference: 'same' },

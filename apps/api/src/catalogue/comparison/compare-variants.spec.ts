@@ -51,7 +51,7 @@ describe('a part that comes in several clearances, between two revisions', () =>
   it('is compared clearance by clearance, the zero too, and is as different as the strongest of them', () => {
     expect(compareVariants(before, part(10, { minus: 10.2, plus: 9.6 }))).toEqual({
       difference: 'changed',
-      whatDiffers: '+: −0.20 mm width',
+      whatDiffers: 'in +: −0.20 mm width',
       sizeChangeMm: { x: expect.closeTo(-0.2, 10), y: 0, z: 0 },
       volumeChangePercent: 0,
       areaChangePercent: 0,
@@ -70,7 +70,7 @@ describe('a part that comes in several clearances, between two revisions', () =>
       whatDiffers: '+0.10 mm width, 1 → 2 pieces',
     });
     expect(compareVariants(before, part(10.1, { minus: 10.3, plus: 9.8 })).whatDiffers).toBe(
-      '− and 0: +0.10 mm width',
+      'in − and 0: +0.10 mm width',
     );
     expect(compareVariants(before, part(10, { minus: 10.2, plus: 9.8 }, 2))).toMatchObject({
       difference: 'same',
@@ -81,12 +81,15 @@ describe('a part that comes in several clearances, between two revisions', () =>
   it('stays the same where clearances only come or go, for nothing that was printed is wrong', () => {
     expect(compareVariants(part(10), before)).toMatchObject({
       difference: 'same',
-      whatDiffers: '− and +: a new clearance',
+      whatDiffers: 'in − and +: a new clearance',
       variants: [{ difference: 'new' }, { difference: 'same' }, { difference: 'new' }],
     });
+    expect(compareVariants(part(9.9), before).whatDiffers).toBe(
+      'in 0: +0.10 mm width; in − and +: a new clearance',
+    );
     expect(compareVariants(before, part(10, { minus: 10.2 }))).toMatchObject({
       difference: 'same',
-      whatDiffers: '+: no longer in this clearance',
+      whatDiffers: 'in +: no longer in this clearance',
       variants: [{ difference: 'same' }, { difference: 'same' }, { difference: 'dropped' }],
     });
   });

@@ -65,15 +65,19 @@ const cameOrWent = ({ difference }: PartDifference): Partial<PartDifference> => 
   return difference === 'dropped' ? { whatDiffers: 'no longer in this clearance' } : {};
 };
 
-/** Clearances that differ alike are told together: `− and 0: −0.20 mm width; +: a new clearance`. */
+/** Clearances that differ alike are told together, what changed first: `in 0: −0.20 mm width; in − and +: a new clearance`. */
 const wordsOf = (variants: readonly Variant[]): string => {
+  const isChanged = ({ difference }: Variant): boolean => strength.includes(difference);
   const alike = new Map<string, string[]>();
-  for (const { clearance, whatDiffers } of variants)
+  for (const { clearance, whatDiffers } of [
+    ...variants.filter(isChanged),
+    ...variants.filter((one) => !isChanged(one)),
+  ])
     if (whatDiffers !== '')
       alike.set(whatDiffers, [...(alike.get(whatDiffers) ?? []), clearanceSigns[clearance]]);
   const [only, ...others] = alike;
   if (only && others.length === 0 && only[1].length === variants.length) return only[0];
-  return [...alike].map(([words, signs]) => `${allOf(signs)}: ${words}`).join('; ');
+  return [...alike].map(([words, signs]) => `in ${allOf(signs)}: ${words}`).join('; ');
 };
 
 const allOf = (signs: readonly string[]): string =>

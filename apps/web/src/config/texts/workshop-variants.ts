@@ -1,7 +1,7 @@
 /** Parts in several clearances, as the workshop makes them. */
 export const variantTexts = {
   heading: 'Clearances',
-  hint: 'The file of the part is 0. Where some printers make it too tight or too loose, give it a file with less of a gap (−, tighter) or with more (+, looser). Kept as soon as it is sent.',
+  hint: 'The file of the part is 0. Where some printers make it too tight or too loose, give it a file with less of a gap (−, tighter) or with more (+, looser). A file dropped on the page with (minus) or (plus) behind its code does the same.',
   send: 'Send a file',
   replace: 'Send another',
   forClearance: (named: string) => `for ${named}`,
