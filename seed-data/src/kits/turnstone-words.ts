@@ -78,7 +78,7 @@ Screw the saddles to the slanted end, [[S-67]] at the long side, with M3 × 12 s
 
 ## 4. Pins
 
-Drive a zither pin into each hole with the wrench, clockwise, until 20 mm of it stand out. It should turn with some force and stay where you leave it. A string turns its pin with no more than 0.04 N·m. If a pin is loose, line its hole with a strip of paper.
+Drive a zither pin into each hole with the wrench, clockwise, until about 22 mm of it stand out. It should turn with some force and stay where you leave it. A string turns its pin with no more than 0.04 N·m. If a pin is loose, line its hole with a strip of paper.
 
 ## 5. String
 

@@ -1,6 +1,6 @@
 import { clearanceSigns, type Clearance } from '@windchest/contracts';
 import type { BookPart } from './build-book.js';
-import { mm, page, textWidth } from './page-geometry.js';
+import { contentWidth, mm, page, textWidth } from './page-geometry.js';
 import type { Sheet } from './sheet.js';
 import { writeTable } from './table.js';
 import { styles } from './text-styles.js';
@@ -20,7 +20,7 @@ export const writeClearances = (sheet: Sheet, parts: readonly BookPart[]): void 
   const gauge = parts.find(({ isGauge }) => isGauge);
   const place = { x: page.left, width: textWidth };
   const paragraphs = [
-    'Printers differ in the gap they leave between two parts. The parts below come in several clearances: − with less of a gap, which fits tighter, 0 as drawn, and + with more of it, which fits looser.',
+    'Printers differ in the gap they leave between two parts. The parts below come in several clearances: − with less of a gap, which fits tighter, 0 as drawn, and + with more of it, which fits looser. A bundle of one clearance holds the files of that one alone.',
     gauge
       ? `Print the gauge first, ${gauge.code} ${gauge.name}. See which of its clearances fits, then print all parts below in that one.`
       : 'Print one of them in 0 first. Where it is too tight take +, where it is too loose take −, and print all parts below in that one.',
@@ -35,7 +35,7 @@ export const writeClearances = (sheet: Sheet, parts: readonly BookPart[]): void 
       { title: 'Code', width: mm(16) },
       { title: 'Part', width: mm(42) },
       { title: 'Clearance', width: mm(26) },
-      { title: 'File', width: textWidth - mm(84) },
+      { title: 'File', width: contentWidth - mm(84) },
     ],
     rows: parts.flatMap(({ code, name, clearances }) =>
       clearances.map(({ clearance, fileName }) => [

@@ -174,6 +174,7 @@ export const collectTexts = {
   getting: 'Making ready …',
   getFailed: 'The download did not start',
   checksum: 'SHA-256',
+  checksumOfAll: 'SHA-256 of the bundle with all clearances',
   copyChecksum: 'Copy the SHA-256',
   of: (kit: string) => `of ${kit}`,
 

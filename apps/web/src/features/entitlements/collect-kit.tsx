@@ -20,7 +20,9 @@ export interface CollectKitProps {
 /** The hash in the same letters as checksum tools print it, and the verb that copies it. */
 const Checksum = ({ kit }: { kit: CollectKitProps['kit'] }) => (
   <Box marginTop="4" fontSize="sm">
-    <Box color="ink.soft">{collectTexts.checksum}</Box>
+    <Box color="ink.soft">
+      {kit.newest.bundles.length > 0 ? collectTexts.checksumOfAll : collectTexts.checksum}
+    </Box>
     <Box display="flex" flexWrap="wrap" columnGap="4" rowGap="2" alignItems="center">
       <Box as="code" fontFamily="mono" fontSize="0.9em" overflowWrap="anywhere" minWidth="0" flex="0 1 auto">
         {kit.newest.bundleSha256}
