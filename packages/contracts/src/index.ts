@@ -4,6 +4,7 @@ export * from './permissions.js';
 export * from './problems.js';
 export * from './values.js';
 export * from './voices.js';
+export * from './clearances.js';
 export * from './session.js';
 export * from './kits.js';
 export * from './printers.js';

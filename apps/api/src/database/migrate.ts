@@ -9,6 +9,7 @@ import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
 import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
+import * as partVariants from './migrations/0010-part-variants.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -20,6 +21,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0007-print-profiles': printProfiles,
   '0008-mesh-comparisons': meshComparisons,
   '0009-printer-cards': printerCards,
+  '0010-part-variants': partVariants,
 };
 
 /**

@@ -9,8 +9,10 @@ const part = (code: string): Part => ({
   orientation: 'as-exported',
   printSpec: null,
   voice: null,
+  isGauge: false,
   file: null,
   drawings: null,
+  variants: [],
 });
 const row = (code: string, difference: Comparison['rows'][number]['difference']) => ({
   code,
@@ -24,6 +26,7 @@ const row = (code: string, difference: Comparison['rows'][number]['difference'])
   deviation: null,
   mark: null,
   reason: '',
+  variants: [],
 });
 const withEarlier = { id: 'x', label: 'Mk 1.0' };
 

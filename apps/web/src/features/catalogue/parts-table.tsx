@@ -9,7 +9,7 @@ import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
 import { MarkField } from './mark-field.js';
-import { MeasuredCell } from './measured-cell.js';
+import { MeasuredMeshes } from './measured-meshes.js';
 import type { Difference, PartRow } from './part-rows.js';
 import { useComparedWith } from './use-compared-with.js';
 
@@ -41,6 +41,11 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
         <Box color="ink.soft" fontWeight="normal">
           {row.name}
         </Box>
+        {part?.isGauge && (
+          <Box fontSize="sm" fontWeight="normal">
+            {partsTexts.gauge}
+          </Box>
+        )}
         {onEdit && part && (
           <Button
             look="plain"
@@ -137,7 +142,7 @@ export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }:
       key: 'measured',
       header: partsTexts.columns.measured,
       width: '20%',
-      cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
+      cell: (row) => row.part && <MeasuredMeshes part={row.part} />,
     },
     {
       key: 'since',
