@@ -31,6 +31,7 @@ th, td { text-align: left; vertical-align: top; padding: .5rem 0; border-bottom:
 th + td, th + th, td + td { padding-left: .75rem; }
 .amount { text-align: right; white-space: nowrap; }
 thead th { color: var(--soft); font-size: .875rem; }
+.below { margin-top: 1rem; }
 tfoot th, tfoot td { font-weight: 650; font-size: 1.125rem; border-bottom: 0; padding-top: .75rem; }
 .field { margin: 0 0 1.25rem; }
 label, legend { display: block; font-weight: 600; margin: 0 0 .25rem; padding: 0; }
