@@ -27,7 +27,7 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
       <Button look="outline" onClick={() => setIsAsking(true)}>
         {texts.resend}
       </Button>
-      <Box role="status" marginTop="2" fontSize="sm" color="ink.soft">
+      <Box role="status" marginTop={isSent ? '2' : undefined} fontSize="sm" color="ink.soft">
         {isSent && texts.resendDone}
       </Box>
       <ConfirmDialog
