@@ -16,7 +16,8 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
   const [isSent, setIsSent] = useState(false);
   const { run, fault } = useAction('POST /workshop/orders/:orderId/link', ['GET /workshop/orders/:orderId']);
   if (!may('links:resend')) return null;
-  if (order.state !== 'paid')
+  if (order.paidAt && order.lines.every((line) => line.right === 'ended')) return null;
+  if (!order.paidAt)
     return (
       <Text look="small" isSoft>
         {texts.onlyPaid}
