@@ -5,6 +5,7 @@ import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
 import { refundEndpoints } from './refunds.js';
+import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
@@ -13,6 +14,7 @@ import { workshopSalesEndpoints } from './workshop-sales.js';
 export const endpoints = {
   ...sessionEndpoints,
   ...kitEndpoints,
+  ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
   ...refundEndpoints,
