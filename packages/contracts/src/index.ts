@@ -10,6 +10,7 @@ export * from './kits.js';
 export * from './printers.js';
 export * from './basket.js';
 export * from './delivery.js';
+export * from './refunds.js';
 export * from './workshop-kits.js';
 export * from './workshop-revisions.js';
 export * from './workshop-sales.js';

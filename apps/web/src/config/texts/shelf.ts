@@ -15,6 +15,8 @@ export const shelfTexts = {
   empty: 'No kits on your shelf yet',
   emptyDetail: 'What you buy stands here, with every later revision and what to reprint for it.',
   seeKits: 'See the kits',
+  resting: (kits: string) =>
+    `Downloads of ${kits} rest while the payment is in dispute. When the bank has decided for the workshop, they go on.`,
 
   hold: 'You hold',
   nothingYet: 'Nothing yet',
@@ -160,10 +162,13 @@ export const collectTexts = {
       title: 'A newer link has replaced this one',
       detail: 'Look for it in your mail, or have another mailed to the address of the order.',
     },
+    suspended: {
+      title: 'Downloads of this order rest',
+      detail: 'Its payment is in dispute. When the bank has decided for the workshop, they go on.',
+    },
     ended: {
       title: 'This order gives no files any more',
-      detail:
-        'It was refunded, or its payment is in dispute. Answer the mail of your order if you think this is wrong.',
+      detail: 'What was paid for it went back. Answer the mail of your order if you think this is wrong.',
     },
   } satisfies Record<Collection['state'], { title: string; detail: string }>,
 
@@ -185,6 +190,7 @@ export const collectTexts = {
     expired: 'expired',
     'used-up': 'used up',
     replaced: 'replaced',
+    suspended: 'resting',
     ended: 'ended',
   } satisfies Record<Collection['state'], string>,
   usesLeft: 'Downloads left',
