@@ -28,6 +28,8 @@ export const problemStatus = {
   'coupon-is-used-up': 409,
   'coupon-does-not-apply': 409,
   'coupon-buyer-limit': 409,
+  'coupon-for-supporters': 409,
+  'coupon-basket-too-small': 409,
   'coupon-refused': 422,
   'basket-is-empty': 422,
   'basket-has-gone': 409,

@@ -1,12 +1,13 @@
 import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
-import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as printProfiles from './migrations/0007-print-profiles.js';
+import * as couponRules from './migrations/0013-coupon-rules.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -16,6 +17,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
+  '0013-coupon-rules': couponRules,
 };
 
 /**

@@ -8,7 +8,7 @@ import type { OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
 
 export type OrderQuery = Handled<'GET /workshop/orders'>['query'];
-export type OrderFilter = Pick<OrderQuery, 'state' | 'flagged' | 'search'>;
+export type OrderFilter = Pick<OrderQuery, 'state' | 'flagged' | 'couponId' | 'search'>;
 type Row = Answer<'GET /workshop/orders'>['items'][number];
 
 const PORTION = 500;
@@ -81,10 +81,11 @@ const below = (last: Order): WhereOptions => ({
   ],
 });
 
-const whereOf = ({ state, flagged, search }: OrderFilter): WhereOptions => {
+const whereOf = ({ state, flagged, couponId, search }: OrderFilter): WhereOptions => {
   const like = `%${search ?? ''}%`;
   return {
     ...(state ? { state } : {}),
+    ...(couponId ? { couponId } : {}),
     ...(flagged ? { [Op.and]: literal('JSON_LENGTH(flags) > 0') } : {}),
     ...(search
       ? {
