@@ -88,6 +88,7 @@ export const orderRow = z.object({
   email: z.string(),
   country: countryCode,
   kits: z.array(z.string()),
+  discount: money,
   total: money,
   couponCode: z.string().nullable(),
   receiptNumber: z.string().nullable(),

@@ -106,6 +106,7 @@ const toRow = (order: Order, kits: string[]): Row => ({
   email: order.email,
   country: locate(order.declaredCountry, order.paymentCountry, order.cardCountry).country,
   kits,
+  discount: { minor: order.discountMinor, currency: order.currency },
   total: { minor: order.totalMinor, currency: order.currency },
   couponCode: order.couponCode,
   receiptNumber: order.receiptNumber,
