@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
 import { differenceKind } from './workshop-revisions.js';
-import { email, filamentColour, id, moment, secret, sha256, slug, slugParams } from './values.js';
+import { email, filamentColour, id, moment, pageOf, secret, sha256, slug, slugParams } from './values.js';
 
 /** What may be fetched: the whole bundle of a revision, or one document of it. */
 export const grantBody = z.object({ kitSlug: slug, revisionId: id, file: sha256.optional() });
@@ -67,7 +67,8 @@ export const collection = z.object({
   orderNumber: z.string(),
   expiresAt: moment,
   usesLeft: z.int(),
-  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'ended']),
+  /** `suspended`: the payment is in dispute. `ended`: no right of the order is left. */
+  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'suspended', 'ended']),
   kits: z.array(
     z.object({
       slug,
@@ -92,7 +93,10 @@ export const deliveryEndpoints = {
     access: 'signed-in',
     summary: 'One’s own kits',
     query: z.object({ page: z.coerce.number().int().min(1).default(1) }),
-    response: z.object({ items: z.array(shelfItem), page: z.int(), size: z.int(), total: z.int() }),
+    response: pageOf(shelfItem).extend({
+      /** Kits whose downloads rest while a payment is in dispute, by name. */
+      resting: z.array(z.string()),
+    }),
   }),
   'GET /shelf/:slug': endpoint({
     access: 'signed-in',

@@ -4,6 +4,7 @@ import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpo
 import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
+import { refundEndpoints } from './refunds.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
@@ -14,6 +15,7 @@ export const endpoints = {
   ...kitEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
+  ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
   ...peopleEndpoints,

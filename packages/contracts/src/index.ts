@@ -8,6 +8,7 @@ export * from './session.js';
 export * from './kits.js';
 export * from './basket.js';
 export * from './delivery.js';
+export * from './refunds.js';
 export * from './workshop-kits.js';
 export * from './workshop-revisions.js';
 export * from './workshop-sales.js';

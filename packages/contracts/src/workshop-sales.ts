@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { buyerOrder, couponCode, orderState } from './basket.js';
 import { endpoint } from './endpoint.js';
+import { dispute, workshopRefund } from './refunds.js';
 import { countryCode, id, idParams, line, minor, moment, money, pageOf, pageQuery } from './values.js';
 
 /** What a coupon takes off: an exact fraction (a third is 1/3, 15 % is 15/100) or a fixed amount. */
@@ -90,6 +91,7 @@ export const orderRow = z.object({
   kits: z.array(z.string()),
   discount: money,
   total: money,
+  refunded: money,
   couponCode: z.string().nullable(),
   receiptNumber: z.string().nullable(),
   flags: z.array(z.string()),
@@ -97,10 +99,15 @@ export const orderRow = z.object({
   paidAt: moment.nullable(),
 });
 
+/** Orders of which money went back, also in part; orders whose payment was ever in dispute. */
+export const moneyBack = z.enum(['refunded', 'disputed']);
+
 export const orderHistoryEntry = z.object({ at: moment, what: z.string(), detail: z.string() });
 export const workshopOrder = buyerOrder.extend({
   country: countryCode,
   flags: z.array(z.string()),
+  refunds: z.array(workshopRefund),
+  disputes: z.array(dispute),
   paymentSessionId: z.string().nullable(),
   paymentIntentId: z.string().nullable(),
   consentText: z.string(),
@@ -136,6 +143,7 @@ export const holder = z.object({
 
 const orderFilters = {
   state: orderState.optional(),
+  moneyBack: moneyBack.optional(),
   /** `1`: only those that staff should look at. */
   flagged: z.enum(['1']).optional(),
   couponId: id.optional(),

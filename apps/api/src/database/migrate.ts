@@ -7,6 +7,7 @@ import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
 import * as printProfiles from './migrations/0007-print-profiles.js';
+import * as refunds from './migrations/0011-refunds.js';
 import * as couponRules from './migrations/0013-coupon-rules.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
@@ -17,6 +18,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
+  '0011-refunds': refunds,
   '0013-coupon-rules': couponRules,
 };
 

@@ -49,6 +49,8 @@ export class ServeFile {
       );
     const download = await this.downloads.findByPk(downloadId);
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
+    if (entitlement?.state === 'suspended')
+      throw new Refusal('forbidden', 'Downloads of this kit rest while its payment is in dispute.');
     if (!download || entitlement?.state !== 'active')
       throw new Refusal('forbidden', 'The right to this file has ended.');
     const file = download.isBundle

@@ -6,7 +6,7 @@ import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
-import { notFound } from '../http/refusal.js';
+import { notFound, Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { toShelfRevision } from './shelf-revision.js';
@@ -46,12 +46,27 @@ export class Shelf {
       page,
       size: PAGE_SIZE,
       total: Number(rows[0]?.total ?? 0),
+      resting: await this.restingOf(person),
     };
+  }
+
+  /** Names of kits of which all that is left rests while a payment is in dispute. */
+  private async restingOf(person: SignedIn, kitId?: string): Promise<string[]> {
+    const rows = await selectRows<{ kitId: string }>(
+      this.database,
+      `SELECT kit_id AS kitId FROM entitlements
+       WHERE person_id = :personId AND state <> 'ended' AND (:kitId IS NULL OR kit_id = :kitId)
+       GROUP BY kit_id HAVING SUM(state = 'active') = 0`,
+      { personId: person.id, kitId: kitId ?? null },
+    );
+    return (await this.catalogue.kitsByIds(rows.map((row) => row.kitId))).map((kit) => kit.name);
   }
 
   async read(person: SignedIn, slug: string): Promise<Answer<'GET /shelf/:slug'>> {
     const kit = await this.catalogue.kitBySlug(slug);
     const item = kit && (await this.itemOf(person, kit.id));
+    if (kit && !item && (await this.restingOf(person, kit.id)).length > 0)
+      throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
     const [revisions, parts, documents, cautions, downloads, [licence]] = await Promise.all([

@@ -1,6 +1,7 @@
 import { Router, text, type Request, type Response } from 'express';
 import qs from 'qs';
 import { setTimeout as wait } from 'node:timers/promises';
+import { balanceTransactionRoutes } from '../resources/balance-transactions.js';
 import { chargeRoutes } from '../resources/charges.js';
 import { checkoutSessionRoutes } from '../resources/checkout-session-routes.js';
 import { customerRoutes } from '../resources/customers.js';
@@ -11,8 +12,8 @@ import { paymentMethodRoutes } from '../resources/payment-methods.js';
 import { priceRoutes } from '../resources/prices.js';
 import { productRoutes } from '../resources/products.js';
 import { refundRoutes } from '../resources/refunds.js';
-import { sweepExpired } from '../payments/session-flow.js';
 import type { StandIn } from '../stand-in.js';
+import { catchUp } from '../time/catch-up.js';
 import type { ApiRoute } from './api-route.js';
 import { checkApiKey } from './authentication.js';
 import { ApiError, unknownRoute } from './errors.js';
@@ -30,6 +31,7 @@ const routes: ApiRoute[] = [
   ...chargeRoutes,
   ...refundRoutes,
   ...disputeRoutes,
+  ...balanceTransactionRoutes,
   ...eventRoutes,
 ];
 
@@ -108,7 +110,7 @@ async function run(
   { requestId, key }: { requestId: string; key: string | null },
 ): Promise<Answer> {
   if (standIn.settings.latencyMs > 0) await wait(standIn.settings.latencyMs);
-  sweepExpired(standIn);
+  catchUp(standIn);
   const source = route.method === 'post' ? body : (request.originalUrl.split('?')[1] ?? '');
   const fields = new Fields(qs.parse(source, { depth: 10, arrayLimit: 1000, parameterLimit: 5000 }));
   const id = typeof request.params.id === 'string' ? request.params.id : '';

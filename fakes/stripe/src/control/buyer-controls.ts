@@ -1,7 +1,8 @@
 import type Stripe from 'stripe';
 import { badParameter } from '../api/errors.js';
 import type { Fields } from '../api/fields.js';
-import { genericDecline, readCard, type Card } from '../payments/cards.js';
+import { genericDecline, secondStep, succeeds } from '../payments/card-traits.js';
+import { readCard, type Card } from '../payments/cards.js';
 import { answerSecondStep, paySession } from '../payments/session-flow.js';
 import type { StandIn } from '../stand-in.js';
 
@@ -40,11 +41,11 @@ export function payWithoutBrowser(
 function bend(card: Card, outcome: (typeof outcomes)[number] | null, country: string | null): Card {
   const behaviour =
     outcome === 'succeed'
-      ? ({ kind: 'succeeds' } as const)
+      ? succeeds
       : outcome === 'decline'
         ? genericDecline
         : outcome === null
           ? card.behaviour
-          : ({ kind: 'second-step' } as const);
+          : secondStep;
   return { ...card, behaviour, country: country?.toUpperCase() ?? card.country };
 }

@@ -1,14 +1,9 @@
 import { Router, urlencoded, type Request, type Response } from 'express';
 import type Stripe from 'stripe';
 import { readCard } from '../payments/cards.js';
-import {
-  answerSecondStep,
-  detailOf,
-  paySession,
-  sweepExpired,
-  type PayResult,
-} from '../payments/session-flow.js';
+import { answerSecondStep, detailOf, paySession, type PayResult } from '../payments/session-flow.js';
 import type { StandIn } from '../stand-in.js';
+import { catchUp } from '../time/catch-up.js';
 import { expiredView, paidView, secondStepView, unknownView } from './end-views.js';
 import { emptyForm, readForm, valuesFrom, type Faults, type FormValues } from './payment-form.js';
 import { paymentView } from './payment-view.js';
@@ -27,7 +22,7 @@ export function pageRouter(standIn: StandIn): Router {
       'referrer-policy': 'no-referrer',
       'x-content-type-options': 'nosniff',
     });
-    sweepExpired(standIn);
+    catchUp(standIn);
     next();
   });
   router.get('/pay/page.css', (_request, response) => {

@@ -60,7 +60,8 @@ export function chargeOnce(
   const intent = intentOf(standIn, session);
   const paymentMethod = standIn.state.paymentMethods.find(String(intent.payment_method));
   if (!paymentMethod) throw new Error(`The payment intent ${intent.id} has lost its card.`);
-  const decline = card.behaviour.kind === 'declined' ? card.behaviour : null;
+  const end = card.behaviour.kind === 'second-step' ? card.behaviour.then : card.behaviour;
+  const decline = end.kind === 'declined' ? end : null;
   intent.customer = session.customer;
   intent.next_action = null;
   const charge = createCharge(standIn, { intent, paymentMethod, card, buyer, decline, isAuthenticated });
@@ -70,6 +71,7 @@ export function chargeOnce(
     intent.amount_received = intent.amount;
     emit(standIn, 'charge.succeeded', charge, null);
     emit(standIn, 'payment_intent.succeeded', intent, null);
+    if (card.dispute) standIn.state.disputePlans.add({ id: charge.id, ...card.dispute });
     return null;
   }
   emit(standIn, 'charge.failed', charge, null);

@@ -105,13 +105,3 @@ export function expireSession(standIn: StandIn, session: Stripe.Checkout.Session
   if (intent && intent.status !== 'canceled') cancelIntent(standIn, intent, 'expired', cause);
   emit(standIn, 'checkout.session.expired', session, cause);
 }
-
-/** Ends what has run out. */
-export function sweepExpired(standIn: StandIn): void {
-  const now = standIn.clock.nowSeconds();
-  const due = standIn.state.sessions
-    .oldestFirst()
-    .filter((session) => session.status === 'open' && session.expires_at <= now);
-  for (const session of due) expireSession(standIn, session, null);
-  if (due.length > 0) standIn.save();
-}

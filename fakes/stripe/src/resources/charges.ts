@@ -2,10 +2,12 @@ import type Stripe from 'stripe';
 import type { ApiCall, ApiRoute } from '../api/api-route.js';
 import { existing } from '../api/existing.js';
 import { createdFilter, pageOf, pageParameters } from '../api/pages.js';
-import type { Card, CardBehaviour } from '../payments/cards.js';
+import type { Declined } from '../payments/card-traits.js';
+import type { Card } from '../payments/cards.js';
 import type { StandIn } from '../stand-in.js';
 import type { Buyer } from '../state/state.js';
 import { addressIn } from './addresses.js';
+import { book, chargeFeeMinor } from './balance-transactions.js';
 import { cardExpiry } from './payment-methods.js';
 
 export type ChargeDetails = {
@@ -13,7 +15,7 @@ export type ChargeDetails = {
   paymentMethod: Stripe.PaymentMethod;
   card: Card;
   buyer: Buyer;
-  decline: Extract<CardBehaviour, { kind: 'declined' }> | null;
+  decline: Declined | null;
   isAuthenticated: boolean;
 };
 
@@ -30,7 +32,6 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     application: null,
     application_fee: null,
     application_fee_amount: null,
-    // The stand-in keeps no balance: there is nothing to settle and no fee to show.
     balance_transaction: null,
     billing_details: {
       address: addressIn(buyer.country),
@@ -72,6 +73,17 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     transfer_data: null,
     transfer_group: null,
   };
+  if (hasSucceeded) {
+    charge.balance_transaction = book(standIn, {
+      type: 'charge',
+      category: 'charge',
+      amount: charge.amount,
+      fee: chargeFeeMinor(charge.amount),
+      currency: charge.currency,
+      source: charge.id,
+      description: charge.description,
+    }).id;
+  }
   return standIn.state.charges.add(charge);
 }
 

@@ -40,6 +40,8 @@ export function createPaymentMethod(standIn: StandIn, card: Card, buyer: Buyer):
     metadata: {},
     type: 'card',
   };
+  const { number, country, later, refunds } = card;
+  standIn.state.savedCards.add({ id: method.id, number, country, later, refunds });
   return standIn.state.paymentMethods.add(method);
 }
 

@@ -14,6 +14,7 @@ const collections = {
   re: 'refunds',
   dp: 'disputes',
   evt: 'events',
+  txn: 'balanceTransactions',
 } as const satisfies Record<string, keyof State>;
 
 /** Any object by its id, for `expand`. */

@@ -1,3 +1,5 @@
+import type { CardBehaviour, CardTraits } from '../payments/card-traits.js';
+
 /** What an idempotency key stands for. Kept for 24 hours. */
 export type IdempotentAnswer = {
   /** The key itself. */
@@ -53,3 +55,24 @@ export type WebhookSwitches = {
 export function calmWeather(): WebhookSwitches {
   return { delayMs: 0, duplicates: 0, shuffle: false, lose: 0, paused: false };
 }
+
+/** The card behind a payment method: what the API does not show of it. */
+export type SavedCard = {
+  /** The payment method's id. */
+  id: string;
+  number: string;
+  country: string;
+  later: CardBehaviour;
+  refunds: CardTraits['refunds'];
+};
+
+/** What a bank will say of a refund, and when. */
+export type RefundPlan = { id: string; atMs: number; outcome: 'succeeded' | 'failed' };
+
+/** The dispute that a charge with such a card brings. */
+export type DisputePlan = {
+  /** The charge's id. */
+  id: string;
+  reason: string;
+  isInquiry: boolean;
+};

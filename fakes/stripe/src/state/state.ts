@@ -4,7 +4,10 @@ import {
   calmWeather,
   type Delivery,
   type DeliveryAttempt,
+  type DisputePlan,
   type IdempotentAnswer,
+  type RefundPlan,
+  type SavedCard,
   type WebhookSwitches,
 } from './records.js';
 
@@ -35,6 +38,12 @@ export type State = {
   charges: Collection<Stripe.Charge>;
   refunds: Collection<Stripe.Refund>;
   disputes: Collection<Stripe.Dispute>;
+  balanceTransactions: Collection<Stripe.BalanceTransaction>;
+  savedCards: Collection<SavedCard>;
+  refundPlans: Collection<RefundPlan>;
+  disputePlans: Collection<DisputePlan>;
+  /** Refunds wait until they are settled by the control API. */
+  areRefundsHeld: boolean;
   events: Collection<Stripe.Event>;
   idempotentAnswers: Collection<IdempotentAnswer>;
   deliveries: Collection<Delivery>;
@@ -60,6 +69,11 @@ export function openState(seed: number, saved: Partial<Record<keyof State, unkno
     charges: collection('charges'),
     refunds: collection('refunds'),
     disputes: collection('disputes'),
+    balanceTransactions: collection('balanceTransactions'),
+    savedCards: collection('savedCards'),
+    refundPlans: collection('refundPlans'),
+    disputePlans: collection('disputePlans'),
+    areRefundsHeld: (saved.areRefundsHeld as boolean | undefined) ?? false,
     events: collection('events'),
     // A call that was under way when the process ended will never be answered: its key is free again.
     idempotentAnswers: new Collection(

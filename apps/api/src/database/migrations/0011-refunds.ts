@@ -49,7 +49,7 @@ export const up = inOrder(
     id ${ID} NOT NULL PRIMARY KEY,
     order_id ${ID} NOT NULL,
     service_id ${SERVICE_ID} NOT NULL,
-    state ENUM('inquiry','open','won','lost') NOT NULL,
+    state ENUM('inquiry','open','won','lost','closed') NOT NULL,
     amount_minor INT UNSIGNED NOT NULL,
     currency CHAR(3) CHARACTER SET ascii NOT NULL,
     reason VARCHAR(80) NOT NULL DEFAULT '',
@@ -66,7 +66,7 @@ export const up = inOrder(
     id BIGINT UNSIGNED NOT NULL AUTO_INCREMENT PRIMARY KEY,
     dispute_id ${ID} NOT NULL,
     at DATETIME(6) NOT NULL,
-    state ENUM('inquiry','open','won','lost') NOT NULL,
+    state ENUM('inquiry','open','won','lost','closed') NOT NULL,
     detail VARCHAR(300) NOT NULL DEFAULT '',
     KEY dispute_history_dispute (dispute_id, id),
     CONSTRAINT dispute_history_dispute_fk FOREIGN KEY (dispute_id) REFERENCES disputes (id)

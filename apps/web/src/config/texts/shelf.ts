@@ -150,10 +150,13 @@ export const collectTexts = {
       title: 'A newer link has replaced this one',
       detail: 'Look for it in your mail, or have another mailed to the address of the order.',
     },
+    suspended: {
+      title: 'Downloads of this order rest',
+      detail: 'Its payment is in dispute. When the bank has decided for the workshop, they go on.',
+    },
     ended: {
       title: 'This order gives no files any more',
-      detail:
-        'It was refunded, or its payment is in dispute. Answer the mail of your order if you think this is wrong.',
+      detail: 'What was paid for it went back. Answer the mail of your order if you think this is wrong.',
     },
   } satisfies Record<Collection['state'], { title: string; detail: string }>,
 
@@ -171,6 +174,7 @@ export const collectTexts = {
     expired: 'expired',
     'used-up': 'used up',
     replaced: 'replaced',
+    suspended: 'resting',
     ended: 'ended',
   } satisfies Record<Collection['state'], string>,
   usesLeft: 'Downloads left',
