@@ -3,6 +3,7 @@ export * from './endpoints.js';
 export * from './permissions.js';
 export * from './problems.js';
 export * from './values.js';
+export * from './tax.js';
 export * from './voices.js';
 export * from './session.js';
 export * from './kits.js';

@@ -33,6 +33,8 @@ export const problemStatus = {
   'coupon-refused': 422,
   'basket-is-empty': 422,
   'basket-has-gone': 409,
+  'gift-refused': 422,
+  'quarter-is-closed': 409,
   'order-is-final': 409,
   'refund-refused': 422,
   'payment-unreachable': 502,

@@ -1,5 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { CouponOff } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { InjectConfig, type Config } from '../config/config.js';
@@ -55,12 +56,16 @@ export class Coupons {
     private readonly clock: Clock,
   ) {}
 
-  /** @throws Refusal with a `coupon-…` code where the coupon cannot be used for these lines by this buyer */
+  /**
+   * @param lines at the shop's own prices
+   * @param options `chargedOf`: what a price of the shop comes to for this buyer, less a tax that is not charged
+   * @throws Refusal with a `coupon-…` code where the coupon cannot be used for these lines by this buyer
+   */
   async priceFor(
     code: string,
     lines: readonly { readonly kitId: string; readonly priceMinor: number }[],
     buyer: CouponBuyer,
-    tx?: Tx,
+    { chargedOf, tx }: { chargedOf: (priceMinor: number) => number; tx: Tx | undefined },
   ): Promise<PricedCoupon> {
     const coupon = await this.coupons.findOne({ where: { code }, transaction: tx ?? null });
     if (!coupon) throw refusalOf(unknownCoupon(code));
@@ -83,7 +88,12 @@ export class Coupons {
       label: coupon.label,
       cap: coupon.cap,
       left: placesLeft(coupon),
-      discounts: discountsOf(coupon.off, lines, isForKit, this.config.WORKSHOP_CURRENCY),
+      discounts: discountsOf(
+        chargedOff(coupon.off, chargedOf),
+        lines.map(({ kitId, priceMinor }) => ({ kitId, priceMinor: chargedOf(priceMinor) })),
+        isForKit,
+        this.config.WORKSHOP_CURRENCY,
+      ),
     };
   }
 
@@ -144,6 +154,10 @@ export class Coupons {
     );
   }
 }
+
+/** An amount contains the same tax as the prices it is taken off. */
+const chargedOff = (off: CouponOff, chargedOf: (minor: number) => number): CouponOff =>
+  off.kind === 'amount' ? { kind: 'amount', minor: chargedOf(off.minor) } : off;
 
 const refusalOf = ({ code, detail }: CouponFault): Refusal => new Refusal(code, detail);
 const sumOf = (lines: readonly { readonly priceMinor: number }[]): number =>

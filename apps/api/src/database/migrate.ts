@@ -9,6 +9,8 @@ import * as taxRates from './migrations/0006-tax-rates.js';
 import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as refunds from './migrations/0011-refunds.js';
 import * as couponRules from './migrations/0013-coupon-rules.js';
+import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
+import * as gifts from './migrations/0015-gifts.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -20,6 +22,8 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0007-print-profiles': printProfiles,
   '0011-refunds': refunds,
   '0013-coupon-rules': couponRules,
+  '0014-tax-and-business': taxAndBusiness,
+  '0015-gifts': gifts,
 };
 
 /**

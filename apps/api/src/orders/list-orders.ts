@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Handled } from '@windchest/contracts';
 import { literal, Op, type Order as Sorting, type WhereOptions } from 'sequelize';
-import { locate } from './location-evidence.js';
+import { placeOf } from './order-country.js';
 import { OrderLine } from './order-line.model.js';
 import type { OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
@@ -109,7 +109,7 @@ const toRow = (order: Order, kits: string[]): Row => ({
   number: order.number,
   state: order.state,
   email: order.email,
-  country: locate(order.declaredCountry, order.paymentCountry, order.cardCountry).country,
+  country: placeOf(order).country,
   kits,
   discount: { minor: order.discountMinor, currency: order.currency },
   total: { minor: order.totalMinor, currency: order.currency },

@@ -49,6 +49,7 @@ import { RefundView } from './refunds/refund-view.js';
 import { Refund } from './refunds/refund.model.js';
 import { RefundsController } from './refunds/refunds.controller.js';
 import { SettleRefund } from './refunds/settle-refund.js';
+import { SalesTax } from './sales-tax.js';
 import { SettleOrder } from './settle-order.js';
 import { ShowOrder } from './show-order.js';
 import { TakeOffFlag } from './take-off-flag.js';
@@ -62,6 +63,7 @@ import { TakeOffFlag } from './take-off-flag.js';
   ],
   controllers: [CheckoutController, OrdersController, RefundsController],
   providers: [
+    SalesTax,
     PriceBasket,
     QuoteBasket,
     PlaceOrder,
@@ -112,6 +114,7 @@ import { TakeOffFlag } from './take-off-flag.js';
     OrdersReader,
     OrderHistory,
     OrderFacts,
+    SalesTax,
   ],
 })
 export class OrdersModule {}
