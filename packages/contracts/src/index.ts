@@ -13,5 +13,7 @@ export * from './refunds.js';
 export * from './workshop-kits.js';
 export * from './workshop-revisions.js';
 export * from './workshop-sales.js';
+export * from './ledger.js';
+export * from './tax-records.js';
 export * from './people.js';
 export * from './health.js';

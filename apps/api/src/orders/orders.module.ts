@@ -53,6 +53,8 @@ import { SalesTax } from './sales-tax.js';
 import { SettleOrder } from './settle-order.js';
 import { ShowOrder } from './show-order.js';
 import { TakeOffFlag } from './take-off-flag.js';
+import { UnclearOrders } from './unclear-orders.js';
+import { YearRecords } from './year-records.js';
 
 @Module({
   imports: [
@@ -99,6 +101,8 @@ import { TakeOffFlag } from './take-off-flag.js';
     CarryOutRefund,
     DecideRights,
     TakeOffFlag,
+    UnclearOrders,
+    YearRecords,
     DisputeSteps,
     DisputeMail,
     DisputeView,
@@ -115,6 +119,8 @@ import { TakeOffFlag } from './take-off-flag.js';
     OrderHistory,
     OrderFacts,
     SalesTax,
+    UnclearOrders,
+    YearRecords,
   ],
 })
 export class OrdersModule {}

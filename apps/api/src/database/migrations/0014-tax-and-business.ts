@@ -32,6 +32,7 @@ export const up = inOrder(
   `CREATE TABLE tax_settlements (
     receipt_id ${ID} NOT NULL PRIMARY KEY,
     country ${COUNTRY} NOT NULL,
+    tax_treatment ${TREATMENT} NOT NULL,
     rate_percent VARCHAR(8) CHARACTER SET ascii NOT NULL,
     net_minor INT UNSIGNED NOT NULL,
     tax_minor INT UNSIGNED NOT NULL,
