@@ -39,6 +39,7 @@ export async function startFakeStripe(options: FakeStripeOptions = {}): Promise<
 
   const sweep = setInterval(() => catchUp(standIn), standIn.settings.sweepMs);
   sweep.unref();
+  standIn.onWake = () => catchUp(standIn);
 
   return {
     url,
@@ -51,6 +52,7 @@ export async function startFakeStripe(options: FakeStripeOptions = {}): Promise<
     },
     stop: async () => {
       clearInterval(sweep);
+      standIn.stop();
       const closed = new Promise((resolve) => server.close(resolve));
       server.closeAllConnections();
       await Promise.all([closed, sender.stop()]);

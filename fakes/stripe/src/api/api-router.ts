@@ -7,11 +7,16 @@ import { checkoutSessionRoutes } from '../resources/checkout-session-routes.js';
 import { customerRoutes } from '../resources/customers.js';
 import { disputeRoutes } from '../resources/disputes.js';
 import { apiVersion, eventRoutes } from '../resources/events.js';
+import { invoicePaymentRoutes } from '../resources/invoice-payments.js';
+import { invoiceRoutes } from '../resources/invoices.js';
 import { paymentIntentRoutes } from '../resources/payment-intents.js';
 import { paymentMethodRoutes } from '../resources/payment-methods.js';
 import { priceRoutes } from '../resources/prices.js';
 import { productRoutes } from '../resources/products.js';
 import { refundRoutes } from '../resources/refunds.js';
+import { setupIntentRoutes } from '../resources/setup-intents.js';
+import { subscriptionRoutes } from '../resources/subscriptions.js';
+import { testClockRoutes } from '../resources/test-clocks.js';
 import type { StandIn } from '../stand-in.js';
 import { catchUp } from '../time/catch-up.js';
 import type { ApiRoute } from './api-route.js';
@@ -32,6 +37,11 @@ const routes: ApiRoute[] = [
   ...refundRoutes,
   ...disputeRoutes,
   ...balanceTransactionRoutes,
+  ...subscriptionRoutes,
+  ...invoiceRoutes,
+  ...invoicePaymentRoutes,
+  ...setupIntentRoutes,
+  ...testClockRoutes,
   ...eventRoutes,
 ];
 
@@ -73,7 +83,7 @@ async function handle(
   if (key) response.set('idempotency-key', key);
   const answer = await answerTo(standIn, route, request, response, { requestId, key });
   // Reading changes nothing; what ran out meanwhile was saved by the sweep.
-  if (route.method === 'post') standIn.save();
+  if (route.method !== 'get') standIn.save();
   response.status(answer.status).type('application/json').send(answer.json);
 }
 

@@ -7,6 +7,7 @@ import { catchUp } from '../time/catch-up.js';
 import type { WebhookSender } from '../webhooks/webhook-sender.js';
 import { payWithoutBrowser } from './buyer-controls.js';
 import { moveClock, summary } from './clock-and-summary.js';
+import { billingControls } from './billing-controls.js';
 import type { Control } from './control.js';
 import { fieldsOf } from './control-fields.js';
 import { moneyBackControls } from './money-back-controls.js';
@@ -51,7 +52,8 @@ export function controlRouter(standIn: StandIn, sender: WebhookSender): Router {
     expireSession(standIn, session, null);
     return session;
   });
-  for (const [path, control] of Object.entries(moneyBackControls(standIn))) post(path, control);
+  const switches = { ...moneyBackControls(standIn), ...billingControls(standIn) };
+  for (const [path, control] of Object.entries(switches)) post(path, control);
   post('/events/:id/redeliver', (fields, id) => {
     fields.allowOnly('times');
     const times = fields.integer('times') ?? 1;

@@ -22,8 +22,7 @@ export function moneyBackControls(standIn: StandIn): Record<string, Control> {
     },
     '/refunds/:id/settle': (fields, id) => {
       fields.allowOnly('status', 'failure_reason');
-      const status = fields.oneOf('status', ['succeeded', 'failed']);
-      if (!status) throw fields.missing('status');
+      const status = fields.requiredOneOf('status', ['succeeded', 'failed']);
       const failure = fields.oneOf('failure_reason', refundFailures) ?? undefined;
       return settleRefund(standIn, refundOf(id), status, failure);
     },
@@ -32,9 +31,7 @@ export function moneyBackControls(standIn: StandIn): Record<string, Control> {
     '/disputes/:id/escalate': (_fields, id) => escalateDispute(standIn, disputeOf(id)),
     '/disputes/:id/close': (fields, id) => {
       fields.allowOnly('status');
-      const status = fields.oneOf('status', disputeEnds);
-      if (!status) throw fields.missing('status');
-      return closeDispute(standIn, disputeOf(id), status, null);
+      return closeDispute(standIn, disputeOf(id), fields.requiredOneOf('status', disputeEnds), null);
     },
   };
 }

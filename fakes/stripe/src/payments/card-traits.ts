@@ -1,7 +1,7 @@
 export type Succeeds = { kind: 'succeeds' };
 export type Declined = { kind: 'declined'; code: string; declineCode: string | null; message: string };
-/** The bank asks the buyer first; `then` is what happens once it is approved. */
-export type SecondStep = { kind: 'second-step'; then: Succeeds | Declined };
+/** The bank asks the buyer first; `afterwards` is what happens once it is approved. */
+export type SecondStep = { kind: 'second-step'; afterwards: Succeeds | Declined };
 /** What a test card does when it is charged. */
 export type CardBehaviour = Succeeds | Declined | SecondStep;
 
@@ -37,7 +37,7 @@ export const authenticationRequired = declined(
   'authentication_required',
   'Your card was declined. This transaction requires authentication.',
 );
-export const secondStep: SecondStep = { kind: 'second-step', then: succeeds };
+export const secondStep: SecondStep = { kind: 'second-step', afterwards: succeeds };
 
 type Given = Partial<CardTraits>;
 
@@ -60,7 +60,10 @@ const documented: Record<string, Given> = {
   // Wants to be authenticated each time.
   '4000002760003184': { behaviour: secondStep, later: authenticationRequired },
   '4000000000003220': { behaviour: secondStep, later: authenticationRequired },
-  '4000008260003178': { behaviour: { kind: 'second-step', then: insufficientFunds }, saving: secondStep },
+  '4000008260003178': {
+    behaviour: { kind: 'second-step', afterwards: insufficientFunds },
+    saving: secondStep,
+  },
   '4000000000007726': { refunds: 'late' },
   '4000000000005126': { refunds: 'bounce' },
   '4000000000000259': { dispute: { reason: 'fraudulent', isInquiry: false } },
@@ -81,7 +84,7 @@ export function cardTraits(number: string): CardTraits {
   return {
     behaviour,
     saving: given.saving ?? behaviour,
-    later: given.later ?? (behaviour.kind === 'second-step' ? behaviour.then : behaviour),
+    later: given.later ?? (behaviour.kind === 'second-step' ? behaviour.afterwards : behaviour),
     refunds: given.refunds ?? 'at-once',
     dispute: given.dispute ?? null,
   };

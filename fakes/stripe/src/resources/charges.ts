@@ -5,8 +5,6 @@ import { createdFilter, pageOf, pageParameters } from '../api/pages.js';
 import type { Declined } from '../payments/card-traits.js';
 import type { Card } from '../payments/cards.js';
 import type { StandIn } from '../stand-in.js';
-import type { Buyer } from '../state/state.js';
-import { addressIn } from './addresses.js';
 import { book, chargeFeeMinor } from './balance-transactions.js';
 import { cardExpiry } from './payment-methods.js';
 
@@ -14,14 +12,13 @@ export type ChargeDetails = {
   intent: Stripe.PaymentIntent;
   paymentMethod: Stripe.PaymentMethod;
   card: Card;
-  buyer: Buyer;
   decline: Declined | null;
   isAuthenticated: boolean;
 };
 
 /** Takes the money of a payment intent, or writes down that the card was declined. */
 export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.Charge {
-  const { intent, buyer, decline } = details;
+  const { intent, decline, paymentMethod } = details;
   const hasSucceeded = decline === null;
   const charge: Stripe.Charge = {
     id: standIn.newId('ch'),
@@ -33,13 +30,7 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     application_fee: null,
     application_fee_amount: null,
     balance_transaction: null,
-    billing_details: {
-      address: addressIn(buyer.country),
-      email: buyer.email,
-      name: buyer.name,
-      phone: null,
-      tax_id: null,
-    },
+    billing_details: structuredClone(paymentMethod.billing_details),
     calculated_statement_descriptor: null,
     captured: hasSucceeded,
     created: standIn.clock.nowSeconds(),
@@ -57,7 +48,7 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     outcome: outcomeOf(decline),
     paid: hasSucceeded,
     payment_intent: intent.id,
-    payment_method: details.paymentMethod.id,
+    payment_method: paymentMethod.id,
     payment_method_details: { type: 'card', card: cardDetails(standIn, details) },
     receipt_email: intent.receipt_email,
     receipt_number: null,

@@ -56,6 +56,11 @@ export function calmWeather(): WebhookSwitches {
   return { delayMs: 0, duplicates: 0, shuffle: false, lose: 0, paused: false };
 }
 
+/** What the buyer typed, kept while a second step waits for an answer. */
+export type Waiting = { cardNumber: string; cardCountry: string | null; buyer: Buyer };
+
+export type Buyer = { email: string; name: string | null; country: string };
+
 /** The card behind a payment method: what the API does not show of it. */
 export type SavedCard = {
   /** The payment method's id. */
@@ -76,3 +81,25 @@ export type DisputePlan = {
   reason: string;
   isInquiry: boolean;
 };
+
+/** The page where an invoice can be paid. */
+export type InvoicePage = {
+  /** The last part of the page's address: nobody guesses it. */
+  id: string;
+  invoiceId: string;
+  waiting: Waiting | null;
+};
+
+/** How the service collects, set through the control API. */
+export type BillingRules = {
+  /** Days between one failed attempt and the next. */
+  retryDays: number[];
+  /** What becomes of a subscription when all of them have failed. */
+  afterRetries: 'cancel' | 'mark-unpaid' | 'leave';
+  /** How long an invoice of a new period stays a draft. */
+  finalizeSeconds: number;
+};
+
+export function usualBilling(): BillingRules {
+  return { retryDays: [3, 5, 7], afterRetries: 'cancel', finalizeSeconds: 3600 };
+}

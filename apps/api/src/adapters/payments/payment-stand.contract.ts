@@ -3,17 +3,28 @@ import type { Payments } from './payments.js';
 import type { PaymentBalance } from './reconciliation.js';
 import type { Subscriptions } from './subscriptions.js';
 
+export interface PageVisit {
+  readonly country?: string;
+  readonly cardCountry?: string;
+  /** Whether the card fails now, or once it is charged again later. */
+  readonly fails?: 'now' | 'later';
+}
+
 /** What buyers, banks and time do at a payment service, for the contracts of this folder. */
 export interface PaymentHands {
   /** Pays, or gives a card, at a page as its visitor does. */
-  pay(pageId: string, options?: { card?: string; country?: string; cardCountry?: string }): Promise<void>;
+  pay(pageId: string, options?: PageVisit): Promise<void>;
   holdRefunds(): Promise<void>;
   settleRefund(refundId: string, outcome: 'succeeded' | 'failed'): Promise<void>;
   /** By somebody at the service, past the shop. */
   refundByHand(paymentIntentId: string, amountMinor: number): Promise<void>;
   openDispute(paymentIntentId: string, reason: string): Promise<string>;
   winDispute(disputeId: string): Promise<void>;
-  advance(seconds: number): Promise<void>;
+  /** Pays an invoice at its page. */
+  payInvoice(invoiceId: string, options?: PageVisit): Promise<void>;
+  /** The card that a customer's subscription is charged with works again. */
+  mendCard(customerId: string): Promise<void>;
+  advanceDays(days: number): Promise<void>;
 }
 
 export interface PaymentStand {
@@ -46,4 +57,31 @@ export const paidOrder = async (
   const { paymentIntentId } = await payments.session(session.id);
   if (!paymentIntentId) throw new Error('The page was not paid.');
   return { sessionId: session.id, paymentIntentId };
+};
+
+/** The page of a new pledge of somebody new. */
+export const openPledge = async ({ subscriptions }: PaymentStand, personId = crypto.randomUUID()) => {
+  const pledgeId = crypto.randomUUID();
+  const customerId = await subscriptions.ensureCustomer(`${personId}@mail.example`, 'Ada', personId);
+  const page = await subscriptions.openPledgePage({
+    pledgeId,
+    customerId,
+    planName: 'Reed supporter',
+    amountMinor: 500,
+    currency: 'EUR',
+    successUrl: 'http://shop.test/pledged',
+    cancelUrl: 'http://shop.test/plans',
+    expiresAt: new Date(Date.now() + 3600_000),
+    idempotencyKey: `pledge-${pledgeId}`,
+  });
+  return { pledgeId, customerId, page };
+};
+
+/** A pledge that runs. */
+export const runningPledge = async (stand: PaymentStand, visit: PageVisit = {}) => {
+  const { pledgeId, customerId, page } = await openPledge(stand);
+  await stand.hands.pay(page.id, visit);
+  const { subscriptionId } = await stand.subscriptions.findPage(page.id);
+  if (!subscriptionId) throw new Error('The pledge did not begin.');
+  return { pledgeId, customerId, subscriptionId, pageId: page.id };
 };

@@ -1,12 +1,14 @@
 import { startFakeStripe } from '@windchest/fake-stripe';
 import { readEnvironment } from '../../config/environment.js';
-import type { OpenStand } from './payment-stand.contract.js';
+import { invoicesContract } from './invoices.contract.js';
+import type { OpenStand, PageVisit } from './payment-stand.contract.js';
 import { paymentsContract } from './payments.contract.js';
 import { reconciliationContract } from './reconciliation.contract.js';
 import { StripeBalance } from './stripe-balance.js';
 import { StripeInvoices } from './stripe-invoices.js';
 import { StripePayments } from './stripe-payments.js';
 import { StripeSubscriptions } from './stripe-subscriptions.js';
+import { subscriptionsContract } from './subscriptions.contract.js';
 
 const open: OpenStand = async () => {
   const standIn = await startFakeStripe({ seed: 1 });
@@ -41,8 +43,8 @@ const open: OpenStand = async () => {
     invoices: new StripeInvoices(config),
     balance: new StripeBalance(config),
     hands: {
-      pay: async (pageId, options = {}) => {
-        await control(`/sessions/${pageId}/pay`, options);
+      pay: async (pageId, visit = {}) => {
+        await control(`/sessions/${pageId}/pay`, bodyOf(visit));
       },
       holdRefunds: async () => {
         await control('/refunds/hold', { held: true });
@@ -58,14 +60,32 @@ const open: OpenStand = async () => {
       winDispute: async (disputeId) => {
         await control(`/disputes/${disputeId}/close`, { status: 'won' });
       },
-      advance: async (advanceSeconds) => {
-        await control('/clock', { advanceSeconds });
+      payInvoice: async (invoiceId, visit = {}) => {
+        await control(`/invoices/${invoiceId}/pay`, bodyOf(visit));
+      },
+      mendCard: async (customerId) => {
+        const answer = await fetch(`${standIn.url}/v1/customers/${customerId}/payment_methods`, {
+          headers: { authorization: `Bearer ${standIn.apiKey}` },
+        });
+        const { data } = (await answer.json()) as { data: { id: string }[] };
+        for (const { id } of data) await control(`/payment-methods/${id}`, { later: 'succeed' });
+      },
+      advanceDays: async (days) => {
+        await control('/clock', { advanceSeconds: Math.round(days * 86_400) });
       },
     },
     close: () => standIn.stop(),
   };
 };
 
+const bodyOf = ({ fails, ...visit }: PageVisit): object => ({
+  ...visit,
+  ...(fails === 'now' ? { outcome: 'decline' } : {}),
+  ...(fails === 'later' ? { later: 'decline' } : {}),
+});
+
 const name = 'Stripe through its SDK';
 paymentsContract(name, open);
 reconciliationContract(name, open);
+subscriptionsContract(name, open);
+invoicesContract(name, open);
