@@ -109,6 +109,8 @@ export interface DemoPurchase {
   couponCode: string | null;
   /** The newest revision of the first kit when it was bought, and so the one the buyer holds. */
   boughtAt: string;
+  /** Of one line, a part that the bookkeeper gave back; the files stay. */
+  givenBack?: { kitSlug: string; minor: number; reason: string };
 }
 
 export interface DemoWorkshop {

@@ -235,6 +235,8 @@ describe('the mail of a new revision', () => {
 });
 
 describe('hostile input', () => {
+  /** Told apart by the code, never shown. */
+  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause'];
   const attack = `<img src=x onerror="alert('1')">&amp;`;
 
   it('is escaped wherever a message or the workshop carries it', () => {
@@ -251,7 +253,7 @@ describe('hostile input', () => {
       return Object.fromEntries(
         Object.entries(value).map(([key, item]: [string, unknown]) => [
           key,
-          key === 'template' || key === 'currency' ? item : poisoned(item),
+          WORDS_OF_OURS.includes(key) ? item : poisoned(item),
         ]),
       );
     };

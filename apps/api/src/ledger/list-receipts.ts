@@ -39,7 +39,7 @@ const WHERE = `
 const SORTS: Record<Query['sort'], string> = {
   number: 'number',
   issuedAt: 'issuedAt',
-  total: 'sign * totalMinor',
+  total: 'sign * CAST(totalMinor AS SIGNED)',
 };
 
 /** Receipts and credit notes in one list: a page of it for the screen, all of it for an export. */

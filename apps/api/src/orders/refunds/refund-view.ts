@@ -84,7 +84,7 @@ const toWorkshop = (refund: Refund, lines: readonly RefundLine[]): WorkshopRefun
         ? { id: refund.creditNoteId, number: refund.creditNoteNumber }
         : null,
     reason: refund.reason,
-    askedBy: refund.askedBy,
-    fault: refund.fault,
+    askedBy: refund.askedBy ?? null,
+    fault: refund.fault ?? null,
   };
 };

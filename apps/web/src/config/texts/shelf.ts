@@ -15,6 +15,8 @@ export const shelfTexts = {
   empty: 'No kits on your shelf yet',
   emptyDetail: 'What you buy stands here, with every later revision and what to reprint for it.',
   seeKits: 'See the kits',
+  resting: (kits: string) =>
+    `Downloads of ${kits} rest while the payment is in dispute. When the bank has decided for the workshop, they go on.`,
 
   hold: 'You hold',
   nothingYet: 'Nothing yet',
