@@ -16,7 +16,7 @@ export async function* selectPortions<Row extends { at: Date; id: string }>(
   do {
     const rows: Row[] = await selectRows<Row>(
       database,
-      `SELECT * FROM (${sql}) portion WHERE :afterAt IS NULL OR at > :afterAt OR (at = :afterAt AND id > :afterId)
+      `SELECT * FROM (${sql}) kept WHERE :afterAt IS NULL OR at > :afterAt OR (at = :afterAt AND id > :afterId)
        ORDER BY at, id LIMIT ${PORTION}`,
       { ...values, afterAt: last?.at ?? null, afterId: last?.id ?? '' },
     );

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { decimalText } from '@windchest/money';
-import { csvRecord } from './csv.js';
+import { csvRecord } from '../http/csv.js';
 import { ListReceipts, type ReceiptFilter } from './list-receipts.js';
 
 const HEAD = [

@@ -1,7 +1,7 @@
 import { Injectable } from '@nestjs/common';
 import type { Answer, Handled } from '@windchest/contracts';
 import { decimalText } from '@windchest/money';
-import { csvNumber, csvRecord } from '../csv.js';
+import { csvNumber, csvRecord } from '../../http/csv.js';
 import { Movements, type Movement, type MovementFilter, type MovementKind } from './movements.js';
 
 type Query = Handled<'GET /workshop/ledger/payments'>['query'];

@@ -4,7 +4,7 @@ import { decimalText } from '@windchest/money';
 import type { Sequelize } from 'sequelize';
 import { selectPortions } from '../../database/portions.js';
 import { YearRecords, type Span } from '../../orders/year-records.js';
-import { csvNumber, csvRecord, type CsvValue } from '../csv.js';
+import { csvNumber, csvRecord, type CsvValue } from '../../http/csv.js';
 import { ExportReceipts } from '../export-receipts.js';
 import { rateText } from '../rate-text.js';
 

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { decimalText } from '@windchest/money';
-import { csvNumber, csvRecord } from '../csv.js';
+import { csvNumber, csvRecord } from '../../http/csv.js';
 import type { Quarter } from './quarter-days.js';
 import { SummariseQuarter } from './summarise-quarter.js';
 
