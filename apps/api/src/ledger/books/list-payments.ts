@@ -9,8 +9,15 @@ type Row = Answer<'GET /workshop/ledger/payments'>['items'][number];
 
 const dayMs = 86_400_000;
 const HEAD = [
-  ...['kind', 'at', 'amount', 'currency', 'state', 'subject', 'email'],
-  ...['payment_reference', 'refund_or_dispute_reference'],
+  'kind',
+  'at',
+  'amount',
+  'currency',
+  'state',
+  'subject',
+  'email',
+  'payment_reference',
+  'refund_or_dispute_reference',
 ];
 
 /** What a filter of the page means of the books' kinds: money that comes back belongs to what took it. */

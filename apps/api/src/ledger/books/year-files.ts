@@ -1,23 +1,26 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection } from '@nestjs/sequelize';
-import { decimalText } from '@windchest/money';
 import type { Sequelize } from 'sequelize';
 import { selectPortions } from '../../database/portions.js';
+import { csvRecord } from '../../http/csv.js';
 import { YearRecords, type Span } from '../../orders/year-records.js';
-import { csvNumber, csvRecord, type CsvValue } from '../../http/csv.js';
 import { ExportReceipts } from '../export-receipts.js';
-import { rateText } from '../rate-text.js';
+import {
+  disputeColumns,
+  lineColumns,
+  orderColumns,
+  rateColumns,
+  refundColumns,
+  settledColumns,
+  type RateRow,
+  type SettledRow,
+  type YearColumn,
+} from './year-columns.js';
 
 export interface YearFile {
   readonly name: string;
-  readonly lines: AsyncIterable<string>;
+  readonly lines: AsyncIterable<string> | Iterable<string>;
 }
-
-type Row<Source> = Source extends AsyncGenerator<infer R> ? R : never;
-
-const moment = (at: Date | null): string | null => at?.toISOString() ?? null;
-const amounts = (currency: string, ...minors: number[]): CsvValue[] =>
-  minors.map((minor) => csvNumber(decimalText({ minor, currency })));
 
 /** What an export of a year holds: one CSV for each kind of record. */
 @Injectable()
@@ -31,15 +34,15 @@ export class YearFiles {
   of(year: number): YearFile[] {
     const span = spanOf(year);
     return [
-      { name: 'orders.csv', lines: csvLines(ORDERS, this.orders.orders(span), orderCells) },
-      { name: 'order-lines.csv', lines: csvLines(LINES, this.orders.lines(span), lineCells) },
+      { name: 'orders.csv', lines: csvLines(orderColumns, this.orders.orders(span)) },
+      { name: 'order-lines.csv', lines: csvLines(lineColumns, this.orders.lines(span)) },
       { name: 'receipts.csv', lines: this.receipts.lines({ kind: 'receipt', year }) },
       { name: 'credit-notes.csv', lines: this.receipts.lines({ kind: 'credit-note', year }) },
-      { name: 'refunds.csv', lines: csvLines(REFUNDS, this.orders.refunds(span), refundCells) },
-      { name: 'disputes.csv', lines: csvLines(DISPUTES, this.orders.disputes(span), disputeCells) },
-      { name: 'tax-rates.csv', lines: csvLines(RATES, this.rates(), rateCells) },
-      { name: 'settled-countries.csv', lines: csvLines(SETTLED, this.settlements(span), settledCells) },
-      { name: 'READ-ME.txt', lines: oneLine(readMe(year)) },
+      { name: 'refunds.csv', lines: csvLines(refundColumns, this.orders.refunds(span)) },
+      { name: 'disputes.csv', lines: csvLines(disputeColumns, this.orders.disputes(span)) },
+      { name: 'tax-rates.csv', lines: csvLines(rateColumns, this.rates()) },
+      { name: 'settled-countries.csv', lines: csvLines(settledColumns, this.settlements(span)) },
+      { name: 'READ-ME.txt', lines: [readMe(year)] },
     ];
   }
 
@@ -75,124 +78,13 @@ const spanOf = (year: number): Span => ({
   until: new Date(Date.UTC(year + 1, 0, 1)),
 });
 
-async function* csvLines<R>(
-  head: readonly string[],
-  rows: AsyncIterable<R>,
-  cells: (row: R) => CsvValue[],
+async function* csvLines<Row>(
+  columns: readonly YearColumn<Row>[],
+  rows: AsyncIterable<Row>,
 ): AsyncGenerator<string> {
-  yield csvRecord(head);
-  for await (const row of rows) yield csvRecord(cells(row));
+  yield csvRecord(columns.map(([head]) => head));
+  for await (const row of rows) yield csvRecord(columns.map(([, cell]) => cell(row)));
 }
-
-// eslint-disable-next-line @typescript-eslint/require-await
-async function* oneLine(text: string): AsyncGenerator<string> {
-  yield text;
-}
-
-const ORDERS = [
-  ...[
-    'number',
-    'state',
-    'placed_at',
-    'paid_at',
-    'email',
-    'declared_country',
-    'billing_country',
-    'card_country',
-  ],
-  ...[
-    'settled_country',
-    'tax_treatment',
-    'business',
-    'vat_number',
-    'is_gift',
-    'currency',
-    'subtotal',
-    'discount',
-  ],
-  ...['total', 'refunded', 'coupon', 'receipt', 'payment_reference'],
-];
-const orderCells = (row: Row<ReturnType<YearRecords['orders']>>): CsvValue[] => [
-  ...[row.number, row.state, moment(row.at), moment(row.paidAt), row.email],
-  ...[row.declaredCountry, row.billingCountry, row.cardCountry, row.settledCountry],
-  ...[row.treatment, row.businessName, row.vatNumber, row.isGift ? 'yes' : 'no', row.currency],
-  ...amounts(row.currency, row.subtotalMinor, row.discountMinor, row.totalMinor, row.refundedMinor),
-  ...[row.couponCode, row.receiptNumber, row.paymentIntentId],
-];
-
-const LINES = [
-  ...['order', 'line', 'kit', 'revision', 'licence', 'currency', 'price', 'discount', 'total', 'refunded'],
-];
-const lineCells = (row: Row<ReturnType<YearRecords['lines']>>): CsvValue[] => [
-  ...[row.order, row.position + 1, row.kit, row.revision, row.licence, row.currency],
-  ...amounts(row.currency, row.priceMinor, row.discountMinor, row.totalMinor, row.refundedMinor),
-];
-
-const REFUNDS = [
-  ...['order', 'asked_at', 'settled_at', 'origin', 'state', 'currency', 'amount', 'reason', 'asked_by'],
-  ...['credit_note', 'payment_reference'],
-];
-const refundCells = (row: Row<ReturnType<YearRecords['refunds']>>): CsvValue[] => [
-  ...[row.order, moment(row.at), moment(row.settledAt), row.origin, row.state, row.currency],
-  ...amounts(row.currency, row.amountMinor),
-  ...[row.reason, row.askedBy, row.creditNote, row.serviceId],
-];
-
-const DISPUTES = [
-  ...['order', 'opened_at', 'closed_at', 'state', 'currency', 'amount', 'reason', 'payment_reference'],
-];
-const disputeCells = (row: Row<ReturnType<YearRecords['disputes']>>): CsvValue[] => [
-  ...[row.order, moment(row.at), moment(row.closedAt), row.state, row.currency],
-  ...amounts(row.currency, row.amountMinor),
-  ...[row.reason, row.serviceId],
-];
-
-interface RateRow {
-  readonly id: string;
-  readonly at: Date;
-  readonly country: string;
-  readonly kind: string;
-  readonly validFrom: string;
-  readonly rate: string | number;
-  readonly source: string;
-}
-const RATES = ['country', 'product_kind', 'valid_from', 'rate_percent', 'source'];
-const rateCells = (row: RateRow): CsvValue[] => [
-  ...[row.country, row.kind, row.validFrom, rateText(row.rate), row.source],
-];
-
-interface SettledRow {
-  readonly id: string;
-  readonly at: Date;
-  readonly receipt: string;
-  readonly countryOnReceipt: string;
-  readonly country: string;
-  readonly rate: string;
-  readonly currency: string;
-  readonly netMinor: number;
-  readonly taxMinor: number;
-  readonly reason: string;
-  readonly who: string;
-}
-const SETTLED = [
-  ...[
-    'receipt',
-    'country_on_receipt',
-    'counted_in',
-    'rate_percent',
-    'currency',
-    'net',
-    'tax',
-    'reason',
-    'by',
-    'at',
-  ],
-];
-const settledCells = (row: SettledRow): CsvValue[] => [
-  ...[row.receipt, row.countryOnReceipt, row.country, row.rate, row.currency],
-  ...amounts(row.currency, row.netMinor, row.taxMinor),
-  ...[row.reason, row.who, moment(row.at)],
-];
 
 const readMe = (year: number): string =>
   [

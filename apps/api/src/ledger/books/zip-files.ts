@@ -44,7 +44,7 @@ const append = (archive: ZipArchive, file: YearFile, date: Date, onLine: () => v
     archive.append(source, { name: file.name, date, mode: 0o644 });
   });
 
-async function* counted(lines: AsyncIterable<string>, onLine: () => void): AsyncGenerator<string> {
+async function* counted(lines: YearFile['lines'], onLine: () => void): AsyncGenerator<string> {
   for await (const line of lines) {
     onLine();
     yield line;

@@ -19,7 +19,12 @@ export const addUp = (portions: readonly Portion[]): SummaryRow[] => {
   for (const { sign, treatment, country, ratePercent, currency, documents, netMinor, taxMinor } of portions) {
     const key = [treatment, country, ratePercent, currency].join(' ');
     const row = rows.get(key) ?? {
-      ...{ treatment, country, ratePercent, currency, receipts: 0, creditNotes: 0 },
+      treatment,
+      country,
+      ratePercent,
+      currency,
+      receipts: 0,
+      creditNotes: 0,
       net: money(0, currency),
       tax: money(0, currency),
       gross: money(0, currency),
@@ -83,7 +88,11 @@ export const creditsOfSettled = ({
     if (!note.isInQuarter) return [];
     return [
       {
-        ...{ sign: -1 as const, ...counted, ratePercent, currency, documents: 1 },
+        sign: -1 as const,
+        ...counted,
+        ratePercent,
+        currency,
+        documents: 1,
         netMinor: net.minor,
         taxMinor: tax.minor,
       },

@@ -5,8 +5,17 @@ import type { Quarter } from './quarter-days.js';
 import { SummariseQuarter } from './summarise-quarter.js';
 
 const HEAD = [
-  ...['year', 'quarter', 'treatment', 'country', 'rate_percent', 'currency'],
-  ...['receipts', 'credit_notes', 'net', 'tax', 'gross'],
+  'year',
+  'quarter',
+  'treatment',
+  'country',
+  'rate_percent',
+  'currency',
+  'receipts',
+  'credit_notes',
+  'net',
+  'tax',
+  'gross',
 ];
 
 /** A quarter's summary as CSV: rows alone, so that each column adds up to the quarter. */
@@ -20,8 +29,14 @@ export class ExportSummary {
       csvRecord(HEAD),
       ...rows.map((row) =>
         csvRecord([
-          ...[quarter.year, quarter.quarter, row.treatment, row.country, row.ratePercent, row.currency],
-          ...[row.receipts, row.creditNotes],
+          quarter.year,
+          quarter.quarter,
+          row.treatment,
+          row.country,
+          row.ratePercent,
+          row.currency,
+          row.receipts,
+          row.creditNotes,
           ...[row.net, row.tax, row.gross].map((amount) => csvNumber(decimalText(amount))),
         ]),
       ),

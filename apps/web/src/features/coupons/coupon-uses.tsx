@@ -2,7 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import type { Coupon } from '@windchest/contracts';
 import { useState } from 'react';
 import { couponUsesTexts as texts } from '../../config/texts/workshop-coupons.js';
-import { date, number, price } from '../../lib/format.js';
+import { day, number, price } from '../../lib/format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { SameAsTable } from '../../ui/chart/same-as-table.js';
 import { type Series, TimeBars } from '../../ui/chart/time-bars.js';
@@ -19,7 +19,7 @@ const series: readonly Series[] = [
 ];
 
 const columnsFor = (step: Step, currency: string): Column<UsesBar>[] => [
-  { key: 'from', header: texts.steps[step], isHeading: true, cell: (bar) => date(bar.from) },
+  { key: 'from', header: texts.steps[step], isHeading: true, cell: (bar) => day(bar.from) },
   { key: 'redeemed', header: texts.redeemed, isNumeric: true, cell: (bar) => number(bar.redeemed) },
   { key: 'held', header: texts.held, isNumeric: true, cell: (bar) => number(bar.held) },
   { key: 'givenBack', header: texts.givenBack, isNumeric: true, cell: (bar) => number(bar.givenBack) },
@@ -66,10 +66,10 @@ export function CouponUses({ coupon }: { coupon: Coupon }) {
             bars={bars.map((bar) => ({
               key: bar.from,
               parts: [bar.redeemed, bar.held, bar.givenBack],
-              words: texts.bar[step](date(bar.from), bar.redeemed, bar.held, bar.givenBack),
+              words: texts.bar[step](day(bar.from), bar.redeemed, bar.held, bar.givenBack),
             }))}
             topText={({ parts }) => texts.taken(parts.reduce((sum, part) => sum + part, 0))}
-            ends={first && last && [date(first.from), date(last.from)]}
+            ends={first && last && [day(first.from), day(last.from)]}
             heightPx={120}
           />
           <SameAsTable>
