@@ -111,7 +111,11 @@ const toPart = (part: PartOfRevision, placeOf: Places): PartShape => ({
   isGauge: part.isGauge,
   file: part.file && toFile(part.file, placeOf),
   drawings: part.file?.drawings ?? null,
-  variants: part.variants.map(({ clearance, file }) => ({ clearance, file: toFile(file, placeOf) })),
+  variants: part.variants.map(({ clearance, file }) => ({
+    clearance,
+    file: toFile(file, placeOf),
+    drawings: file.drawings,
+  })),
 });
 
 const toFile = (file: FileOfRevision, placeOf: Places): FileShape => ({
