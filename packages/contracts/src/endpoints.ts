@@ -3,6 +3,7 @@ import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
 import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
+import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
 import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
@@ -20,6 +21,7 @@ export const endpoints = {
   ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
+  ...ledgerEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

@@ -310,6 +310,41 @@ describe('hostile input', () => {
   });
 });
 
+describe('a gift', () => {
+  const gift = sampleMessages.find(({ title }) => title.includes('gift'))?.message;
+  if (gift?.template !== 'order-paid') throw new Error('There is no sample of a gift.');
+
+  it('tells its buyer who has the files, and hands them no link', () => {
+    const { subject, html, text } = renderEmail(gift, sampleWorkshop);
+    expect(subject).toBe('Your gift is on its way: Curlew');
+    for (const form of [html, text]) {
+      expect(form).toContain('wren@mail.example');
+      expect(form).not.toContain('/get/');
+      expect(form).not.toContain('download page');
+      expect(form).toContain(gift.orderLink);
+    }
+    expect(unwrapped(text)).toContain('Reverse charge: your business owes the VAT in its own country.');
+  });
+
+  it('names all its kits to the one who gets it', () => {
+    const kits = ['Curlew', 'Knot', 'Teal'].map((kit) => ({
+      kit,
+      licence: 'personal prints',
+      revision: 'Mk 1.0',
+    }));
+    const { subject, text } = renderEmail(sampleOf('gift-received', { kits }), sampleWorkshop);
+    expect(subject).toBe('Marlow gives you Curlew and 2 more kits');
+    expect(unwrapped(text)).toContain('Marlow gives you Curlew, Knot and Teal, musical instruments');
+    expect(unwrapped(text)).toContain('Knot Mk 1.0, with the licence “personal prints”.');
+  });
+
+  it('says whose rights end when it is refunded', () => {
+    const { text } = renderEmail(sampleOf('order-refunded', { giftTo: 'wren@mail.example' }), sampleWorkshop);
+    expect(unwrapped(text)).toContain('the right of wren@mail.example to the files of');
+    expect(text).not.toContain('your shelf');
+  });
+});
+
 describe('moments and counts', () => {
   it('are shown in UTC, in words', () => {
     const text = unwrapped(renderEmail(sampleOf('passphrase-changed'), sampleWorkshop).text);

@@ -11,6 +11,9 @@ import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
 import * as partVariants from './migrations/0010-part-variants.js';
 import * as refunds from './migrations/0011-refunds.js';
+import * as couponRules from './migrations/0013-coupon-rules.js';
+import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
+import * as gifts from './migrations/0015-gifts.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -24,6 +27,9 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0009-printer-cards': printerCards,
   '0010-part-variants': partVariants,
   '0011-refunds': refunds,
+  '0013-coupon-rules': couponRules,
+  '0014-tax-and-business': taxAndBusiness,
+  '0015-gifts': gifts,
 };
 
 /**

@@ -11,6 +11,7 @@ import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
+import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holders } from './holders.js';
 import { ServeFile } from './serve-file.js';
@@ -31,6 +32,7 @@ import { SignedAddress } from './signed-address.js';
     SignedAddress,
     FileGrants,
     ServeFile,
+    GiftMail,
     GiveEntitlements,
     FollowOrderRights,
     Collections,

@@ -83,7 +83,8 @@ export class Shelf {
     const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
-      orderId: best?.orderId ?? null,
+      // The order behind a gift is the giver's own affair.
+      orderId: best && best.source !== 'gift' ? best.orderId : null,
       clearance: { ...clearances, chosen },
       revisions: revisions.map(toShelfRevision),
       parts,

@@ -1,3 +1,4 @@
+import type { TaxTreatment } from '@windchest/contracts';
 import { Column, DataType, Model, Table } from 'sequelize-typescript';
 import { IdColumn, MomentColumn } from '../database/columns.js';
 import type { ReceiptBuyer, ReceiptLine, ReceiptSeller } from './receipt-parties.js';
@@ -23,6 +24,7 @@ export class Receipt extends Model {
   @Column(DataType.CHAR(3)) declare currency: string;
   @Column(DataType.INTEGER.UNSIGNED) declare totalMinor: number;
   @Column(DataType.CHAR(2)) declare country: string;
+  @Column(DataType.STRING(20)) declare taxTreatment: TaxTreatment;
   @Column(DataType.JSON) declare tax: ReceiptTax[];
   @Column(DataType.JSON) declare buyer: ReceiptBuyer;
   /** Null where it was issued before this was kept. */

@@ -49,9 +49,12 @@ import { RefundView } from './refunds/refund-view.js';
 import { Refund } from './refunds/refund.model.js';
 import { RefundsController } from './refunds/refunds.controller.js';
 import { SettleRefund } from './refunds/settle-refund.js';
+import { SalesTax } from './sales-tax.js';
 import { SettleOrder } from './settle-order.js';
 import { ShowOrder } from './show-order.js';
 import { TakeOffFlag } from './take-off-flag.js';
+import { UnclearOrders } from './unclear-orders.js';
+import { YearRecords } from './year-records.js';
 
 @Module({
   imports: [
@@ -62,6 +65,7 @@ import { TakeOffFlag } from './take-off-flag.js';
   ],
   controllers: [CheckoutController, OrdersController, RefundsController],
   providers: [
+    SalesTax,
     PriceBasket,
     QuoteBasket,
     PlaceOrder,
@@ -97,6 +101,8 @@ import { TakeOffFlag } from './take-off-flag.js';
     CarryOutRefund,
     DecideRights,
     TakeOffFlag,
+    UnclearOrders,
+    YearRecords,
     DisputeSteps,
     DisputeMail,
     DisputeView,
@@ -112,6 +118,9 @@ import { TakeOffFlag } from './take-off-flag.js';
     OrdersReader,
     OrderHistory,
     OrderFacts,
+    SalesTax,
+    UnclearOrders,
+    YearRecords,
   ],
 })
 export class OrdersModule {}

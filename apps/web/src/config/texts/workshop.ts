@@ -10,6 +10,7 @@ export const workshopTexts = {
   kits: 'Kits',
   orders: 'Orders',
   receipts: 'Receipts',
+  ledger: 'Ledger',
   coupons: 'Coupons',
   holders: 'Holders',
   people: 'People',

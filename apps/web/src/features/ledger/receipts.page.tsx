@@ -18,6 +18,7 @@ import { useTableState } from '../../ui/table/use-table-state.js';
 import { Heading, Text } from '../../ui/text.js';
 import { Unbroken } from '../../ui/unbroken.js';
 import { countryOptions } from '../basket/country-options.js';
+import { LedgerTabs } from './ledger-head.js';
 import { yearsUntil } from './receipt-years.js';
 
 type Query = NonNullable<InputOf<'GET /workshop/receipts'>['query']>;
@@ -114,6 +115,7 @@ export function ReceiptsPage() {
   return (
     <Band>
       <PageTitle title={texts.title} />
+      <LedgerTabs />
       <Heading level={1}>{texts.title}</Heading>
       <Text look="lead" marginTop="2" marginBottom="1">
         {texts.lead}

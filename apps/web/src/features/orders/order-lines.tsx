@@ -106,6 +106,11 @@ export function OrderLines({ order }: { order: BuyerOrder }) {
             {price(line.tax)}
           </Sum>
         ))}
+        {taxes.length === 0 && order.total.minor > 0 && (
+          <Box as="dd" fontSize="sm" color="ink.soft" textAlign="end" paddingInline={{ md: '2.5' }}>
+            {orderTexts.untaxed[order.taxTreatment]}
+          </Box>
+        )}
         {order.refunded.minor > 0 && <Sum name={orderTexts.refunded}>{less(order.refunded)}</Sum>}
       </Box>
     </>
