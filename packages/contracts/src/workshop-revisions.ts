@@ -5,6 +5,7 @@ import {
   drawings,
   hardwareList,
   orientations,
+  previewFields,
   printSpec,
   revisionState,
   sizeMm,
@@ -68,6 +69,7 @@ export const part = z.object({
   voice: voice.nullable(),
   file: revisionFile.nullable(),
   drawings: drawings.nullable(),
+  ...previewFields,
 });
 export type Part = z.output<typeof part>;
 

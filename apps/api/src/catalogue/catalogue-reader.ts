@@ -1,16 +1,17 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { FilamentColour } from '@windchest/contracts';
+import type { FilamentColour, RankVoice } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { Differences, type ReprintRow } from './comparison/differences.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
+import { rankOf } from './kits/rank.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
 import { bundleName, servable, type ServableFile } from './release/stored-file-of.js';
 import { RevisionContents } from './revisions/revision-contents.js';
-import { Revision } from './revisions/revision.model.js';
+import { Revision, type Room } from './revisions/revision.model.js';
 
 export type { OfferedLicence, ReprintRow, ServableFile };
 
@@ -31,6 +32,13 @@ export interface ReleasedRevision {
   readonly bundleBytes: number;
   readonly changeNotes: string;
   readonly isWithdrawn: boolean;
+}
+
+/** What a revision is meant to sound like. */
+export interface Voicing {
+  readonly rank: RankVoice[];
+  readonly room: Room;
+  readonly declaredCents: number;
 }
 
 /** What other rooms may know of the catalogue: plain facts, nothing of a draft. */
@@ -123,6 +131,13 @@ export class CatalogueReader {
 
   async cautionsOf(revisionId: string): Promise<string> {
     return (await this.finalById(revisionId))?.cautions ?? '';
+  }
+
+  async voicingOf(revisionId: string): Promise<Voicing | null> {
+    const revision = await this.finalById(revisionId);
+    if (!revision) return null;
+    const { room, declaredCents } = revision;
+    return { rank: rankOf(await this.contents.voicesOf(revisionId)), room, declaredCents };
   }
 
   /** Part by part, what differs between a revision held (or none) and another one of the same kit. */

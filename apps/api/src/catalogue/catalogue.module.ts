@@ -9,7 +9,9 @@ import { AttachFile } from './files/attach-file.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
 import { OfferFiles } from './files/offer-files.js';
+import { PartPreviews } from './files/part-previews.js';
 import { RemoveFile } from './files/remove-file.js';
+import { RenewMeasurements } from './files/renew-measurements.js';
 import { RevisionFile } from './files/revision-file.model.js';
 import { StoredFile } from './files/stored-file.model.js';
 import { UploadFile } from './files/upload-file.js';
@@ -58,6 +60,8 @@ import { StartRevision } from './revisions/start-revision.js';
     Comparison,
     Gates,
     MeasurementRecords,
+    RenewMeasurements,
+    PartPreviews,
     AttachFile,
     OfferFiles,
     UploadFile,

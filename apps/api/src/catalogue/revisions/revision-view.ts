@@ -93,6 +93,8 @@ const toPart = (part: PartOfRevision, partOfFile: Map<string, string>): PartShap
   voice: part.voice,
   file: part.file && toFile(part.file, partOfFile),
   drawings: part.file?.drawings ?? null,
+  previewBytes: part.file?.measured?.previewBytes ?? null,
+  previewSha256: part.file?.previewSha256 ?? null,
 });
 
 const toFile = (file: FileOfRevision, partOfFile: Map<string, string>): FileShape => ({

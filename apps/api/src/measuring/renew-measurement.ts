@@ -1,0 +1,31 @@
+import { Injectable } from '@nestjs/common';
+import type { z } from 'zod';
+import { renewMeasurement } from '../catalogue/files/measure-file.job.js';
+import { MeasurementRecords, passingFaults } from '../catalogue/files/measurement-records.js';
+import { HandlesJob, type JobHandler } from '../jobs/job.js';
+import { StoredMeshes } from './stored-meshes.js';
+
+/** Counted with those of its first measuring: a file that ends the process is not taken up for ever. */
+const MOST_TRIES = 8;
+
+/** Measures a mesh again that was measured by an older version; what cannot be measured now stays as it was. */
+@Injectable()
+@HandlesJob(renewMeasurement)
+export class RenewMeasurement implements JobHandler<typeof renewMeasurement.payload> {
+  constructor(
+    private readonly records: MeasurementRecords,
+    private readonly meshes: StoredMeshes,
+  ) {}
+
+  async handle({ sha256, fileName }: z.output<typeof renewMeasurement.payload>): Promise<void> {
+    const work = await this.records.beginRenewal(sha256);
+    if (!work) return;
+    if (work.tries > MOST_TRIES) return this.records.keepRenewed(sha256, null);
+    const measured = await this.meshes.measure(work.storageKey, fileName);
+    if (measured.isMeasured) return this.records.keepRenewed(sha256, measured.findings);
+    // A fault of the measuring, not of the file: the job is tried again later.
+    if ((passingFaults as readonly string[]).includes(measured.code))
+      throw new Error(`“${fileName}” ${measured.fault}`);
+    await this.records.keepRenewed(sha256, null);
+  }
+}
