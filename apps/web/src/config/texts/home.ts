@@ -7,7 +7,7 @@ export const homeTexts = {
     `${numberWords[count] ?? count} ${count === 1 ? 'kit, drawn to scale' : 'kits, drawn to one scale'}`,
   sortBy: 'Sort by',
   sorts: { newest: 'newest', name: 'name', price: 'price', size: 'size' },
-  tallest: 'tallest part',
+  longest: 'longest part',
   parts: (count: number) => (count === 1 ? 'part' : 'parts'),
   plates: (count: number) => (count === 1 ? 'plate' : 'plates'),
   filament: 'filament',

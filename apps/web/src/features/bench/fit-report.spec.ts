@@ -11,6 +11,8 @@ const part = (code: string, x: number, y: number, z: number, rest: Partial<KitPa
   areaMm2: 1,
   printSpec: null,
   drawing: null,
+  previewBytes: null,
+  previewSha256: null,
   ...rest,
 });
 const bed = { xMm: 220, yMm: 180, zMm: 200 };

@@ -22,6 +22,8 @@ const part = (changes: Partial<Part> = {}): Part => ({
   voice: null,
   file: null,
   drawings: null,
+  previewBytes: null,
+  previewSha256: null,
   ...changes,
 });
 const voices: NonNullable<Part['voice']>[] = [

@@ -11,6 +11,8 @@ const part = (code: string): Part => ({
   voice: null,
   file: null,
   drawings: null,
+  previewBytes: null,
+  previewSha256: null,
 });
 const row = (code: string, difference: Comparison['rows'][number]['difference']) => ({
   code,

@@ -5,6 +5,8 @@ import { PartThumb } from '../../ui/drawing/parts-sheet.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
+import { previewOfPart } from '../bench/part-preview/previewed-part.js';
+import { TurnButton } from '../bench/part-preview/turn-button.js';
 import { MarkField } from './mark-field.js';
 import { MeasuredCell } from './measured-cell.js';
 import type { Difference, PartRow } from './part-rows.js';
@@ -24,9 +26,14 @@ const drawingOf = ({ part }: PartRow) => {
   return front.widthMm * front.heightMm >= top.widthMm * top.heightMm ? front : top;
 };
 
-const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => void) | undefined }) => {
+interface PartCellProps extends Pick<PartsTableProps, 'revisionId' | 'onEdit'> {
+  row: PartRow;
+}
+
+const PartCell = ({ row, revisionId, onEdit }: PartCellProps) => {
   const drawing = drawingOf(row);
   const { part } = row;
+  const preview = part && previewOfPart(revisionId, part, drawing);
   return (
     <Box id={`part-${row.code}`} display="flex" gap="3.5" alignItems="center" scrollMarginTop="4">
       <Box width="2.75rem" flex="none" display="grid" placeItems="center">
@@ -37,18 +44,21 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
         <Box color="ink.soft" fontWeight="normal">
           {row.name}
         </Box>
-        {onEdit && part && (
-          <Button
-            look="plain"
-            size="sm"
-            minHeight="1.5rem"
-            paddingBlock="0"
-            onClick={() => onEdit(part.id)}
-            aria-label={partsTexts.editOf(row.code)}
-          >
-            {partsTexts.edit}
-          </Button>
-        )}
+        <Box display="flex" flexWrap="wrap" columnGap="4">
+          {onEdit && part && (
+            <Button
+              look="plain"
+              size="sm"
+              minHeight="1.5rem"
+              paddingBlock="0"
+              onClick={() => onEdit(part.id)}
+              aria-label={partsTexts.editOf(row.code)}
+            >
+              {partsTexts.edit}
+            </Button>
+          )}
+          {preview && <TurnButton part={preview} isShort />}
+        </Box>
       </Box>
     </Box>
   );
@@ -87,7 +97,7 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
       header: partsTexts.columns.part,
       width: '23%',
       isHeading: true,
-      cell: (row) => <PartCell row={row} onEdit={onEdit} />,
+      cell: (row) => <PartCell row={row} revisionId={revisionId} onEdit={onEdit} />,
     },
     {
       key: 'quantity',

@@ -4,6 +4,8 @@ import { kitTexts } from '../../config/texts/kit.js';
 import { number } from '../../lib/format.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Text } from '../../ui/text.js';
+import { previewOfKitPart } from '../bench/part-preview/previewed-part.js';
+import { TurnButton } from '../bench/part-preview/turn-button.js';
 import { ownSettings } from './own-settings.js';
 
 const sizeWords = ({ sizeMm: { x, y, z } }: KitPart) => [x, y, z].map((side) => number(side, 1)).join(' × ');
@@ -16,6 +18,7 @@ export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitP
       header: kitTexts.partName,
       isHeading: true,
       cell: (part) => {
+        const preview = previewOfKitPart(kit.slug, part);
         const own = part.printSpec ? ownSettings(part.printSpec, kit.printSpec) : [];
         return (
           <Box id={`part-${part.code}`} scrollMarginTop="4" _target={{ textDecoration: 'underline' }}>
@@ -27,6 +30,11 @@ export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitP
               <Text look="small" isSoft fontWeight="normal">
                 {kitTexts.ownSettings(own.join(', '))}
               </Text>
+            )}
+            {preview && (
+              <Box>
+                <TurnButton part={preview} />
+              </Box>
             )}
           </Box>
         );
