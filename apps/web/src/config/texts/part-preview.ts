@@ -1,17 +1,18 @@
 export const partPreviewTexts = {
-  open: 'Turn it in three dimensions',
-  openShort: 'Turn it',
+  open: 'Turn it',
+  /** Over a column of such buttons. */
+  column: 'In three dimensions',
   openOf: (code: string) => `Turn it in three dimensions: ${code}`,
-  openShortOf: (code: string) => `Turn it: ${code}`,
+  press: 'Press one to turn it in three dimensions.',
   title: (code: string, name: string) => `${code} ${name}`,
   size: (x: string, y: string, z: string) =>
-    `${x} mm wide, ${y} mm deep, ${z} mm tall, as it stands on the bed.`,
+    `${x} mm wide, ${y} mm deep, ${z} mm tall, as it goes on the bed.`,
   coarse: 'A coarse likeness to look at, not the file: edges are rounded to more than half a millimetre.',
   loading: (size: string) => `Fetching the likeness, ${size}, and what draws it …`,
   failed: 'The part cannot be shown in three dimensions',
   unreadable: 'The likeness could not be read.',
   view: (part: string) => `${part}, to turn about`,
-  how: 'Drag it, or use the arrow keys; + and − come nearer and go back, Home looks as at first.',
+  how: 'Drag it, or use the arrow keys; + and − come nearer and go back, Home brings the first view.',
   controls: 'Turn the part',
   steps: {
     left: 'Turn left',
@@ -20,7 +21,7 @@ export const partPreviewTexts = {
     down: 'Tip down',
     nearer: 'Nearer',
     farther: 'Farther',
-    reset: 'View as at first',
+    reset: 'First view',
   },
   looking: (around: string, above: string) => `Seen from ${around}° around, ${above}° above`,
   noWebGl:

@@ -5,8 +5,10 @@ import { PartThumb } from '../../ui/drawing/parts-sheet.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
+import type { PreviewedPart } from '../bench/part-preview/part-turner.js';
 import { previewOfPart } from '../bench/part-preview/previewed-part.js';
 import { TurnButton } from '../bench/part-preview/turn-button.js';
+import { useTurning } from '../bench/part-preview/use-turning.js';
 import { MarkField } from './mark-field.js';
 import { MeasuredCell } from './measured-cell.js';
 import type { Difference, PartRow } from './part-rows.js';
@@ -28,9 +30,10 @@ const drawingOf = ({ part }: PartRow) => {
 
 interface PartCellProps extends Pick<PartsTableProps, 'revisionId' | 'onEdit'> {
   row: PartRow;
+  onTurn: (part: PreviewedPart) => void;
 }
 
-const PartCell = ({ row, revisionId, onEdit }: PartCellProps) => {
+const PartCell = ({ row, revisionId, onEdit, onTurn }: PartCellProps) => {
   const drawing = drawingOf(row);
   const { part } = row;
   const preview = part && previewOfPart(revisionId, part, drawing);
@@ -57,7 +60,7 @@ const PartCell = ({ row, revisionId, onEdit }: PartCellProps) => {
               {partsTexts.edit}
             </Button>
           )}
-          {preview && <TurnButton part={preview} isShort />}
+          {preview && <TurnButton code={row.code} onTurn={() => onTurn(preview)} />}
         </Box>
       </Box>
     </Box>
@@ -91,13 +94,14 @@ export interface PartsTableProps {
 
 /** Every part with its drawing, what it measures, what changed, and what buyers should do about it. */
 export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTableProps) {
+  const [turning, turn] = useTurning();
   const columns: Column<PartRow>[] = [
     {
       key: 'part',
       header: partsTexts.columns.part,
       width: '23%',
       isHeading: true,
-      cell: (row) => <PartCell row={row} revisionId={revisionId} onEdit={onEdit} />,
+      cell: (row) => <PartCell row={row} revisionId={revisionId} onEdit={onEdit} onTurn={turn} />,
     },
     {
       key: 'quantity',
@@ -137,6 +141,9 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
     },
   ];
   return (
-    <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+    <>
+      <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+      {turning}
+    </>
   );
 }

@@ -4,7 +4,6 @@ import {
   AmbientLight,
   BufferGeometry,
   DirectionalLight,
-  EdgesGeometry,
   Float32BufferAttribute,
   Group,
   LineBasicMaterial,
@@ -13,6 +12,7 @@ import {
   Mesh,
   type PerspectiveCamera,
 } from 'three';
+import { edgeLines } from './edge-lines.js';
 import { eyeOf, type Orbit } from './orbit.js';
 import { printedMaterial } from './printed-material.js';
 import type { DrawnColours } from './use-drawn-colours.js';
@@ -21,9 +21,7 @@ export { readModel } from './read-model.js';
 
 const fovDeg = 26;
 /** A little air around the part. */
-const airFactor = 1.08;
-/** Facets of a round wall meet at less; only what is an edge to the eye is drawn as one. */
-const edgeDeg = 32;
+const airFactor = 1.02;
 
 /** The outline of the box on the bed, so that one sees which side is down. */
 function bedOutline(model: BufferGeometry): BufferGeometry {
@@ -37,10 +35,7 @@ function bedOutline(model: BufferGeometry): BufferGeometry {
 /** The part, its edges, the bed under it, and the lights, as one thing to draw and to throw away. */
 function sceneOf(model: BufferGeometry, colours: DrawnColours, radius: number) {
   const body = new Mesh(model, printedMaterial(colours.kit, radius));
-  const edges = new LineSegments(
-    new EdgesGeometry(model, edgeDeg),
-    new LineBasicMaterial({ color: colours.deep }),
-  );
+  const edges = new LineSegments(edgeLines(model), new LineBasicMaterial({ color: colours.deep }));
   const bed = new LineLoop(bedOutline(model), new LineBasicMaterial({ color: colours.hairline }));
   // Lines lie on the faces; without this they would fight for the same depth.
   Object.assign(body.material, { polygonOffset: true, polygonOffsetFactor: 1, polygonOffsetUnits: 1 });
