@@ -3,7 +3,7 @@ import { curlew } from './kits/curlew.js';
 import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
-import { people, purchases } from './people.js';
+import { people, printers, purchases } from './people.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
 
@@ -21,6 +21,7 @@ export const demoWorkshop: DemoWorkshop = {
     email: 'hello@saltmarsh.example',
   },
   people,
+  printers,
   kits: kitPlans.map(({ kit }) => kit),
   coupons: [
     {

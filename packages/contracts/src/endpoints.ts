@@ -4,6 +4,7 @@ import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpo
 import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
+import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
@@ -12,6 +13,7 @@ import { workshopSalesEndpoints } from './workshop-sales.js';
 export const endpoints = {
   ...sessionEndpoints,
   ...kitEndpoints,
+  ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
   ...workshopKitEndpoints,

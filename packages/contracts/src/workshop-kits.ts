@@ -24,6 +24,8 @@ import {
   revisionBody,
   fileOffer,
   offerAnswer,
+  gateNames,
+  waiverBody,
 } from './workshop-revisions.js';
 
 export const revisionSummary = z.object({
@@ -81,6 +83,7 @@ export const licenceBody = z.object({
 
 const inKit = idParams('kitId');
 const inRevision = idParams('revisionId');
+const atGate = inRevision.extend({ gate: z.enum(gateNames) });
 
 export const workshopKitEndpoints = {
   'GET /workshop/kits': endpoint({
@@ -196,7 +199,7 @@ export const workshopKitEndpoints = {
   }),
   'GET /workshop/revisions/:revisionId/comparison': endpoint({
     access: 'kits:read',
-    summary: 'Part by part against an earlier revision',
+    summary: 'Part by part against an earlier revision; shapes not compared yet are compared next',
     params: inRevision,
     query: z.object({ with: id.optional() }),
     response: comparison,
@@ -207,6 +210,19 @@ export const workshopKitEndpoints = {
     params: inRevision,
     body: markBody,
     response: comparison,
+  }),
+  'PUT /workshop/revisions/:revisionId/waivers/:gate': endpoint({
+    access: 'revisions:release',
+    summary: 'Waive an open gate of a draft, with a reason',
+    params: atGate,
+    body: waiverBody,
+    response: revisionDetail,
+  }),
+  'DELETE /workshop/revisions/:revisionId/waivers/:gate': endpoint({
+    access: 'revisions:release',
+    summary: 'Take a waiver back',
+    params: atGate,
+    response: revisionDetail,
   }),
   'POST /workshop/revisions/:revisionId/release': endpoint({
     access: 'revisions:release',

@@ -11,6 +11,10 @@ interface RevisionAnswer {
   release: { state: string; fault: string | null };
 }
 
+interface ComparisonAnswer {
+  rows: { deviation: { state: string } | null }[];
+}
+
 /** Drafts a kit with its licences. @returns its id */
 export const draftKit = async (maker: ShopBrowser, kit: DemoKit): Promise<string> => {
   const { id } = await maker.post<{ id: string }>('/workshop/kits', {
@@ -65,6 +69,11 @@ export const releaseRevision = async (
     'The measuring',
     () => maker.get<RevisionAnswer>(at),
     (one) => one.parts.every(({ file }) => file?.measuring === 'measured' || file?.measuring === 'refused'),
+  );
+  await waitFor(
+    'The comparing',
+    () => maker.get<ComparisonAnswer>(`${at}/comparison`),
+    ({ rows }) => rows.every(({ deviation }) => deviation?.state !== 'waiting'),
   );
   if (!isFirst)
     for (const { code, mark, reason } of revision.marks)

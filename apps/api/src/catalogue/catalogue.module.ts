@@ -5,6 +5,9 @@ import { CatalogueReader } from './catalogue-reader.js';
 import { CatalogueWaiting } from './catalogue-waiting.js';
 import { Comparison } from './comparison/comparison.js';
 import { Differences } from './comparison/differences.js';
+import { MeshComparisonRecord } from './comparison/mesh-comparison.model.js';
+import { MeshComparisons } from './comparison/mesh-comparisons.js';
+import { QueueComparisons } from './comparison/queue-comparisons.js';
 import { AttachFile } from './files/attach-file.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
@@ -15,7 +18,9 @@ import { RenewMeasurements } from './files/renew-measurements.js';
 import { RevisionFile } from './files/revision-file.model.js';
 import { StoredFile } from './files/stored-file.model.js';
 import { UploadFile } from './files/upload-file.js';
+import { GateWaiver } from './gates/gate-waiver.model.js';
 import { Gates } from './gates/gates.js';
+import { WaiveGate } from './gates/waive-gate.js';
 import { DraftKit } from './kits/draft-kit.js';
 import { KitPageHead } from './kits/kit-page-head.js';
 import { Kit } from './kits/kit.model.js';
@@ -26,9 +31,12 @@ import { PriceLicence } from './kits/price-licence.js';
 import { ShopKits } from './kits/shop-kits.js';
 import { WorkshopKitsController } from './kits/workshop-kits.controller.js';
 import { WorkshopKits } from './kits/workshop-kits.js';
+import { KitsTooBig } from './print/kits-too-big.js';
 import { PrintPlans } from './print/print-plans.js';
+import { PrintSheets } from './print/print-sheets.js';
 import { BuildRelease } from './release/build-release.js';
 import { RequestRelease } from './release/request-release.js';
+import { TidyDraft } from './release/tidy-draft.js';
 import { ChangeRevision } from './revisions/change-revision.js';
 import { Drafts } from './revisions/drafts.js';
 import { Part } from './revisions/part.model.js';
@@ -41,7 +49,17 @@ import { StartRevision } from './revisions/start-revision.js';
 @Module({
   imports: [
     AccountsModule,
-    SequelizeModule.forFeature([Kit, Licence, Revision, Part, RevisionFile, StoredFile, MeasurementRecord]),
+    SequelizeModule.forFeature([
+      Kit,
+      Licence,
+      Revision,
+      Part,
+      RevisionFile,
+      StoredFile,
+      MeasurementRecord,
+      MeshComparisonRecord,
+      GateWaiver,
+    ]),
   ],
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
   providers: [
@@ -57,8 +75,11 @@ import { StartRevision } from './revisions/start-revision.js';
     StartRevision,
     ChangeRevision,
     Differences,
+    MeshComparisons,
+    QueueComparisons,
     Comparison,
     Gates,
+    WaiveGate,
     MeasurementRecords,
     RenewMeasurements,
     PartPreviews,
@@ -67,12 +88,15 @@ import { StartRevision } from './revisions/start-revision.js';
     UploadFile,
     RemoveFile,
     RequestRelease,
+    TidyDraft,
     BuildRelease,
     CatalogueReader,
     CatalogueWaiting,
     PrintPlans,
+    PrintSheets,
+    KitsTooBig,
   ],
   // The measuring room writes what it finds through the records.
-  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans],
+  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, MeshComparisons, PrintPlans],
 })
 export class CatalogueModule {}

@@ -3,12 +3,13 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Answer, Comparison } from '@windchest/contracts';
 import { Op, type Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
-import type { Tx } from '../../database/transactions.js';
+import { Transactions, type Tx } from '../../database/transactions.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
 import type { ReprintMark } from '../revisions/part.model.js';
 import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
 import { Revision } from '../revisions/revision.model.js';
-import { comparePart } from './compare-parts.js';
+import { comparePart, meshPairOf } from './compare-parts.js';
+import { MeshComparisons, type KnownComparison, type MeshPair } from './mesh-comparisons.js';
 
 /** One part on a person's reprint list. */
 export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
@@ -26,6 +27,8 @@ export class Differences {
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     private readonly contents: RevisionContents,
+    private readonly meshes: MeshComparisons,
+    private readonly transactions: Transactions,
   ) {}
 
   async rows(from: Revision | null, to: Revision, tx?: Tx): Promise<Comparison['rows']> {
@@ -72,10 +75,28 @@ export class Differences {
     );
     const after = await this.contents.partsOf(to.id, tx);
     const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
-    const now = after.map((part) => pairOf(before.get(part.code) ?? null, part, verdicts.get(part.code)));
+    const meshPairs = after.map((part) => meshPairOf(before.get(part.code) ?? null, part));
+    const known = await this.knownOf(meshPairs, tx);
+    const now = after.map((part, at) =>
+      pairOf(before.get(part.code) ?? null, part, verdicts.get(part.code), known[at]),
+    );
     const codes = new Set(after.map((part) => part.code));
     const gone = [...before.values()].filter((part) => !codes.has(part.code));
     return [...now, ...gone.map((part) => pairOf(part, null, undefined))];
+  }
+
+  /** What nobody has asked about so far is compared from now on. */
+  private async knownOf(
+    pairs: readonly (MeshPair | null)[],
+    tx?: Tx,
+  ): Promise<(KnownComparison | undefined)[]> {
+    const { of, unasked } = await this.meshes.known(
+      pairs.filter((pair) => pair !== null),
+      tx,
+    );
+    if (tx) await this.meshes.want(tx, unasked);
+    else if (unasked.length > 0) await this.transactions.run((own) => this.meshes.want(own, unasked));
+    return pairs.map((pair) => (pair ? of(pair) : undefined));
   }
 
   /**
@@ -117,9 +138,10 @@ const pairOf = (
   before: PartOfRevision | null,
   after: PartOfRevision | null,
   verdict: Verdict | undefined,
+  known?: KnownComparison,
 ): Pair => {
   const part = (after ?? before)!;
-  const difference = comparePart(before, after);
+  const difference = comparePart(before, after, known);
   const counts = difference.difference === 'changed' && verdict !== undefined;
   return {
     after,

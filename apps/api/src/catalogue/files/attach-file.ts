@@ -8,6 +8,7 @@ import { newId } from '../../database/columns.js';
 import { touchRows } from '../../database/rows.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { Drafts } from '../revisions/drafts.js';
 import { Part } from '../revisions/part.model.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
@@ -36,6 +37,7 @@ export class AttachFile {
     private readonly drafts: Drafts,
     private readonly contents: RevisionContents,
     private readonly measurements: MeasurementRecords,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -60,6 +62,7 @@ export class AttachFile {
       if (isMeshKind(stored.kind)) {
         await this.keepPart(tx, file, stored, parts);
         await this.measurements.want(tx, stored.sha256, stored.fileName);
+        await this.comparisons.ofSentFile(tx, revision.id, stored.sha256);
       }
       await this.staffLog.record(tx, person, {
         what: old ? 'replaced a file' : 'added a file',

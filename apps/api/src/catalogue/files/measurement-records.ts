@@ -4,21 +4,19 @@ import { Op, type Sequelize } from 'sequelize';
 import { keyOf } from '../../adapters/storage/storage.js';
 import { Clock } from '../../adapters/clock/clock.js';
 import { selectRows, touchRows } from '../../database/rows.js';
-import type { Tx } from '../../database/transactions.js';
+import { Transactions, type Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { measureFile, renewMeasurement } from './measure-file.job.js';
 import type { MeshFindings } from './measured-mesh.js';
 import { MeasurementRecord } from './measurement.model.js';
+import { passingFaults } from './passing-faults.js';
 import { StoredFile } from './stored-file.model.js';
 
 /** Goes up when the same bytes would measure differently, or give more; then all are measured again. */
 export const MEASURER_VERSION = 3;
 /** Between two meshes measured again, so that uploads and e-mails find a worker meanwhile. */
 const RENEWAL_PACE_SECONDS = 0.5;
-
-/** Faults of the measuring, not of the file: sending the file again tries again. */
-export const passingFaults = ['timed-out', 'out-of-memory', 'worker-ended'] as const;
-export type PassingFault = (typeof passingFaults)[number];
 
 export interface MeasuringWork {
   readonly tries: number;
@@ -33,7 +31,9 @@ export class MeasurementRecords {
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(MeasurementRecord) private readonly records: typeof MeasurementRecord,
     @InjectModel(StoredFile) private readonly stored: typeof StoredFile,
+    private readonly transactions: Transactions,
     private readonly queue: JobQueue,
+    private readonly comparisons: QueueComparisons,
     private readonly clock: Clock,
   ) {}
 
@@ -123,17 +123,28 @@ export class MeasurementRecords {
     return { tries: record.tries, storageKey: keyOf('files', sha256), bytes: file.bytes };
   }
 
+  /** Keeps what was found, and has the mesh compared with what it takes the place of. */
   async keepMeasured(sha256: string, result: MeshFindings): Promise<void> {
-    await this.records.update(
-      { ...this.columnsOf(result), state: 'measured', fault: null, faultCode: null },
-      { where: { sha256, state: 'measuring' } },
-    );
+    await this.transactions.run(async (tx) => {
+      const [kept] = await this.records.update(
+        { ...this.columnsOf(result), state: 'measured', fault: null, faultCode: null },
+        { where: { sha256, state: 'measuring' }, transaction: tx },
+      );
+      if (kept > 0) await this.comparisons.ofMeasuredFile(tx, sha256);
+    });
   }
 
   /** @param result null where the newer measurer refuses what an older one measured: that then stands */
   async keepRenewed(sha256: string, result: MeshFindings | null): Promise<void> {
-    await this.records.update(result ? this.columnsOf(result) : { measurerVersion: MEASURER_VERSION }, {
-      where: { sha256, state: 'measured', measurerVersion: { [Op.lt]: MEASURER_VERSION } },
+    await this.transactions.run(async (tx) => {
+      const [kept] = await this.records.update(
+        result ? this.columnsOf(result) : { measurerVersion: MEASURER_VERSION },
+        {
+          where: { sha256, state: 'measured', measurerVersion: { [Op.lt]: MEASURER_VERSION } },
+          transaction: tx,
+        },
+      );
+      if (kept > 0 && result) await this.comparisons.ofMeasuredFile(tx, sha256);
     });
   }
 

@@ -1,3 +1,4 @@
+import type { Gate } from '@windchest/contracts';
 import type { PartOfRevision } from '../revisions/revision-contents.js';
 import type { BuildVolume } from '../revisions/revision.model.js';
 import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
@@ -43,10 +44,8 @@ export const watertight: GateCheck = ({ parts }) => {
     ];
     return [`${code} (${faults.join(', ')})`];
   });
-  if (leaks.length > 0) return open(name, `Not watertight: ${listed(leaks)}.`, true);
-  return allMeasured(parts)
-    ? passed(name, 'Every part is watertight.', true)
-    : open(name, 'Known when every part is measured.', true);
+  if (leaks.length > 0) return open(name, `Not watertight: ${listed(leaks)}.`);
+  return allMeasured(parts) ? passed(name, 'Every part is watertight.') : notKnownYet(name);
 };
 
 export const fitsBuildVolume: GateCheck = ({ parts, revision: { buildVolume } }) => {
@@ -56,10 +55,8 @@ export const fitsBuildVolume: GateCheck = ({ parts, revision: { buildVolume } })
     const excess = part.file?.measured && excessOf(part, part.file.measured.sizeMm, buildVolume);
     return excess ? [`${part.code} is ${excess}`] : [];
   });
-  if (tooBig.length > 0) return open(name, `Too big for ${volume}: ${listed(tooBig)}.`, true);
-  return allMeasured(parts)
-    ? passed(name, `Every part fits ${volume}.`, true)
-    : open(name, 'Known when every part is measured.', true);
+  if (tooBig.length > 0) return open(name, `Too big for ${volume}: ${listed(tooBig)}.`);
+  return allMeasured(parts) ? passed(name, `Every part fits ${volume}.`) : notKnownYet(name);
 };
 
 const AXES = ['wide', 'deep', 'tall'] as const;
@@ -91,6 +88,12 @@ const excessOf = (
   );
   return over.length > 0 ? over.join(' and ') : null;
 };
+
+/** Nobody can answer for a fault that is not known. */
+const notKnownYet = (name: Gate['name']): Gate => ({
+  ...open(name, 'Known when every part is measured.'),
+  mayBeWaived: false,
+});
 
 const allMeasured = (parts: readonly PartOfRevision[]): boolean =>
   parts.length > 0 && parts.every((part) => part.file?.measured);

@@ -3,6 +3,7 @@ import type { Answer, Handled } from '@windchest/contracts';
 import type { Response } from 'express';
 import { Endpoint, Input } from '../../http/endpoint.js';
 import { PartPreviews } from '../files/part-previews.js';
+import { PrintSheets } from '../print/print-sheets.js';
 import { ShopKits } from './shop-kits.js';
 
 @Controller()
@@ -10,6 +11,7 @@ export class KitsController {
   constructor(
     private readonly kits: ShopKits,
     private readonly previews: PartPreviews,
+    private readonly printSheets: PrintSheets,
   ) {}
 
   @Endpoint('GET /kits')
@@ -32,10 +34,17 @@ export class KitsController {
     @Input() { params, query }: Handled<'GET /kits/:slug/parts/:code/preview'>,
     @Res() response: Response,
   ): Promise<void> {
-    const revisionId = await this.kits.revisionIdOf(params.slug);
+    const revisionId = await this.kits.newestRevisionId(params.slug);
     await this.previews.send(
       { revisionId, part: { code: params.code }, named: query.v, isPublic: true },
       response,
     );
+  }
+
+  @Endpoint('GET /kits/:slug/print')
+  async printSheet(
+    @Input() { params }: Handled<'GET /kits/:slug/print'>,
+  ): Promise<Answer<'GET /kits/:slug/print'>> {
+    return this.printSheets.sheetOf(await this.kits.newestRevisionId(params.slug));
   }
 }

@@ -11,6 +11,7 @@ import { touchRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { HandlesJob, type Finish, type JobHandler } from '../../jobs/job.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { Kit } from '../kits/kit.model.js';
 import { Licence } from '../kits/licence.model.js';
 import { estimatePrint } from '../print/estimate-print.job.js';
@@ -42,6 +43,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     @InjectConfig() private readonly config: Config,
     private readonly contents: RevisionContents,
+    private readonly comparisons: QueueComparisons,
     private readonly storage: Storage,
     private readonly people: People,
     private readonly staffLog: StaffLog,
@@ -112,6 +114,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
       },
       { transaction: tx },
     );
+    await this.comparisons.ofRelease(tx, revisionId);
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;

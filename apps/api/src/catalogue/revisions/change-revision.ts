@@ -7,6 +7,7 @@ import type { SignedIn } from '../../http/person.js';
 import { isDuplicate } from '../../database/errors.js';
 import { Clock } from '../../adapters/clock/clock.js';
 import { notFound, Refusal } from '../../http/refusal.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { RevisionFile } from '../files/revision-file.model.js';
 import { Drafts } from './drafts.js';
 import { Part } from './part.model.js';
@@ -19,6 +20,7 @@ export class ChangeRevision {
     @InjectModel(RevisionFile) private readonly files: typeof RevisionFile,
     private readonly transactions: Transactions,
     private readonly drafts: Drafts,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -61,6 +63,8 @@ export class ChangeRevision {
         if (!part) throw notFound('part');
         const before = Object.fromEntries(Object.keys(body).map((key) => [key, part.get(key) as unknown]));
         await part.update({ ...body, updatedAt: this.clock.now() }, { transaction: tx });
+        // Under another code it follows another part.
+        if (body.code !== before['code']) await this.comparisons.ofDraft(tx, revision.id);
         await this.staffLog.record(tx, person, {
           what: `changed part ${part.code}`,
           subject,

@@ -8,6 +8,7 @@ import { OfferFiles } from '../files/offer-files.js';
 import { PartPreviews } from '../files/part-previews.js';
 import { RemoveFile } from '../files/remove-file.js';
 import { UploadFile } from '../files/upload-file.js';
+import { WaiveGate } from '../gates/waive-gate.js';
 import { RequestRelease } from '../release/request-release.js';
 import { ChangeRevision } from './change-revision.js';
 import { RevisionView } from './revision-view.js';
@@ -23,6 +24,7 @@ export class RevisionsController {
     private readonly uploadFile: UploadFile,
     private readonly removeFile: RemoveFile,
     private readonly comparison: Comparison,
+    private readonly waiveGate: WaiveGate,
     private readonly requestRelease: RequestRelease,
     private readonly previews: PartPreviews,
   ) {}
@@ -126,6 +128,24 @@ export class RevisionsController {
     @Input() input: Handled<'PUT /workshop/revisions/:revisionId/marks'>,
   ): Promise<Answer<'PUT /workshop/revisions/:revisionId/marks'>> {
     return this.comparison.mark(person, input);
+  }
+
+  @Endpoint('PUT /workshop/revisions/:revisionId/waivers/:gate')
+  async waive(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'PUT /workshop/revisions/:revisionId/waivers/:gate'>,
+  ): Promise<RevisionDetail> {
+    await this.waiveGate.waive(person, input);
+    return this.view.read(input.params.revisionId);
+  }
+
+  @Endpoint('DELETE /workshop/revisions/:revisionId/waivers/:gate')
+  async takeWaiverBack(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'DELETE /workshop/revisions/:revisionId/waivers/:gate'>,
+  ): Promise<RevisionDetail> {
+    await this.waiveGate.takeBack(person, input);
+    return this.view.read(input.params.revisionId);
   }
 
   @Endpoint('POST /workshop/revisions/:revisionId/release')

@@ -7,6 +7,7 @@ import { newId } from '../../database/columns.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
 import { notFound, Refusal } from '../../http/refusal.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { RevisionFile } from '../files/revision-file.model.js';
 import { Kit } from '../kits/kit.model.js';
 import { firstRevision } from './first-revision.js';
@@ -26,6 +27,7 @@ export class StartRevision {
     @InjectModel(Part) private readonly parts: typeof Part,
     @InjectModel(RevisionFile) private readonly files: typeof RevisionFile,
     private readonly transactions: Transactions,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -71,6 +73,8 @@ export class StartRevision {
         { transaction: tx },
       );
       if (base) await this.carryContents(tx, base.id, id);
+      // Carried over from an older revision, parts may differ from those of the last one.
+      await this.comparisons.ofDraft(tx, id);
       await kit.update({ updatedAt: now }, { transaction: tx });
       await this.staffLog.record(tx, person, {
         what: 'started a revision',

@@ -25,7 +25,7 @@ const REFUSE = `SIGNAL SQLSTATE '45000' SET MESSAGE_TEXT = 'A released revision 
 const isFinal = (revisionId: string): string =>
   `EXISTS (SELECT 1 FROM revisions WHERE id = ${revisionId} AND state IN ('released', 'withdrawn'))`;
 
-const guardContents = (table: string): string[] =>
+export const guardContents = (table: string): string[] =>
   (['INSERT', 'UPDATE', 'DELETE'] as const).map((verb) => {
     const owners = { INSERT: ['NEW'], UPDATE: ['OLD', 'NEW'], DELETE: ['OLD'] }[verb];
     return `CREATE TRIGGER ${table}_of_released_${verb.toLowerCase()} BEFORE ${verb} ON ${table} FOR EACH ROW

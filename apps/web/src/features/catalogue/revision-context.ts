@@ -15,7 +15,7 @@ export interface RevisionContext {
 export const useRevision = () => useOutletContext<RevisionContext>();
 
 /** Asked again while something goes on: this often, in ms. */
-const lookAgainMs = 1500;
+export const lookAgainMs = 1500;
 
 const isUnmeasured = (revision: RevisionDetail) =>
   revision.parts.some((part) => part.file?.measuring === 'waiting' || part.file?.measuring === 'measuring');
