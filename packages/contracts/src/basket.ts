@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.js';
 import { problemStatus, type ProblemCode } from './problems.js';
+import { lineRight, refund } from './refunds.js';
 import { countryCode, email, filamentColour, id, moment, money, secret } from './values.js';
 
 export const basketItem = z.object({ licenceId: id });
@@ -87,6 +88,9 @@ export const orderLine = z.object({
   price: money,
   discount: money,
   total: money,
+  /** Of the total, what went back. */
+  refunded: money,
+  right: lineRight,
 });
 
 /** An order as its buyer sees it. */
@@ -104,6 +108,8 @@ export const buyerOrder = z.object({
   subtotal: money,
   discount: money,
   total: money,
+  refunded: money,
+  refunds: z.array(refund),
   tax: z.array(z.object({ ratePercent: z.string(), net: money, tax: money })),
   couponCode: z.string().nullable(),
   isMine: z.boolean(),

@@ -4,6 +4,7 @@ import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpo
 import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
+import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
@@ -16,6 +17,7 @@ export const endpoints = {
   ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
+  ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
   ...peopleEndpoints,

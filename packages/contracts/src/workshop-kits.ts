@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { variantClearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { licence, licenceKinds, previewQuery, revisionState } from './kits.js';
 import {
@@ -26,6 +27,7 @@ import {
   offerAnswer,
   gateNames,
   waiverBody,
+  variantBody,
 } from './workshop-revisions.js';
 
 export const revisionSummary = z.object({
@@ -84,6 +86,7 @@ export const licenceBody = z.object({
 const inKit = idParams('kitId');
 const inRevision = idParams('revisionId');
 const atGate = inRevision.extend({ gate: z.enum(gateNames) });
+const ofVariant = idParams('revisionId', 'partId').extend({ clearance: variantClearance });
 
 export const workshopKitEndpoints = {
   'GET /workshop/kits': endpoint({
@@ -196,6 +199,19 @@ export const workshopKitEndpoints = {
     params: idParams('revisionId', 'partId'),
     query: previewQuery,
     response: 'stream',
+  }),
+  'PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
+    access: 'revisions:write',
+    summary: 'Give a part of a draft another clearance: a mesh of the draft becomes its file',
+    params: ofVariant,
+    body: variantBody,
+    response: part,
+  }),
+  'DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
+    access: 'revisions:write',
+    summary: 'Take a clearance of a part, with its file, out of a draft',
+    params: ofVariant,
+    response: part,
   }),
   'GET /workshop/revisions/:revisionId/comparison': endpoint({
     access: 'kits:read',

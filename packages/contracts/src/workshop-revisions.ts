@@ -1,5 +1,6 @@
 /** Revisions as the workshop sees them: files, parts, comparison, gates, release. */
 import { z } from 'zod';
+import { clearance, variantClearance } from './clearances.js';
 import {
   buildVolume,
   drawings,
@@ -55,6 +56,8 @@ export const revisionFile = z.object({
   /** Why a mesh was refused, in a sentence that names the file and the fault. */
   fault: z.string().nullable(),
   partId: id.nullable(),
+  /** Which clearance of its part a mesh is; null for other files. */
+  clearance: clearance.nullable(),
   addedAt: moment,
 });
 export type RevisionFile = z.output<typeof revisionFile>;
@@ -67,9 +70,13 @@ export const part = z.object({
   orientation: z.enum(orientations),
   printSpec: printSpec.nullable(),
   voice: voice.nullable(),
+  /** Tells a buyer which clearance fits their printer. */
+  isGauge: z.boolean(),
   file: revisionFile.nullable(),
   drawings: drawings.nullable(),
   ...previewFields,
+  /** The part in other clearances, tightest first; `file` is the zero. */
+  variants: z.array(z.object({ clearance: variantClearance, file: revisionFile })),
 });
 export type Part = z.output<typeof part>;
 
@@ -83,7 +90,9 @@ export const partBody = z.object({
   orientation: z.enum(orientations),
   printSpec: printSpec.nullable(),
   voice: voice.nullable(),
+  isGauge: z.boolean().default(false),
 });
+export const variantBody = z.object({ fileId: id });
 
 export const differenceKind = z.enum(['same', 're-exported', 'changed', 'new', 'dropped']);
 export const reprintMark = z.enum(['reprint needed', 'reprint if it troubles you']);
@@ -119,6 +128,8 @@ export const comparisonRow = z.object({
   deviation: deviation.nullable(),
   mark: reprintMark.nullable(),
   reason: z.string(),
+  /** Clearance by clearance, the zero too, where the part comes in several; `difference` is the strongest of them. */
+  variants: z.array(z.object({ clearance, difference: differenceKind, whatDiffers: z.string() })),
 });
 export const comparison = z.object({
   with: z.object({ id, label: z.string() }).nullable(),
@@ -189,7 +200,10 @@ export const revisionDetail = z.object({
   documents: z.array(revisionFile),
   gates: z.array(gate),
   release: releaseProgress,
+  /** Holds every clearance. */
   bundle: z.object({ sha256, bytes: z.int() }).nullable(),
+  /** One for each clearance, where parts come in several. */
+  bundles: z.array(z.object({ clearance, sha256, bytes: z.int() })),
   totalBytes: z.int(),
   limits: z.object({ fileBytes: z.int(), revisionBytes: z.int() }),
 });

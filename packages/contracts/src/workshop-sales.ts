@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { buyerOrder, couponCode, orderState } from './basket.js';
 import { endpoint } from './endpoint.js';
+import { dispute, workshopRefund } from './refunds.js';
 import { countryCode, id, idParams, line, minor, moment, money, pageOf, pageQuery } from './values.js';
 
 /** What a coupon takes off: an exact fraction (a third is 1/3, 15 % is 15/100) or a fixed amount. */
@@ -65,6 +66,7 @@ export const orderRow = z.object({
   country: countryCode,
   kits: z.array(z.string()),
   total: money,
+  refunded: money,
   couponCode: z.string().nullable(),
   receiptNumber: z.string().nullable(),
   flags: z.array(z.string()),
@@ -72,10 +74,15 @@ export const orderRow = z.object({
   paidAt: moment.nullable(),
 });
 
+/** Orders of which money went back, also in part; orders whose payment was ever in dispute. */
+export const moneyBack = z.enum(['refunded', 'disputed']);
+
 export const orderHistoryEntry = z.object({ at: moment, what: z.string(), detail: z.string() });
 export const workshopOrder = buyerOrder.extend({
   country: countryCode,
   flags: z.array(z.string()),
+  refunds: z.array(workshopRefund),
+  disputes: z.array(dispute),
   paymentSessionId: z.string().nullable(),
   paymentIntentId: z.string().nullable(),
   consentText: z.string(),
@@ -152,6 +159,7 @@ export const workshopSalesEndpoints = {
     summary: 'Orders, filtered, searched, paged',
     query: pageQuery.extend({
       state: orderState.optional(),
+      moneyBack: moneyBack.optional(),
       /** `1`: only those that staff should look at. */
       flagged: z.enum(['1']).optional(),
       sort: z.enum(['placedAt', 'total', 'number']).default('placedAt'),
@@ -162,7 +170,11 @@ export const workshopSalesEndpoints = {
   'GET /workshop/orders.csv': endpoint({
     access: 'orders:read',
     summary: 'The same orders as CSV',
-    query: pageQuery.extend({ state: orderState.optional(), flagged: z.enum(['1']).optional() }),
+    query: pageQuery.extend({
+      state: orderState.optional(),
+      moneyBack: moneyBack.optional(),
+      flagged: z.enum(['1']).optional(),
+    }),
     response: 'stream',
   }),
   'GET /workshop/orders/:orderId': endpoint({

@@ -76,17 +76,40 @@ export type NewDownloadLinkMessage = {
   kits: string[];
 };
 
-/** `endedKits` leave the shelf with this refund; `keptKits` stay although money went back. */
+/**
+ * `endedKits` leave the shelf with this refund; `keptKits` stay although money went back. `cause`: the workshop gave
+ * it back, or the buyer's bank took it back in a dispute. `lines` say what went back for which kit.
+ */
 export type OrderRefundedMessage = {
   template: 'order-refunded';
+  cause?: 'refund' | 'dispute';
   name?: string;
   orderNumber: string;
   receiptNumber: string;
   creditNoteNumber: string;
   amount: Money;
   tax?: TaxLine[];
+  lines?: { kit: string; licence: string; amount: Money; endsRight: boolean }[];
+  /** It lowered what was paid, and stays used. */
+  couponCode?: string;
   endedKits: string[];
   keptKits?: string[];
+  orderLink: string;
+};
+
+/**
+ * To staff: a buyer's bank asks for the money of an order back, or has decided. `reason` is the payment service's own
+ * word; `answerBy` an ISO 8601 instant until which evidence may be handed in there.
+ */
+export type PaymentDisputedMessage = {
+  template: 'payment-disputed';
+  name: string;
+  orderNumber: string;
+  buyer: string;
+  stand: 'inquiry' | 'open' | 'won' | 'lost' | 'closed';
+  amount: Money;
+  reason: string;
+  answerBy?: string;
   orderLink: string;
 };
 
@@ -140,6 +163,7 @@ export type EmailMessage =
   | OrderPaidMessage
   | NewDownloadLinkMessage
   | OrderRefundedMessage
+  | PaymentDisputedMessage
   | StaffInviteMessage
   | RevisionReleasedMessage
   | GiftReceivedMessage;

@@ -94,6 +94,7 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'order-paid': true,
     'new-download-link': true,
     'order-refunded': true,
+    'payment-disputed': true,
     'staff-invite': true,
     'revision-released': true,
     'gift-received': true,
@@ -177,11 +178,35 @@ describe('the mail of a refund', () => {
     expect(text).toContain('your right to the files of Curlew ends. It is no longer on your shelf.');
     expect(text).toContain('Reed Bunting stays on your shelf.');
     expect(text).toContain('Credit note: 2026-C00012');
+    expect(text).toContain('The coupon FIRSTWIND that lowered the price stays used.');
   });
 
   it('says neither where staff keep everything as it was', () => {
     const message = sampleOf('order-refunded', { endedKits: [], keptKits: [] });
     expect(renderEmail(message, sampleWorkshop).text).not.toContain('shelf');
+  });
+
+  it('names the bank where it took the money back in a dispute', () => {
+    const { subject, text } = renderEmail(sampleOf('order-refunded', { cause: 'dispute' }), sampleWorkshop);
+    expect(subject).toBe('Credit note over €21.00 for order W-2026-0417');
+    expect(unwrapped(text)).toContain('Your bank has given you back €21.00 that you had disputed.');
+  });
+});
+
+describe('the mail of a dispute', () => {
+  const text = (message: object = {}): string =>
+    unwrapped(renderEmail(sampleOf('payment-disputed', message), sampleWorkshop).text);
+
+  it('says what the bank has done, what rests and until when to answer', () => {
+    expect(text()).toContain('has taken €24.00 back until it has decided. Downloads of this order rest');
+    expect(text()).toContain('Reason given: product not received');
+    expect(text()).toContain('Answer by: 10 December 2026');
+  });
+
+  it('asks for no answer once it is decided', () => {
+    expect(text({ stand: 'won' })).toContain('€24.00 stays with the workshop.');
+    expect(text({ stand: 'won' })).not.toContain('Answer by');
+    expect(text({ stand: 'lost' })).toContain('A credit note is written');
   });
 });
 
@@ -210,6 +235,8 @@ describe('the mail of a new revision', () => {
 });
 
 describe('hostile input', () => {
+  /** Told apart by the code, never shown. */
+  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause'];
   const attack = `<img src=x onerror="alert('1')">&amp;`;
 
   it('is escaped wherever a message or the workshop carries it', () => {
@@ -226,7 +253,7 @@ describe('hostile input', () => {
       return Object.fromEntries(
         Object.entries(value).map(([key, item]: [string, unknown]) => [
           key,
-          key === 'template' || key === 'currency' ? item : poisoned(item),
+          WORDS_OF_OURS.includes(key) ? item : poisoned(item),
         ]),
       );
     };

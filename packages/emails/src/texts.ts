@@ -119,6 +119,15 @@ export const texts = {
     heading: (amount: string): string => `${amount} is on its way back`,
     body: (amount: string): string =>
       `${amount} goes back to the card or account you paid with. The bank may take some days to show it.`,
+    disputeSubject: (amount: string, order: string): string =>
+      `Credit note over ${amount} for order ${order}`,
+    disputeHeading: 'Your bank has decided',
+    disputeBody: (amount: string): string =>
+      `Your bank has given you back ${amount} that you had disputed. Here is the credit note for it.`,
+    lineDetail: (licence: string, endsRight: boolean): string =>
+      endsRight ? `${licence}, right to the files ends` : licence,
+    total: 'Goes back',
+    couponIsSpent: (code: string): string => `The coupon ${code} that lowered the price stays used.`,
     ended: (kits: readonly string[]): string =>
       kits.length === 1
         ? `With this refund your right to the files of ${listOf(kits)} ends. It is no longer on your shelf.`
@@ -132,6 +141,41 @@ export const texts = {
     creditNoteLabel: 'Credit note',
     amountLabel: 'Refunded',
     reason: 'You get this because money for an order of yours was refunded.',
+  },
+
+  paymentDisputed: {
+    subjects: {
+      inquiry: (order: string): string => `The bank asks about the payment of order ${order}`,
+      open: (order: string): string => `Dispute over order ${order}: answer it in time`,
+      won: (order: string): string => `Dispute over order ${order}: decided for the workshop`,
+      lost: (order: string): string => `Dispute over order ${order}: lost`,
+      closed: (order: string): string => `The bank’s question about order ${order} is closed`,
+    },
+    headings: {
+      inquiry: 'The bank asks about a payment',
+      open: 'A payment is in dispute',
+      won: 'The dispute is won',
+      lost: 'The dispute is lost',
+      closed: 'The question is closed',
+    },
+    bodies: {
+      inquiry: (amount: string): string =>
+        `The buyer’s bank asks about ${amount}. No money is taken yet, and the buyer’s files stay open. Answer at the payment service, or give the money back.`,
+      open: (amount: string): string =>
+        `The buyer’s bank has taken ${amount} back until it has decided. Downloads of this order rest meanwhile. Hand in at the payment service what shows that the files were asked for and fetched; the order’s page has the consent and the downloads.`,
+      won: (amount: string): string => `${amount} stays with the workshop. The buyer’s files are open again.`,
+      lost: (amount: string): string =>
+        `${amount} stays with the buyer. A credit note is written and the right to the files has ended.`,
+      closed: (): string => 'No money was taken. Nothing is left to do.',
+    },
+    preheader: (buyer: string): string => `Bought by ${buyer}.`,
+    button: 'Open the order',
+    orderLabel: 'Order',
+    buyerLabel: 'Buyer',
+    amountLabel: 'Amount',
+    reasonLabel: 'Reason given',
+    answerByLabel: 'Answer by',
+    reason: 'You get this because you look after the workshop’s money. These mails cannot be turned off.',
   },
 
   staffInvite: {

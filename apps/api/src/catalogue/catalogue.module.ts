@@ -9,6 +9,7 @@ import { MeshComparisonRecord } from './comparison/mesh-comparison.model.js';
 import { MeshComparisons } from './comparison/mesh-comparisons.js';
 import { QueueComparisons } from './comparison/queue-comparisons.js';
 import { AttachFile } from './files/attach-file.js';
+import { MeshPlaces } from './files/mesh-places.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
 import { OfferFiles } from './files/offer-files.js';
@@ -35,10 +36,14 @@ import { KitsTooBig } from './print/kits-too-big.js';
 import { PrintPlans } from './print/print-plans.js';
 import { PrintSheets } from './print/print-sheets.js';
 import { BuildRelease } from './release/build-release.js';
+import { ReleasedBundles } from './release/released-bundles.js';
 import { RequestRelease } from './release/request-release.js';
 import { TidyDraft } from './release/tidy-draft.js';
+import { RevisionBundle } from './release/revision-bundle.model.js';
 import { ChangeRevision } from './revisions/change-revision.js';
+import { ChangeVariants } from './revisions/change-variants.js';
 import { Drafts } from './revisions/drafts.js';
+import { PartVariant } from './revisions/part-variant.model.js';
 import { Part } from './revisions/part.model.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { RevisionView } from './revisions/revision-view.js';
@@ -53,7 +58,9 @@ import { StartRevision } from './revisions/start-revision.js';
       Kit,
       Licence,
       Revision,
+      RevisionBundle,
       Part,
+      PartVariant,
       RevisionFile,
       StoredFile,
       MeasurementRecord,
@@ -74,6 +81,7 @@ import { StartRevision } from './revisions/start-revision.js';
     RevisionView,
     StartRevision,
     ChangeRevision,
+    ChangeVariants,
     Differences,
     MeshComparisons,
     QueueComparisons,
@@ -83,10 +91,12 @@ import { StartRevision } from './revisions/start-revision.js';
     MeasurementRecords,
     RenewMeasurements,
     PartPreviews,
+    MeshPlaces,
     AttachFile,
     OfferFiles,
     UploadFile,
     RemoveFile,
+    ReleasedBundles,
     RequestRelease,
     TidyDraft,
     BuildRelease,

@@ -1,14 +1,16 @@
 import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
-import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
+import * as partVariants from './migrations/0010-part-variants.js';
+import * as refunds from './migrations/0011-refunds.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -20,6 +22,8 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0007-print-profiles': printProfiles,
   '0008-mesh-comparisons': meshComparisons,
   '0009-printer-cards': printerCards,
+  '0010-part-variants': partVariants,
+  '0011-refunds': refunds,
 };
 
 /**

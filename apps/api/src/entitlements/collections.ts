@@ -28,20 +28,21 @@ export class Collections {
     const link = await this.links.byToken(token);
     const order = await this.orders.byId(link.orderId);
     if (!order) throw notFound('order');
-    const active = await this.entitlements.findAll({
-      where: { orderId: link.orderId, state: 'active' },
+    const left = await this.entitlements.findAll({
+      where: { orderId: link.orderId, state: ['active', 'suspended'] },
       order: [
         ['createdAt', 'ASC'],
         ['id', 'ASC'],
       ],
     });
+    const active = left.filter((one) => one.state === 'active');
     const state = this.links.stateOf(link);
     const kits = await this.kitsOf(active);
     return {
       orderNumber: order.number,
       expiresAt: link.expiresAt.toISOString(),
       usesLeft: link.usesLeft,
-      state: active.length === 0 ? 'ended' : state,
+      state: active.length > 0 ? state : left.length > 0 ? 'suspended' : 'ended',
       kits: state === 'replaced' ? [] : kits,
     };
   }

@@ -9,6 +9,7 @@ import { DownloadLink } from './download-link.model.js';
 import { DownloadLinks } from './download-links.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holders } from './holders.js';
@@ -31,6 +32,7 @@ import { SignedAddress } from './signed-address.js';
     FileGrants,
     ServeFile,
     GiveEntitlements,
+    FollowOrderRights,
     Collections,
     Shelf,
     Holders,

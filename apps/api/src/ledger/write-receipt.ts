@@ -1,10 +1,13 @@
 import { Injectable, type OnModuleInit } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import { money, percent, taxFromGross } from '@windchest/money';
+import { money, parseMoney, percent, taxFromGross } from '@windchest/money';
+import { InjectConfig, type Config } from '../config/config.js';
 import type { Tx } from '../database/transactions.js';
 import { OrderPaidSteps, type PaidOrder } from '../orders/order-paid-steps.js';
 import { NumberSeries } from './number-series.js';
+import type { ReceiptBuyer } from './receipt-parties.js';
 import { Receipt } from './receipt.model.js';
+import { sellerOf } from './seller.js';
 import { TaxRates } from './tax-rates.js';
 
 const SERIES = 'receipt';
@@ -14,6 +17,7 @@ const SERIES = 'receipt';
 export class WriteReceipt implements OnModuleInit {
   constructor(
     @InjectModel(Receipt) private readonly receipts: typeof Receipt,
+    @InjectConfig() private readonly config: Config,
     private readonly numbers: NumberSeries,
     private readonly rates: TaxRates,
     private readonly orderPaid: OrderPaidSteps,
@@ -34,6 +38,7 @@ export class WriteReceipt implements OnModuleInit {
     await this.receipts.create(
       {
         orderId: order.id,
+        orderNumber: order.number,
         series: SERIES,
         year,
         number,
@@ -42,11 +47,29 @@ export class WriteReceipt implements OnModuleInit {
         totalMinor: order.totalMinor,
         country: order.country,
         tax: [{ country: order.country, ...line }],
+        buyer: this.buyerOf(order),
+        seller: sellerOf(this.config),
+        lines: order.lines.map((one) => ({
+          orderLineId: one.id,
+          kit: one.kitName,
+          licence: one.licenceName,
+          revision: one.revisionLabel,
+          priceMinor: one.priceMinor,
+          discountMinor: one.discountMinor,
+          totalMinor: one.totalMinor,
+          ratePercent,
+        })),
         issuedAt: order.paidAt,
       },
       { transaction: tx },
     );
     order.facts.receiptNumber = label;
     order.facts.tax = [line];
+  }
+
+  private buyerOf({ email, country, billing, totalMinor, currency }: PaidOrder): ReceiptBuyer {
+    const limit = parseMoney(String(this.config.SIMPLE_RECEIPT_UP_TO), currency).minor;
+    if (totalMinor <= limit || !billing?.name || billing.lines.length === 0) return { email, country };
+    return { email, country, name: billing.name, address: billing.lines };
   }
 }

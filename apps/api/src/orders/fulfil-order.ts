@@ -48,7 +48,7 @@ export class FulfilOrder {
       if (fault) return this.flags.set(tx, order, 'amount-differs', fault);
       await this.markPaid(tx, order, payment);
       await this.coupons.redeem(tx, order.id);
-      await this.handOver(tx, order);
+      await this.handOver(tx, order, payment);
     }, 'read-committed');
   }
 
@@ -93,7 +93,7 @@ export class FulfilOrder {
       );
   }
 
-  private async handOver(tx: Tx, order: Order): Promise<void> {
+  private async handOver(tx: Tx, order: Order, payment: Payment | null): Promise<void> {
     const lines = await this.lines.findAll({
       where: { orderId: order.id },
       order: [['position', 'ASC']],
@@ -101,9 +101,10 @@ export class FulfilOrder {
     });
     const { country } = locate(order.declaredCountry, order.paymentCountry, order.cardCountry);
     const paid: PaidOrder = {
-      ...(order.get({ plain: true }) as Omit<PaidOrder, 'lines' | 'country' | 'facts'>),
+      ...(order.get({ plain: true }) as Omit<PaidOrder, 'lines' | 'country' | 'billing' | 'facts'>),
       lines: lines.map((line) => line.get({ plain: true })),
       country,
+      billing: payment && { name: payment.session.billingName, lines: payment.session.billingLines },
       facts: {},
     };
     await this.steps.run(tx, paid);

@@ -8,10 +8,11 @@ import type { OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
 
 export type OrderQuery = Handled<'GET /workshop/orders'>['query'];
-export type OrderFilter = Pick<OrderQuery, 'state' | 'flagged' | 'search'>;
+export type OrderFilter = Pick<OrderQuery, 'state' | 'moneyBack' | 'flagged' | 'search'>;
 type Row = Answer<'GET /workshop/orders'>['items'][number];
 
 const PORTION = 500;
+const WAS_DISPUTED = 'EXISTS (SELECT 1 FROM disputes d WHERE d.order_id = `Order`.id)';
 
 /** The workshop's list of orders: a page of it for the screen, all of it for an export. */
 @Injectable()
@@ -81,11 +82,15 @@ const below = (last: Order): WhereOptions => ({
   ],
 });
 
-const whereOf = ({ state, flagged, search }: OrderFilter): WhereOptions => {
+const whereOf = ({ state, moneyBack, flagged, search }: OrderFilter): WhereOptions => {
   const like = `%${search ?? ''}%`;
   return {
     ...(state ? { state } : {}),
-    ...(flagged ? { [Op.and]: literal('JSON_LENGTH(flags) > 0') } : {}),
+    ...(moneyBack === 'refunded' ? { refundedMinor: { [Op.gt]: 0 } } : {}),
+    [Op.and]: [
+      ...(flagged ? [literal('JSON_LENGTH(flags) > 0')] : []),
+      ...(moneyBack === 'disputed' ? [literal(WAS_DISPUTED)] : []),
+    ],
     ...(search
       ? {
           [Op.or]: [
@@ -106,6 +111,7 @@ const toRow = (order: Order, kits: string[]): Row => ({
   country: locate(order.declaredCountry, order.paymentCountry, order.cardCountry).country,
   kits,
   total: { minor: order.totalMinor, currency: order.currency },
+  refunded: { minor: order.refundedMinor, currency: order.currency },
   couponCode: order.couponCode,
   receiptNumber: order.receiptNumber,
   flags: order.flags,

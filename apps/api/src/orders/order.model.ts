@@ -15,6 +15,7 @@ export class Order extends Model {
   @Column(DataType.INTEGER.UNSIGNED) declare subtotalMinor: number;
   @Column(DataType.INTEGER.UNSIGNED) declare discountMinor: number;
   @Column(DataType.INTEGER.UNSIGNED) declare totalMinor: number;
+  @Column(DataType.INTEGER.UNSIGNED) declare refundedMinor: number;
   @Column(DataType.CHAR(36)) declare couponId: string | null;
   @Column(DataType.STRING(40)) declare couponCode: string | null;
   @Column(DataType.CHAR(2)) declare declaredCountry: string;

@@ -3,10 +3,12 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Sequelize } from 'sequelize';
 import { selectRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
+import type { SignedIn } from '../http/person.js';
 import { ListOrders, type OrderFilter } from './list-orders.js';
 import { OrderLine } from './order-line.model.js';
 import type { OrderLineRecord, OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
+import { OwnOrders } from './own-orders.js';
 
 export interface DaySales {
   /** ISO date, in UTC. */
@@ -23,10 +25,16 @@ export class OrdersReader {
     @InjectModel(Order) private readonly orders: typeof Order,
     @InjectModel(OrderLine) private readonly lines: typeof OrderLine,
     private readonly listing: ListOrders,
+    private readonly own: OwnOrders,
   ) {}
 
   byId(id: string, tx?: Tx): Promise<OrderRecord | null> {
     return this.orders.findByPk(id, { transaction: tx ?? null });
+  }
+
+  /** @throws Refusal `not-found`, alike where there is no such order and where it is not theirs */
+  ofBuyer(id: string, person: SignedIn | null, key: string | undefined): Promise<OrderRecord> {
+    return this.own.find(id, person, key);
   }
 
   linesOf(orderId: string, tx?: Tx): Promise<OrderLineRecord[]> {

@@ -132,6 +132,9 @@ export const gateOf = (revision: RevisionDetail, name: Gate['name']): Gate =>
   revision.gates.find((gate) => gate.name === name)!;
 
 export const release = async (shop: TestApp, maker: Browser, revisionId: string): Promise<RevisionDetail> => {
+  // As the page does: the gates are read, and what they wait for is done.
+  await readRevision(maker, revisionId);
+  await shop.drain();
   await maker.post(`/api/workshop/revisions/${revisionId}/release`).expect(202);
   await shop.drain();
   return readRevision(maker, revisionId);

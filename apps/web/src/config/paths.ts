@@ -65,6 +65,7 @@ export const paths = {
     coupon: route('/workshop/coupons/:couponId'),
     orders: route('/workshop/orders'),
     order: route('/workshop/orders/:orderId'),
+    receipts: route('/workshop/receipts'),
     holders: route('/workshop/holders'),
     people: route('/workshop/people'),
     log: route('/workshop/log'),

@@ -67,24 +67,40 @@ export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): E
 
 export function orderRefunded(message: OrderRefundedMessage, workshop: EmailWorkshop): EmailContent {
   const words = texts.orderRefunded;
-  const amount = formatMoney(message.amount, workshop.locale);
+  const show = (amount: Money): string => formatMoney(amount, workshop.locale);
+  const amount = show(message.amount);
+  const isDispute = message.cause === 'dispute';
+  const { lines = [], keptKits = [], endedKits, tax = [] } = message;
   const kits: EmailBlock[] = [];
-  if (message.endedKits.length > 0) kits.push(say(words.ended(message.endedKits)));
-  if (message.keptKits && message.keptKits.length > 0) kits.push(say(words.kept(message.keptKits)));
-  const taxCells = (message.tax ?? []).map((line) => ({
-    label: words.taxWithin(texts.unbroken(line.rateLabel)),
-    value: formatMoney(line.amount, workshop.locale),
-  }));
+  if (endedKits.length > 0) kits.push(say(words.ended(endedKits)));
+  if (keptKits.length > 0) kits.push(say(words.kept(keptKits)));
+  if (message.couponCode) kits.push({ ...say(words.couponIsSpent(message.couponCode)), isSoft: true });
 
   return {
-    subject: words.subject(amount, message.orderNumber),
+    subject: (isDispute ? words.disputeSubject : words.subject)(amount, message.orderNumber),
     preheader: words.preheader(message.creditNoteNumber),
-    heading: words.heading(amount),
+    heading: isDispute ? words.disputeHeading : words.heading(amount),
     blocks: [
       say(texts.hello(greetedName(message.name))),
-      say(words.body(amount)),
+      say(isDispute ? words.disputeBody(amount) : words.body(amount)),
       ...kits,
       { kind: 'button', label: words.button, link: message.orderLink },
+      {
+        kind: 'price-table',
+        rows: lines.map((line) => ({
+          title: line.kit,
+          detail: words.lineDetail(line.licence, line.endsRight),
+          amount: show(line.amount),
+        })),
+        sums: [
+          { label: words.total, amount, isTotal: true },
+          ...tax.map((line) => ({
+            label: words.taxWithin(texts.unbroken(line.rateLabel)),
+            amount: show(line.amount),
+            isSoft: true,
+          })),
+        ],
+      },
       {
         kind: 'title-block',
         cells: [
@@ -92,7 +108,6 @@ export function orderRefunded(message: OrderRefundedMessage, workshop: EmailWork
           { label: words.receiptLabel, value: message.receiptNumber },
           { label: words.creditNoteLabel, value: message.creditNoteNumber },
           { label: words.amountLabel, value: amount },
-          ...taxCells,
         ],
       },
     ],

@@ -17,6 +17,8 @@ const part = (
   voice: null,
   mark: null,
   reason: '',
+  isGauge: false,
+  variants: [],
   file: {
     id: 'f',
     sha256,

@@ -1,4 +1,5 @@
-import type { Comparison } from '@windchest/contracts';
+import { clearances, type Comparison } from '@windchest/contracts';
+import { fileAt } from '../revisions/part-files.js';
 import type { FileOfRevision, PartOfRevision } from '../revisions/revision-contents.js';
 import { deviationOf } from './deviation.js';
 import type { KnownComparison, MeshPair } from './mesh-comparisons.js';
@@ -18,6 +19,18 @@ export const meshPairOf = (before: PartOfRevision | null, after: PartOfRevision 
   const [old, now] = [before?.file, after?.file];
   if (!old?.measured || !now?.measured || old.sha256 === now.sha256 || isSameHash(old, now)) return null;
   return { beforeSha: old.sha256, afterSha: now.sha256 };
+};
+
+/** All pairs of a part, clearance by clearance. */
+export const meshPairsOf = (before: PartOfRevision | null, after: PartOfRevision | null): MeshPair[] => {
+  if (!before || !after) return [];
+  const pairs = clearances.map((clearance) =>
+    meshPairOf({ ...before, file: fileAt(before, clearance) }, { ...after, file: fileAt(after, clearance) }),
+  );
+  const byName = new Map(
+    pairs.flatMap((pair) => (pair ? [[`${pair.beforeSha} ${pair.afterSha}`, pair]] : [])),
+  );
+  return [...byName.values()];
 };
 
 /**

@@ -22,6 +22,9 @@ export type KnownComparison =
   | { readonly state: 'failed'; readonly fault: string }
   | { readonly state: 'compared'; readonly result: MeshComparison };
 
+/** What is known of a pair of meshes at this moment. */
+export type Knowledge = (pair: MeshPair) => KnownComparison;
+
 /** What came of comparing two meshes: once for each pair, wherever it occurs. */
 @Injectable()
 export class MeshComparisons {
@@ -33,10 +36,7 @@ export class MeshComparisons {
   ) {}
 
   /** What is known of some pairs, and which of them nobody has asked for yet. */
-  async known(
-    pairs: readonly MeshPair[],
-    tx?: Tx,
-  ): Promise<{ of: (pair: MeshPair) => KnownComparison; unasked: MeshPair[] }> {
+  async known(pairs: readonly MeshPair[], tx?: Tx): Promise<{ of: Knowledge; unasked: MeshPair[] }> {
     const rows = pairs.length > 0 ? await this.rowsOf(pairs, tx) : [];
     const byPair = new Map(rows.map((row) => [nameOf(row), row]));
     return {

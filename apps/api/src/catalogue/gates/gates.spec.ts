@@ -53,6 +53,8 @@ const part = (over: Partial<PartOfRevision> = {}): PartOfRevision => ({
   voice: null,
   mark: null,
   reason: '',
+  isGauge: false,
+  variants: [],
   file: file(),
   ...over,
 });
@@ -85,6 +87,7 @@ const changed = (over: Partial<Comparison['rows'][number]>): Comparison['rows'][
   deviation: null,
   mark: null,
   reason: '',
+  variants: [],
   ...over,
 });
 
@@ -126,6 +129,22 @@ describe('the gate', () => {
       reason: 'Not watertight: J-01 (3 open edges, 1 edge with its sides turned).',
     });
     expect(watertight(facts({ parts: [part({ file: null })] })).state).toBe('open');
+  });
+
+  it('parts-measured, watertight and fits-build-volume look at every clearance of a part', () => {
+    const inPlus = (over: Partial<FileOfRevision>) =>
+      facts({ parts: [part({ variants: [{ clearance: 'plus', file: file(over) }] })] });
+    expect(partsMeasured(inPlus({}))).toMatchObject({ state: 'passed', reason: '1 part measured.' });
+    expect(partsMeasured(inPlus({ measuring: 'waiting', measured: null }))).toMatchObject({
+      state: 'open',
+      reason: 'J-01 + is being measured.',
+    });
+    const leaking = measured([1, 1, 1], { watertight: false, openEdges: 3 });
+    expect(watertight(inPlus({ measured: leaking })).reason).toBe('Not watertight: J-01 + (3 open edges).');
+    expect(watertight(inPlus({ measured: null })).state).toBe('open');
+    expect(fitsBuildVolume(inPlus({ measured: measured([10, 10, 190]) })).reason).toContain(
+      'J-01 + is 90.0 mm too tall',
+    );
   });
 
   it.each([

@@ -1,4 +1,5 @@
 import type { Gate } from '@windchest/contracts';
+import { eachMesh } from '../revisions/part-files.js';
 import type { PartOfRevision } from '../revisions/revision-contents.js';
 import type { BuildVolume } from '../revisions/revision.model.js';
 import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
@@ -6,11 +7,12 @@ import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
 export const partsMeasured: GateCheck = ({ parts }) => {
   const name = 'parts-measured';
   if (parts.length === 0) return open(name, 'There are no parts yet. Upload their meshes.');
+  const meshes = eachMesh(parts);
   const faults = [
     ...saying(parts, (part) => !part.file, 'has no file', 'have no file'),
-    ...parts.flatMap(({ file }) => (file?.measuring === 'refused' && file.fault ? [file.fault] : [])),
+    ...meshes.flatMap(({ file }) => (file?.measuring === 'refused' && file.fault ? [file.fault] : [])),
     ...saying(
-      parts,
+      meshes,
       ({ file }) => file?.measuring === 'waiting' || file?.measuring === 'measuring',
       'is being measured',
       'are being measured',
@@ -23,7 +25,7 @@ export const partsMeasured: GateCheck = ({ parts }) => {
 
 export const watertight: GateCheck = ({ parts }) => {
   const name = 'watertight';
-  const leaks = parts.flatMap(({ code, file }) => {
+  const leaks = eachMesh(parts).flatMap(({ code, file }) => {
     if (!file?.measured || file.measured.watertight) return [];
     const { openEdges, nonManifoldEdges, windingFaults, shells } = file.measured;
     const faults = [
@@ -51,7 +53,7 @@ export const watertight: GateCheck = ({ parts }) => {
 export const fitsBuildVolume: GateCheck = ({ parts, revision: { buildVolume } }) => {
   const name = 'fits-build-volume';
   const volume = `${buildVolume.xMm} × ${buildVolume.yMm} × ${buildVolume.zMm} mm`;
-  const tooBig = parts.flatMap((part) => {
+  const tooBig = eachMesh(parts).flatMap((part) => {
     const excess = part.file?.measured && excessOf(part, part.file.measured.sizeMm, buildVolume);
     return excess ? [`${part.code} is ${excess}`] : [];
   });
@@ -96,7 +98,7 @@ const notKnownYet = (name: Gate['name']): Gate => ({
 });
 
 const allMeasured = (parts: readonly PartOfRevision[]): boolean =>
-  parts.length > 0 && parts.every((part) => part.file?.measured);
+  parts.length > 0 && eachMesh(parts).every((part) => part.file?.measured);
 
 const saying = (
   parts: readonly PartOfRevision[],

@@ -11,6 +11,7 @@ import { UploadFile } from '../files/upload-file.js';
 import { WaiveGate } from '../gates/waive-gate.js';
 import { RequestRelease } from '../release/request-release.js';
 import { ChangeRevision } from './change-revision.js';
+import { ChangeVariants } from './change-variants.js';
 import { RevisionView } from './revision-view.js';
 import { StartRevision } from './start-revision.js';
 
@@ -20,6 +21,7 @@ export class RevisionsController {
     private readonly view: RevisionView,
     private readonly startRevision: StartRevision,
     private readonly changeRevision: ChangeRevision,
+    private readonly changeVariants: ChangeVariants,
     private readonly offerFiles: OfferFiles,
     private readonly uploadFile: UploadFile,
     private readonly removeFile: RemoveFile,
@@ -113,6 +115,24 @@ export class RevisionsController {
       { revisionId, part: { id: partId }, named: query.v, isPublic: false },
       response,
     );
+  }
+
+  @Endpoint('PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance')
+  async giveVariant(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance'>,
+  ): Promise<Answer<'PUT /workshop/revisions/:revisionId/parts/:partId'>> {
+    await this.changeVariants.give(person, input);
+    return this.view.part(input.params.revisionId, input.params.partId);
+  }
+
+  @Endpoint('DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance')
+  async takeVariant(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance'>,
+  ): Promise<Answer<'PUT /workshop/revisions/:revisionId/parts/:partId'>> {
+    await this.changeVariants.take(person, input);
+    return this.view.part(input.params.revisionId, input.params.partId);
   }
 
   @Endpoint('GET /workshop/revisions/:revisionId/comparison')

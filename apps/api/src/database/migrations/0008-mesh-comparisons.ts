@@ -1,4 +1,4 @@
-import { guardContents } from './0005-released-is-final.js';
+import { guardContents } from './released-guards.js';
 import { inOrder } from './statements.js';
 
 const SHA = 'CHAR(64) CHARACTER SET ascii COLLATE ascii_bin';

@@ -18,6 +18,7 @@ const entries: readonly (HeaderEntry & { needs: Permission })[] = [
   { to: paths.workshop.overview.to(), label: workshopTexts.overview, isExact: true, needs: 'workshop:enter' },
   { to: paths.workshop.kits.to(), label: workshopTexts.kits, needs: 'kits:read' },
   { to: paths.workshop.orders.to(), label: workshopTexts.orders, needs: 'orders:read' },
+  { to: paths.workshop.receipts.to(), label: workshopTexts.receipts, needs: 'orders:read' },
   { to: paths.workshop.coupons.to(), label: workshopTexts.coupons, needs: 'coupons:read' },
   { to: paths.workshop.holders.to(), label: workshopTexts.holders, needs: 'buyers:read' },
   { to: paths.workshop.people.to(), label: workshopTexts.people, needs: 'people:read' },

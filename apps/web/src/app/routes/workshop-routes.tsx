@@ -78,6 +78,10 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/ledger/order.page.js')).WorkshopOrderPage),
   },
   {
+    path: paths.workshop.receipts.path,
+    element: lazyPage(async () => (await import('../../features/ledger/receipts.page.js')).ReceiptsPage),
+  },
+  {
     path: paths.workshop.holders.path,
     element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
   },

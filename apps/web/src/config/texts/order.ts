@@ -30,6 +30,8 @@ export const orderTexts = {
   paidLead: (email: string) => `We have written to ${email}.`,
   nothingCharged: 'Nothing was charged.',
   refundedLead: 'What you paid goes back the way it came. Your bank may take some days.',
+  lostLead: 'Your bank gave you back what you paid. The right to the files has ended.',
+  restingLead: 'The payment is in dispute. Downloads of this order rest until the bank has decided.',
 
   payUntil: (when: string) => `The payment page stays open until ${when}.`,
   notHeard: 'The payment service cannot be reached just now. This page goes on asking.',
@@ -57,6 +59,19 @@ export const orderTexts = {
   accountWhy: 'Join with this address, and the kits stand on your shelf with every later revision.',
   join: 'Join',
   seeKits: 'See the kits',
+
+  papers: 'Papers',
+  receiptPdf: (number: string) => `Receipt ${number}`,
+  creditNotePdf: (number: string) => `Credit note ${number}`,
+  pdf: 'PDF',
+  refunds: 'What went back',
+  wentBack: (when: string) => `on ${when}`,
+  byDispute: (when: string) => `by your bank’s decision, on ${when}`,
+  rightEnded: 'The right to the files has ended.',
+  rightSuspended: 'Downloads rest.',
+  refunded: 'Went back',
+  keptNext: 'What you keep stands on your shelf.',
+  keptByMail: 'The link in your mail opens what you keep.',
 
   lines: 'What was ordered',
   kit: 'Kit',

@@ -9,6 +9,7 @@ export const workshopTexts = {
   overview: 'Overview',
   kits: 'Kits',
   orders: 'Orders',
+  receipts: 'Receipts',
   coupons: 'Coupons',
   holders: 'Holders',
   people: 'People',

@@ -9,10 +9,12 @@ const part = (code: string): Part => ({
   orientation: 'as-exported',
   printSpec: null,
   voice: null,
+  isGauge: false,
   file: null,
   drawings: null,
   previewBytes: null,
   previewSha256: null,
+  variants: [],
 });
 const row = (code: string, difference: Comparison['rows'][number]['difference']) => ({
   code,
@@ -26,6 +28,7 @@ const row = (code: string, difference: Comparison['rows'][number]['difference'])
   deviation: null,
   mark: null,
   reason: '',
+  variants: [],
 });
 const withEarlier = { id: 'x', label: 'Mk 1.0' };
 

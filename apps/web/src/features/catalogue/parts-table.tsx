@@ -13,7 +13,7 @@ import { previewOfPart } from '../bench/part-preview/previewed-part.js';
 import { TurnButton } from '../bench/part-preview/turn-button.js';
 import { useTurning } from '../bench/part-preview/use-turning.js';
 import { MarkField } from './mark-field.js';
-import { MeasuredCell } from './measured-cell.js';
+import { MeasuredMeshes } from './measured-meshes.js';
 import type { Difference, PartRow } from './part-rows.js';
 import { useComparedWith } from './use-compared-with.js';
 
@@ -52,6 +52,11 @@ const PartCell = ({ row, revisionId, onEdit, onTurn }: PartCellProps) => {
         <Box color="ink.soft" fontWeight="normal">
           {row.name}
         </Box>
+        {part?.isGauge && (
+          <Box fontSize="sm" fontWeight="normal">
+            {partsTexts.gauge}
+          </Box>
+        )}
         <Box display="flex" flexWrap="wrap" columnGap="4">
           {onEdit && part && (
             <Button
@@ -152,7 +157,7 @@ export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }:
       key: 'measured',
       header: partsTexts.columns.measured,
       width: '20%',
-      cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
+      cell: (row) => row.part && <MeasuredMeshes part={row.part} />,
     },
     {
       key: 'since',

@@ -3,6 +3,7 @@ import { useEffect, useRef } from 'react';
 import { useSWRConfig } from 'swr';
 import { isAnswerOf } from '../../lib/use-action.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
+import { meshesOf } from './part-meshes.js';
 import { lookAgainMs } from './revision-context.js';
 
 /** How many shapes there are to compare, and how many of them still wait. */
@@ -17,7 +18,13 @@ export function countedShapes(comparison: Comparison | undefined): { total: numb
 /** What a comparison was made from; when it changes, the comparison is old. */
 const fingerprint = ({ parts }: RevisionDetail) =>
   parts
-    .map((part) => `${part.code} ${part.quantity} ${part.file?.sha256} ${part.file?.measuring}`)
+    .map((part) =>
+      [
+        part.code,
+        part.quantity,
+        ...meshesOf(part).map(({ clearance, file }) => `${clearance} ${file.sha256} ${file.measuring}`),
+      ].join(' '),
+    )
     .sort()
     .join();
 

@@ -32,6 +32,11 @@ const kitColumn: Column<Line> = {
         <Box fontSize="sm" fontWeight="normal" color="ink.soft">
           {line.licenceName}
         </Box>
+        {(line.right === 'ended' || line.right === 'suspended') && (
+          <Box fontSize="sm" fontWeight="normal" color="ink.soft">
+            {line.right === 'ended' ? orderTexts.rightEnded : orderTexts.rightSuspended}
+          </Box>
+        )}
       </Box>
     </KitColour>
   ),
@@ -101,6 +106,7 @@ export function OrderLines({ order }: { order: BuyerOrder }) {
             {price(line.tax)}
           </Sum>
         ))}
+        {order.refunded.minor > 0 && <Sum name={orderTexts.refunded}>{less(order.refunded)}</Sum>}
       </Box>
     </>
   );

@@ -17,6 +17,8 @@ import { useEmptiedBasket } from './bought-basket.js';
 import { OpenOrder } from './open-order.js';
 import { OrderLead } from './order-lead.js';
 import { OrderLines } from './order-lines.js';
+import { OrderPapers } from './order-papers.js';
+import { OrderRefunds } from './order-refunds.js';
 import { PaidOrder } from './paid-order.js';
 import { type FollowedOrder, useOrder } from './use-order.js';
 
@@ -32,7 +34,8 @@ function fieldsOf(order: BuyerOrder): TitleBlockField[] {
 
 function Next({ order, followed }: { order: BuyerOrder; followed: FollowedOrder }) {
   if (order.state === 'open') return <OpenOrder order={order} followed={followed} />;
-  if (order.state === 'paid') return <PaidOrder order={order} />;
+  // After a refund, also of all that was paid, some files may have been left with the buyer.
+  if (order.lines.some((line) => line.right === 'active')) return <PaidOrder order={order} />;
   const isUnpaid = order.state === 'cancelled' || order.state === 'expired';
   return (
     <Box display="grid" gap="4">
@@ -58,6 +61,8 @@ const Order = ({ order, followed }: { order: BuyerOrder; followed: FollowedOrder
         <Heading level={1}>{orderTexts.titles[order.state]}</Heading>
         <OrderLead order={order} isTired={followed.isTired} />
         <OrderLines order={order} />
+        <OrderRefunds order={order} />
+        <OrderPapers order={order} orderKey={followed.input.query.key} />
       </>
     }
     aside={<Next order={order} followed={followed} />}

@@ -1,5 +1,4 @@
 import { inks, page } from './page-geometry.js';
-import type { KitShades } from './kit-shades.js';
 import { layOutText, type Span, type TextLine, type TextStyle } from './text-lines.js';
 import type { Typeface } from './typeface.js';
 
@@ -9,7 +8,7 @@ export interface TextPlace {
   readonly align?: 'left' | 'right' | 'centre';
 }
 
-/** Where the book is being written: the page, how far down it, and the tagged structure around it. */
+/** Where a document is being written: the page, how far down it, and the tagged structure around it. */
 export class Sheet {
   /** From the top of the page, in points. */
   y: number = page.top;
@@ -20,7 +19,6 @@ export class Sheet {
   constructor(
     readonly doc: PDFKit.PDFDocument,
     readonly typeface: Typeface,
-    readonly shades: KitShades,
   ) {
     const root = doc.struct('Document');
     doc.addStructure(root);

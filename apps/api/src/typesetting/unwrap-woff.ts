@@ -12,7 +12,7 @@ const sfntEntryBytes = 16;
  */
 export const unwrapWoff = (woff: Buffer): Buffer => {
   if (woff.length < woffHeaderBytes || woff.toString('latin1', 0, 4) !== 'wOFF')
-    throw new Error('A font of the build book is no WOFF file: install the packages again.');
+    throw new Error('A font file is no WOFF file: install the packages again.');
   const count = woff.readUInt16BE(12);
   const header = Buffer.alloc(sfntHeaderBytes + count * sfntEntryBytes);
   woff.copy(header, 0, 4, 8);

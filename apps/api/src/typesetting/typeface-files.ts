@@ -2,7 +2,7 @@ import { readFile } from 'node:fs/promises';
 import { createRequire } from 'node:module';
 import { unwrapWoff } from './unwrap-woff.js';
 
-/** The cuts a build book is set in. */
+/** The cuts that documents are set in. */
 export const faces = ['regular', 'italic', 'semibold', 'bold'] as const;
 export type Face = (typeof faces)[number];
 
