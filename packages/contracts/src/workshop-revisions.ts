@@ -6,6 +6,7 @@ import {
   drawings,
   hardwareList,
   orientations,
+  previewFields,
   printSpec,
   revisionState,
   sizeMm,
@@ -73,6 +74,7 @@ export const part = z.object({
   isGauge: z.boolean(),
   file: revisionFile.nullable(),
   drawings: drawings.nullable(),
+  ...previewFields,
   /** The part in other clearances, tightest first; `file` is the zero. */
   variants: z.array(
     z.object({ clearance: variantClearance, file: revisionFile, drawings: drawings.nullable() }),

@@ -22,6 +22,7 @@ const file = (widthMm: number): FileOfRevision => ({
   } as unknown as MeasuredMesh,
   geometryHash: String(widthMm),
   drawings: null,
+  previewSha256: null,
   fault: null,
 });
 const part = (

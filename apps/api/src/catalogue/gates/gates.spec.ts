@@ -38,6 +38,7 @@ const file = (over: Partial<FileOfRevision> = {}): FileOfRevision => ({
   measured: measured([10, 10, 10]),
   geometryHash: 'g',
   drawings: null,
+  previewSha256: null,
   fault: null,
   ...over,
 });

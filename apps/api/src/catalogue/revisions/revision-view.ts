@@ -111,6 +111,8 @@ const toPart = (part: PartOfRevision, placeOf: Places): PartShape => ({
   isGauge: part.isGauge,
   file: part.file && toFile(part.file, placeOf),
   drawings: part.file?.drawings ?? null,
+  previewBytes: part.file?.measured?.previewBytes ?? null,
+  previewSha256: part.file?.previewSha256 ?? null,
   variants: part.variants.map(({ clearance, file }) => ({
     clearance,
     file: toFile(file, placeOf),
