@@ -1,7 +1,7 @@
 import type { Permission } from '@windchest/contracts';
 import { Navigate, useLocation } from 'react-router-dom';
 import { paths, signInThenBack } from '../../config/paths.js';
-import { faultTexts } from '../../config/texts/shared.js';
+import { noPageTexts } from '../../config/texts/no-page.js';
 import { workshopTexts } from '../../config/texts/workshop.js';
 import { useSession } from '../../lib/session.js';
 import { LinkButton } from '../../ui/button.js';
@@ -40,9 +40,9 @@ export function WorkshopLayout() {
   const refusal = may('workshop:enter') ? undefined : (
     <Band>
       {session ? (
-        <Fault level={1} fault={{ title: faultTexts.forbidden, detail: faultTexts.forbiddenDetail }}>
+        <Fault level={1} fault={{ title: noPageTexts.forbidden, detail: noPageTexts.forbiddenDetail }}>
           <LinkButton look="outline" size="sm" to={paths.home.to()}>
-            {faultTexts.toKits}
+            {noPageTexts.toKits}
           </LinkButton>
         </Fault>
       ) : fault ? (

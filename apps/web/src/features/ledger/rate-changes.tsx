@@ -5,7 +5,7 @@ import { ledgerTexts, ratesTexts as texts } from '../../config/texts/workshop-le
 import { countryName, dateTime, day } from '../../lib/format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { Button } from '../../ui/button.js';
-import { tableTexts } from '../../config/texts/shared.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { Fault } from '../../ui/fault.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Heading, Text } from '../../ui/text.js';
