@@ -71,7 +71,11 @@ export default defineConfig({
     // Data addresses would need `data:` in the content security policy.
     assetsInlineLimit: 0,
     sourcemap: false,
-    modulePreload: { polyfill: false },
+    modulePreload: {
+      polyfill: false,
+      // To fetch the parts of a dialog at once, the first page would have to name all of them.
+      resolveDependencies: (file, parts) => (file.includes('-dialog-') ? [] : parts),
+    },
     rolldownOptions: {
       treeshake: {
         manualPureFunctions: ['defineConfig', 'defineConditions'],
