@@ -4,6 +4,7 @@ import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
 import { differenceKind } from './workshop-revisions.js';
 import { email, filamentColour, id, moment, pageOf, secret, sha256, slug, slugParams } from './values.js';
+import { rankVoice, room } from './voices.js';
 
 /**
  * What may be fetched: the whole bundle of a revision, its bundle of one clearance, or one document of it.
@@ -75,6 +76,10 @@ export const shelfKit = shelfItem.extend({
   documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
   licenceTerms: z.string(),
   cautions: z.string(),
+  /** What the tuner listens for: the voices of the revision held, of the newest where none is. */
+  rank: z.array(rankVoice),
+  room,
+  declaredCents: z.number(),
   downloads: z.array(
     z.object({ at: moment, revision: z.string(), fileName: z.string(), isComplete: z.boolean() }),
   ),

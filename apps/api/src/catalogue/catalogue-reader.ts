@@ -1,18 +1,19 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Clearance, FilamentColour } from '@windchest/contracts';
+import type { Clearance, FilamentColour, RankVoice } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { Differences, type ReprintRow } from './comparison/differences.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
+import { rankOf } from './kits/rank.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
 import { ReleasedBundles, type BundleFile, type ClearanceBundle } from './release/released-bundles.js';
 import { servable, type ServableFile } from './release/stored-file-of.js';
 import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
-import { Revision } from './revisions/revision.model.js';
+import { Revision, type Room } from './revisions/revision.model.js';
 
 export type { BundleFile, OfferedLicence, ReprintRow, ServableFile };
 
@@ -35,6 +36,13 @@ export interface ReleasedRevision {
   readonly bundles: readonly ClearanceBundle[];
   readonly changeNotes: string;
   readonly isWithdrawn: boolean;
+}
+
+/** What a revision is meant to sound like. */
+export interface Voicing {
+  readonly rank: RankVoice[];
+  readonly room: Room;
+  readonly declaredCents: number;
 }
 
 /** What other rooms may know of the catalogue: plain facts, nothing of a draft. */
@@ -132,6 +140,13 @@ export class CatalogueReader {
 
   async cautionsOf(revisionId: string): Promise<string> {
     return (await this.finalById(revisionId))?.cautions ?? '';
+  }
+
+  async voicingOf(revisionId: string): Promise<Voicing | null> {
+    const revision = await this.finalById(revisionId);
+    if (!revision) return null;
+    const { room, declaredCents } = revision;
+    return { rank: rankOf(await this.contents.voicesOf(revisionId)), room, declaredCents };
   }
 
   /** Whether parts of a revision come in several clearances, and the part that tells which one to print. */

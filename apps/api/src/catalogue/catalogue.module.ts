@@ -13,7 +13,9 @@ import { MeshPlaces } from './files/mesh-places.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
 import { OfferFiles } from './files/offer-files.js';
+import { PartPreviews } from './files/part-previews.js';
 import { RemoveFile } from './files/remove-file.js';
+import { RenewMeasurements } from './files/renew-measurements.js';
 import { RevisionFile } from './files/revision-file.model.js';
 import { StoredFile } from './files/stored-file.model.js';
 import { UploadFile } from './files/upload-file.js';
@@ -87,6 +89,8 @@ import { StartRevision } from './revisions/start-revision.js';
     Gates,
     WaiveGate,
     MeasurementRecords,
+    RenewMeasurements,
+    PartPreviews,
     MeshPlaces,
     AttachFile,
     OfferFiles,

@@ -71,15 +71,18 @@ export class Shelf {
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
     const chosen = clearanceFor(best, null);
-    const [revisions, parts, clearances, documents, cautions, downloads, [licence]] = await Promise.all([
-      this.catalogue.revisionsOf(kit.id),
-      this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
-      this.catalogue.clearancesOf(item.newest.id),
-      this.catalogue.documentsOf(item.newest.id),
-      this.catalogue.cautionsOf(item.newest.id),
-      this.downloadsOf(person, kit.id),
-      this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
-    ]);
+    const [revisions, parts, clearances, documents, cautions, voicing, downloads, [licence]] =
+      await Promise.all([
+        this.catalogue.revisionsOf(kit.id),
+        this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+        this.catalogue.clearancesOf(item.newest.id),
+        this.catalogue.documentsOf(item.newest.id),
+        this.catalogue.cautionsOf(item.newest.id),
+        this.catalogue.voicingOf((item.held ?? item.newest).id),
+        this.downloadsOf(person, kit.id),
+        this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
+      ]);
+    if (!voicing) throw notFound('kit on your shelf');
     const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
@@ -91,6 +94,7 @@ export class Shelf {
       documents,
       licenceTerms: licence?.terms ?? '',
       cautions,
+      ...voicing,
       downloads: downloads.map((one) => ({
         at: one.grantedAt.toISOString(),
         revision: labels.get(one.revisionId) ?? '',

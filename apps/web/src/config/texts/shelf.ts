@@ -108,6 +108,7 @@ export const shelfKitTexts = {
     `The shelf then compares new revisions with ${label} and says what to reprint from there. You can change it again.`,
   printedConfirm: (label: string) => `Yes, I hold ${label}`,
   printedFailed: 'What you hold was not changed',
+  tune: 'Tune what you printed',
   changeNotes: 'Change notes',
   licence: 'Licence',
   cautions: 'Cautions',
