@@ -21,6 +21,7 @@ export const faultTexts = {
 export const tableTexts = {
   csv: 'Download as CSV',
   sameAsTable: 'The same as a table',
+  drawn: 'As a bar',
   search: 'Search',
   sortBy: 'Sort by',
   ascending: 'rising',
