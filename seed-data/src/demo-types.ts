@@ -127,6 +127,11 @@ export interface DemoPurchase {
   boughtAt: string;
   /** Of one line, a part that the bookkeeper gave back; the files stay. */
   givenBack?: { kitSlug: string; minor: number; reason: string };
+  business?: { name: string; address: string; vatNumber: string };
+  /** Then the files are not the buyer's. */
+  gift?: { email: string; giver: string; greeting: string };
+  /** Where billing address and card are from, where that is not the buyer's country. */
+  paidFrom?: { billing: string; card: string };
 }
 
 export interface DemoWorkshop {

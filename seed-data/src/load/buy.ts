@@ -32,16 +32,19 @@ export const buy = async (
     ...(purchase.couponCode ? { couponCode: purchase.couponCode } : {}),
     email: person.email,
     country: person.countryCode,
+    ...(purchase.business ? { business: purchase.business } : {}),
+    ...(purchase.gift ? { gift: purchase.gift } : {}),
     hasConsented: true,
     attempt: crypto.randomUUID(),
   });
-  if (paymentUrl) await pay(stripeUrl, paymentUrl, person);
+  if (paymentUrl) await pay(stripeUrl, paymentUrl, person, purchase.paidFrom);
   await waitFor(
     'The payment',
     () => buyer.get<{ state: string }>(`/orders/${orderId}?key=${orderKey}`),
     (order) => order.state === 'paid',
   );
 
+  if (purchase.gift) return orderId;
   for (const { kitSlug } of purchase.lines) {
     const { newest } = await buyer.get<ShelfAnswer>(`/shelf/${kitSlug}`);
     const grant = await buyer.post<{ url: string }>('/shelf/grants', { kitSlug, revisionId: newest.id });
@@ -50,14 +53,19 @@ export const buy = async (
   return orderId;
 };
 
-const pay = async (stripeUrl: string, paymentUrl: string, person: DemoPerson): Promise<void> => {
+const pay = async (
+  stripeUrl: string,
+  paymentUrl: string,
+  person: DemoPerson,
+  paidFrom: DemoPurchase['paidFrom'],
+): Promise<void> => {
   const session = /\/(cs_[A-Za-z0-9_]+)/.exec(paymentUrl)?.[1];
   const response = await fetch(`${stripeUrl}/control/sessions/${session}/pay`, {
     method: 'POST',
     headers: { 'Content-Type': 'application/json' },
     body: JSON.stringify({
-      country: person.countryCode,
-      cardCountry: person.countryCode,
+      country: paidFrom?.billing ?? person.countryCode,
+      cardCountry: paidFrom?.card ?? person.countryCode,
       email: person.email,
       outcome: 'succeed',
     }),

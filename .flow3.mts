@@ -1,0 +1,13 @@
+import { chromium } from '@playwright/test';
+const browser = await chromium.launch({ executablePath: '/usr/bin/chromium', args: ['--no-sandbox','--disable-dev-shm-usage'] });
+const context = await browser.newContext({ viewport: { width: 1280, height: 900 }, baseURL: process.argv[2] });
+const page = await context.newPage();
+page.on('console', (m) => { console.log(m.type(), m.text().slice(0,300)); });
+page.on('pageerror', (e) => console.log('pageerror', e.message));
+await page.goto('/kits/teal'); await page.waitForTimeout(2500); console.log((await page.content()).slice(0,600)); 
+await page.screenshot({ path: '/tmp/ledger/x1.png' });
+console.log(await page.getByRole('button').allTextContents());
+await page.getByRole('button', { name: /basket/i }).first().click(); await page.waitForTimeout(500);
+await page.goto('/basket'); await page.waitForTimeout(3000);
+await page.screenshot({ path: '/tmp/ledger/x2.png' });
+await browser.close();
