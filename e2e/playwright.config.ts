@@ -8,7 +8,7 @@ export default defineConfig({
   testDir: '.',
   timeout: 90_000,
   expect: { timeout: 15_000 },
-  workers: 1,
+  workers: 2,
   fullyParallel: false,
   retries: 0,
   forbidOnly: true,

@@ -53,6 +53,11 @@ export default defineConfig({
         find: `@windchest/${name}`,
         replacement: packageSource(name),
       })),
+      // Emotion's own sheet writes `<style>` elements, which the content security policy blocks.
+      {
+        find: '@emotion/sheet',
+        replacement: fileURLToPath(new URL('./src/ui/theme/adopted-sheet.ts', import.meta.url)),
+      },
       // SWR asks for a stand-in that React has had itself since version 18.
       { find: /^use-sync-external-store\/shim$/, replacement: 'react' },
     ],
@@ -71,7 +76,13 @@ export default defineConfig({
     // Data addresses would need `data:` in the content security policy.
     assetsInlineLimit: 0,
     sourcemap: false,
-    modulePreload: { polyfill: false },
+    modulePreload: {
+      polyfill: false,
+      // To fetch the parts of a dialog at once, the first page would have to name all of them.
+      resolveDependencies: (file, parts) => (file.includes('-dialog-') ? [] : parts),
+    },
+    // What draws in three dimensions is that large; it is fetched when a visitor asks to turn a part.
+    chunkSizeWarningLimit: 1000,
     rolldownOptions: {
       treeshake: {
         manualPureFunctions: ['defineConfig', 'defineConditions'],

@@ -1,5 +1,6 @@
 import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
+import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { makePeople } from './load/make-people.js';
 import { beginPledge, makePlan } from './load/pledge.js';
@@ -26,6 +27,8 @@ const main = async (): Promise<void> => {
   await makePeople(process.env);
   const maker = await signIn(demoSignIns.find((one) => one.role === 'maker')?.email ?? '');
 
+  const bookkeeper = await signIn(demoSignIns.find((one) => one.role === 'bookkeeper')?.email ?? '');
+
   const kitIds = new Map<string, string>();
   for (const kit of demoWorkshop.kits) {
     const kitId = await draftKit(maker, kit);
@@ -35,6 +38,9 @@ const main = async (): Promise<void> => {
     await maker.patch(`/workshop/kits/${kitId}`, { isListed: true });
     say(`${kit.name} ${first?.label} is released`);
   }
+
+  for (const { ownerEmail, ...printer } of demoWorkshop.printers)
+    await (await signIn(ownerEmail)).post('/account/printers', { ...printer, isMain: false });
 
   for (const { kitSlugs, ...coupon } of demoWorkshop.coupons)
     await maker.post('/workshop/coupons', {
@@ -47,8 +53,10 @@ const main = async (): Promise<void> => {
 
   for (const purchase of demoWorkshop.purchases) {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
-    if (person) await buy(await signIn(person.email), person, purchase, stripeUrl);
-    say(`${person?.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+    if (!person) continue;
+    const orderId = await buy(await signIn(person.email), person, purchase, stripeUrl);
+    say(`${person.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+    if (purchase.givenBack) await giveBack(bookkeeper, orderId, purchase.givenBack);
   }
 
   const planIds = new Map<string, string>();

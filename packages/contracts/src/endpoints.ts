@@ -3,7 +3,10 @@ import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
 import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
+import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
+import { refundEndpoints } from './refunds.js';
+import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { supporterEndpoints } from './supporters.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
@@ -13,11 +16,14 @@ import { workshopSalesEndpoints } from './workshop-sales.js';
 export const endpoints = {
   ...sessionEndpoints,
   ...kitEndpoints,
+  ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
+  ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
   ...supporterEndpoints,
+  ...ledgerEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

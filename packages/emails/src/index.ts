@@ -13,6 +13,7 @@ export type {
   OrderRefundedMessage,
   PaidLine,
   PassphraseChangedMessage,
+  PaymentDisputedMessage,
   RenderedEmail,
   ReprintRow,
   ResetPassphraseMessage,

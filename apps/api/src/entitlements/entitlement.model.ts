@@ -1,3 +1,4 @@
+import type { Clearance } from '@windchest/contracts';
 import { Column, DataType, Model, Table } from 'sequelize-typescript';
 import { IdColumn, MomentColumn } from '../database/columns.js';
 
@@ -24,6 +25,8 @@ export class Entitlement extends Model {
   @MomentColumn({ isNullable: true }) declare releasedBefore: Date | null;
   /** How far the pledge behind it is paid, to say so; the pledge itself ends it. */
   @MomentColumn({ isNullable: true }) declare untilAt: Date | null;
+  /** What its owner prints of this kit, once they have said or shown it. */
+  @Column(DataType.STRING(10)) declare clearance: Clearance | null;
   @MomentColumn() declare createdAt: Date;
   @MomentColumn() declare updatedAt: Date;
   @MomentColumn({ isNullable: true }) declare endedAt: Date | null;

@@ -10,7 +10,9 @@ import { DownloadLink } from './download-link.model.js';
 import { DownloadLinks } from './download-links.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
+import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holders } from './holders.js';
 import { PledgeEntitlements } from './pledge-entitlements.js';
@@ -33,8 +35,10 @@ import { SignedAddress } from './signed-address.js';
     SignedAddress,
     FileGrants,
     ServeFile,
+    GiftMail,
     GiveEntitlements,
     PledgeEntitlements,
+    FollowOrderRights,
     Collections,
     Shelf,
     Holders,

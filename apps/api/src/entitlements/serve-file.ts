@@ -4,14 +4,14 @@ import type { Response } from 'express';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { Storage } from '../adapters/storage/storage.js';
-import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { CatalogueReader, type BundleFile, type ServableFile } from '../catalogue/catalogue-reader.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { touchRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
 import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
-import { browserMark } from './file-grants.js';
+import { browserMark, downloadRefusal } from './file-grants.js';
 import { covers } from './may-download.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
@@ -50,10 +50,12 @@ export class ServeFile {
       );
     const download = await this.downloads.findByPk(downloadId);
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
+    if (entitlement?.state === 'suspended')
+      throw downloadRefusal(entitlement.source === 'pledge' ? 'pledge-rests' : 'suspended');
     if (!download || !entitlement || !(await this.isStillTheirs(entitlement, download.revisionId)))
       throw new Refusal('forbidden', 'The right to this file has ended.');
-    const file = download.isBundle
-      ? await this.catalogue.bundleFile(download.revisionId)
+    const file: (ServableFile & Partial<BundleFile>) | null = download.isBundle
+      ? await this.catalogue.bundleByHash(download.revisionId, download.sha256)
       : await this.catalogue.fileOf(download.revisionId, download.sha256);
     if (!file) throw new Refusal('not-found', 'There is no file at this address.');
 
@@ -62,7 +64,9 @@ export class ServeFile {
       accelPrefix: this.config.ACCEL_PREFIX,
       fileAddressSeconds: this.config.FILE_ADDRESS_MINUTES * 60,
     });
-    if (!isHead) await this.countSent(download, sent.bytes, sent.reachedEnd);
+    if (isHead) return;
+    await this.countSent(download, sent.bytes, sent.reachedEnd);
+    if (sent.reachedEnd && download.isBundle) await this.noteHeld(download, file.clearance ?? null);
   }
 
   private async isStillTheirs(entitlement: Entitlement, revisionId: string): Promise<boolean> {
@@ -92,15 +96,26 @@ export class ServeFile {
         now,
       },
     );
-    if (reachedEnd && download.isBundle)
+  }
+
+  /** Whoever fetched a bundle holds its revision; whoever fetched one clearance, and said no other, prints that. */
+  private async noteHeld(download: Download, clearance: BundleFile['clearance']): Promise<void> {
+    const values = {
+      id: download.entitlementId,
+      revisionId: download.revisionId,
+      clearance,
+      now: this.clock.now(),
+    };
+    await touchRows(
+      this.database,
+      'UPDATE entitlements SET held_revision_id = :revisionId, held_since = :now, updated_at = :now WHERE id = :id AND NOT (held_revision_id <=> :revisionId)',
+      values,
+    );
+    if (clearance)
       await touchRows(
         this.database,
-        'UPDATE entitlements SET held_revision_id = :revisionId, held_since = :now, updated_at = :now WHERE id = :id AND NOT (held_revision_id <=> :revisionId)',
-        {
-          id: download.entitlementId,
-          revisionId: download.revisionId,
-          now,
-        },
+        'UPDATE entitlements SET clearance = :clearance, updated_at = :now WHERE id = :id AND clearance IS NULL',
+        values,
       );
   }
 }

@@ -1,12 +1,13 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer } from '@windchest/contracts';
+import type { Answer, Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader, type ReleasedRevision } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
-import { notFound } from '../http/refusal.js';
+import { notFound, Refusal } from '../http/refusal.js';
+import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { covers } from './may-download.js';
@@ -47,31 +48,57 @@ export class Shelf {
       page,
       size: PAGE_SIZE,
       total: Number(rows[0]?.total ?? 0),
+      ...(await this.restingOf(person)),
+    };
+  }
+
+  /** Names of kits of which all that is left rests: while a payment is in dispute, or with a pledge. */
+  private async restingOf(person: SignedIn, kitId?: string): Promise<Resting> {
+    const rows = await selectRows<{ kitId: string; isPledge: number }>(
+      this.database,
+      `SELECT kit_id AS kitId, MIN(source = 'pledge') AS isPledge FROM entitlements
+       WHERE person_id = :personId AND state <> 'ended' AND (:kitId IS NULL OR kit_id = :kitId)
+       GROUP BY kit_id HAVING SUM(state = 'active') = 0`,
+      { personId: person.id, kitId: kitId ?? null },
+    );
+    const byPledge = new Set(rows.filter((row) => Number(row.isPledge) === 1).map((row) => row.kitId));
+    const kits = await this.catalogue.kitsByIds(rows.map((row) => row.kitId));
+    return {
+      resting: kits.filter(({ id }) => !byPledge.has(id)).map(({ name }) => name),
+      restingWithPledge: kits.filter(({ id }) => byPledge.has(id)).map(({ name }) => name),
     };
   }
 
   async read(person: SignedIn, slug: string): Promise<Answer<'GET /shelf/:slug'>> {
     const kit = await this.catalogue.kitBySlug(slug);
     const item = kit && (await this.itemOf(person, kit.id));
+    if (kit && !item) await this.refuseResting(person, kit);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
+    const chosen = clearanceFor(best, null);
     const mine = await this.revisionsOf(person, kit.id);
-    const [parts, documents, cautions, downloads, [licence]] = await Promise.all([
-      this.catalogue.differences(item.held?.id ?? null, item.newest.id),
+    const [parts, clearances, documents, cautions, voicing, downloads, [licence]] = await Promise.all([
+      this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+      this.catalogue.clearancesOf(item.newest.id),
       this.catalogue.documentsOf(item.newest.id),
       this.catalogue.cautionsOf(item.newest.id),
+      this.catalogue.voicingOf((item.held ?? item.newest).id),
       this.downloadsOf(person, kit.id),
       this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
     ]);
+    if (!voicing) throw notFound('kit on your shelf');
     const labels = new Map(mine.all.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
-      orderId: best?.orderId ?? null,
+      // The order behind a gift is the giver's own affair.
+      orderId: best && best.source !== 'gift' ? best.orderId : null,
+      clearance: { ...clearances, chosen },
       revisions: mine.covered.map(toShelfRevision),
       parts,
       documents,
       licenceTerms: licence?.terms ?? '',
       cautions,
+      ...voicing,
       downloads: downloads.map((one) => ({
         at: one.grantedAt.toISOString(),
         revision: labels.get(one.revisionId) ?? '',
@@ -79,6 +106,17 @@ export class Shelf {
         isComplete: one.completedAt !== null,
       })),
     };
+  }
+
+  private async refuseResting(person: SignedIn, kit: { id: string; name: string }): Promise<void> {
+    const { resting, restingWithPledge } = await this.restingOf(person, kit.id);
+    if (resting.length > 0)
+      throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
+    if (restingWithPledge.length > 0)
+      throw new Refusal(
+        'forbidden',
+        `${kit.name} is on your shelf by your pledge, and the pledge rests now.`,
+      );
   }
 
   async sayHeld(person: SignedIn, slug: string, revisionId: string): Promise<Answer<'GET /shelf/:slug'>> {
@@ -91,6 +129,23 @@ export class Shelf {
       { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
       { where: { personId: person.id, kitId: best.kitId, state: 'active' } },
     );
+    return this.read(person, slug);
+  }
+
+  /** Null forgets what was said. */
+  async sayClearance(
+    person: SignedIn,
+    slug: string,
+    clearance: Clearance | null,
+  ): Promise<Answer<'GET /shelf/:slug'>> {
+    const kit = await this.catalogue.kitBySlug(slug);
+    const [said] = kit
+      ? await this.entitlements.update(
+          { clearance, updatedAt: this.clock.now() },
+          { where: { personId: person.id, kitId: kit.id, state: 'active' } },
+        )
+      : [0];
+    if (said === 0) throw notFound('kit on your shelf');
     return this.read(person, slug);
   }
 
@@ -168,6 +223,8 @@ export class Shelf {
     });
   }
 }
+
+type Resting = Pick<Answer<'GET /shelf'>, 'resting' | 'restingWithPledge'>;
 
 interface OwnRevisions {
   readonly all: ReleasedRevision[];

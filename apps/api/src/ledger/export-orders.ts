@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import type { Handled } from '@windchest/contracts';
 import { decimalText } from '@windchest/money';
 import { OrdersReader } from '../orders/orders-reader.js';
-import { csvRecord } from './csv.js';
+import { csvRecord } from '../http/csv.js';
 
 const HEAD = [
   'number',
@@ -18,6 +18,7 @@ const HEAD = [
   'subtotal',
   'discount',
   'total',
+  'refunded',
   'coupon',
   'receipt',
   'flags',
@@ -46,6 +47,7 @@ export class ExportOrders {
         amount(order.subtotalMinor),
         amount(order.discountMinor),
         amount(order.totalMinor),
+        amount(order.refundedMinor),
         order.couponCode,
         order.receiptNumber,
         order.flags.join('; '),

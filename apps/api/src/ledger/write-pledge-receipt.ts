@@ -1,10 +1,13 @@
 import { Injectable, type OnModuleInit } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import { money, percent, taxFromGross } from '@windchest/money';
+import { InjectConfig, type Config } from '../config/config.js';
 import type { Tx } from '../database/transactions.js';
 import { PledgePaidSteps, type PaidMonth } from '../supporters/pledges/pledge-steps.js';
+import { dayText } from '../typesetting/number-text.js';
 import { NumberSeries } from './number-series.js';
 import { Receipt } from './receipt.model.js';
+import { sellerOf } from './seller.js';
 import { TaxRates } from './tax-rates.js';
 import { RECEIPT_SERIES } from './write-receipt.js';
 
@@ -13,6 +16,7 @@ import { RECEIPT_SERIES } from './write-receipt.js';
 export class WritePledgeReceipt implements OnModuleInit {
   constructor(
     @InjectModel(Receipt) private readonly receipts: typeof Receipt,
+    @InjectConfig() private readonly config: Config,
     private readonly numbers: NumberSeries,
     private readonly rates: TaxRates,
     private readonly pledgePaid: PledgePaidSteps,
@@ -32,7 +36,9 @@ export class WritePledgeReceipt implements OnModuleInit {
     const label = `${year}-${String(number).padStart(6, '0')}`;
     await this.receipts.create(
       {
+        pledgeId: month.pledgeId,
         pledgePaymentId: month.paymentId,
+        orderNumber: month.pledgeNumber,
         series: RECEIPT_SERIES,
         year,
         number,
@@ -40,7 +46,22 @@ export class WritePledgeReceipt implements OnModuleInit {
         currency: month.currency,
         totalMinor: month.amountMinor,
         country: month.country,
+        taxTreatment: 'consumer',
         tax: [{ country: month.country, ...line }],
+        buyer: { email: month.email, country: month.country },
+        seller: sellerOf(this.config),
+        lines: [
+          {
+            orderLineId: month.paymentId,
+            kit: `Pledge “${month.planName}”`,
+            licence: `${dayText(month.periodStart)} to ${dayText(month.periodEnd)}, paid on ${dayText(month.paidAt)}`,
+            revision: '',
+            priceMinor: month.amountMinor,
+            discountMinor: 0,
+            totalMinor: month.amountMinor,
+            ratePercent,
+          },
+        ],
         issuedAt: month.writtenAt,
       },
       { transaction: tx },

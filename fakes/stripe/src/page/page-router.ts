@@ -6,7 +6,8 @@ import { sessionPages } from './session-pages.js';
 import { stylesheet } from './stylesheet.js';
 
 // No `form-action`: browsers apply it to the redirect after a form too, and that leads to the shop.
-const policy = "default-src 'none'; style-src 'self'; img-src data:; base-uri 'none'; frame-ancestors 'none'";
+export const policy =
+  "default-src 'none'; style-src 'self'; img-src data:; base-uri 'none'; frame-ancestors 'none'";
 
 /** The pages where buyers pay: plain forms, no script. */
 export function pageRouter(standIn: StandIn): Router {

@@ -5,8 +5,10 @@ import { shelfTexts } from '../../config/texts/shelf.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
+import { TextLink } from '../../ui/link.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
+import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band, SplitSheet } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
@@ -43,6 +45,19 @@ function Kits() {
   if (fault && !data)
     return <Fault level={2} what={shelfTexts.failed} fault={fault} onAgain={() => void mutate()} />;
   if (!data) return <SkeletonLines lines={5} />;
+  const isResting = data.resting.length > 0 || data.restingWithPledge.length > 0;
+  const resting = isResting && (
+    <Box display="grid" gap="3" marginBottom="6">
+      {data.resting.length > 0 && <Notice tone="warn">{shelfTexts.resting(data.resting.join(', '))}</Notice>}
+      {data.restingWithPledge.length > 0 && (
+        <Notice>
+          {shelfTexts.restingWithPledge(data.restingWithPledge.join(', '))}{' '}
+          <TextLink to={paths.pledge.to()}>{shelfTexts.seePledge}</TextLink>
+        </Notice>
+      )}
+    </Box>
+  );
+  if (data.items.length === 0 && resting) return resting;
   if (data.items.length === 0)
     return (
       <EmptyState
@@ -54,6 +69,7 @@ function Kits() {
     );
   return (
     <>
+      {resting}
       <Box as="ul" listStyle="none" aria-label={shelfTexts.title} borderTopWidth="1px" borderColor="hairline">
         {data.items.map((item) => (
           <ShelfRow key={item.slug} item={item} />

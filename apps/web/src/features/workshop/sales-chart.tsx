@@ -1,7 +1,8 @@
 import { Box } from '@chakra-ui/react/box';
 import type { OutputOf } from '@windchest/contracts';
 import { overviewTexts as texts } from '../../config/texts/workshop-overview.js';
-import { counted, date, number, price } from '../../lib/format.js';
+import { counted, number, price } from '../../lib/format.js';
+import { day as isoDay } from '../../lib/workshop-format.js';
 import { SameAsTable } from '../../ui/chart/same-as-table.js';
 import { TimeBars } from '../../ui/chart/time-bars.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
@@ -10,7 +11,7 @@ import { Heading } from '../../ui/text.js';
 type SalesDay = NonNullable<OutputOf<'GET /workshop/overview'>['sales']>[number];
 
 const columns: Column<SalesDay>[] = [
-  { key: 'day', header: texts.columns.day, isHeading: true, cell: (one) => date(one.day) },
+  { key: 'day', header: texts.columns.day, isHeading: true, cell: (one) => isoDay(one.day) },
   { key: 'orders', header: texts.columns.orders, isNumeric: true, cell: (one) => number(one.orders) },
   { key: 'gross', header: texts.columns.gross, isNumeric: true, cell: (one) => price(one.gross) },
 ];
@@ -25,7 +26,7 @@ function summary(sales: readonly SalesDay[]): string {
   return texts.salesWords(
     orders(count),
     price({ minor: gross, currency: best.gross.currency }),
-    `${date(best.day)}, ${price(best.gross)}`,
+    `${isoDay(best.day)}, ${price(best.gross)}`,
   );
 }
 
@@ -44,10 +45,10 @@ export function SalesChart({ sales }: { sales: readonly SalesDay[] }) {
         bars={sales.map((day) => ({
           key: day.day,
           parts: [day.gross.minor],
-          words: texts.day(date(day.day), orders(day.orders), price(day.gross)),
+          words: texts.day(isoDay(day.day), orders(day.orders), price(day.gross)),
         }))}
         topText={({ parts: [minor = 0] }) => price({ minor, currency })}
-        ends={first && last && [date(first.day), date(last.day)]}
+        ends={first && last && [isoDay(first.day), isoDay(last.day)]}
       />
       <SameAsTable>
         <HairlineTable
