@@ -27,6 +27,7 @@ const entries: readonly (HeaderEntry & { needs: Permission; unless?: Permission 
   },
   { to: paths.workshop.sales.to(), label: workshopTexts.ledger, needs: 'ledger:read' },
   { to: paths.workshop.coupons.to(), label: workshopTexts.coupons, needs: 'coupons:read' },
+  { to: paths.workshop.supporters.to(), label: workshopTexts.supporters, needs: 'supporters:read' },
   { to: paths.workshop.holders.to(), label: workshopTexts.holders, needs: 'buyers:read' },
   { to: paths.workshop.people.to(), label: workshopTexts.people, needs: 'people:read' },
 ];

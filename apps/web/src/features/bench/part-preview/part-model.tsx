@@ -54,8 +54,7 @@ function Eye({ orbit, radius }: { orbit: Orbit; radius: number }) {
     // A narrow view is filled by its width.
     const narrow = Math.max(1, size.height / Math.max(1, size.width));
     eye.position.set(...eyeOf(orbit, radius * airFactor * narrow, fovDeg));
-    eye.near = radius / 50;
-    eye.far = radius * 60;
+    Object.assign(eye, { near: radius / 50, far: radius * 60 });
     eye.lookAt(0, 0, 0);
     eye.updateProjectionMatrix();
     invalidate();

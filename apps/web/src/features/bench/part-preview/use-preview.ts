@@ -30,16 +30,17 @@ async function load(address: string): Promise<Loading> {
 
 /** A part's likeness and the program that draws it, fetched together, once they are wanted. */
 export function usePreview(address: string, isWanted: boolean): [Loading, again: () => void] {
-  const [loading, setLoading] = useState<Loading>({ state: 'loading' });
   const [tries, setTries] = useState(0);
+  const wish = `${tries} ${address}`;
+  // With the wish it answers: what came of an earlier one says nothing of this.
+  const [came, setCame] = useState<{ of: string; loading: Loading }>();
   useEffect(() => {
     if (!isWanted) return;
     let isGone = false;
-    setLoading({ state: 'loading' });
-    void load(address).then((next) => !isGone && setLoading(next));
+    void load(address).then((loading) => !isGone && setCame({ of: wish, loading }));
     return () => {
       isGone = true;
     };
-  }, [address, isWanted, tries]);
-  return [loading, () => setTries((before) => before + 1)];
+  }, [address, isWanted, wish]);
+  return [came?.of === wish ? came.loading : { state: 'loading' }, () => setTries((before) => before + 1)];
 }

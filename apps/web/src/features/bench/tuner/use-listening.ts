@@ -10,6 +10,12 @@ export interface Source {
   recording: Recording | undefined;
 }
 
+interface Heard {
+  code: string;
+  of: OpenMicrophone | Recording | undefined;
+  listening: Listening;
+}
+
 /** So often a frame is looked at; frames overlap by more than half. */
 const everyMs = 70;
 const rest = () => new Promise<void>((resolve) => setTimeout(resolve));
@@ -20,11 +26,8 @@ export function useListening(
   { code, voice: { kind } }: RankVoice,
   targetHz: number,
 ): Listening {
-  // With the voice it was heard for: what was heard of one says nothing of the next.
-  const [heard, setHeard] = useState({ code, listening: notYetListening });
-  useEffect(() => {
-    if (microphone) setHeard({ code: '', listening: notYetListening });
-  }, [microphone]);
+  // With the voice it was heard for and where: what was heard of one says nothing of the next.
+  const [heard, setHeard] = useState<Heard>({ code, of: undefined, listening: notYetListening });
 
   useEffect(() => {
     if (!microphone) return;
@@ -34,8 +37,8 @@ export function useListening(
     const timer = setInterval(() => {
       const frame = hear(microphone.read(size));
       setHeard((before) => {
-        const known = before.code === code ? before.listening : notYetListening;
-        return { code, listening: listen(known, frame, performance.now(), kind) };
+        const known = before.code === code && before.of === microphone ? before.listening : notYetListening;
+        return { code, of: microphone, listening: listen(known, frame, performance.now(), kind) };
       });
     }, everyMs);
     return () => clearInterval(timer);
@@ -45,12 +48,12 @@ export function useListening(
     if (!recording || microphone) return;
     let isGone = false;
     void readRecording(recording, targetHz, kind, rest).then(
-      (listening) => !isGone && setHeard({ code, listening }),
+      (listening) => !isGone && setHeard({ code, of: recording, listening }),
     );
     return () => {
       isGone = true;
     };
   }, [recording, microphone, targetHz, code, kind]);
 
-  return heard.code === code ? heard.listening : notYetListening;
+  return heard.code === code && heard.of === (microphone ?? recording) ? heard.listening : notYetListening;
 }

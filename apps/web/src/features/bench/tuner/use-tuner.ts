@@ -1,6 +1,6 @@
 import type { RankVoice } from '@windchest/contracts';
 import type { Room } from '@windchest/voicing';
-import { useCallback, useEffect, useMemo, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import { foresee, type Foreseen, judge, type Judging, targetOf, type Verdict } from './judge.js';
 import type { Listening } from './listening.js';
 import type { Reading } from './steady-pitch.js';
@@ -62,10 +62,10 @@ export function useTuner(rank: readonly [RankVoice, ...RankVoice[]], voicedFor: 
     [reading, judging],
   );
 
-  useEffect(() => {
-    if (!tuned?.reading.isSteady || tuned.verdict.says !== 'advice' || tuned.verdict.nearer) return;
-    setSoFar((before) => new Map(before).set(tuned.judging.voice.code, tuned));
-  }, [tuned]);
+  const isToKeep = tuned?.reading.isSteady && tuned.verdict.says === 'advice' && !tuned.verdict.nearer;
+  // Kept while rendering, as React has it for state that follows from other state.
+  if (isToKeep && soFar.get(tuned.judging.voice.code) !== tuned)
+    setSoFar(new Map(soFar).set(tuned.judging.voice.code, tuned));
 
   return {
     judging,
