@@ -28,19 +28,20 @@ async function load(address: string): Promise<Loading> {
   }
 }
 
+const isLoading: Loading = { state: 'loading' };
+
 /** A part's likeness and the program that draws it, fetched together, once they are wanted. */
 export function usePreview(address: string, isWanted: boolean): [Loading, again: () => void] {
   const [tries, setTries] = useState(0);
-  const wish = `${tries} ${address}`;
-  // With the wish it answers: what came of an earlier one says nothing of this.
-  const [came, setCame] = useState<{ of: string; loading: Loading }>();
+  const asked = `${address} ${tries}`;
+  const [answer, setAnswer] = useState({ asked, loading: isLoading });
   useEffect(() => {
     if (!isWanted) return;
     let isGone = false;
-    void load(address).then((loading) => !isGone && setCame({ of: wish, loading }));
+    void load(address).then((loading) => !isGone && setAnswer({ asked, loading }));
     return () => {
       isGone = true;
     };
-  }, [address, isWanted, wish]);
-  return [came?.of === wish ? came.loading : { state: 'loading' }, () => setTries((before) => before + 1)];
+  }, [address, asked, isWanted]);
+  return [answer.asked === asked ? answer.loading : isLoading, () => setTries((before) => before + 1)];
 }
