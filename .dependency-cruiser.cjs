@@ -19,11 +19,11 @@ const mayUse = {
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
   letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
-  journal: ['accounts', 'catalogue'],
+  journal: ['accounts', 'catalogue', 'supporters'],
   ledger: ['accounts', 'catalogue', 'orders'],
   workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),
 };
-const lowerLayers = 'adapters database jobs mails http config'.split(' ');
+const lowerLayers = 'adapters database jobs mails http pictures config'.split(' ');
 
 module.exports = {
   forbidden: [

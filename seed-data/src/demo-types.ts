@@ -111,6 +111,15 @@ export interface DemoPurchase {
   boughtAt: string;
 }
 
+export interface DemoPost {
+  title: string;
+  slug: string;
+  lead: string;
+  body: string;
+  audience: 'everybody' | 'supporters';
+  kitSlug: string | null;
+}
+
 export interface DemoWorkshop {
   workshop: {
     name: string;
@@ -126,6 +135,7 @@ export interface DemoWorkshop {
   kits: DemoKit[];
   coupons: DemoCoupon[];
   purchases: DemoPurchase[];
+  posts: DemoPost[];
 }
 
 /** A part together with what draws its mesh. */

@@ -4,6 +4,7 @@ import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { people, purchases } from './people.js';
+import { posts } from './posts.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
 
@@ -43,4 +44,5 @@ export const demoWorkshop: DemoWorkshop = {
     },
   ],
   purchases,
+  posts,
 };

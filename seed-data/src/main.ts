@@ -44,6 +44,12 @@ const main = async (): Promise<void> => {
       isActive: true,
     });
 
+  for (const { kitSlug, ...words } of demoWorkshop.posts) {
+    const kitId = kitSlug === null ? null : (kitIds.get(kitSlug) ?? null);
+    const { id } = await maker.post<{ id: string }>('/workshop/posts', { ...words, kitId });
+    await maker.post(`/workshop/posts/${id}/publication`);
+  }
+
   for (const purchase of demoWorkshop.purchases) {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
     if (person) await buy(await signIn(person.email), person, purchase, stripeUrl);

@@ -9,9 +9,11 @@ import { DatabaseModule } from './database/database.module.js';
 import { EntitlementsModule } from './entitlements/entitlements.module.js';
 import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
+import { JournalModule } from './journal/journal.module.js';
 import { LedgerModule } from './ledger/ledger.module.js';
 import { MailsModule } from './mails/mails.module.js';
 import { MeasuringModule } from './measuring/measuring.module.js';
+import { PicturesModule } from './pictures/pictures.module.js';
 import { OrdersModule } from './orders/orders.module.js';
 import { WorkshopModule } from './workshop/workshop.module.js';
 
@@ -23,6 +25,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     HttpModule,
     JobsModule,
     MailsModule,
+    PicturesModule,
     ScheduleModule.forRoot(),
     // The rooms, lower ones first.
     AccountsModule,
@@ -32,6 +35,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     OrdersModule,
     LedgerModule,
     EntitlementsModule,
+    JournalModule,
     WorkshopModule,
   ],
 })

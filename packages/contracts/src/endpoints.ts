@@ -2,6 +2,7 @@ import { basketEndpoints } from './basket.js';
 import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
 import { healthEndpoints } from './health.js';
+import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
 import { sessionEndpoints } from './session.js';
@@ -16,6 +17,7 @@ export const endpoints = {
   ...deliveryEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
+  ...journalEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

@@ -11,5 +11,6 @@ export * from './delivery.js';
 export * from './workshop-kits.js';
 export * from './workshop-revisions.js';
 export * from './workshop-sales.js';
+export * from './journal.js';
 export * from './people.js';
 export * from './health.js';

@@ -82,6 +82,18 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
   },
   {
+    path: paths.workshop.journal.path,
+    element: lazyPage(async () => (await import('../../features/journal/posts.page.js')).PostsPage),
+  },
+  {
+    path: paths.workshop.newPost.path,
+    element: lazyPage(async () => (await import('../../features/journal/new-post.page.js')).NewPostPage),
+  },
+  {
+    path: paths.workshop.post.path,
+    element: lazyPage(async () => (await import('../../features/journal/edit-post.page.js')).EditPostPage),
+  },
+  {
     path: paths.workshop.people.path,
     element: lazyPage(async () => (await import('../../features/workshop/people.page.js')).PeoplePage),
   },

@@ -47,6 +47,8 @@ export const progressTexts = { percent: (value: number) => `${value} %` };
 
 export const markdownTexts = { done: 'done', toDo: 'to do' };
 
+export const editorTexts = { preview: 'Preview', nothing: 'Nothing is written here.' };
+
 export const loadingText = 'Loading';
 
 export const drawingTexts = {

@@ -14,6 +14,7 @@ export const shopTexts = {
   navigation: 'Shop',
   footer: 'About this shop',
   cautions: 'Cautions',
+  journal: 'Journal',
   printer: 'My printer',
 };
 

@@ -11,6 +11,7 @@ export const workshopTexts = {
   orders: 'Orders',
   coupons: 'Coupons',
   holders: 'Holders',
+  journal: 'Journal',
   people: 'People',
   toShop: 'To the shop',
   footer: 'About the workshop',
