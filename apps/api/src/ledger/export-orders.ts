@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import type { Handled } from '@windchest/contracts';
 import { decimalText } from '@windchest/money';
 import { OrdersReader } from '../orders/orders-reader.js';
-import { csvRecord } from './csv.js';
+import { csvRecord } from '../http/csv.js';
 
 const HEAD = [
   'number',
