@@ -111,6 +111,21 @@ export interface DemoPurchase {
   boughtAt: string;
 }
 
+export interface DemoFitReport {
+  buyerEmail: string;
+  kitSlug: string;
+  /** Which part of the revision held, in the order of their codes. */
+  partIndex: number;
+  printerName: string;
+  nozzleMm: number;
+  layerMm: number;
+  material: string;
+  verdict: 'far-too-tight' | 'tight' | 'right' | 'loose' | 'far-too-loose';
+  gapMm: number | null;
+  words: string;
+  answer: string | null;
+}
+
 export interface DemoPost {
   title: string;
   slug: string;
@@ -136,6 +151,7 @@ export interface DemoWorkshop {
   coupons: DemoCoupon[];
   purchases: DemoPurchase[];
   posts: DemoPost[];
+  fitReports: DemoFitReport[];
 }
 
 /** A part together with what draws its mesh. */

@@ -3,6 +3,7 @@ import { curlew } from './kits/curlew.js';
 import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
+import { fitReports } from './fit-reports.js';
 import { people, purchases } from './people.js';
 import { posts } from './posts.js';
 
@@ -45,4 +46,5 @@ export const demoWorkshop: DemoWorkshop = {
   ],
   purchases,
   posts,
+  fitReports,
 };

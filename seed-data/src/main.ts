@@ -1,6 +1,7 @@
 import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
+import { reportFit } from './load/report-fit.js';
 import { makePeople } from './load/make-people.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
@@ -55,6 +56,9 @@ const main = async (): Promise<void> => {
     if (person) await buy(await signIn(person.email), person, purchase, stripeUrl);
     say(`${person?.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
   }
+
+  for (const report of demoWorkshop.fitReports)
+    await reportFit(await signIn(report.buyerEmail), maker, report);
 
   for (const kit of demoWorkshop.kits)
     for (const revision of kit.revisions.slice(1)) {

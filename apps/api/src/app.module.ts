@@ -7,6 +7,7 @@ import { ConfigModule } from './config/config.module.js';
 import { CouponsModule } from './coupons/coupons.module.js';
 import { DatabaseModule } from './database/database.module.js';
 import { EntitlementsModule } from './entitlements/entitlements.module.js';
+import { FitModule } from './fit/fit.module.js';
 import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
 import { JournalModule } from './journal/journal.module.js';
@@ -35,6 +36,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     OrdersModule,
     LedgerModule,
     EntitlementsModule,
+    FitModule,
     JournalModule,
     WorkshopModule,
   ],

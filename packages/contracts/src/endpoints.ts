@@ -1,6 +1,7 @@
 import { basketEndpoints } from './basket.js';
 import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
+import { fitEndpoints } from './fit.js';
 import { healthEndpoints } from './health.js';
 import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
@@ -17,6 +18,7 @@ export const endpoints = {
   ...deliveryEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
+  ...fitEndpoints,
   ...journalEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,

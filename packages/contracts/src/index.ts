@@ -11,6 +11,7 @@ export * from './delivery.js';
 export * from './workshop-kits.js';
 export * from './workshop-revisions.js';
 export * from './workshop-sales.js';
+export * from './fit.js';
 export * from './journal.js';
 export * from './people.js';
 export * from './health.js';

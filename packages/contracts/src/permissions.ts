@@ -19,6 +19,8 @@ export const permissionTable = {
   'orders:refund': ['bookkeeper', 'owner'],
   'buyers:read': ['helper', 'bookkeeper', 'maker', 'owner'],
   'links:resend': ['helper', 'bookkeeper', 'maker', 'owner'],
+  'fit:read': ['helper', 'maker', 'owner'],
+  'fit:answer': ['helper', 'maker', 'owner'],
   'journal:write': ['helper', 'maker', 'owner'],
   'journal:publish': ['maker', 'owner'],
   'people:read': ['owner'],

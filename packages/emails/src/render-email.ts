@@ -5,6 +5,7 @@ import { renderHtml } from './render-html.js';
 import { renderText } from './render-text.js';
 import * as accountMails from './templates/account-mails.js';
 import * as deliveryMails from './templates/delivery-mails.js';
+import * as fitMails from './templates/fit-mails.js';
 import * as orderMails from './templates/order-mails.js';
 
 function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent {
@@ -31,6 +32,10 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return deliveryMails.revisionReleased(message);
     case 'gift-received':
       return deliveryMails.giftReceived(message, workshop);
+    case 'fit-answered':
+      return fitMails.fitAnswered(message);
+    case 'fit-fixed':
+      return fitMails.fitFixed(message);
   }
 }
 

@@ -91,6 +91,18 @@ export class CatalogueReader {
     return revision && toReleased(revision);
   }
 
+  /** All revisions of a kit, drafts too, newest first: for staff's choices only. */
+  async revisionChoices(kitId: string): Promise<{ id: string; label: string; isReleased: boolean }[]> {
+    const rows = await this.revisions.findAll({
+      where: { kitId },
+      order: [
+        ['mark', 'DESC'],
+        ['issue', 'DESC'],
+      ],
+    });
+    return rows.map(({ id, label, releasedAt }) => ({ id, label, isReleased: releasedAt !== null }));
+  }
+
   async bundleFile(revisionId: string): Promise<ServableFile | null> {
     const revision = await this.finalById(revisionId);
     const kit = revision && (await this.kits.findByPk(revision.kitId));

@@ -26,6 +26,7 @@ import { WorkshopKitsController } from './kits/workshop-kits.controller.js';
 import { WorkshopKits } from './kits/workshop-kits.js';
 import { PrintPlans } from './print/print-plans.js';
 import { BuildRelease } from './release/build-release.js';
+import { RevisionReleasedSteps } from './release/revision-released-steps.js';
 import { RequestRelease } from './release/request-release.js';
 import { ChangeRevision } from './revisions/change-revision.js';
 import { Drafts } from './revisions/drafts.js';
@@ -67,8 +68,9 @@ import { StartRevision } from './revisions/start-revision.js';
     CatalogueReader,
     CatalogueWaiting,
     PrintPlans,
+    RevisionReleasedSteps,
   ],
   // The measuring room writes what it finds through the records.
-  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans],
+  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans, RevisionReleasedSteps],
 })
 export class CatalogueModule {}

@@ -2,6 +2,7 @@ import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
 import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as journal from './migrations/0016-journal.js';
+import * as fitReports from './migrations/0017-fit-reports.js';
 import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
@@ -18,6 +19,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
   '0016-journal': journal,
+  '0017-fit-reports': fitReports,
 };
 
 /**

@@ -11,6 +11,7 @@ import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
+import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
@@ -34,6 +35,8 @@ import { SignedAddress } from './signed-address.js';
     Collections,
     Shelf,
     Holders,
+    Holdings,
   ],
+  exports: [Holdings],
 })
 export class EntitlementsModule {}

@@ -18,6 +18,7 @@ import { RevisionContents } from '../revisions/revision-contents.js';
 import { isFinal, Revision } from '../revisions/revision.model.js';
 import { buildRelease } from './build-release.job.js';
 import { bundleEntries } from './bundle-entries.js';
+import { RevisionReleasedSteps } from './revision-released-steps.js';
 import { ReleaseProgress } from './release-progress.js';
 import { verifyBundle } from './verify-bundle.js';
 import { writeBuildBook } from './write-build-book.js';
@@ -46,6 +47,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly people: People,
     private readonly staffLog: StaffLog,
     private readonly jobs: JobQueue,
+    private readonly released: RevisionReleasedSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -114,6 +116,11 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     );
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
+    await this.released.run(tx, {
+      revisionId,
+      label: revision.label,
+      kit: { id: kit.id, slug: kit.slug, name: kit.name },
+    });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
       what: 'released a revision',

@@ -20,6 +20,7 @@ const entries: readonly (HeaderEntry & { needs: Permission })[] = [
   { to: paths.workshop.orders.to(), label: workshopTexts.orders, needs: 'orders:read' },
   { to: paths.workshop.coupons.to(), label: workshopTexts.coupons, needs: 'coupons:read' },
   { to: paths.workshop.holders.to(), label: workshopTexts.holders, needs: 'buyers:read' },
+  { to: paths.workshop.fit.to(), label: workshopTexts.fit, needs: 'fit:read' },
   { to: paths.workshop.journal.to(), label: workshopTexts.journal, needs: 'journal:write' },
   { to: paths.workshop.people.to(), label: workshopTexts.people, needs: 'people:read' },
 ];

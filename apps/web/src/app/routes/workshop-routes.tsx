@@ -82,6 +82,14 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
   },
   {
+    path: paths.workshop.fit.path,
+    element: lazyPage(async () => (await import('../../features/fit/fit.page.js')).WorkshopFitPage),
+  },
+  {
+    path: paths.workshop.fitReport.path,
+    element: lazyPage(async () => (await import('../../features/fit/fit-report.page.js')).FitReportPage),
+  },
+  {
     path: paths.workshop.journal.path,
     element: lazyPage(async () => (await import('../../features/journal/posts.page.js')).PostsPage),
   },

@@ -11,6 +11,7 @@ export const workshopTexts = {
   orders: 'Orders',
   coupons: 'Coupons',
   holders: 'Holders',
+  fit: 'Fit',
   journal: 'Journal',
   people: 'People',
   toShop: 'To the shop',
