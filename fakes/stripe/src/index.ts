@@ -1,8 +1,8 @@
 import type { AddressInfo } from 'node:net';
 import { settingsFrom, type FakeStripeOptions } from './options.js';
-import { sweepExpired } from './payments/session-flow.js';
 import { buildServer } from './server.js';
 import { StandIn } from './stand-in.js';
+import { catchUp } from './time/catch-up.js';
 import { WebhookSender } from './webhooks/webhook-sender.js';
 
 export { defaultApiKey, defaultWebhookSecret, type FakeStripeOptions } from './options.js';
@@ -37,8 +37,9 @@ export async function startFakeStripe(options: FakeStripeOptions = {}): Promise<
   const url = `http://127.0.0.1:${port}`;
   standIn.settings.publicUrl ||= url;
 
-  const sweep = setInterval(() => sweepExpired(standIn), standIn.settings.sweepMs);
+  const sweep = setInterval(() => catchUp(standIn), standIn.settings.sweepMs);
   sweep.unref();
+  standIn.onWake = () => catchUp(standIn);
 
   return {
     url,
@@ -51,6 +52,7 @@ export async function startFakeStripe(options: FakeStripeOptions = {}): Promise<
     },
     stop: async () => {
       clearInterval(sweep);
+      standIn.stop();
       const closed = new Promise((resolve) => server.close(resolve));
       server.closeAllConnections();
       await Promise.all([closed, sender.stop()]);

@@ -11,4 +11,4 @@ export type ApiCall = {
 };
 
 /** One address of the API. `run` returns the object or list that goes back, or throws an `ApiError`. */
-export type ApiRoute = { method: 'get' | 'post'; path: string; run: (call: ApiCall) => object };
+export type ApiRoute = { method: 'get' | 'post' | 'delete'; path: string; run: (call: ApiCall) => object };

@@ -1,18 +1,24 @@
 import { Router, text, type Request, type Response } from 'express';
 import qs from 'qs';
 import { setTimeout as wait } from 'node:timers/promises';
+import { balanceTransactionRoutes } from '../resources/balance-transactions.js';
 import { chargeRoutes } from '../resources/charges.js';
 import { checkoutSessionRoutes } from '../resources/checkout-session-routes.js';
 import { customerRoutes } from '../resources/customers.js';
 import { disputeRoutes } from '../resources/disputes.js';
 import { apiVersion, eventRoutes } from '../resources/events.js';
+import { invoicePaymentRoutes } from '../resources/invoice-payments.js';
+import { invoiceRoutes } from '../resources/invoices.js';
 import { paymentIntentRoutes } from '../resources/payment-intents.js';
 import { paymentMethodRoutes } from '../resources/payment-methods.js';
 import { priceRoutes } from '../resources/prices.js';
 import { productRoutes } from '../resources/products.js';
 import { refundRoutes } from '../resources/refunds.js';
-import { sweepExpired } from '../payments/session-flow.js';
+import { setupIntentRoutes } from '../resources/setup-intents.js';
+import { subscriptionRoutes } from '../resources/subscriptions.js';
+import { testClockRoutes } from '../resources/test-clocks.js';
 import type { StandIn } from '../stand-in.js';
+import { catchUp } from '../time/catch-up.js';
 import type { ApiRoute } from './api-route.js';
 import { checkApiKey } from './authentication.js';
 import { ApiError, unknownRoute } from './errors.js';
@@ -30,6 +36,12 @@ const routes: ApiRoute[] = [
   ...chargeRoutes,
   ...refundRoutes,
   ...disputeRoutes,
+  ...balanceTransactionRoutes,
+  ...subscriptionRoutes,
+  ...invoiceRoutes,
+  ...invoicePaymentRoutes,
+  ...setupIntentRoutes,
+  ...testClockRoutes,
   ...eventRoutes,
 ];
 
@@ -71,7 +83,7 @@ async function handle(
   if (key) response.set('idempotency-key', key);
   const answer = await answerTo(standIn, route, request, response, { requestId, key });
   // Reading changes nothing; what ran out meanwhile was saved by the sweep.
-  if (route.method === 'post') standIn.save();
+  if (route.method !== 'get') standIn.save();
   response.status(answer.status).type('application/json').send(answer.json);
 }
 
@@ -108,7 +120,7 @@ async function run(
   { requestId, key }: { requestId: string; key: string | null },
 ): Promise<Answer> {
   if (standIn.settings.latencyMs > 0) await wait(standIn.settings.latencyMs);
-  sweepExpired(standIn);
+  catchUp(standIn);
   const source = route.method === 'post' ? body : (request.originalUrl.split('?')[1] ?? '');
   const fields = new Fields(qs.parse(source, { depth: 10, arrayLimit: 1000, parameterLimit: 5000 }));
   const id = typeof request.params.id === 'string' ? request.params.id : '';

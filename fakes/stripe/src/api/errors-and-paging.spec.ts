@@ -26,10 +26,10 @@ describe('the API as the SDK sees it', () => {
   });
 
   it('answers an address that it does not know as the service does', async () => {
-    const error = await errorOf(shop.stripe.invoices.list());
+    const error = await errorOf(shop.stripe.coupons.list());
     expect(error).toBeInstanceOf(Stripe.errors.StripeInvalidRequestError);
     expect(error.statusCode).toBe(404);
-    expect(error.message).toContain('Unrecognized request URL (GET: /v1/invoices)');
+    expect(error.message).toContain('Unrecognized request URL (GET: /v1/coupons)');
   });
 
   it('refuses to expand what is no reference', async () => {
@@ -38,6 +38,12 @@ describe('the API as the SDK sees it', () => {
       shop.stripe.checkout.sessions.retrieve(session.id, { expand: ['amount_total'] }),
     );
     expect(error.message).toBe('This property cannot be expanded (amount_total).');
+  });
+
+  it('expands four steps deep and no further, as the service does', async () => {
+    const path = 'data.payment_intent.latest_charge.balance_transaction.source';
+    const error = await errorOf(shop.stripe.checkout.sessions.list({ expand: [path] }));
+    expect(error.message).toContain('You cannot expand more than 4 levels');
   });
 
   it('expands along lists', async () => {

@@ -4,12 +4,23 @@ import { badParameter } from './errors.js';
 
 type Node = Record<string, unknown>;
 
+/** The service goes four steps deep and no further. */
+const mostSteps = 4;
+
 /**
  * Replaces ids by their objects along each path (`payment_intent.latest_charge`, `data.customer`).
  * `answer` is changed in place: hand in a copy.
  */
 export function expand(standIn: StandIn, answer: object, paths: readonly string[]): void {
-  for (const path of paths) expandPath(standIn, answer as Node, path.split('.'), path);
+  for (const path of paths) {
+    const steps = path.split('.');
+    if (steps.length > mostSteps)
+      throw badParameter(
+        'expand',
+        `You cannot expand more than ${mostSteps} levels of a property (${path}).`,
+      );
+    expandPath(standIn, answer as Node, steps, path);
+  }
 }
 
 function expandPath(standIn: StandIn, node: Node, steps: readonly string[], path: string): void {

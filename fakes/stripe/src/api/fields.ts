@@ -18,6 +18,11 @@ export class Fields {
     return this.values[key] !== undefined && this.values[key] !== '';
   }
 
+  /** Given, but as nothing: the API's way to clear a field. */
+  isEmptied(key: string): boolean {
+    return this.values[key] === '';
+  }
+
   isNested(key: string): boolean {
     return typeof this.values[key] === 'object';
   }
@@ -79,6 +84,12 @@ export class Fields {
       );
     }
     return match;
+  }
+
+  requiredOneOf<const T extends string>(key: string, allowed: readonly T[]): T {
+    const value = this.oneOf(key, allowed);
+    if (value === null) throw this.missing(key);
+    return value;
   }
 
   /** Currency codes are lower case in the API, whatever came in. */

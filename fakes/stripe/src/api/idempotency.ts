@@ -20,7 +20,7 @@ export function claimKey(
 ): KeyLookup {
   const answers = standIn.state.idempotentAnswers;
   for (const old of answers.oldestFirst()) {
-    if (standIn.clock.nowMs() - old.createdMs < keptMs) break;
+    if (standIn.clock.flowingMs() - old.createdMs < keptMs) break;
     answers.remove(old.id);
   }
   if (key.length > 255) {
@@ -32,7 +32,7 @@ export function claimKey(
   const bodyHash = createHash('sha256').update(body).digest('hex');
   const known = answers.find(key);
   if (!known) {
-    const createdMs = standIn.clock.nowMs();
+    const createdMs = standIn.clock.flowingMs();
     return { claim: answers.add({ id: key, path, bodyHash, createdMs, requestId, answer: null }) };
   }
   if (known.path !== path || known.bodyHash !== bodyHash) {

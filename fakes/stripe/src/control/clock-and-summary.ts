@@ -28,13 +28,16 @@ export function summary(standIn: StandIn) {
   return {
     clock: {
       now: clock.nowSeconds(),
-      iso: new Date(clock.nowMs()).toISOString(),
+      iso: new Date(clock.flowingMs()).toISOString(),
       offsetSeconds: clock.offsetMs / 1000,
     },
     sessions: byStatus(state.sessions.oldestFirst()),
     paymentIntents: byStatus(state.paymentIntents.oldestFirst()),
     refunds: byStatus(state.refunds.oldestFirst()),
     disputes: byStatus(state.disputes.oldestFirst()),
+    subscriptions: byStatus(state.subscriptions.oldestFirst()),
+    invoices: byStatus(state.invoices.oldestFirst()),
+    billing: state.billing,
     customers: state.customers.size,
     events: state.events.size,
     webhooks: {

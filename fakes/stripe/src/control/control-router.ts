@@ -1,23 +1,17 @@
 import { json, Router, type NextFunction, type Request, type Response } from 'express';
 import { ApiError, badParameter } from '../api/errors.js';
 import { existing } from '../api/existing.js';
-import type { Fields } from '../api/fields.js';
-import {
-  closeDispute,
-  disputableCharge,
-  disputeEnds,
-  disputeReasons,
-  openDispute,
-} from '../resources/disputes.js';
-import { expireSession, sweepExpired } from '../payments/session-flow.js';
+import { expireSession } from '../payments/session-flow.js';
 import type { StandIn } from '../stand-in.js';
+import { catchUp } from '../time/catch-up.js';
 import type { WebhookSender } from '../webhooks/webhook-sender.js';
 import { payWithoutBrowser } from './buyer-controls.js';
 import { moveClock, summary } from './clock-and-summary.js';
+import { billingControls } from './billing-controls.js';
+import type { Control } from './control.js';
 import { fieldsOf } from './control-fields.js';
+import { moneyBackControls } from './money-back-controls.js';
 import { setSwitches } from './webhook-controls.js';
-
-type Control = (fields: Fields, id: string) => object | Promise<object>;
 
 /** `/control`: what tests and developers do to the stand-in from outside. JSON in, JSON out. */
 export function controlRouter(standIn: StandIn, sender: WebhookSender): Router {
@@ -35,7 +29,7 @@ export function controlRouter(standIn: StandIn, sender: WebhookSender): Router {
   router.use('/control', json());
   const post = (path: string, control: Control) =>
     router.post(`/control${path}`, async (request, response) => {
-      sweepExpired(standIn);
+      catchUp(standIn);
       const result = await control(fieldsOf(request.body), idIn(request));
       standIn.save();
       response.json(result);
@@ -43,7 +37,7 @@ export function controlRouter(standIn: StandIn, sender: WebhookSender): Router {
   const sessionOf = (id: string) => existing(standIn.state.sessions, 'checkout.session', id);
 
   router.get('/control/state', (_request, response) => {
-    sweepExpired(standIn);
+    catchUp(standIn);
     response.json(summary(standIn));
   });
   router.get('/control/deliveries', (_request, response) => {
@@ -58,17 +52,8 @@ export function controlRouter(standIn: StandIn, sender: WebhookSender): Router {
     expireSession(standIn, session, null);
     return session;
   });
-  post('/disputes', (fields) => {
-    fields.allowOnly('payment_intent', 'reason');
-    const charge = disputableCharge(standIn, fields.requiredString('payment_intent'));
-    return openDispute(standIn, charge, fields.oneOf('reason', disputeReasons) ?? 'fraudulent');
-  });
-  post('/disputes/:id/close', (fields, id) => {
-    fields.allowOnly('status');
-    const status = fields.oneOf('status', disputeEnds);
-    if (!status) throw fields.missing('status');
-    return closeDispute(standIn, existing(standIn.state.disputes, 'dispute', id), status, null);
-  });
+  const switches = { ...moneyBackControls(standIn), ...billingControls(standIn) };
+  for (const [path, control] of Object.entries(switches)) post(path, control);
   post('/events/:id/redeliver', (fields, id) => {
     fields.allowOnly('times');
     const times = fields.integer('times') ?? 1;
@@ -79,7 +64,7 @@ export function controlRouter(standIn: StandIn, sender: WebhookSender): Router {
   });
   post('/clock', (fields) => {
     moveClock(standIn, fields);
-    sweepExpired(standIn);
+    catchUp(standIn);
     sender.plan();
     return summary(standIn).clock;
   });

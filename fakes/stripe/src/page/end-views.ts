@@ -1,29 +1,27 @@
-import type Stripe from 'stripe';
-import { formatAmount } from '../payments/amounts.js';
 import { layout } from './layout.js';
 import { html } from './markup.js';
 
-/** The bank's question between pressing "Pay" and the charge. */
-export function secondStepView(session: Stripe.Checkout.Session): string {
-  const amount = formatAmount(session.amount_total ?? 0, session.currency ?? 'eur');
+/** The bank's question between pressing the button and the charge. `what` goes on from "do you approve". */
+export function secondStepView(path: string, what: string): string {
   return layout(
     'Second step',
-    html`<form class="sheet narrow" method="post" action="/pay/${session.id}/second-step">
-      <h2>Your bank asks: do you approve this payment of ${amount}?</h2>
+    html`<form class="sheet narrow" method="post" action="${path}">
+      <h2>Your bank asks: do you approve ${what}?</h2>
       <p>A real bank would ask in its own app, or for a code. Here you choose how it ends.</p>
       <div class="actions">
-        <button class="main" name="answer" value="approve">Approve the payment</button>
-        <button name="answer" value="refuse">Refuse the payment</button>
+        <button class="main" name="answer" value="approve">Approve</button>
+        <button name="answer" value="refuse">Refuse</button>
       </div>
     </form>`,
   );
 }
 
-export function paidView(shopAddress: string | null): string {
+/** Nothing is left to do. */
+export function doneView(heading: string, shopAddress: string | null): string {
   return layout(
     'Already done',
     html`<div class="sheet narrow">
-      <h2>This order is complete</h2>
+      <h2>${heading}</h2>
       <p>Nothing is left to do on this page.</p>
       ${shopAddress && html`<p><a href="${shopAddress}">Go back to the shop</a></p>`}
     </div>`,

@@ -1,53 +1,54 @@
-import type Stripe from 'stripe';
-import { formatAmount } from '../payments/amounts.js';
-import { grouped, sampleCards } from '../payments/cards.js';
+import { grouped } from '../payments/cards.js';
 import { countries } from './countries.js';
 import { layout } from './layout.js';
 import { html, type Markup } from './markup.js';
-import { orderView } from './order-view.js';
-import type { Faults, FormValues } from './payment-form.js';
+import type { Faults, FormShape, FormValues } from './payment-form.js';
 
 export type PaymentPage = {
-  session: Stripe.Checkout.Session;
-  lines: readonly Stripe.LineItem[];
+  /** Where the form goes. */
+  path: string;
+  title: string;
+  heading: string;
+  /** The main button. */
+  action: string;
+  /** What it is about, beside the form. */
+  summary: Markup;
+  shape: FormShape;
+  samples: readonly { number: string; label: string }[];
+  canGoBack: boolean;
   values: FormValues;
   faults: Faults;
   /** Why the last try failed, if one did. */
   notice: string | null;
 };
 
-export function paymentView({ session, lines, values, faults, notice }: PaymentPage): string {
-  const isFree = session.amount_total === 0;
+export function paymentView(page: PaymentPage): string {
+  const { faults, notice, path, action } = page;
   const hasFault = Object.keys(faults).length > 0;
   const message = notice ?? (hasFault ? 'Something is missing or wrong; see the marked fields.' : null);
-  const action = isFree
-    ? 'Complete the order'
-    : `Pay ${formatAmount(session.amount_total ?? 0, session.currency ?? 'eur')}`;
   const content = html`${message && html`<div class="summary" role="alert"><p>${message}</p></div>`}
     <div class="columns">
-      ${orderView(session, lines)}
-      <form class="sheet" method="post" action="/pay/${session.id}">
-        <h2>${isFree ? 'Nothing to pay' : 'Pay by card'}</h2>
+      ${page.summary}
+      <form class="sheet" method="post" action="${path}">
+        <h2>${page.heading}</h2>
         <button class="default-action" name="action" value="pay" tabindex="-1" aria-hidden="true">
           ${action}
         </button>
-        ${emailField(session, values, faults)} ${countryField(values, faults)}
-        ${!isFree && cardFields(session, values, faults)}
+        ${emailField(page)} ${countryField(page)} ${page.shape.isCardNeeded && cardFields(page)}
         <div class="actions">
           <button class="main" name="action" value="pay">${action}</button>
           ${
-            session.cancel_url &&
+            page.canGoBack &&
             html`<button name="action" value="back" formnovalidate>Go back to the shop</button>`
           }
         </div>
       </form>
     </div>`;
-  return layout(`${message ? 'Try again: ' : ''}${isFree ? 'Complete the order' : 'Pay'}`, content);
+  return layout(`${message ? 'Try again: ' : ''}${page.title}`, content);
 }
 
-function emailField(session: Stripe.Checkout.Session, values: FormValues, faults: Faults): Markup {
+function emailField({ shape, values, faults }: PaymentPage): Markup {
   // An address that the shop has named is fixed, as on the real page.
-  const isFixed = Boolean(session.customer_details?.email);
   return html`<div class="field">
     <label for="email">E-mail address</label>
     <input
@@ -57,14 +58,14 @@ function emailField(session: Stripe.Checkout.Session, values: FormValues, faults
       autocomplete="email"
       required
       value="${values.email}"
-      ${isFixed && html`readonly`}
+      ${shape.fixedEmail !== null && html`readonly`}
       ${marks('email', faults)}
     />
     ${faultOf('email', faults)}
   </div>`;
 }
 
-function countryField(values: FormValues, faults: Faults): Markup {
+function countryField({ values, faults }: PaymentPage): Markup {
   return html`<div class="field">
     <label for="country">Billing country</label>
     <select id="country" name="country" autocomplete="country" required ${marks('country', faults)}>
@@ -78,14 +79,14 @@ function countryField(values: FormValues, faults: Faults): Markup {
   </div>`;
 }
 
-function cardFields(session: Stripe.Checkout.Session, values: FormValues, faults: Faults): Markup {
+function cardFields({ path, samples, values, faults }: PaymentPage): Markup {
   return html`<fieldset>
       <legend>Sample cards</legend>
       <p class="hint">Each button fills in the card number below.</p>
       <div class="samples">
-        ${sampleCards.map(
+        ${samples.map(
           ({ number, label }) =>
-            html`<button name="sample" value="${number}" formaction="/pay/${session.id}#card" formnovalidate>
+            html`<button name="sample" value="${number}" formaction="${path}#card" formnovalidate>
               <span>${label}</span> <span class="number">${grouped(number)}</span>
             </button>`,
         )}

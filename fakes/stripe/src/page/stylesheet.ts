@@ -31,6 +31,7 @@ th, td { text-align: left; vertical-align: top; padding: .5rem 0; border-bottom:
 th + td, th + th, td + td { padding-left: .75rem; }
 .amount { text-align: right; white-space: nowrap; }
 thead th { color: var(--soft); font-size: .875rem; }
+.below { margin-top: 1rem; }
 tfoot th, tfoot td { font-weight: 650; font-size: 1.125rem; border-bottom: 0; padding-top: .75rem; }
 .field { margin: 0 0 1.25rem; }
 label, legend { display: block; font-weight: 600; margin: 0 0 .25rem; padding: 0; }
@@ -57,5 +58,15 @@ button.main { background: var(--ink); color: var(--sheet); border-color: var(--i
 .default-action { position: absolute; width: 1px; height: 1px; min-height: 0; padding: 0; border: 0; overflow: hidden; clip-path: inset(50%); }
 :focus-visible { outline: 3px solid var(--focus); outline-offset: 2px; }
 button:hover { text-decoration: underline; }
+.desk { margin: 0 0 1.5rem; }
+.desk h2 { margin-bottom: .5rem; }
+.desk ul { list-style: none; margin: 0; padding: 0; }
+.desk li { display: flex; flex-wrap: wrap; gap: .5rem 1.5rem; align-items: center; justify-content: space-between; padding: .75rem 0; border-top: 1px solid var(--line); }
+.desk li p { margin: 0; overflow-wrap: anywhere; flex: 1 1 18rem; }
+.desk .hint { margin: 0; }
+.forms { display: flex; flex-wrap: wrap; gap: .5rem 1rem; }
+.forms form { display: flex; flex-wrap: wrap; gap: .5rem; }
+.forms input { width: 6rem; }
+.forms select { width: auto; max-width: 100%; }
 @media (forced-colors: active) { button, .sheet { border: 1px solid ButtonText; } }
 `;

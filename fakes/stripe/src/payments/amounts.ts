@@ -11,6 +11,20 @@ export function formatAmount(minor: number, currency: string): string {
   return format.format(minor / 10 ** exponentOf(currency));
 }
 
+/** `12.50`, `eur` -> `1250`; a comma will do too. Null where it is no amount. */
+export function parseAmount(typed: string, currency: string): number | null {
+  const text = typed.trim().replace(',', '.');
+  const digits = exponentOf(currency);
+  if (!/^\d{1,9}(\.\d+)?$/.test(text) || (text.split('.')[1]?.length ?? 0) > digits) return null;
+  return Math.round(Number(text) * 10 ** digits);
+}
+
+/** `1250`, `eur` -> `12.50`, as it is put into a field. */
+export function plainAmount(minor: number, currency: string): string {
+  const digits = exponentOf(currency);
+  return (minor / 10 ** digits).toFixed(digits);
+}
+
 // The smallest amounts the service charges, in minor units, from its public page on currencies; written
 // from memory of that page. A currency that is not listed has no lower bound here.
 const smallestCharge: Record<string, number> = {

@@ -1,37 +1,6 @@
-/** What a test card does when it is charged. */
-export type CardBehaviour =
-  | { kind: 'succeeds' }
-  | { kind: 'second-step' }
-  | { kind: 'declined'; code: string; declineCode: string | null; message: string };
+import { cardTraits, type CardTraits } from './card-traits.js';
 
-export type Card = {
-  number: string;
-  brand: string;
-  last4: string;
-  country: string;
-  behaviour: CardBehaviour;
-};
-
-const declined = (code: string, declineCode: string | null, message: string): CardBehaviour => ({
-  kind: 'declined',
-  code,
-  declineCode,
-  message,
-});
-export const genericDecline = declined('card_declined', 'generic_decline', 'Your card was declined.');
-
-// Numbers and outcomes as in the service's public page on testing; written from memory of that page.
-const behaviours: Record<string, CardBehaviour> = {
-  '4000000000000002': genericDecline,
-  '4000000000009995': declined('card_declined', 'insufficient_funds', 'Your card has insufficient funds.'),
-  '4000000000009987': declined('card_declined', 'lost_card', 'Your card was declined.'),
-  '4000000000000069': declined('expired_card', null, 'Your card has expired.'),
-  '4000000000000127': declined('incorrect_cvc', null, "Your card's security code is incorrect."),
-  '4000000000000119': declined('processing_error', null, 'An error occurred while processing your card.'),
-  '4000002500003155': { kind: 'second-step' },
-  '4000002760003184': { kind: 'second-step' },
-  '4000000000003220': { kind: 'second-step' },
-};
+export type Card = CardTraits & { number: string; brand: string; last4: string; country: string };
 
 // Test cards of a country carry its ISO 3166-1 numeric code in digits 6 to 8 (4000 0027 6… is Germany, 276).
 const countryByNumericCode: Record<string, string> = {
@@ -40,11 +9,15 @@ const countryByNumericCode: Record<string, string> = {
   '752': 'SE', '756': 'CH', '826': 'GB', '036': 'AU', '392': 'JP', '554': 'NZ',
 }; // prettier-ignore
 
-/** The three that the payment page offers as buttons. */
+/** Those that the pages offer as buttons; the last where money is to be taken again later. */
 export const sampleCards = [
   { number: '4242424242424242', label: 'Succeeds' },
   { number: '4000000000000002', label: 'Is declined' },
   { number: '4000002500003155', label: 'Needs a second step' },
+] as const;
+export const laterSampleCards = [
+  ...sampleCards,
+  { number: '4000000000099210', label: 'Succeeds once, is declined later' },
 ] as const;
 
 export function grouped(number: string): string {
@@ -63,8 +36,7 @@ export function readCard(typed: string): CardReading {
   const brand = brandOf(number);
   if (!brand) return { fault: 'This stand-in takes test cards alone. Press one of the sample cards.' };
   const country = countryByNumericCode[number.slice(6, 9)] ?? 'US';
-  const behaviour = behaviours[number] ?? { kind: 'succeeds' };
-  return { card: { number, brand, last4: number.slice(-4), country, behaviour } };
+  return { card: { number, brand, last4: number.slice(-4), country, ...cardTraits(number) } };
 }
 
 function brandOf(number: string): string | null {

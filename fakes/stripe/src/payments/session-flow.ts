@@ -1,18 +1,23 @@
 import type Stripe from 'stripe';
 import { refused } from '../api/errors.js';
 import { addressIn } from '../resources/addresses.js';
-import { customerDetails } from '../resources/checkout-sessions.js';
-import { createCustomer } from '../resources/customers.js';
+import { customerDetails } from '../resources/checkout-session-object.js';
 import { emit } from '../resources/events.js';
-import { cancelIntent } from '../resources/payment-intents.js';
 import type { Cause, StandIn } from '../stand-in.js';
-import type { Buyer, SessionDetail } from '../state/state.js';
+import type { Buyer } from '../state/records.js';
+import type { SessionDetail } from '../state/state.js';
+import { inTimeOfCustomer } from '../time/in-time-of.js';
 import type { Card } from './cards.js';
-import { chargeOnce, refuseSecondStep, startOnce } from './pay-once.js';
+import { customerOf, type PageFlow, type PayResult, type Visit } from './page-flow.js';
+import { payOnce } from './pay-once.js';
+import { paySubscription } from './pay-subscription.js';
+import { saveCard } from './save-card.js';
 
-/** How one try of the buyer ended. */
-export type PayResult =
-  { kind: 'complete' } | { kind: 'second-step' } | { kind: 'declined'; message: string };
+const flows: Record<string, PageFlow> = {
+  payment: payOnce,
+  subscription: paySubscription,
+  setup: saveCard,
+};
 
 export function detailOf(standIn: StandIn, session: Stripe.Checkout.Session): SessionDetail {
   const detail = standIn.state.sessionDetails.find(session.id);
@@ -20,7 +25,11 @@ export function detailOf(standIn: StandIn, session: Stripe.Checkout.Session): Se
   return detail;
 }
 
-/** The buyer presses "Pay". `card` may be null where nothing is to be paid. */
+/** An order of nothing needs no card; a pledge and a card given for later do. */
+export const isCardNeeded = (session: Stripe.Checkout.Session): boolean =>
+  session.mode !== 'payment' || session.amount_total !== 0;
+
+/** The buyer presses the button. `card` may be null where none is needed. */
 export function paySession(
   standIn: StandIn,
   session: Stripe.Checkout.Session,
@@ -28,17 +37,18 @@ export function paySession(
   card: Card | null,
 ): PayResult {
   assertOpen(session);
-  if (session.amount_total === 0) {
+  if (!isCardNeeded(session)) {
     complete(standIn, session, buyer);
     return { kind: 'complete' };
   }
   if (!card) throw refused('A card is needed to pay this session.', undefined, 'card');
-  const started = startOnce(standIn, session, detailOf(standIn, session), card, buyer);
-  if (started === 'second-step') {
-    detailOf(standIn, session).waiting = { cardNumber: card.number, cardCountry: card.country, buyer };
+  const detail = detailOf(standIn, session);
+  const visit = { standIn, session, detail, card, buyer };
+  return inTimeOfCustomer(standIn, customerOf(session), () => {
+    if (flowOf(session).start(visit) === 'ready') return finish(visit, false);
+    detail.waiting = { cardNumber: card.number, cardCountry: card.country, buyer };
     return { kind: 'second-step' };
-  }
-  return finish(standIn, session, card, buyer, false);
+  });
 }
 
 /** The buyer answers the bank's question of the second step. */
@@ -51,30 +61,17 @@ export function answerSecondStep(
   assertOpen(session);
   const detail = detailOf(standIn, session);
   if (!detail.waiting) throw refused(`The session ${session.id} waits for no second step.`);
-  const { buyer } = detail.waiting;
+  const visit = { standIn, session, detail, card, buyer: detail.waiting.buyer };
   detail.waiting = null;
-  if (!isApproved) return { kind: 'declined', message: refuseSecondStep(standIn, session) };
-  return finish(standIn, session, card, buyer, true);
+  return inTimeOfCustomer(standIn, customerOf(session), () =>
+    isApproved ? finish(visit, true) : { kind: 'declined', message: flowOf(session).refuse(visit) },
+  );
 }
 
-function finish(
-  standIn: StandIn,
-  session: Stripe.Checkout.Session,
-  card: Card,
-  buyer: Buyer,
-  isAuthenticated: boolean,
-): PayResult {
-  if (
-    card.behaviour.kind !== 'declined' &&
-    session.customer === null &&
-    session.customer_creation === 'always'
-  ) {
-    session.customer = createCustomer(standIn, { email: buyer.email, name: buyer.name }, null).id;
-  }
-  const decline = chargeOnce(standIn, session, card, buyer, isAuthenticated);
-  if (decline) return { kind: 'declined', message: decline };
-  session.payment_status = 'paid';
-  complete(standIn, session, buyer);
+function finish(visit: Visit, isAuthenticated: boolean): PayResult {
+  const fault = flowOf(visit.session).finish(visit, isAuthenticated);
+  if (fault !== null) return { kind: 'declined', message: fault };
+  complete(visit.standIn, visit.session, visit.buyer);
   return { kind: 'complete' };
 }
 
@@ -83,6 +80,12 @@ function complete(standIn: StandIn, session: Stripe.Checkout.Session, buyer: Buy
   session.url = null;
   session.customer_details = customerDetails(buyer.email, buyer.name, addressIn(buyer.country));
   emit(standIn, 'checkout.session.completed', session, null);
+}
+
+function flowOf(session: Stripe.Checkout.Session): PageFlow {
+  const flow = flows[session.mode];
+  if (!flow) throw new Error(`The session ${session.id} has the unknown mode ${session.mode}.`);
+  return flow;
 }
 
 function assertOpen(session: Stripe.Checkout.Session): void {
@@ -100,18 +103,8 @@ export function expireSession(standIn: StandIn, session: Stripe.Checkout.Session
   }
   session.status = 'expired';
   session.url = null;
-  detailOf(standIn, session).waiting = null;
-  const intent = standIn.state.paymentIntents.find(String(session.payment_intent));
-  if (intent && intent.status !== 'canceled') cancelIntent(standIn, intent, 'expired', cause);
+  const detail = detailOf(standIn, session);
+  detail.waiting = null;
+  flowOf(session).drop(standIn, session, detail, cause);
   emit(standIn, 'checkout.session.expired', session, cause);
-}
-
-/** Ends what has run out. */
-export function sweepExpired(standIn: StandIn): void {
-  const now = standIn.clock.nowSeconds();
-  const due = standIn.state.sessions
-    .oldestFirst()
-    .filter((session) => session.status === 'open' && session.expires_at <= now);
-  for (const session of due) expireSession(standIn, session, null);
-  if (due.length > 0) standIn.save();
 }

@@ -2,24 +2,23 @@ import type Stripe from 'stripe';
 import type { ApiCall, ApiRoute } from '../api/api-route.js';
 import { existing } from '../api/existing.js';
 import { createdFilter, pageOf, pageParameters } from '../api/pages.js';
-import type { Card, CardBehaviour } from '../payments/cards.js';
+import type { Declined } from '../payments/card-traits.js';
+import type { Card } from '../payments/cards.js';
 import type { StandIn } from '../stand-in.js';
-import type { Buyer } from '../state/state.js';
-import { addressIn } from './addresses.js';
+import { book, chargeFeeMinor } from './balance-transactions.js';
 import { cardExpiry } from './payment-methods.js';
 
 export type ChargeDetails = {
   intent: Stripe.PaymentIntent;
   paymentMethod: Stripe.PaymentMethod;
   card: Card;
-  buyer: Buyer;
-  decline: Extract<CardBehaviour, { kind: 'declined' }> | null;
+  decline: Declined | null;
   isAuthenticated: boolean;
 };
 
 /** Takes the money of a payment intent, or writes down that the card was declined. */
 export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.Charge {
-  const { intent, buyer, decline } = details;
+  const { intent, decline, paymentMethod } = details;
   const hasSucceeded = decline === null;
   const charge: Stripe.Charge = {
     id: standIn.newId('ch'),
@@ -30,15 +29,8 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     application: null,
     application_fee: null,
     application_fee_amount: null,
-    // The stand-in keeps no balance: there is nothing to settle and no fee to show.
     balance_transaction: null,
-    billing_details: {
-      address: addressIn(buyer.country),
-      email: buyer.email,
-      name: buyer.name,
-      phone: null,
-      tax_id: null,
-    },
+    billing_details: structuredClone(paymentMethod.billing_details),
     calculated_statement_descriptor: null,
     captured: hasSucceeded,
     created: standIn.clock.nowSeconds(),
@@ -56,7 +48,7 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     outcome: outcomeOf(decline),
     paid: hasSucceeded,
     payment_intent: intent.id,
-    payment_method: details.paymentMethod.id,
+    payment_method: paymentMethod.id,
     payment_method_details: { type: 'card', card: cardDetails(standIn, details) },
     receipt_email: intent.receipt_email,
     receipt_number: null,
@@ -72,6 +64,17 @@ export function createCharge(standIn: StandIn, details: ChargeDetails): Stripe.C
     transfer_data: null,
     transfer_group: null,
   };
+  if (hasSucceeded) {
+    charge.balance_transaction = book(standIn, {
+      type: 'charge',
+      category: 'charge',
+      amount: charge.amount,
+      fee: chargeFeeMinor(charge.amount),
+      currency: charge.currency,
+      source: charge.id,
+      description: charge.description,
+    }).id;
+  }
   return standIn.state.charges.add(charge);
 }
 

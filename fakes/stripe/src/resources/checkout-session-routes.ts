@@ -8,13 +8,15 @@ const sessionOf = ({ standIn, id }: ApiCall) =>
   existing(standIn.state.sessions, 'checkout.session', id, 'session');
 
 function listFromCall(call: ApiCall): object {
-  call.fields.allowOnly(...pageParameters, 'payment_intent', 'customer', 'status', 'created');
+  call.fields.allowOnly(...pageParameters, 'payment_intent', 'subscription', 'customer', 'status', 'created');
   const intentId = call.fields.string('payment_intent');
+  const subscription = call.fields.string('subscription');
   const customer = call.fields.string('customer');
   const status = call.fields.oneOf('status', ['open', 'complete', 'expired']);
   const sessions = call.standIn.state.sessions
     .newestFirst()
     .filter((session) => intentId === null || session.payment_intent === intentId)
+    .filter((session) => subscription === null || session.subscription === subscription)
     .filter((session) => customer === null || session.customer === customer)
     .filter((session) => status === null || session.status === status)
     .filter(createdFilter(call.fields));

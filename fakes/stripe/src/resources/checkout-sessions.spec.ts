@@ -137,6 +137,16 @@ describe('checkout sessions', () => {
     expect(shop.types()).toContain('checkout.session.expired');
   });
 
+  it('takes the word of a shop whose clock was not moved along, and gives it the time it asked for', async () => {
+    await shop.control('/clock', { advanceSeconds: 90 * 86_400 });
+    const expiresAt = Math.floor(Date.now() / 1000) + 1800;
+    const session = await shop.openSession({ expires_at: expiresAt });
+    expect(session.expires_at).toBe(expiresAt);
+    expect((await shop.stripe.checkout.sessions.retrieve(session.id)).status).toBe('open');
+    await shop.control('/clock', { advanceSeconds: 1801 });
+    expect((await shop.stripe.checkout.sessions.retrieve(session.id)).status).toBe('expired');
+  });
+
   it('keeps a completed session complete when its time runs out', async () => {
     const { session } = await shop.paidSession();
     await shop.control('/clock', { advanceSeconds: 48 * 3600 });
@@ -156,7 +166,13 @@ describe('checkout sessions', () => {
       { consent_collection: { promotions: 'auto' as const } },
       'consent_collection',
     ],
-    ['a mode that it does not offer', { mode: 'setup' as const }, 'mode'],
+    ['a mode that it does not offer', { mode: 'loan' as 'payment' }, 'mode'],
+    ['what belongs to another mode', { subscription_data: { description: 'Reed' } }, 'subscription_data'],
+    [
+      'a subscription without a recurring price',
+      { mode: 'subscription' as const, payment_intent_data: undefined },
+      'line_items',
+    ],
     [
       'a broken price',
       { line_items: [lineItem('Half a cent', 0.5)] },

@@ -13,6 +13,8 @@ export type IntentDetails = {
   description: string | null;
   metadata: Stripe.Metadata;
   receiptEmail: string | null;
+  /** The card is to be kept for what falls due later. */
+  isCardKept: boolean;
 };
 
 export function createPaymentIntent(
@@ -58,7 +60,7 @@ export function createPaymentIntent(
     processing: null,
     receipt_email: details.receiptEmail,
     review: null,
-    setup_future_usage: null,
+    setup_future_usage: details.isCardKept ? 'off_session' : null,
     shipping: null,
     source: null,
     statement_descriptor: null,
@@ -108,6 +110,7 @@ function createFromCall({ standIn, fields, cause }: ApiCall): Stripe.PaymentInte
       description: fields.string('description'),
       metadata: fields.metadata(),
       receiptEmail: fields.string('receipt_email'),
+      isCardKept: false,
     },
     cause,
   );

@@ -45,8 +45,7 @@ export function createPrice(standIn: StandIn, fields: Fields, isActive: boolean)
     nickname: fields.string('nickname'),
     product: productOf(standIn, fields, isActive),
     recurring: recurring && {
-      interval:
-        recurring.oneOf('interval', ['day', 'week', 'month', 'year']) ?? raiseMissing(recurring, 'interval'),
+      interval: recurring.requiredOneOf('interval', ['day', 'week', 'month', 'year']),
       interval_count: recurring.integer('interval_count') ?? 1,
       meter: null,
       trial_period_days: null,
@@ -70,10 +69,6 @@ function productOf(standIn: StandIn, fields: Fields, isActive: boolean): string 
   if (!inline) throw fields.missing('product');
   inline.allowOnly(...productParameters);
   return createProduct(standIn, inline, isActive).id;
-}
-
-function raiseMissing(fields: Fields, key: string): never {
-  throw fields.missing(key);
 }
 
 export const priceRoutes: ApiRoute[] = [

@@ -1,5 +1,6 @@
 import type Stripe from 'stripe';
 import type { ApiRoute } from '../api/api-route.js';
+import { refused } from '../api/errors.js';
 import { existing } from '../api/existing.js';
 import type { Fields } from '../api/fields.js';
 import { createdFilter, pageOf, pageParameters } from '../api/pages.js';
@@ -8,8 +9,11 @@ import type { StandIn } from '../stand-in.js';
 /** `isActive` is false for the product that a price given inline (`price_data`) makes by the way. */
 export function createProduct(standIn: StandIn, fields: Fields, isActive: boolean): Stripe.Product {
   const now = standIn.clock.nowSeconds();
+  const id = fields.string('id');
+  if (id && standIn.state.products.find(id))
+    throw refused('Product already exists.', 'resource_already_exists', 'id');
   const product: Stripe.Product = {
-    id: standIn.newId('prod'),
+    id: id ?? standIn.newId('prod'),
     object: 'product',
     active: isActive,
     created: now,
@@ -40,7 +44,7 @@ export const productRoutes: ApiRoute[] = [
     method: 'post',
     path: '/v1/products',
     run: ({ standIn, fields }) => {
-      fields.allowOnly(...productParameters, 'active', 'expand');
+      fields.allowOnly(...productParameters, 'id', 'active', 'expand');
       return createProduct(standIn, fields, fields.boolean('active') ?? true);
     },
   },

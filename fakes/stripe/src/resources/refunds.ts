@@ -5,62 +5,28 @@ import { existing } from '../api/existing.js';
 import type { Fields } from '../api/fields.js';
 import { createdFilter, pageOf, pageParameters } from '../api/pages.js';
 import { formatAmount } from '../payments/amounts.js';
+import { makeRefund } from '../payments/refund-flow.js';
 import type { StandIn } from '../stand-in.js';
 import { emit } from './events.js';
+
+const refundReasons = ['duplicate', 'fraudulent', 'requested_by_customer'] as const;
 
 function createFromCall({ standIn, fields, cause }: ApiCall): Stripe.Refund {
   fields.allowOnly('amount', 'payment_intent', 'charge', 'reason', 'metadata', 'expand');
   const charge = chargeOf(standIn, fields);
-  const reason = fields.oneOf('reason', ['duplicate', 'fraudulent', 'requested_by_customer']);
+  const reason = fields.oneOf('reason', refundReasons);
   const metadata = fields.metadata();
   const amount = refundableAmount(standIn, fields, charge);
-  const refund: Stripe.Refund = {
-    id: standIn.newId('re'),
-    object: 'refund',
-    amount,
-    balance_transaction: null,
-    charge: charge.id,
-    created: standIn.clock.nowSeconds(),
-    currency: charge.currency,
-    customer: charge.customer,
-    customer_account: null,
-    destination_details: {
-      type: 'card',
-      card: { reference_status: 'pending', reference_type: 'acquirer_reference_number', type: 'refund' },
-    },
-    metadata,
-    payment_intent: charge.payment_intent,
-    payment_method: charge.payment_method,
-    reason,
-    receipt_number: null,
-    source_transfer_reversal: null,
-    status: 'succeeded',
-    transfer_reversal: null,
-  };
-  standIn.state.refunds.add(refund);
-  const before = { amount_refunded: charge.amount_refunded, refunded: charge.refunded };
-  charge.amount_refunded += amount;
-  charge.refunded = charge.amount_refunded === charge.amount_captured;
-  emit(standIn, 'refund.created', refund, cause);
-  emit(standIn, 'charge.refunded', charge, cause, before);
-  const answer = structuredClone(refund);
-  giveReference(standIn, refund);
-  return answer;
+  return makeRefund(standIn, charge, { amount, reason, metadata }, cause);
 }
 
-/** Card networks name a refund some time after it was made; the service tells of it by `refund.updated`. */
-function giveReference(standIn: StandIn, refund: Stripe.Refund): void {
-  const previous = structuredClone(refund.destination_details);
-  refund.destination_details = {
-    type: 'card',
-    card: {
-      reference: String(Math.floor(standIn.ids.next() * 1e12)).padStart(12, '0'),
-      reference_status: 'available',
-      reference_type: 'acquirer_reference_number',
-      type: 'refund',
-    },
-  };
-  emit(standIn, 'refund.updated', refund, null, { destination_details: previous });
+/** What somebody does by hand at the service, without the shop: the shop hears of it by events alone. */
+export function refundByHand(standIn: StandIn, fields: Fields): Stripe.Refund {
+  fields.allowOnly('amount', 'payment_intent', 'charge', 'reason');
+  const charge = chargeOf(standIn, fields);
+  const reason = fields.oneOf('reason', refundReasons) ?? 'requested_by_customer';
+  const amount = refundableAmount(standIn, fields, charge);
+  return makeRefund(standIn, charge, { amount, reason, metadata: {} }, null);
 }
 
 function chargeOf(standIn: StandIn, fields: Fields): Stripe.Charge {

@@ -14,6 +14,12 @@ const collections = {
   re: 'refunds',
   dp: 'disputes',
   evt: 'events',
+  txn: 'balanceTransactions',
+  sub: 'subscriptions',
+  in: 'invoices',
+  inpay: 'invoicePayments',
+  seti: 'setupIntents',
+  clock: 'testClocks',
 } as const satisfies Record<string, keyof State>;
 
 /** Any object by its id, for `expand`. */
@@ -22,7 +28,9 @@ export function findObject(standIn: StandIn, id: string): object | undefined {
   const name = Object.hasOwn(collections, prefix)
     ? collections[prefix as keyof typeof collections]
     : undefined;
-  return name && standIn.state[name].find(id);
+  const found = name && standIn.state[name].find(id);
+  // A product may have an id of the shop's own choice; of a deleted customer, that it was there is left.
+  return found ?? standIn.state.products.find(id) ?? standIn.state.deletedCustomers.find(id);
 }
 
 /** Fields that an object shows only where `expand` asks for them. */
@@ -43,6 +51,17 @@ export function includable(
   if (owner.object === 'charge' && field === 'refunds') {
     const refunds = standIn.state.refunds.newestFirst().filter((refund) => refund.charge === id);
     return list(`/v1/charges/${id}/refunds`, refunds);
+  }
+  if (owner.object === 'invoice' && field === 'payments') {
+    const payments = standIn.state.invoicePayments.newestFirst().filter(({ invoice }) => invoice === id);
+    return list(`/v1/invoice_payments?invoice=${id}`, payments);
+  }
+  if (owner.object === 'customer' && field === 'subscriptions') {
+    const subscriptions = standIn.state.subscriptions.newestFirst();
+    return list(
+      `/v1/customers/${id}/subscriptions`,
+      subscriptions.filter(({ customer, status }) => customer === id && status !== 'canceled'),
+    );
   }
   return undefined;
 }

@@ -1,3 +1,5 @@
+import type { CardBehaviour, CardTraits } from '../payments/card-traits.js';
+
 /** What an idempotency key stands for. Kept for 24 hours. */
 export type IdempotentAnswer = {
   /** The key itself. */
@@ -52,4 +54,52 @@ export type WebhookSwitches = {
 
 export function calmWeather(): WebhookSwitches {
   return { delayMs: 0, duplicates: 0, shuffle: false, lose: 0, paused: false };
+}
+
+/** What the buyer typed, kept while a second step waits for an answer. */
+export type Waiting = { cardNumber: string; cardCountry: string | null; buyer: Buyer };
+
+export type Buyer = { email: string; name: string | null; country: string };
+
+/** The card behind a payment method: what the API does not show of it. */
+export type SavedCard = {
+  /** The payment method's id. */
+  id: string;
+  number: string;
+  country: string;
+  later: CardBehaviour;
+  refunds: CardTraits['refunds'];
+};
+
+/** What a bank will say of a refund, and when. */
+export type RefundPlan = { id: string; atMs: number; outcome: 'succeeded' | 'failed' };
+
+/** The dispute that a charge with such a card brings. */
+export type DisputePlan = {
+  /** The charge's id. */
+  id: string;
+  reason: string;
+  isInquiry: boolean;
+};
+
+/** The page where an invoice can be paid. */
+export type InvoicePage = {
+  /** The last part of the page's address: nobody guesses it. */
+  id: string;
+  invoiceId: string;
+  waiting: Waiting | null;
+};
+
+/** How the service collects, set through the control API. */
+export type BillingRules = {
+  /** Days between one failed attempt and the next. */
+  retryDays: number[];
+  /** What becomes of a subscription when all of them have failed. */
+  afterRetries: 'cancel' | 'mark-unpaid' | 'leave';
+  /** How long an invoice of a new period stays a draft. */
+  finalizeSeconds: number;
+};
+
+export function usualBilling(): BillingRules {
+  return { retryDays: [3, 5, 7], afterRetries: 'cancel', finalizeSeconds: 3600 };
 }

@@ -2,9 +2,16 @@ import type Stripe from 'stripe';
 import { Collection } from './collection.js';
 import {
   calmWeather,
+  usualBilling,
+  type BillingRules,
   type Delivery,
   type DeliveryAttempt,
+  type DisputePlan,
   type IdempotentAnswer,
+  type InvoicePage,
+  type RefundPlan,
+  type SavedCard,
+  type Waiting,
   type WebhookSwitches,
 } from './records.js';
 
@@ -12,13 +19,20 @@ import {
 export type SessionDetail = {
   /** The session's id. */
   id: string;
+  /** Unix seconds of the stand-in's own time. */
+  endsAt: number | null;
   lineItems: Stripe.LineItem[];
-  paymentIntentData: { metadata: Stripe.Metadata; description: string | null; receiptEmail: string | null };
-  /** What the buyer typed, kept while a second step waits for an answer. */
-  waiting: { cardNumber: string; cardCountry: string | null; buyer: Buyer } | null;
+  paymentIntentData: {
+    metadata: Stripe.Metadata;
+    description: string | null;
+    receiptEmail: string | null;
+    isCardKept: boolean;
+  };
+  subscriptionData: { metadata: Stripe.Metadata; description: string | null };
+  /** The subscription that the first try begins. */
+  subscriptionId: string | null;
+  waiting: Waiting | null;
 };
-
-export type Buyer = { email: string; name: string | null; country: string };
 
 /**
  * All that the stand-in remembers. A further kind of object is one more collection here, one more file in
@@ -35,6 +49,20 @@ export type State = {
   charges: Collection<Stripe.Charge>;
   refunds: Collection<Stripe.Refund>;
   disputes: Collection<Stripe.Dispute>;
+  balanceTransactions: Collection<Stripe.BalanceTransaction>;
+  subscriptions: Collection<Stripe.Subscription>;
+  invoices: Collection<Stripe.Invoice>;
+  invoicePayments: Collection<Stripe.InvoicePayment>;
+  invoicePages: Collection<InvoicePage>;
+  setupIntents: Collection<Stripe.SetupIntent>;
+  testClocks: Collection<Stripe.TestHelpers.TestClock>;
+  deletedCustomers: Collection<Stripe.DeletedCustomer>;
+  billing: BillingRules;
+  savedCards: Collection<SavedCard>;
+  refundPlans: Collection<RefundPlan>;
+  disputePlans: Collection<DisputePlan>;
+  /** Refunds wait until they are settled by the control API. */
+  areRefundsHeld: boolean;
   events: Collection<Stripe.Event>;
   idempotentAnswers: Collection<IdempotentAnswer>;
   deliveries: Collection<Delivery>;
@@ -54,12 +82,27 @@ export function openState(seed: number, saved: Partial<Record<keyof State, unkno
     products: collection('products'),
     prices: collection('prices'),
     sessions: collection('sessions'),
-    sessionDetails: collection('sessionDetails'),
+    sessionDetails: new Collection(
+      ((saved.sessionDetails as SessionDetail[] | undefined) ?? []).map(completed),
+    ),
     paymentIntents: collection('paymentIntents'),
     paymentMethods: collection('paymentMethods'),
     charges: collection('charges'),
     refunds: collection('refunds'),
     disputes: collection('disputes'),
+    balanceTransactions: collection('balanceTransactions'),
+    subscriptions: collection('subscriptions'),
+    invoices: collection('invoices'),
+    invoicePayments: collection('invoicePayments'),
+    invoicePages: collection('invoicePages'),
+    setupIntents: collection('setupIntents'),
+    testClocks: collection('testClocks'),
+    deletedCustomers: collection('deletedCustomers'),
+    billing: { ...usualBilling(), ...(saved.billing as Partial<BillingRules> | undefined) },
+    savedCards: collection('savedCards'),
+    refundPlans: collection('refundPlans'),
+    disputePlans: collection('disputePlans'),
+    areRefundsHeld: (saved.areRefundsHeld as boolean | undefined) ?? false,
     events: collection('events'),
     // A call that was under way when the process ended will never be answered: its key is free again.
     idempotentAnswers: new Collection(
@@ -73,5 +116,19 @@ export function openState(seed: number, saved: Partial<Record<keyof State, unkno
     clockOffsetMs: (saved.clockOffsetMs as number | undefined) ?? 0,
     idRandomState: (saved.idRandomState as number | undefined) ?? seed,
     weatherRandomState: (saved.weatherRandomState as number | undefined) ?? seed,
+  };
+}
+
+/** Files of an earlier day know sessions of the mode `payment` alone. */
+function completed(detail: SessionDetail): SessionDetail {
+  return {
+    ...detail,
+    endsAt: detail.endsAt ?? null,
+    paymentIntentData: {
+      ...detail.paymentIntentData,
+      isCardKept: detail.paymentIntentData.isCardKept ?? false,
+    },
+    subscriptionData: detail.subscriptionData ?? { metadata: {}, description: null },
+    subscriptionId: detail.subscriptionId ?? null,
   };
 }

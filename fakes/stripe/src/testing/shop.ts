@@ -73,6 +73,50 @@ export class Shop {
     return { session: paid, intentId: String(paid.payment_intent) };
   }
 
+  /** A page on which a monthly pledge of `amount` is begun. */
+  openPledge(
+    amount = 500,
+    more: Partial<Stripe.Checkout.SessionCreateParams> = {},
+  ): Promise<Stripe.Checkout.Session> {
+    return this.stripe.checkout.sessions.create({
+      mode: 'subscription',
+      line_items: [
+        {
+          quantity: 1,
+          price_data: {
+            currency: 'eur',
+            unit_amount: amount,
+            recurring: { interval: 'month' },
+            product_data: { name: 'Reed supporter' },
+          },
+        },
+      ],
+      client_reference_id: 'pledge-1',
+      metadata: { pledge: '1' },
+      subscription_data: { metadata: { pledge: '1' }, description: 'Reed supporter' },
+      success_url: 'http://shop.test/pledged?session={CHECKOUT_SESSION_ID}',
+      cancel_url: 'http://shop.test/plans',
+      ...more,
+    });
+  }
+
+  /** A subscription that runs, by a customer of its own; `pay` goes to the page's visitor. */
+  async runningPledge(pay: object = {}, customer: Stripe.CustomerCreateParams = {}) {
+    const { id } = await this.stripe.customers.create({ email: 'ada@example.test', ...customer });
+    const session = await this.openPledge(500, { customer: id });
+    await this.control(`/sessions/${session.id}/pay`, pay);
+    const { subscription } = await this.stripe.checkout.sessions.retrieve(session.id);
+    return { customerId: id, subscriptionId: String(subscription), sessionId: session.id };
+  }
+
+  /** What arrived since the last call, by type; sends what waits first. */
+  async arrived(): Promise<string[]> {
+    await this.control('/webhooks/flush');
+    const types = this.types();
+    this.received.length = 0;
+    return types;
+  }
+
   async control<T = Record<string, unknown>>(path: string, body: object = {}): Promise<T> {
     const response = await fetch(`${this.standIn.url}/control${path}`, {
       method: 'POST',

@@ -34,7 +34,7 @@ export class WebhookSender {
       return;
     }
     const { delayMs, shuffle, duplicates } = state.switches;
-    this.queue(event.id, 1 + duplicates, clock.nowMs() + delayMs + (shuffle ? shuffleGatherMs : 0));
+    this.queue(event.id, 1 + duplicates, clock.flowingMs() + delayMs + (shuffle ? shuffleGatherMs : 0));
   }
 
   private isLost(event: Stripe.Event): boolean {
@@ -45,7 +45,7 @@ export class WebhookSender {
 
   /** Sends an event again, `times` copies side by side, past delay and loss. */
   redeliver(eventId: string, times: number): void {
-    this.queue(eventId, times, this.standIn.clock.nowMs());
+    this.queue(eventId, times, this.standIn.clock.flowingMs());
   }
 
   private queue(eventId: string, copies: number, dueMs: number): void {
@@ -68,7 +68,7 @@ export class WebhookSender {
     const { state, clock } = this.standIn;
     if (state.switches.paused || this.stopping.signal.aborted || state.deliveries.size === 0) return;
     const nextMs = Math.min(...state.deliveries.oldestFirst().map((delivery) => delivery.dueMs));
-    const waitMs = Math.min(Math.max(0, nextMs - clock.nowMs()), 60_000);
+    const waitMs = Math.min(Math.max(0, nextMs - clock.flowingMs()), 60_000);
     this.timer = setTimeout(() => void this.inTurn(() => this.pass(false)), waitMs);
     this.timer.unref();
   }
@@ -95,7 +95,7 @@ export class WebhookSender {
     const { state, clock } = this.standIn;
     const due = state.deliveries
       .oldestFirst()
-      .filter((delivery) => isForced || delivery.dueMs <= clock.nowMs())
+      .filter((delivery) => isForced || delivery.dueMs <= clock.flowingMs())
       .sort((a, b) => a.dueMs - b.dueMs);
     const result: FlushResult = { attempted: 0, delivered: 0, stillWaiting: 0 };
     for (const group of this.groups(due)) {
@@ -136,7 +136,7 @@ export class WebhookSender {
     }
     const waitSeconds = settings.webhookRetrySeconds[delivery.attempts - 1];
     if (waitSeconds === undefined) state.deliveries.remove(delivery.id);
-    else delivery.dueMs = clock.nowMs() + waitSeconds * 1000 * settings.webhookTimeScale;
+    else delivery.dueMs = clock.flowingMs() + waitSeconds * 1000 * settings.webhookTimeScale;
     this.log(delivery, waitSeconds === undefined ? 'given-up' : 'failed', answer.status, answer.fault);
     return false;
   }
@@ -153,7 +153,7 @@ export class WebhookSender {
       eventId: delivery.eventId,
       type: state.events.find(delivery.eventId)?.type ?? '',
       attempt: delivery.attempts,
-      atMs: clock.nowMs(),
+      atMs: clock.flowingMs(),
       outcome,
       status,
       detail,

@@ -39,7 +39,49 @@ export interface PaymentEvent {
   readonly payload: unknown;
 }
 
-/** What the shop asks of the payment service. */
+export interface RefundRequest {
+  readonly paymentIntentId: string;
+  /** Part of the payment, or all that is left of it. Partial refunds may follow one another. */
+  readonly amountMinor: number;
+  readonly idempotencyKey: string;
+  readonly metadata?: Readonly<Record<string, string>>;
+}
+
+export type RefundState = 'pending' | 'needs-action' | 'succeeded' | 'failed' | 'cancelled';
+
+/** Money on its way back to a buyer. A refund that succeeded may still fail later, when the bank sends it back. */
+export interface PaymentRefund {
+  readonly id: string;
+  readonly paymentIntentId: string | null;
+  readonly chargeId: string | null;
+  readonly amountMinor: number;
+  readonly currency: string;
+  readonly state: RefundState;
+  /** The service's own word for why it failed, such as `expired_or_canceled_card`. */
+  readonly failure: string | null;
+  readonly metadata: Readonly<Record<string, string>>;
+  readonly createdAt: Date;
+}
+
+export type DisputeState = 'needs-response' | 'under-review' | 'won' | 'lost' | 'inquiry' | 'inquiry-closed';
+
+/** A buyer's bank asks for the money back. An inquiry takes no money yet. */
+export interface PaymentDispute {
+  readonly id: string;
+  readonly paymentIntentId: string | null;
+  readonly chargeId: string;
+  readonly amountMinor: number;
+  readonly currency: string;
+  /** The service's own word, such as `fraudulent` or `product_not_received`. */
+  readonly reason: string;
+  readonly state: DisputeState;
+  /** Until when evidence may be handed in at the payment service. */
+  readonly evidenceDueAt: Date | null;
+  readonly hasEvidence: boolean;
+  readonly createdAt: Date;
+}
+
+/** What the shop asks of the payment service about a payment made once. */
 export abstract class Payments {
   /** Opens a payment page; the same order with the same end, asked twice, gives the same page. */
   abstract openSession(request: SessionRequest): Promise<PaymentSession>;
@@ -48,12 +90,18 @@ export abstract class Payments {
   abstract expireSession(sessionId: string): Promise<PaymentSession>;
   /** Country of the card's bank, the second piece of location evidence, where the service tells. */
   abstract cardCountry(paymentIntentId: string): Promise<string | null>;
+  /**
+   * Gives money back; the same key asked twice gives the same refund.
+   * @throws PaymentsRefused where more is asked than is left, or the payment is disputed
+   */
+  abstract refund(request: RefundRequest): Promise<PaymentRefund>;
+  abstract findRefund(refundId: string): Promise<PaymentRefund>;
+  /** All refunds of a payment, newest first, those made at the payment service's own pages too. */
+  abstract refundsOf(paymentIntentId: string): Promise<readonly PaymentRefund[]>;
+  abstract findDispute(disputeId: string): Promise<PaymentDispute>;
+  abstract disputesOf(paymentIntentId: string): Promise<readonly PaymentDispute[]>;
   /** @throws SignatureRefused */
   abstract readEvent(body: Buffer, signature: string): PaymentEvent;
 }
 
-export class SignatureRefused extends Error {}
-/** The service could not be reached or asks to be left alone for a while; worth trying again. */
-export class PaymentsUnreachable extends Error {}
-/** The service refuses the request itself; trying again changes nothing. */
-export class PaymentsRefused extends Error {}
+export { CardDeclined, PaymentsRefused, PaymentsUnreachable, SignatureRefused } from './payment-faults.js';

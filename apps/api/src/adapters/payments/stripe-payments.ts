@@ -1,29 +1,30 @@
 import Stripe from 'stripe';
 import type { Config } from '../../config/config.js';
+import { toDispute } from './dispute.mapping.js';
+import { toSession } from './page.mapping.js';
 import {
   Payments,
   PaymentsRefused,
-  PaymentsUnreachable,
   SignatureRefused,
+  type PaymentDispute,
   type PaymentEvent,
+  type PaymentRefund,
   type PaymentSession,
+  type RefundRequest,
   type SessionRequest,
 } from './payments.js';
+import { toRefund } from './refund.mapping.js';
+import { calling, openStripe } from './stripe-client.js';
 
-/** Over the official SDK; host, port and key are settings. */
+/** As many as one call gives, and more than any payment has. */
+const MOST = 100;
+
 export class StripePayments extends Payments {
   private readonly stripe: Stripe;
 
   constructor(private readonly config: Config) {
     super();
-    this.stripe = new Stripe(config.STRIPE_KEY, {
-      protocol: config.STRIPE_PROTOCOL,
-      ...(config.STRIPE_HOST ? { host: config.STRIPE_HOST } : {}),
-      ...(config.STRIPE_PORT ? { port: config.STRIPE_PORT } : {}),
-      telemetry: false,
-      timeout: 15_000,
-      maxNetworkRetries: 2,
-    });
+    this.stripe = openStripe(config);
   }
 
   async openSession(request: SessionRequest): Promise<PaymentSession> {
@@ -78,6 +79,39 @@ export class StripePayments extends Payments {
     return typeof charge === 'object' ? (charge?.payment_method_details?.card?.country ?? null) : null;
   }
 
+  async refund(request: RefundRequest): Promise<PaymentRefund> {
+    return toRefund(
+      await calling(
+        this.stripe.refunds.create(
+          {
+            payment_intent: request.paymentIntentId,
+            amount: request.amountMinor,
+            metadata: { ...request.metadata },
+          },
+          { idempotencyKey: request.idempotencyKey },
+        ),
+      ),
+    );
+  }
+
+  async findRefund(refundId: string): Promise<PaymentRefund> {
+    return toRefund(await calling(this.stripe.refunds.retrieve(refundId)));
+  }
+
+  async refundsOf(paymentIntentId: string): Promise<readonly PaymentRefund[]> {
+    const page = await calling(this.stripe.refunds.list({ payment_intent: paymentIntentId, limit: MOST }));
+    return page.data.map(toRefund);
+  }
+
+  async findDispute(disputeId: string): Promise<PaymentDispute> {
+    return toDispute(await calling(this.stripe.disputes.retrieve(disputeId)));
+  }
+
+  async disputesOf(paymentIntentId: string): Promise<readonly PaymentDispute[]> {
+    const page = await calling(this.stripe.disputes.list({ payment_intent: paymentIntentId, limit: MOST }));
+    return page.data.map(toDispute);
+  }
+
   readEvent(body: Buffer, signature: string): PaymentEvent {
     try {
       const event = this.stripe.webhooks.constructEvent(body, signature, this.config.STRIPE_WEBHOOK_SECRET);
@@ -94,34 +128,3 @@ export class StripePayments extends Payments {
     }
   }
 }
-
-const toSession = (session: Stripe.Checkout.Session): PaymentSession => ({
-  id: session.id,
-  url: session.url,
-  state:
-    session.status === 'complete' && session.payment_status !== 'unpaid'
-      ? 'paid'
-      : session.status === 'expired'
-        ? 'expired'
-        : 'open',
-  orderId: session.client_reference_id,
-  paymentIntentId:
-    typeof session.payment_intent === 'string'
-      ? session.payment_intent
-      : (session.payment_intent?.id ?? null),
-  amountMinor: session.amount_total ?? 0,
-  currency: (session.currency ?? '').toUpperCase(),
-  email: session.customer_details?.email ?? session.customer_email,
-  billingCountry: session.customer_details?.address?.country ?? null,
-  expiresAt: new Date(session.expires_at * 1000),
-});
-
-const calling = async <T>(request: Promise<T>): Promise<T> => {
-  try {
-    return await request;
-  } catch (fault) {
-    if (fault instanceof Stripe.errors.StripeInvalidRequestError) throw new PaymentsRefused(fault.message);
-    if (fault instanceof Stripe.errors.StripeError) throw new PaymentsUnreachable(fault.message);
-    throw fault;
-  }
-};
