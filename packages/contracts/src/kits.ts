@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { filamentColour, id, moment, money, pageOf, pageQuery, slug, slugParams } from './values.js';
 import { rankVoice, room } from './voices.js';
@@ -121,10 +122,20 @@ export const kitPart = z.object({
   volumeMm3: z.number(),
   areaMm2: z.number(),
   printSpec: printSpec.nullable(),
+  /** Printed first: it tells which clearance fits a printer. */
+  isGauge: z.boolean(),
+  /** Those the part comes in, tightest first; none where there is only the one file. */
+  clearances: z.array(clearance),
   /** Shown on the sheet: the side that tells most about the part. */
   drawing: drawing.nullable(),
 });
 export type KitPart = z.output<typeof kitPart>;
+
+const fitsMm = (most: number) => z.coerce.number().positive().max(most).optional();
+/** The bed of a printer, in mm: all three figures or none. */
+const fitsQuery = { fitsX: fitsMm(2000), fitsY: fitsMm(2000), fitsZ: fitsMm(3000) };
+const isWholeBed = ({ fitsX, fitsY, fitsZ }: { fitsX?: number; fitsY?: number; fitsZ?: number }): boolean =>
+  new Set([fitsX, fitsY, fitsZ].map((one) => one === undefined)).size === 1;
 
 export const kitEndpoints = {
   'GET /offers': endpoint({
@@ -134,8 +145,10 @@ export const kitEndpoints = {
   }),
   'GET /kits': endpoint({
     access: 'public',
-    summary: 'Kits on sale, newest first',
-    query: pageQuery.extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest') }),
+    summary: 'Kits on sale, newest first; with fitsX, fitsY, fitsZ only those that print on such a bed',
+    query: pageQuery
+      .extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest'), ...fitsQuery })
+      .refine(isWholeBed, { path: ['fitsX'], message: 'Give width, depth and height of the bed.' }),
     response: pageOf(kitCard),
   }),
   'GET /kits/:slug': endpoint({

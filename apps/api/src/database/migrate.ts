@@ -9,6 +9,9 @@ import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
+import * as printerCards from './migrations/0009-printer-cards.js';
+import * as partVariants from './migrations/0010-part-variants.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -20,6 +23,9 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0007-print-profiles': printProfiles,
   '0016-journal': journal,
   '0017-fit-reports': fitReports,
+  '0008-mesh-comparisons': meshComparisons,
+  '0009-printer-cards': printerCards,
+  '0010-part-variants': partVariants,
 };
 
 /**
@@ -49,9 +55,10 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
       logger: undefined,
     });
     const done = await umzug.up();
-    await database.query("SELECT RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     return done.map((one) => one.name);
   } finally {
+    // The connection goes back to the pool alive: without this a failed migration would block every other process.
+    await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }
 };

@@ -9,6 +9,7 @@ import { styles } from './text-styles.js';
 import { Typeface } from './typeface.js';
 import { readFontFiles } from './typeface-files.js';
 import { writeAssembly } from './write-assembly.js';
+import { hasClearances, writeClearances } from './write-clearances.js';
 import { writeContents } from './write-contents.js';
 import { contentsTop, writeCover } from './write-cover.js';
 import { writeHardware, writePartsList, writePrintSpecification, writeVoicing } from './write-lists.js';
@@ -78,6 +79,8 @@ const writeBook = (sheet: Sheet, book: BuildBook): (() => void) => {
 
   if (book.parts.length > 0) {
     sections.write('Parts sheet', { least: 0, isOnNewPage: true }, () => writePartsSheet(sheet, book.parts));
+    if (hasClearances(book.parts))
+      sections.write('Clearance', { least: mm(60) }, () => writeClearances(sheet, book.parts));
     sections.write('Parts to print', { least: mm(50) }, () => writePartsList(sheet, book));
   }
   sections.write('Hardware', { least: mm(35) }, () => writeHardware(sheet, book));

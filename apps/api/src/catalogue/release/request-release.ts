@@ -10,6 +10,7 @@ import { Gates } from '../gates/gates.js';
 import { Drafts } from '../revisions/drafts.js';
 import { Revision } from '../revisions/revision.model.js';
 import { buildRelease } from './build-release.job.js';
+import { TidyDraft } from './tidy-draft.js';
 
 /** Checks the gates and sends a draft to have its bundle built; from then on the draft stands still. */
 @Injectable()
@@ -19,6 +20,7 @@ export class RequestRelease {
     private readonly transactions: Transactions,
     private readonly drafts: Drafts,
     private readonly gates: Gates,
+    private readonly tidyDraft: TidyDraft,
     private readonly queue: JobQueue,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
@@ -31,12 +33,15 @@ export class RequestRelease {
       // Asked twice, it is built once.
       if (standing.state === 'draft' && ['waiting', 'building'].includes(standing.releaseState)) return;
       const { revision, subject } = await this.drafts.lock(tx, revisionId);
-      const open = (await this.gates.of(revision, tx)).filter((gate) => gate.state === 'open');
+      const gates = await this.gates.of(revision, tx);
+      const open = gates.filter((gate) => gate.state === 'open');
       if (open.length > 0)
         throw new Refusal(
           'gates-are-open',
           `${revision.label} cannot be released yet: ${open.map((gate) => `${gate.name}: ${gate.reason}`).join(' ')}`,
         );
+      const waived = gates.filter((gate) => gate.state === 'waived');
+      await this.tidyDraft.tidy(tx, revision, gates);
       await revision.update(
         {
           releaseState: 'waiting',
@@ -49,7 +54,11 @@ export class RequestRelease {
         { transaction: tx },
       );
       await this.queue.add(tx, buildRelease, { revisionId });
-      await this.staffLog.record(tx, person, { what: 'asked for a release', subject });
+      await this.staffLog.record(tx, person, {
+        what: 'asked for a release',
+        subject,
+        after: { waived: waived.map(({ name, waiver }) => ({ gate: name, reason: waiver?.reason })) },
+      });
     });
   }
 }
