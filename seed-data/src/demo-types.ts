@@ -103,6 +103,16 @@ export interface DemoPerson {
   isVerified: boolean;
 }
 
+/** A printer of a buyer; the first one of each is the main one. */
+export interface DemoPrinter {
+  ownerEmail: string;
+  name: string;
+  bed: { xMm: number; yMm: number; zMm: number };
+  nozzleMm: number;
+  materials: { material: string; pricePerKgMinor: number | null }[];
+  clearance: 'minus' | 'zero' | 'plus' | null;
+}
+
 export interface DemoPurchase {
   buyerEmail: string;
   lines: { kitSlug: string; licence: LicenceKind }[];
@@ -147,6 +157,7 @@ export interface DemoWorkshop {
     email: string;
   };
   people: DemoPerson[];
+  printers: DemoPrinter[];
   kits: DemoKit[];
   coupons: DemoCoupon[];
   purchases: DemoPurchase[];

@@ -5,6 +5,7 @@ import {
   licenceBody,
   markBody,
   partBody,
+  printerCardFields,
   revisionBody,
   roles,
 } from '@windchest/contracts';
@@ -108,6 +109,14 @@ describe('the demo workshop', () => {
       for (const { kitSlug, licence } of lines) {
         expect(pricesOf(kitSlug)?.map(([kind]) => kind)).toContain(licence);
       }
+    }
+  });
+
+  it('has printers of its people, as their accounts take them', () => {
+    const emails = demoWorkshop.people.map(({ email }) => email);
+    for (const { ownerEmail, ...printer } of demoWorkshop.printers) {
+      expect(emails).toContain(ownerEmail);
+      expect(printerCardFields.parse(printer)).toEqual(printer);
     }
   });
 

@@ -4,7 +4,7 @@ import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { fitReports } from './fit-reports.js';
-import { people, purchases } from './people.js';
+import { people, printers, purchases } from './people.js';
 import { posts } from './posts.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
@@ -23,6 +23,7 @@ export const demoWorkshop: DemoWorkshop = {
     email: 'hello@saltmarsh.example',
   },
   people,
+  printers,
   kits: kitPlans.map(({ kit }) => kit),
   coupons: [
     {

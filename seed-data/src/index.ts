@@ -7,6 +7,7 @@ export type {
   DemoMark,
   DemoPart,
   DemoPerson,
+  DemoPrinter,
   DemoPrintSpec,
   DemoPurchase,
   DemoRevision,

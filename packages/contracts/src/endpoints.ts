@@ -6,6 +6,7 @@ import { healthEndpoints } from './health.js';
 import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
+import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
@@ -14,6 +15,7 @@ import { workshopSalesEndpoints } from './workshop-sales.js';
 export const endpoints = {
   ...sessionEndpoints,
   ...kitEndpoints,
+  ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
   ...workshopKitEndpoints,

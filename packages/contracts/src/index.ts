@@ -6,6 +6,7 @@ export * from './values.js';
 export * from './voices.js';
 export * from './session.js';
 export * from './kits.js';
+export * from './printers.js';
 export * from './basket.js';
 export * from './delivery.js';
 export * from './workshop-kits.js';

@@ -126,6 +126,12 @@ export const kitPart = z.object({
 });
 export type KitPart = z.output<typeof kitPart>;
 
+const fitsMm = (most: number) => z.coerce.number().positive().max(most).optional();
+/** The bed of a printer, in mm: all three figures or none. */
+const fitsQuery = { fitsX: fitsMm(2000), fitsY: fitsMm(2000), fitsZ: fitsMm(3000) };
+const isWholeBed = ({ fitsX, fitsY, fitsZ }: { fitsX?: number; fitsY?: number; fitsZ?: number }): boolean =>
+  new Set([fitsX, fitsY, fitsZ].map((one) => one === undefined)).size === 1;
+
 export const kitEndpoints = {
   'GET /offers': endpoint({
     access: 'public',
@@ -134,8 +140,10 @@ export const kitEndpoints = {
   }),
   'GET /kits': endpoint({
     access: 'public',
-    summary: 'Kits on sale, newest first',
-    query: pageQuery.extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest') }),
+    summary: 'Kits on sale, newest first; with fitsX, fitsY, fitsZ only those that print on such a bed',
+    query: pageQuery
+      .extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest'), ...fitsQuery })
+      .refine(isWholeBed, { path: ['fitsX'], message: 'Give width, depth and height of the bed.' }),
     response: pageOf(kitCard),
   }),
   'GET /kits/:slug': endpoint({

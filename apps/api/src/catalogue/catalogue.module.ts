@@ -24,7 +24,9 @@ import { PriceLicence } from './kits/price-licence.js';
 import { ShopKits } from './kits/shop-kits.js';
 import { WorkshopKitsController } from './kits/workshop-kits.controller.js';
 import { WorkshopKits } from './kits/workshop-kits.js';
+import { KitsTooBig } from './print/kits-too-big.js';
 import { PrintPlans } from './print/print-plans.js';
+import { PrintSheets } from './print/print-sheets.js';
 import { BuildRelease } from './release/build-release.js';
 import { RevisionReleasedSteps } from './release/revision-released-steps.js';
 import { RequestRelease } from './release/request-release.js';
@@ -69,6 +71,8 @@ import { StartRevision } from './revisions/start-revision.js';
     CatalogueWaiting,
     PrintPlans,
     RevisionReleasedSteps,
+    PrintSheets,
+    KitsTooBig,
   ],
   // The measuring room writes what it finds through the records.
   exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, PrintPlans, RevisionReleasedSteps],

@@ -9,6 +9,7 @@ import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as printerCards from './migrations/0009-printer-cards.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -18,6 +19,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
+  '0009-printer-cards': printerCards,
   '0016-journal': journal,
   '0017-fit-reports': fitReports,
 };
@@ -49,9 +51,10 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
       logger: undefined,
     });
     const done = await umzug.up();
-    await database.query("SELECT RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     return done.map((one) => one.name);
   } finally {
+    // The connection goes back to the pool alive: without this a failed migration would block every other process.
+    await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }
 };

@@ -7,6 +7,7 @@ import { selectRows } from '../../database/rows.js';
 import { notFound } from '../../http/refusal.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
 import { fromJson } from '../json-column.js';
+import { KitsTooBig } from '../print/kits-too-big.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
 import { labelOf, Revision, type Room } from '../revisions/revision.model.js';
 import { Kit } from './kit.model.js';
@@ -51,12 +52,14 @@ export class ShopKits {
     @InjectModel(Licence) private readonly licences: typeof Licence,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     private readonly contents: RevisionContents,
+    private readonly tooBig: KitsTooBig,
   ) {}
 
   async list({ query }: Handled<'GET /kits'>): Promise<Answer<'GET /kits'>> {
+    const tooBig = await this.tooBigFor(query);
     const rows = await this.rows(
-      'AND (k.name LIKE :like OR k.tagline LIKE :like)',
-      { like: `%${likeText(query.search)}%`, size: query.size, from: (query.page - 1) * query.size },
+      `AND (k.name LIKE :like OR k.tagline LIKE :like) ${tooBig.length > 0 ? 'AND r.id NOT IN (:tooBig)' : ''}`,
+      { like: `%${likeText(query.search)}%`, size: query.size, from: (query.page - 1) * query.size, tooBig },
       `ORDER BY ${orders[query.sort]}, id LIMIT :size OFFSET :from`,
     );
     const voices = await this.voicesOf(rows.map((row) => row.revision_id));
@@ -135,6 +138,16 @@ export class ShopKits {
         drawing: tellingDrawing(part.file?.drawings ?? null),
       };
     });
+  }
+
+  /** The revision everybody is offered now. */
+  async newestRevisionId(slug: string): Promise<string> {
+    return (await this.rowOf(slug)).revision_id;
+  }
+
+  private async tooBigFor({ fitsX, fitsY, fitsZ }: ListQuery): Promise<string[]> {
+    if (fitsX === undefined || fitsY === undefined || fitsZ === undefined) return [];
+    return this.tooBig.revisionsFor({ xMm: fitsX, yMm: fitsY, zMm: fitsZ });
   }
 
   private async rowOf(slug: string): Promise<Row> {

@@ -40,25 +40,10 @@ export const kitTexts = {
 
   fit: 'Will it print on your machine?',
   fitNobody: (volume: string) =>
-    `Every part keeps to a build volume of ${volume} mm. Write down your printer, and this page checks each part against it.`,
+    `Every part keeps to a build volume of ${volume} mm. Write down your printer, and this page lays the kit out on its plates.`,
   fitOpen: 'Write down my printer',
-  fitChange: 'Change my printer',
-  fitWorking: 'Measuring against your printer …',
-  fitAll: (count: number, volume: string) =>
-    count === 1 ? `The part fits ${volume} mm.` : `All ${count} parts fit ${volume} mm.`,
-  fitMost: (fitting: number, count: number, volume: string) =>
-    `${fitting} of ${count} parts fit ${volume} mm.`,
-  fitTurned: (codes: string) => `Turned on the bed: ${codes}.`,
-  fitTurnedBy: (code: string, degrees: string) => `${code} by ${degrees}°`,
-  fitLaid: (codes: string) => `Laid on another side: ${codes}.`,
-  fitOver: {
-    x: (part: string, over: string) => `${part} is ${over} too wide.`,
-    y: (part: string, over: string) => `${part} is ${over} too deep.`,
-    z: (part: string, over: string) => `${part} is ${over} too tall.`,
-  },
-  fitUnmeasured: (codes: string) => `Without a size yet: ${codes}.`,
-  fitNozzle: (drawnFor: string, yours: string) =>
-    `The kit is drawn for a ${drawnFor} nozzle; yours is ${yours}.`,
+  fitChange: 'Change it',
+  fitWorking: 'Fetching what lays out plates …',
   onePlate: 'plate',
   manyPlates: 'plates',
   fitEstimate: (volume: string, plates: string, hours: string, mass: string, metres: string) =>
