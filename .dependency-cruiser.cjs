@@ -18,7 +18,7 @@ const mayUse = {
   supporters: ['accounts', 'catalogue', 'coupons'],
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
-  letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
+  letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements', 'fit'],
   journal: ['accounts', 'catalogue', 'supporters'],
   ledger: ['accounts', 'catalogue', 'orders'],
   workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),

@@ -5,6 +5,8 @@ import { fitEndpoints } from './fit.js';
 import { healthEndpoints } from './health.js';
 import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
+import { workshopLetterEndpoints } from './letters.js';
+import { newsEndpoints } from './news.js';
 import { peopleEndpoints } from './people.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
@@ -22,6 +24,8 @@ export const endpoints = {
   ...workshopSalesEndpoints,
   ...fitEndpoints,
   ...journalEndpoints,
+  ...workshopLetterEndpoints,
+  ...newsEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

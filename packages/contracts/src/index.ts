@@ -14,5 +14,7 @@ export * from './workshop-revisions.js';
 export * from './workshop-sales.js';
 export * from './fit.js';
 export * from './journal.js';
+export * from './letters.js';
+export * from './news.js';
 export * from './people.js';
 export * from './health.js';

@@ -32,6 +32,7 @@ export const problemStatus = {
   'basket-is-empty': 422,
   'basket-has-gone': 409,
   'order-is-final': 409,
+  'letter-is-final': 409,
   'payment-unreachable': 502,
   'payment-refused': 402,
   'signature-refused': 400,

@@ -12,6 +12,7 @@ import { bundleName, servable, type ServableFile } from './release/stored-file-o
 import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision } from './revisions/revision.model.js';
 
+export { filamentHex } from './build-book/kit-shades.js';
 export type { OfferedLicence, ReprintRow, ServableFile };
 
 export interface KitFacts {
@@ -59,6 +60,15 @@ export class CatalogueReader {
     return (await this.kits.findAll({ where: { id: [...new Set(ids)] }, order: [['name', 'ASC']] })).map(
       toKit,
     );
+  }
+
+  /** Kits of which a revision is out, by name. */
+  async releasedKits(): Promise<KitFacts[]> {
+    const kits = await this.kits.findAll({
+      where: { newestRevisionId: { [Op.ne]: null } },
+      order: [['name', 'ASC']],
+    });
+    return kits.map(toKit);
   }
 
   async kitBySlug(slug: string): Promise<KitFacts | null> {

@@ -3,6 +3,7 @@ import { SequelizeStorage, Umzug } from 'umzug';
 import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as journal from './migrations/0016-journal.js';
 import * as fitReports from './migrations/0017-fit-reports.js';
+import * as letters from './migrations/0018-letters.js';
 import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
@@ -22,6 +23,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0009-printer-cards': printerCards,
   '0016-journal': journal,
   '0017-fit-reports': fitReports,
+  '0018-letters': letters,
 };
 
 /**

@@ -13,6 +13,7 @@ import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
+import { ReaderParts } from './reader-parts.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -36,7 +37,8 @@ import { SignedAddress } from './signed-address.js';
     Shelf,
     Holders,
     Holdings,
+    ReaderParts,
   ],
-  exports: [Holdings],
+  exports: [Holdings, DownloadLinks, ReaderParts],
 })
 export class EntitlementsModule {}

@@ -3,6 +3,7 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { CouponsModule } from '../coupons/coupons.module.js';
+import { BuyerParts } from './buyer-parts.js';
 import { CancelOrder } from './cancel-order.js';
 import { CheckoutController } from './checkout.controller.js';
 import { ClaimOrders } from './claim-orders.js';
@@ -60,7 +61,8 @@ import { ShowOrder } from './show-order.js';
     ListOrders,
     ShowOrder,
     OrdersReader,
+    BuyerParts,
   ],
-  exports: [OrderPaidSteps, OrdersReader, OrderHistory, OrderFacts],
+  exports: [BuyerParts, OrderPaidSteps, OrdersReader, OrderHistory, OrderFacts],
 })
 export class OrdersModule {}

@@ -1,0 +1,27 @@
+import { Injectable } from '@nestjs/common';
+import type { SqlPart } from '../database/sql-part.js';
+import type { EntitlementSource } from './entitlement.model.js';
+
+/** Owners of kits as parts of other rooms' queries. */
+@Injectable()
+export class ReaderParts {
+  /**
+   * One row for each person, or for each address that bought without an account: `reader` (which of the two),
+   * `person_id`, `email`, `is_active`, `is_suspended`, the revision held (`held`, as the shelf has it: of the
+   * entitlement whose files were fetched last), and `order_id` of what gives the right.
+   */
+  owners({ kitId, sources }: { kitId: string | null; sources: readonly EntitlementSource[] }): SqlPart {
+    return {
+      sql: `SELECT COALESCE(CONVERT(e.person_id USING utf8mb4), e.email) AS reader,
+          MAX(e.person_id) AS person_id, MIN(e.email) AS email,
+          MAX(e.state = 'active') AS is_active, MAX(e.state = 'suspended') AS is_suspended,
+          SUBSTRING(MAX(CASE WHEN e.held_revision_id IS NOT NULL
+            THEN CONCAT(e.state = 'active', COALESCE(DATE_FORMAT(e.held_since, '%Y%m%d%H%i%s%f'), REPEAT('0', 20)), e.held_revision_id) END), 22) AS held,
+          MAX(CASE WHEN e.state = 'active' THEN e.order_id END) AS order_id
+        FROM entitlements e
+        WHERE ${kitId ? 'e.kit_id = :ownedKitId' : 'TRUE'} AND ${sources.length > 0 ? 'e.source IN (:ownedBySources)' : 'TRUE'}
+        GROUP BY COALESCE(CONVERT(e.person_id USING utf8mb4), e.email)`,
+      values: { ownedKitId: kitId, ownedBySources: sources },
+    };
+  }
+}
