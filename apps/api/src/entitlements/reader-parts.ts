@@ -12,7 +12,7 @@ export class ReaderParts {
    */
   owners({ kitId, sources }: { kitId: string | null; sources: readonly EntitlementSource[] }): SqlPart {
     return {
-      sql: `SELECT COALESCE(CONVERT(e.person_id USING utf8mb4), e.email) AS reader,
+      sql: `SELECT COALESCE(CONVERT(e.person_id USING utf8mb4) COLLATE utf8mb4_unicode_ci, e.email) AS reader,
           MAX(e.person_id) AS person_id, MIN(e.email) AS email,
           MAX(e.state = 'active') AS is_active, MAX(e.state = 'suspended') AS is_suspended,
           SUBSTRING(MAX(CASE WHEN e.held_revision_id IS NOT NULL
@@ -20,7 +20,7 @@ export class ReaderParts {
           MAX(CASE WHEN e.state = 'active' THEN e.order_id END) AS order_id
         FROM entitlements e
         WHERE ${kitId ? 'e.kit_id = :ownedKitId' : 'TRUE'} AND ${sources.length > 0 ? 'e.source IN (:ownedBySources)' : 'TRUE'}
-        GROUP BY COALESCE(CONVERT(e.person_id USING utf8mb4), e.email)`,
+        GROUP BY COALESCE(CONVERT(e.person_id USING utf8mb4) COLLATE utf8mb4_unicode_ci, e.email)`,
       values: { ownedKitId: kitId, ownedBySources: sources },
     };
   }

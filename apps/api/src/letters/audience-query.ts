@@ -40,7 +40,7 @@ export class AudienceQuery {
     const people = this.people.people();
     if (isNewsToAll({ kind, kitId, audience }))
       return {
-        sql: `SELECT COALESCE(CONVERT(p.id USING utf8mb4), n.email) AS reader, p.id AS person_id, n.email,
+        sql: `SELECT COALESCE(CONVERT(p.id USING utf8mb4) COLLATE utf8mb4_unicode_ci, n.email) AS reader, p.id AS person_id, n.email,
             COALESCE(p.name, '') AS name, 1 AS is_active, 0 AS is_suspended, NULL AS held, NULL AS order_id,
             n.state AS news, d.id IS NOT NULL AS is_dead
           FROM news_readers n LEFT JOIN (${people.sql}) p ON p.email = n.email AND p.is_verified
@@ -66,8 +66,13 @@ export class AudienceQuery {
     const add = (sql: string, part: SqlPart | undefined = undefined): void => {
       parts.push({ sql, values: part?.values ?? {} });
     };
-    const { heldFromId, heldToId, withNothingHeld, nozzlesMm, materials, reportedParts, countries } = audience;
-    if (audience.ownsKit && kitId !== null && (heldFromId !== null || heldToId !== null || !withNothingHeld)) {
+    const { heldFromId, heldToId, withNothingHeld, nozzlesMm, materials, reportedParts, countries } =
+      audience;
+    if (
+      audience.ownsKit &&
+      kitId !== null &&
+      (heldFromId !== null || heldToId !== null || !withNothingHeld)
+    ) {
       const between = heldBetween(revisions, heldFromId, heldToId);
       const held = between.length > 0 ? 'f.held IN (:heldBetween)' : 'FALSE';
       add(withNothingHeld ? `(${held} OR f.held IS NULL)` : held, {

@@ -62,7 +62,7 @@ export class BeginLetter implements JobHandler<typeof beginLetter.payload> {
     if (matter.target) await letter.update({ revisionId: matter.target.id }, { transaction: tx });
     const part = await this.audience.partOf(letter, matter);
     const needsLink = fieldsIn(letter.body).has('download_link');
-    for (let after = ''; ; ) {
+    for (let after = ''; ;) {
       const readers = await this.audience.portion(part, after, PORTION, tx);
       if (readers.length > 0) await this.write(tx, letter.id, readers, needsLink);
       const last = readers.at(-1);

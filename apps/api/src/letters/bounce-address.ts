@@ -4,7 +4,9 @@ const SIGNATURE_LENGTH = 16;
 
 const signatureOf = (recipientId: string, tokens: Pick<LinkTokens, 'sign'>): string =>
   // Parts of addresses may lose their capitals on the way.
-  Buffer.from(tokens.sign(`bounce:${recipientId}`)).toString('hex').slice(0, SIGNATURE_LENGTH);
+  Buffer.from(tokens.sign(`bounce:${recipientId}`))
+    .toString('hex')
+    .slice(0, SIGNATURE_LENGTH);
 
 /** `bounces+<recipient>-<signature>@domain`: a report that comes back says by itself whose mail it is about. */
 export const returnPathOf = (

@@ -94,11 +94,7 @@ export class ClaimRecipients {
     }, 'read-committed');
   }
 
-  private async whatIsLeft(
-    letterId: string,
-    now: Date,
-    tx: Tx,
-  ): Promise<Claim> {
+  private async whatIsLeft(letterId: string, now: Date, tx: Tx): Promise<Claim> {
     const [left] = await selectRows<{ dueAt: Date | null }>(
       this.database,
       `SELECT MIN(due_at) AS dueAt FROM letter_recipients WHERE letter_id = :letterId AND state IN ('queued', 'handed-over')`,
@@ -106,7 +102,10 @@ export class ClaimRecipients {
       tx,
     );
     if (left?.dueAt)
-      return { kind: 'wait', seconds: Math.min(15, Math.max(0.5, (left.dueAt.getTime() - now.getTime()) / 1000)) };
+      return {
+        kind: 'wait',
+        seconds: Math.min(15, Math.max(0.5, (left.dueAt.getTime() - now.getTime()) / 1000)),
+      };
     await touchRows(
       this.database,
       `UPDATE letters SET state = 'sent', finished_at = :now, updated_at = :now WHERE id = :letterId AND state = 'sending'`,

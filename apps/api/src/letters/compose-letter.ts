@@ -119,14 +119,17 @@ export class LetterComposer {
   }
 
   private preheader(writing: Writing): string {
-    const first = this.blocks.filter(({ type }) => type === 'paragraph').map((node) => blockText(node, writing));
+    const first = this.blocks
+      .filter(({ type }) => type === 'paragraph')
+      .map((node) => blockText(node, writing));
     // A greeting alone tells nothing in a list of mails.
     const telling = first.find((text) => text.length > 40) ?? first[0] ?? '';
     return oneLine(telling).slice(0, 140);
   }
 }
 
-const oneLine = (text: string): string => text.replace(/[\p{Cc}\u2028\u2029\u202a-\u202e\u2066-\u2069]+/gu, ' ').trim();
+const oneLine = (text: string): string =>
+  text.replace(/[\p{Cc}\u2028\u2029\u202a-\u202e\u2066-\u2069]+/gu, ' ').trim();
 const unbroken = (label: string): string => label.replaceAll(' ', '\u00a0');
 const decoded = (address: string): string => {
   try {

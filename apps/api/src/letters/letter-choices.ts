@@ -32,7 +32,9 @@ export class LetterChoices {
         revisions: (revisions[at] ?? []).map((one) => ({ id: one.id, label: one.label })),
         reportedParts: reports.partsByKit.get(id) ?? [],
       })),
-      materials: [...new Set([...printers.materials, ...reports.materials])].sort((a, b) => a.localeCompare(b)),
+      materials: [...new Set([...printers.materials, ...reports.materials])].sort((a, b) =>
+        a.localeCompare(b),
+      ),
       nozzlesMm: [...new Set([...printers.nozzlesMm, ...reports.nozzlesMm])].sort((a, b) => a - b),
       countries,
       perMinute: this.config.LETTERS_PER_MINUTE,

@@ -25,16 +25,15 @@ export const loneField = (text: string): LetterField | null => {
 };
 
 /** @throws Refusal where the letter asks for what nobody can fill in */
-export const checkFields = (words: {
-  subject: string;
-  body: string;
-  kitId: string | null;
-}): void => {
+export const checkFields = (words: { subject: string; body: string; kitId: string | null }): void => {
   const known: readonly string[] = letterFields;
   for (const where of ['subject', 'body'] as const) {
     const unknown = [...words[where].matchAll(ANY_BRACES)].find(([, field]) => !known.includes(field ?? ''));
     if (unknown)
-      throw wrong(where, `There is no field ${unknown[0]}. Known are ${known.map((one) => `{${one}}`).join(', ')}.`);
+      throw wrong(
+        where,
+        `There is no field ${unknown[0]}. Known are ${known.map((one) => `{${one}}`).join(', ')}.`,
+      );
   }
   const [inSubject, inBody] = [fieldsIn(words.subject), fieldsIn(words.body)];
   if (inSubject.has('reprint_list') || inSubject.has('download_link'))

@@ -51,7 +51,7 @@ export class ListRecipients {
 
   async *csv(letterId: string, query: Query): AsyncGenerator<string> {
     yield csvRecord(HEAD);
-    for (let after = ''; ; ) {
+    for (let after = ''; ;) {
       const rows = await this.rows(letterId, query, { after, limit: PORTION, offset: 0 });
       for (const one of await this.shown(rows))
         yield csvRecord([one.email, one.name, one.held, one.state, one.reason, one.tries, one.sentAt]);

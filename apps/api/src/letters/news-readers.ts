@@ -57,7 +57,10 @@ export class NewsReaders {
       if (!found) throw new Refusal('not-found', 'This link is not one of ours. Ask for the news again.');
       if (found.state === 'confirmed') return { email: found.email };
       if (found.state === 'stopped')
-        throw new Refusal('link-is-used-up', 'The news were stopped after this link was sent. Ask for them again.');
+        throw new Refusal(
+          'link-is-used-up',
+          'The news were stopped after this link was sent. Ask for them again.',
+        );
       if (!found.confirmUntil || found.confirmUntil <= this.clock.now())
         throw new Refusal('link-has-expired', 'This link has expired. Ask for the news again.');
       await this.setConfirmed(tx, found.id);

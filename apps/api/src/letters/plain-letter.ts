@@ -16,7 +16,8 @@ export const filledMarkdown = (
     .flatMap((block) => {
       const alone = loneField(block);
       if (alone === 'reprint_list') return toPrint ? [listOf(toPrint)] : [];
-      if (alone === 'download_link') return values.download_link ? [`[Get the files](${values.download_link})`] : [];
+      if (alone === 'download_link')
+        return values.download_link ? [`[Get the files](${values.download_link})`] : [];
       return [
         fillFields(block, (field) =>
           field === 'reprint_list'

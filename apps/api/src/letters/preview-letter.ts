@@ -55,7 +55,10 @@ export class PreviewLetter {
     const open = await this.desk.open(letter);
     const found = await this.audience.one(letter, open.matter, wanted);
     if (wanted && !found)
-      throw new Refusal('not-found', 'The facts of this letter fit nobody of that name. Choose another reader.');
+      throw new Refusal(
+        'not-found',
+        'The facts of this letter fit nobody of that name. Choose another reader.',
+      );
     const reader = found ?? { name: person.name, email: person.email, personId: person.id, heldId: null };
     const facts = await open.factsOf(reader);
     const stopLink = letter.kind === 'news' ? { stopLink: this.desk.stopNewsLink(newId()) } : {};

@@ -82,7 +82,10 @@ export class ReadLetters {
     };
   }
 
-  async own(person: SignedIn, { query }: Handled<'GET /account/letters'>): Promise<Answer<'GET /account/letters'>> {
+  async own(
+    person: SignedIn,
+    { query }: Handled<'GET /account/letters'>,
+  ): Promise<Answer<'GET /account/letters'>> {
     const rows = await selectRows<OwnRow>(
       this.database,
       `SELECT ${OWN_COLUMNS}, COUNT(*) OVER () AS total ${OWN} ORDER BY sentAt DESC, r.id DESC LIMIT :limit OFFSET :offset`,

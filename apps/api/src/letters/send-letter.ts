@@ -55,7 +55,8 @@ export class SendLetter implements JobHandler<typeof sendLetter.payload> {
     recipients: readonly ClaimedRecipient[],
     worker: string,
   ): Promise<void> {
-    const newsReaders = letter.kind === 'news' ? await this.newsReaderIds(recipients) : new Map<string, string>();
+    const newsReaders =
+      letter.kind === 'news' ? await this.newsReaderIds(recipients) : new Map<string, string>();
     const waiting = [...recipients];
     const sent: string[] = [];
     const lane = async (): Promise<void> => {

@@ -48,9 +48,7 @@ export class StopMails {
   async stop(token: string): Promise<void> {
     const found = await this.find(token);
     await this.transactions.run((tx) =>
-      found.kind === 'news'
-        ? this.news.stop(tx, { id: found.id })
-        : this.watchers.stop(tx, found.id),
+      found.kind === 'news' ? this.news.stop(tx, { id: found.id }) : this.watchers.stop(tx, found.id),
     );
   }
 

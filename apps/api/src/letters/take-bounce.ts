@@ -10,7 +10,7 @@ import { Transactions } from '../database/transactions.js';
 import { Refusal } from '../http/refusal.js';
 import { recipientOf } from './bounce-address.js';
 import { DeadAddresses } from './dead-addresses.js';
-import { readDeliveryReport, type DeliveryFailure, type DeliveryReport } from './delivery-report.js';
+import { readDeliveryReport, type DeliveryFailure, type DeliveryReport } from './delivery-status.js';
 
 const MOST_BYTES = 2 * 1024 ** 2;
 /** Full mailboxes, too large mails and refusals of policy come with class 5 too, yet the address lives. */
@@ -41,7 +41,10 @@ export class TakeBounce {
     for (const failure of report.failures) await this.writeDown(report, failure);
   }
 
-  private async writeDown(report: DeliveryReport, { recipient, status, diagnostic }: DeliveryFailure): Promise<void> {
+  private async writeDown(
+    report: DeliveryReport,
+    { recipient, status, diagnostic }: DeliveryFailure,
+  ): Promise<void> {
     // Class 4 says that the server goes on trying.
     if (!status.startsWith('5.')) return;
     const found = await this.find(report, recipient);
@@ -83,7 +86,10 @@ const readAll = async (body: Readable): Promise<Buffer> => {
   for await (const chunk of body as AsyncIterable<Buffer>) {
     bytes += chunk.length;
     if (bytes > MOST_BYTES)
-      throw new Refusal('file-too-large', 'A delivery report has 2 MiB at most. Send it without the whole mail.');
+      throw new Refusal(
+        'file-too-large',
+        'A delivery report has 2 MiB at most. Send it without the whole mail.',
+      );
     chunks.push(chunk);
   }
   return Buffer.concat(chunks);

@@ -32,10 +32,7 @@ export class TellOfRevision implements JobHandler<typeof tellOfRevision.payload>
     private readonly jobs: JobQueue,
   ) {}
 
-  async handle({
-    revisionId,
-    after,
-  }: z.output<typeof tellOfRevision.payload>): Promise<Finish | void> {
+  async handle({ revisionId, after }: z.output<typeof tellOfRevision.payload>): Promise<Finish | void> {
     const revision = await this.catalogue.revisionById(revisionId);
     const [kit] = revision ? await this.catalogue.kitsByIds([revision.kitId]) : [];
     if (!revision || !kit || revision.isWithdrawn) return;

@@ -12,7 +12,7 @@ export class BuyerParts {
   /** One column: whoever paid an order from one of these countries, by account or else by address. */
   from(countries: readonly string[]): SqlPart {
     return {
-      sql: `SELECT COALESCE(CONVERT(person_id USING utf8mb4), email) FROM orders
+      sql: `SELECT COALESCE(CONVERT(person_id USING utf8mb4) COLLATE utf8mb4_unicode_ci, email) FROM orders
         WHERE paid_at IS NOT NULL AND declared_country IN (:buyerCountries)`,
       values: { buyerCountries: countries },
     };

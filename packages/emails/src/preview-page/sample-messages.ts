@@ -211,7 +211,11 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
   },
   {
     title: 'Confirm the news',
-    message: { template: 'confirm-news', link: `https://saltmarsh.example/news/confirm#token=${token}`, days: 7 },
+    message: {
+      template: 'confirm-news',
+      link: `https://saltmarsh.example/news/confirm#token=${token}`,
+      days: 7,
+    },
   },
   {
     title: 'Letter about a fix, with a reprint list',

@@ -20,7 +20,7 @@ export interface DeliveryReport {
  * words differs from server to server. A mail that is no report has no failures.
  */
 export const readDeliveryReport = async (raw: Buffer): Promise<DeliveryReport> => {
-  const mail = await simpleParser(raw, { skipHtmlToText: true, skipTextToHtml: true, skipImageLinks: true });
+  const mail = await simpleParser(raw, { keepDeliveryStatus: true, skipTextToHtml: true });
   const partOf = (type: string): string =>
     mail.attachments
       .filter(({ contentType }) => contentType.toLowerCase() === type)
@@ -29,9 +29,7 @@ export const readDeliveryReport = async (raw: Buffer): Promise<DeliveryReport> =
   const status = partOf('message/delivery-status');
   const returned = ['message/rfc822', 'text/rfc822-headers', 'message/rfc822-headers'].map(partOf).join('\n');
   return {
-    sentTo: [mail.to ?? []]
-      .flat()
-      .flatMap(({ value }) => value.flatMap(({ address }) => address ?? [])),
+    sentTo: [mail.to ?? []].flat().flatMap(({ value }) => value.flatMap(({ address }) => address ?? [])),
     messageIds: [...returned.matchAll(/^Message-ID:\s*(<[^>\s]+>)/gim)].flatMap(([, id]) => id ?? []),
     failures: status
       .split(/\r?\n\s*\r?\n/)
