@@ -41,6 +41,11 @@ export const paths = {
   cautions: route('/cautions'),
   journal: route('/journal'),
   post: route('/journal/:slug'),
+  letters: route('/letters'),
+  letter: route('/letters/:slug'),
+  news: route('/news'),
+  newsConfirm: route('/news/confirm'),
+  unsubscribe: route('/unsubscribe/:token'),
   support: route('/support'),
 
   join: route('/join'),
@@ -50,6 +55,7 @@ export const paths = {
   reset: route('/reset'),
   verify: route('/verify'),
   account: route('/account'),
+  ownLetter: route('/account/letters/:recipientId'),
 
   workshop: {
     overview: route('/workshop'),
@@ -74,6 +80,10 @@ export const paths = {
     journal: route('/workshop/journal'),
     newPost: route('/workshop/journal/new'),
     post: route('/workshop/journal/:postId'),
+    letters: route('/workshop/letters'),
+    newLetter: route('/workshop/letters/new'),
+    letter: route('/workshop/letters/:letterId'),
+    deadAddresses: route('/workshop/letters/dead-addresses'),
     people: route('/workshop/people'),
     log: route('/workshop/log'),
   },

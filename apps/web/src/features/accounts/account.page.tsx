@@ -16,6 +16,7 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading } from '../../ui/text.js';
 import { AddressSection } from './address-section.js';
 import { useEnter } from './enter.js';
+import { LettersSection } from './letters-section.js';
 import { NameSection } from './name-section.js';
 import { OrdersSection } from './orders-section.js';
 import { PassphraseSection } from './passphrase-section.js';
@@ -65,6 +66,7 @@ export function AccountPage() {
       {person ? (
         <>
           <OrdersSection />
+          <LettersSection />
           <PrintersSection />
           <NameSection person={person} />
           <AddressSection person={person} />

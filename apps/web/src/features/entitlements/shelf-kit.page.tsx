@@ -24,6 +24,7 @@ import { ShelfKitActions } from './shelf-kit-actions.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
 import { useShelfDownload } from './use-download.js';
+import { WatchRevisions } from './watch-revisions.js';
 
 /** A download that has not ended yet is looked after for this long, so that the page learns what is held. */
 const watchedMs = 10 * 60_000;
@@ -72,7 +73,12 @@ function Kit({ kit }: { kit: ShelfKit }) {
             {held && <ReprintTable parts={kit.parts} />}
           </>
         }
-        aside={<ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />}
+        aside={
+          <>
+            <ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />
+            <WatchRevisions slug={kit.slug} />
+          </>
+        }
         block={
           <TitleBlock
             columns={2}

@@ -37,7 +37,7 @@ type Report = OutputOf<'POST /shelf/:slug/fit-reports'>;
 
 /** How a part came out: what was printed, how it fits, a picture. */
 export function ReportForm({ kit }: { kit: ShelfKit }) {
-  const [card] = usePrinterCard();
+  const card = usePrinterCard();
   const [picture, setPicture] = useState<{ file: File | undefined; round: number }>({
     file: undefined,
     round: 0,
@@ -54,7 +54,7 @@ export function ReportForm({ kit }: { kit: ShelfKit }) {
       partCode: '',
       clearance: null,
       printerName: '',
-      material: card?.material ?? '',
+      material: card?.materials[0]?.material ?? '',
       nozzleMm: card?.nozzleMm ?? 0.4,
       layerMm: 0.2,
       verdict: 'right',
