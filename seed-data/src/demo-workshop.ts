@@ -5,6 +5,7 @@ import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { fitReports } from './fit-reports.js';
 import { people, printers, purchases } from './people.js';
+import { letters, newsReaders } from './letters.js';
 import { posts } from './posts.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
@@ -48,4 +49,6 @@ export const demoWorkshop: DemoWorkshop = {
   purchases,
   posts,
   fitReports,
+  newsReaders,
+  letters,
 };

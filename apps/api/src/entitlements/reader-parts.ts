@@ -12,15 +12,17 @@ export class ReaderParts {
    */
   owners({ kitId, sources }: { kitId: string | null; sources: readonly EntitlementSource[] }): SqlPart {
     return {
-      sql: `SELECT COALESCE(CONVERT(e.person_id USING utf8mb4) COLLATE utf8mb4_unicode_ci, e.email) AS reader,
-          MAX(e.person_id) AS person_id, MIN(e.email) AS email,
+      // The inner query names the reader first: grouping by an expression with a collation is refused.
+      sql: `SELECT e.reader, MAX(e.person_id) AS person_id, MIN(e.email) AS email,
           MAX(e.state = 'active') AS is_active, MAX(e.state = 'suspended') AS is_suspended,
           SUBSTRING(MAX(CASE WHEN e.held_revision_id IS NOT NULL
             THEN CONCAT(e.state = 'active', COALESCE(DATE_FORMAT(e.held_since, '%Y%m%d%H%i%s%f'), REPEAT('0', 20)), e.held_revision_id) END), 22) AS held,
           MAX(CASE WHEN e.state = 'active' THEN e.order_id END) AS order_id
-        FROM entitlements e
-        WHERE ${kitId ? 'e.kit_id = :ownedKitId' : 'TRUE'} AND ${sources.length > 0 ? 'e.source IN (:ownedBySources)' : 'TRUE'}
-        GROUP BY COALESCE(CONVERT(e.person_id USING utf8mb4) COLLATE utf8mb4_unicode_ci, e.email)`,
+        FROM (SELECT COALESCE(CONVERT(person_id USING utf8mb4) COLLATE utf8mb4_unicode_ci, email) AS reader,
+            person_id, email, state, held_revision_id, held_since, order_id
+          FROM entitlements
+          WHERE ${kitId ? 'kit_id = :ownedKitId' : 'TRUE'} AND ${sources.length > 0 ? 'source IN (:ownedBySources)' : 'TRUE'}) e
+        GROUP BY e.reader`,
       values: { ownedKitId: kitId, ownedBySources: sources },
     };
   }

@@ -3,7 +3,7 @@ import { MailPutOff, MailRefused } from '../adapters/mailer/mailer.js';
 import { newId } from '../database/columns.js';
 import { selectRows, touchRows } from '../database/rows.js';
 import { putKitOnSale, type KitOnSale } from '../testing/kit-on-sale.js';
-import { letterOf } from '../testing/letters.js';
+import { letterOf, putFitReport, putPrinter } from '../testing/letters.js';
 import { putOnShelf } from '../testing/released-revision.js';
 import { putShapes } from '../testing/revision-with-shapes.js';
 import { makePerson, signInAs, TEST_PASSPHRASE } from '../testing/sign-in.js';
@@ -131,24 +131,8 @@ describe('letters about a fix', () => {
       await emails({ heldFromId: revisions['1.6']!, heldToId: revisions['1.7']!, withNothingHeld: false }),
     ).toEqual(['sedge', 'teal']);
     expect(await emails({ sources: ['purchase'] })).toEqual(['guest']);
-    await touchRows(
-      shop.database,
-      `INSERT INTO fit_reports (id, kit_id, revision_id, part_code, part_name, person_id, printer_name, material, nozzle_mm, layer_mm, verdict, words, created_at, updated_at)
-       VALUES (:id, :kitId, :revisionId, 'J-01', 'Tongue', :personId, '', 'PETG', 0.4, 0.2, 'tight', '', :now, :now)`,
-      {
-        id: newId(),
-        kitId: kit.kitId,
-        revisionId: revisions['1.6'],
-        personId: people['sedge']!.id,
-        now: shop.clock.now(),
-      },
-    );
-    await touchRows(
-      shop.database,
-      `INSERT INTO printer_cards (id, person_id, name, bed_x_mm, bed_y_mm, bed_z_mm, nozzle_mm, materials, is_main, created_at, updated_at)
-       VALUES (:id, :personId, 'Box', 200, 200, 200, 0.6, '[{"material":"ASA"}]', TRUE, :now, :now)`,
-      { id: newId(), personId: people['teal']!.id, now: shop.clock.now() },
-    );
+    await putFitReport(shop, people['sedge']!.id, { kitId: kit.kitId, revisionId: revisions['1.6']! });
+    await putPrinter(shop, people['teal']!.id);
     expect(await emails({ reportedParts: ['J-01'] })).toEqual(['sedge']);
     expect(await emails({ materials: ['PETG', 'ASA'] })).toEqual(['sedge', 'teal']);
     expect(await emails({ nozzlesMm: [0.6] })).toEqual(['teal']);

@@ -123,7 +123,7 @@ export const reachTexts = {
 };
 
 export const previewTexts = {
-  title: 'Preview',
+  title: 'As one reader gets it',
   asHtml: 'As HTML',
   asText: 'As text',
   to: (to: string, subject: string) => `To ${to}: ${subject}`,

@@ -72,14 +72,16 @@ export function AudienceReach({ form, onPreview, onCounted }: AudienceReachProps
   const { kind, kitId, revisionId, audience, leavesOutUnneeded } = bodyOf(form);
   const letter = useSettled({ kind, kitId, revisionId, audience, leavesOutUnneeded }, 400);
   const [show, setShow] = useState<'readers' | 'left-out'>('readers');
-  const [page, setPage] = useState(1);
+  // Another question begins at its first page.
+  const asked = JSON.stringify([letter, show]);
+  const [turned, setTurned] = useState({ asked, page: 1 });
+  const page = turned.asked === asked ? turned.page : 1;
+  const setPage = (next: number) => setTurned({ asked, page: next });
   const { data, fault, mutate } = useEndpoint(
     'POST /workshop/letters/audience',
     { body: { letter, show, page, size: SIZE } },
     { keepPreviousData: true },
   );
-  const asked = JSON.stringify(letter);
-  useEffect(() => setPage(1), [asked, show]);
   const size = data?.size;
   useEffect(() => {
     if (size !== undefined) onCounted?.(size);

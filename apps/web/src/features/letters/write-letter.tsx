@@ -1,7 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import { letterBody, type Letter, type LetterChoices } from '@windchest/contracts';
 import { useState } from 'react';
-import { useForm } from 'react-hook-form';
+import { useForm, useWatch } from 'react-hook-form';
 import { useNavigate } from 'react-router-dom';
 import { paths } from '../../config/paths.js';
 import { letterFormTexts as texts, sendTexts } from '../../config/texts/workshop-letters.js';
@@ -38,6 +38,7 @@ export function WriteLetter({ letter, choices }: { letter: Letter | null; choice
     defaultValues: letter ? formOf(letter) : emptyLetter(choices.perMinute),
     resolver: formResolver<LetterForm, typeof letterBody>(letterBody, bodyOf),
   });
+  const written = useWatch({ control: form.control }) as LetterForm;
   const { isDirty } = form.formState;
   const isWritable = may('letters:write');
   const save = form.handleSubmit(async (body) => {
@@ -70,7 +71,7 @@ export function WriteLetter({ letter, choices }: { letter: Letter | null; choice
             </Heading>
             <AudienceFields form={form} choices={choices} />
           </Box>
-          <AudienceReach form={form.watch()} onPreview={letter ? setReader : undefined} onCounted={setSize} />
+          <AudienceReach form={written} onPreview={letter ? setReader : undefined} onCounted={setSize} />
         </Box>
         {fault && !isFaultBesideField && <Fault what={texts.failed} fault={fault} />}
         {isWritable && (
