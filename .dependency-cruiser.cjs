@@ -23,7 +23,7 @@ const mayUse = {
   ledger: ['accounts', 'catalogue', 'orders'],
   workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),
 };
-const lowerLayers = 'adapters database jobs mails http pictures config'.split(' ');
+const lowerLayers = 'adapters database jobs mails http pictures config typesetting'.split(' ');
 
 module.exports = {
   forbidden: [

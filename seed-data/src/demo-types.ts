@@ -4,6 +4,8 @@ import type { Solid } from './geometry/solid.js';
 export type FilamentColour = 'orange' | 'teal' | 'violet' | 'ochre' | 'blue' | 'rose' | 'moss';
 export type OrientationRule = 'as-exported' | 'may-turn' | 'may-lie';
 export type LicenceKind = 'personal' | 'small-run' | 'classroom';
+/** A gap smaller or larger than drawn: such a part fits tighter or looser. */
+export type DemoClearance = 'minus' | 'plus';
 export type DemoRole = 'owner' | 'maker' | 'helper' | 'bookkeeper' | 'buyer';
 
 /** A voice with the note it is meant to give; `widthMm` is for drawing a bar or tine, it changes no pitch. */
@@ -30,8 +32,12 @@ export interface DemoPart {
   /** Only where it differs from the revision's. */
   printSpec: DemoPrintSpec | null;
   voice: DemoVoice | null;
+  /** Printed first: it tells which clearance fits a printer. */
+  isGauge: boolean;
   fileName: string;
   fileFormat: 'stl' | '3mf';
+  /** The part in other clearances; its own file is the zero. */
+  variants: { clearance: DemoClearance; fileName: string }[];
 }
 
 export interface DemoHardware {
@@ -119,6 +125,8 @@ export interface DemoPurchase {
   couponCode: string | null;
   /** The newest revision of the first kit when it was bought, and so the one the buyer holds. */
   boughtAt: string;
+  /** Of one line, a part that the bookkeeper gave back; the files stay. */
+  givenBack?: { kitSlug: string; minor: number; reason: string };
 }
 
 export interface DemoFitReport {
@@ -180,6 +188,7 @@ export interface DemoLetter {
 export interface PlannedPart {
   part: DemoPart;
   shape: () => Solid;
+  variantShapes: Partial<Record<DemoClearance, () => Solid>>;
 }
 
 export interface KitPlan {

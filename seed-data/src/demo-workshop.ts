@@ -4,11 +4,12 @@ import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { fitReports } from './fit-reports.js';
+import { turnstone } from './kits/turnstone.js';
 import { people, printers, purchases } from './people.js';
 import { letters, newsReaders } from './letters.js';
 import { posts } from './posts.js';
 
-export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
+export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
 
 /** A small workshop that exists nowhere, with all it needs to open its shop. */
 export const demoWorkshop: DemoWorkshop = {

@@ -1,5 +1,6 @@
 export { demoWorkshop } from './demo-workshop.js';
 export type {
+  DemoClearance,
   DemoCoupon,
   DemoHardware,
   DemoKit,

@@ -1,5 +1,6 @@
 import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
+import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { reportFit } from './load/report-fit.js';
 import { makePeople } from './load/make-people.js';
@@ -26,6 +27,8 @@ const main = async (): Promise<void> => {
     );
   await makePeople(process.env);
   const maker = await signIn(demoSignIns.find((one) => one.role === 'maker')?.email ?? '');
+
+  const bookkeeper = await signIn(demoSignIns.find((one) => one.role === 'bookkeeper')?.email ?? '');
 
   const kitIds = new Map<string, string>();
   for (const kit of demoWorkshop.kits) {
@@ -57,8 +60,10 @@ const main = async (): Promise<void> => {
 
   for (const purchase of demoWorkshop.purchases) {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
-    if (person) await buy(await signIn(person.email), person, purchase, stripeUrl);
-    say(`${person?.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+    if (!person) continue;
+    const orderId = await buy(await signIn(person.email), person, purchase, stripeUrl);
+    say(`${person.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+    if (purchase.givenBack) await giveBack(bookkeeper, orderId, purchase.givenBack);
   }
 
   for (const report of demoWorkshop.fitReports)

@@ -90,6 +90,11 @@ export const purchases: DemoPurchase[] = [
     ],
     couponCode: 'CHIME2',
     boughtAt: 'Mk 1.0',
+    givenBack: {
+      kitSlug: 'godwit',
+      minor: 350,
+      reason: 'The first issue came without its reed gauge; a quarter goes back.',
+    },
   },
   {
     buyerEmail: 'jonas.abara@mail.example',

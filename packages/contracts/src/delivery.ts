@@ -1,11 +1,19 @@
 import { z } from 'zod';
+import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
 import { differenceKind } from './workshop-revisions.js';
-import { email, filamentColour, id, moment, secret, sha256, slug, slugParams } from './values.js';
+import { email, filamentColour, id, moment, pageOf, secret, sha256, slug, slugParams } from './values.js';
 
-/** What may be fetched: the whole bundle of a revision, or one document of it. */
-export const grantBody = z.object({ kitSlug: slug, revisionId: id, file: sha256.optional() });
+/**
+ * What may be fetched: the whole bundle of a revision, its bundle of one clearance, or one document of it.
+ */
+export const grantBody = z.object({
+  kitSlug: slug,
+  revisionId: id,
+  file: sha256.optional(),
+  clearance: clearance.optional(),
+});
 export const grant = z.object({
   url: z.string(),
   expiresAt: moment,
@@ -20,6 +28,8 @@ export const shelfRevision = z.object({
   releasedAt: moment,
   bundleBytes: z.int(),
   bundleSha256: sha256,
+  /** Of one clearance each, tightest first; none where no part comes in several. */
+  bundles: z.array(z.object({ clearance, bytes: z.int(), sha256 })),
   changeNotes: z.string(),
   isWithdrawn: z.boolean(),
 });
@@ -43,6 +53,8 @@ export const shelfPart = z.object({
   code: z.string(),
   name: z.string(),
   quantity: z.int(),
+  /** Which one is compared; null where the part comes in one, or nothing is known of the reader's choice. */
+  clearance: clearance.nullable(),
   difference: differenceKind,
   mark: z.enum(['reprint needed', 'reprint if it troubles you']).nullable(),
   reason: z.string(),
@@ -51,6 +63,13 @@ export const shelfPart = z.object({
 });
 export const shelfKit = shelfItem.extend({
   orderId: id.nullable(),
+  /** Of the newest revision. */
+  clearance: z.object({
+    hasVariants: z.boolean(),
+    gauge: z.object({ code: z.string(), name: z.string() }).nullable(),
+    /** What this person prints: said for this kit, else the habit of their printer. */
+    chosen: clearance.nullable(),
+  }),
   revisions: z.array(shelfRevision),
   parts: z.array(shelfPart),
   documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
@@ -67,7 +86,8 @@ export const collection = z.object({
   orderNumber: z.string(),
   expiresAt: moment,
   usesLeft: z.int(),
-  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'ended']),
+  /** `suspended`: the payment is in dispute. `ended`: no right of the order is left. */
+  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'suspended', 'ended']),
   kits: z.array(
     z.object({
       slug,
@@ -92,7 +112,10 @@ export const deliveryEndpoints = {
     access: 'signed-in',
     summary: 'One’s own kits',
     query: z.object({ page: z.coerce.number().int().min(1).default(1) }),
-    response: z.object({ items: z.array(shelfItem), page: z.int(), size: z.int(), total: z.int() }),
+    response: pageOf(shelfItem).extend({
+      /** Kits whose downloads rest while a payment is in dispute, by name. */
+      resting: z.array(z.string()),
+    }),
   }),
   'GET /shelf/:slug': endpoint({
     access: 'signed-in',
@@ -105,6 +128,13 @@ export const deliveryEndpoints = {
     summary: 'Say which revision one has printed',
     params: slugParams,
     body: z.object({ revisionId: id }),
+    response: shelfKit,
+  }),
+  'PUT /shelf/:slug/clearance': endpoint({
+    access: 'signed-in',
+    summary: 'Say which clearance one prints of a kit; bundle and reprint list then keep to it',
+    params: slugParams,
+    body: z.object({ clearance: clearance.nullable() }),
     response: shelfKit,
   }),
   'POST /shelf/grants': endpoint({

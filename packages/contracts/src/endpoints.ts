@@ -7,7 +7,9 @@ import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
 import { workshopLetterEndpoints } from './letters.js';
 import { newsEndpoints } from './news.js';
+import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
+import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
@@ -20,12 +22,14 @@ export const endpoints = {
   ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
+  ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
   ...fitEndpoints,
   ...journalEndpoints,
   ...workshopLetterEndpoints,
   ...newsEndpoints,
+  ...ledgerEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { filamentColour, id, moment, money, pageOf, pageQuery, slug, slugParams } from './values.js';
 import { rankVoice, room } from './voices.js';
@@ -121,6 +122,10 @@ export const kitPart = z.object({
   volumeMm3: z.number(),
   areaMm2: z.number(),
   printSpec: printSpec.nullable(),
+  /** Printed first: it tells which clearance fits a printer. */
+  isGauge: z.boolean(),
+  /** Those the part comes in, tightest first; none where there is only the one file. */
+  clearances: z.array(clearance),
   /** Shown on the sheet: the side that tells most about the part. */
   drawing: drawing.nullable(),
 });

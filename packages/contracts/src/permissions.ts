@@ -17,6 +17,8 @@ export const permissionTable = {
   'coupons:write': ['maker', 'owner'],
   'orders:read': ['bookkeeper', 'maker', 'owner'],
   'orders:refund': ['bookkeeper', 'owner'],
+  'ledger:read': ['bookkeeper', 'owner'],
+  'tax:write': ['bookkeeper', 'owner'],
   'buyers:read': ['helper', 'bookkeeper', 'maker', 'owner'],
   'links:resend': ['helper', 'bookkeeper', 'maker', 'owner'],
   'fit:read': ['helper', 'maker', 'owner'],

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { buildVolume, orientations, printSpec, sizeMm } from './kits.js';
 import { id, idParams, line, minor, slugParams } from './values.js';
@@ -75,10 +76,6 @@ export const printSheet = z.object({
 });
 export type PrintSheet = z.output<typeof printSheet>;
 
-/** How a person's printer wants moving parts: with less room than drawn, as drawn, or with more. */
-export const clearances = ['minus', 'zero', 'plus'] as const;
-export type Clearance = (typeof clearances)[number];
-
 export const mostPrinterCards = 20;
 export const mostCardMaterials = 10;
 
@@ -99,10 +96,11 @@ export const printerCardFields = z.object({
   materials: z
     .array(cardMaterial)
     .min(1, 'Write down at least one filament.')
-    .max(mostCardMaterials, `Ten filaments are the most a card holds.`)
+    .max(mostCardMaterials, 'Ten filaments are the most a card holds.')
     .refine(hasEachOnce, 'One filament stands here twice; keep one of the two.'),
   /** What a gauge part told; null until one was printed. */
-  clearance: z.enum(clearances).nullable(),
+  /** How the printer wants moving parts: with less room than drawn, as drawn, or with more. */
+  clearance: clearance.nullable(),
 });
 /** A card as a visitor's browser keeps it. */
 export type PrinterCardFields = z.output<typeof printerCardFields>;

@@ -20,6 +20,7 @@ export type {
   OrderRefundedMessage,
   PaidLine,
   PassphraseChangedMessage,
+  PaymentDisputedMessage,
   RenderedEmail,
   ReprintRow,
   ResetPassphraseMessage,

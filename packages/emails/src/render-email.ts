@@ -4,6 +4,7 @@ import { plainStrings } from './plain-text.js';
 import { renderHtml } from './render-html.js';
 import { renderText } from './render-text.js';
 import * as accountMails from './templates/account-mails.js';
+import * as disputeMails from './templates/dispute-mails.js';
 import * as deliveryMails from './templates/delivery-mails.js';
 import * as fitMails from './templates/fit-mails.js';
 import * as letterMails from './templates/letter-mails.js';
@@ -27,6 +28,8 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return deliveryMails.newDownloadLink(message);
     case 'order-refunded':
       return orderMails.orderRefunded(message, workshop);
+    case 'payment-disputed':
+      return disputeMails.paymentDisputed(message, workshop);
     case 'staff-invite':
       return accountMails.staffInvite(message, workshop);
     case 'revision-released':

@@ -8,13 +8,13 @@ interface ShelfAnswer {
   newest: { id: string };
 }
 
-/** Buys as a person would: basket, checkout, payment page, shelf, bundle. */
+/** Buys as a person would: basket, checkout, payment page, shelf, bundle. @returns the order's id */
 export const buy = async (
   buyer: ShopBrowser,
   person: DemoPerson,
   purchase: DemoPurchase,
   stripeUrl: string,
-): Promise<void> => {
+): Promise<string> => {
   const items = await Promise.all(
     purchase.lines.map(async ({ kitSlug, licence }) => {
       const { licences } = await buyer.get<KitAnswer>(`/kits/${kitSlug}`);
@@ -47,6 +47,7 @@ export const buy = async (
     const grant = await buyer.post<{ url: string }>('/shelf/grants', { kitSlug, revisionId: newest.id });
     await buyer.download(grant.url);
   }
+  return orderId;
 };
 
 const pay = async (stripeUrl: string, paymentUrl: string, person: DemoPerson): Promise<void> => {

@@ -73,6 +73,14 @@ export const environmentSchema = z.object({
     .regex(/^[A-Z]{2}$/)
     .default('IE'),
   WORKSHOP_ADDRESS: z.string().default(''),
+  /** Who sells, by the full name that receipts must carry; the workshop's name where it is the same. */
+  WORKSHOP_SELLER: z.string().max(160).default(''),
+  WORKSHOP_VAT_NUMBER: z
+    .string()
+    .regex(/^([A-Z]{2}[A-Z0-9+*]{2,13})?$/, 'begins with the country, IE1234567X, without spaces')
+    .default(''),
+  /** Above it a receipt carries the buyer's name and address; in whole units of the workshop's currency. */
+  SIMPLE_RECEIPT_UP_TO: z.coerce.number().int().min(0).max(1_000_000).default(100),
   WORKSHOP_LOCALE: z.string().default('en-IE'),
   SECURITY_CONTACT: z.string().optional(),
 

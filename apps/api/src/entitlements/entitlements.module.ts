@@ -9,7 +9,9 @@ import { DownloadLink } from './download-link.model.js';
 import { DownloadLinks } from './download-links.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
+import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
@@ -32,7 +34,9 @@ import { SignedAddress } from './signed-address.js';
     SignedAddress,
     FileGrants,
     ServeFile,
+    GiftMail,
     GiveEntitlements,
+    FollowOrderRights,
     Collections,
     Shelf,
     Holders,

@@ -1,12 +1,13 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer } from '@windchest/contracts';
+import type { Answer, Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
-import { notFound } from '../http/refusal.js';
+import { notFound, Refusal } from '../http/refusal.js';
+import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { toShelfRevision } from './shelf-revision.js';
@@ -46,17 +47,34 @@ export class Shelf {
       page,
       size: PAGE_SIZE,
       total: Number(rows[0]?.total ?? 0),
+      resting: await this.restingOf(person),
     };
+  }
+
+  /** Names of kits of which all that is left rests while a payment is in dispute. */
+  private async restingOf(person: SignedIn, kitId?: string): Promise<string[]> {
+    const rows = await selectRows<{ kitId: string }>(
+      this.database,
+      `SELECT kit_id AS kitId FROM entitlements
+       WHERE person_id = :personId AND state <> 'ended' AND (:kitId IS NULL OR kit_id = :kitId)
+       GROUP BY kit_id HAVING SUM(state = 'active') = 0`,
+      { personId: person.id, kitId: kitId ?? null },
+    );
+    return (await this.catalogue.kitsByIds(rows.map((row) => row.kitId))).map((kit) => kit.name);
   }
 
   async read(person: SignedIn, slug: string): Promise<Answer<'GET /shelf/:slug'>> {
     const kit = await this.catalogue.kitBySlug(slug);
     const item = kit && (await this.itemOf(person, kit.id));
+    if (kit && !item && (await this.restingOf(person, kit.id)).length > 0)
+      throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
-    const [revisions, parts, documents, cautions, downloads, [licence]] = await Promise.all([
+    const chosen = clearanceFor(best, null);
+    const [revisions, parts, clearances, documents, cautions, downloads, [licence]] = await Promise.all([
       this.catalogue.revisionsOf(kit.id),
-      this.catalogue.differences(item.held?.id ?? null, item.newest.id),
+      this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+      this.catalogue.clearancesOf(item.newest.id),
       this.catalogue.documentsOf(item.newest.id),
       this.catalogue.cautionsOf(item.newest.id),
       this.downloadsOf(person, kit.id),
@@ -65,7 +83,9 @@ export class Shelf {
     const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
-      orderId: best?.orderId ?? null,
+      // The order behind a gift is the giver's own affair.
+      orderId: best && best.source !== 'gift' ? best.orderId : null,
+      clearance: { ...clearances, chosen },
       revisions: revisions.map(toShelfRevision),
       parts,
       documents,
@@ -90,6 +110,23 @@ export class Shelf {
       { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
       { where: { personId: person.id, kitId: best.kitId, state: 'active' } },
     );
+    return this.read(person, slug);
+  }
+
+  /** Null forgets what was said. */
+  async sayClearance(
+    person: SignedIn,
+    slug: string,
+    clearance: Clearance | null,
+  ): Promise<Answer<'GET /shelf/:slug'>> {
+    const kit = await this.catalogue.kitBySlug(slug);
+    const [said] = kit
+      ? await this.entitlements.update(
+          { clearance, updatedAt: this.clock.now() },
+          { where: { personId: person.id, kitId: kit.id, state: 'active' } },
+        )
+      : [0];
+    if (said === 0) throw notFound('kit on your shelf');
     return this.read(person, slug);
   }
 

@@ -7,7 +7,7 @@ import type { ClaimedRecipient } from './claim-recipients.js';
 import { DeadAddresses, isDeadAddressReply } from './dead-addresses.js';
 import type { OpenLetter } from './letter-desk.js';
 import type { Letter } from './letter.model.js';
-import { LeaseLost, RecipientRecord } from './recipient-record.js';
+import { LeaseLost, RecipientRecord, type HandedOver } from './recipient-record.js';
 
 const MOST_TRIES = 8;
 const WHILE_SERVER_IS_AWAY_SECONDS = 20;
@@ -34,6 +34,7 @@ export class MailLetter {
     recipient: ClaimedRecipient & { readonly newsReaderId: string | null },
     worker: string,
   ): Promise<boolean> {
+    let handedOver: HandedOver | undefined;
     try {
       const { subject, html, text } = open.composer.for(await open.factsOf(recipient));
       await this.mailer.send(
@@ -46,10 +47,16 @@ export class MailLetter {
           ...this.returnPath(recipient.id),
           ...(recipient.newsReaderId ? { headers: this.stopHeaders(recipient.newsReaderId) } : {}),
         },
-        { beforeLastLine: () => this.record.handOver(recipient.id, worker) },
+        {
+          beforeLastLine: async () => {
+            handedOver = await this.record.handOver(recipient.id, worker);
+          },
+        },
       );
+      await handedOver?.isNoted;
       return true;
     } catch (fault) {
+      await handedOver?.isNoted;
       await this.writeDown(fault, letter, recipient, worker);
       return false;
     }

@@ -27,15 +27,35 @@ export class RecipientRecord {
     );
   }
 
-  /** The last moment before the mail is the server's. @throws where the lease is lost or the letter broken off */
-  async handOver(id: string, worker: string): Promise<void> {
-    const mine = await touchRows(
-      this.database,
-      `UPDATE letter_recipients SET state = 'handed-over', due_at = :until
-       WHERE id = :id AND state = 'queued' AND leased_by = :worker AND due_at > :now`,
-      { id, worker, now: this.clock.now(), until: this.leaseEnd() },
-    );
-    if (mine !== 1) throw new LeaseLost();
+  /**
+   * The last moment before the mail is the server's. The change waits in an open transaction until the database
+   * has granted it; its commit and the mail's last line then leave this process within one turn, the commit
+   * first. A process killed before that turn has sent nothing and noted nothing, one killed after it has done
+   * both: waiting for the commit's answer would leave a mail noted and unsent for as long as that takes.
+   * @throws LeaseLost where another worker took over or the letter was broken off
+   */
+  async handOver(id: string, worker: string): Promise<HandedOver> {
+    const tx = await this.database.transaction();
+    try {
+      const mine = await touchRows(
+        this.database,
+        `UPDATE letter_recipients SET state = 'handed-over', due_at = :until
+         WHERE id = :id AND state = 'queued' AND leased_by = :worker AND due_at > :now`,
+        { id, worker, now: this.clock.now(), until: this.leaseEnd() },
+        tx,
+      );
+      if (mine !== 1) throw new LeaseLost();
+    } catch (fault) {
+      await tx.rollback();
+      throw fault;
+    }
+    const commit = tx.commit();
+    return {
+      isNoted: commit.then(
+        () => true,
+        () => false,
+      ),
+    };
   }
 
   async markSent(ids: readonly string[], worker: string): Promise<void> {
@@ -43,7 +63,7 @@ export class RecipientRecord {
     await touchRows(
       this.database,
       `UPDATE letter_recipients SET state = 'sent', sent_at = :now, reason = NULL
-       WHERE id IN (:ids) AND state = 'handed-over' AND leased_by = :worker`,
+       WHERE id IN (:ids) AND state IN ('queued', 'handed-over') AND leased_by = :worker`,
       { ids, worker, now: this.clock.now() },
     );
   }
@@ -76,6 +96,11 @@ export class RecipientRecord {
       },
     );
   }
+}
+
+export interface HandedOver {
+  /** Whether the database took the note; a mail that went out is marked sent either way. */
+  readonly isNoted: Promise<boolean>;
 }
 
 export class LeaseLost extends Error {

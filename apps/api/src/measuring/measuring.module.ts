@@ -2,6 +2,7 @@ import { existsSync } from 'node:fs';
 import { Module } from '@nestjs/common';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { CONFIG, type Config } from '../config/config.js';
+import { CompareMeshes } from './compare-meshes.js';
 import { InlineMeshRunner } from './inline-mesh-runner.js';
 import { EstimatePrint } from './estimate-print.js';
 import { MeasureFile } from './measure-file.js';
@@ -15,6 +16,7 @@ const MAX_HEAP_MB = 2048;
   imports: [CatalogueModule],
   providers: [
     MeasureFile,
+    CompareMeshes,
     EstimatePrint,
     {
       provide: MeshRunner,

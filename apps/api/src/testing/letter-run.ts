@@ -1,6 +1,6 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { randomUUID } from 'node:crypto';
-import { readFileSync } from 'node:fs';
+import { existsSync, readFileSync } from 'node:fs';
 import { mkdtemp, rm } from 'node:fs/promises';
 import { createServer, type AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
@@ -26,6 +26,7 @@ export interface LetterRun {
   /** Starts a process of the API that works on the same database; answers when it is ready. */
   start(): Promise<ChildProcess>;
   kill(api: ChildProcess): Promise<void>;
+  /** Memory in use; 0 of a process that is gone. */
   rssMib(api: ChildProcess): number;
   /** Puts the letter on its way, as the begin job finds it. */
   send(perMinute: number): Promise<void>;
@@ -97,8 +98,11 @@ export const prepareLetterRun = async (main: string, readers: number): Promise<L
     letterId,
     start,
     kill,
-    rssMib: (api) =>
-      Math.round(Number(/VmRSS:\s+(\d+)/.exec(readFileSync(`/proc/${api.pid}/status`, 'utf8'))?.[1]) / 1024),
+    rssMib: (api) => {
+      const status = `/proc/${api.pid}/status`;
+      if (!existsSync(status)) return 0;
+      return Math.round(Number(/VmRSS:\s+(\d+)/.exec(readFileSync(status, 'utf8'))?.[1]) / 1024);
+    },
     send: async (perMinute) => {
       await putReaders(rows, letterId, readers, perMinute);
       const payload = JSON.stringify({ letterId, run: 1 });

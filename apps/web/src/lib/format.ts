@@ -94,3 +94,27 @@ export const dateTime = (moment: string): string =>
     hour: '2-digit',
     minute: '2-digit',
   }).format(new Date(moment));
+
+/** `Germany`, of `DE`. */
+export const countryName = (code: string): string => {
+  try {
+    return new Intl.DisplayNames(locale, { type: 'region' }).of(code) ?? code;
+  } catch {
+    return code;
+  }
+};
+
+/** `Nov 2026`, of `2026-11`. */
+export const month = (yearAndMonth: string): string =>
+  new Intl.DateTimeFormat(locale, { month: 'short', year: 'numeric', timeZone: 'UTC' }).format(
+    new Date(`${yearAndMonth}-01T00:00:00Z`),
+  );
+
+/** `12 Nov 2026`, of a day without a time, which is the same day everywhere. */
+export const day = (isoDay: string): string =>
+  new Intl.DateTimeFormat(locale, {
+    day: 'numeric',
+    month: 'short',
+    year: 'numeric',
+    timeZone: 'UTC',
+  }).format(new Date(`${isoDay}T00:00:00Z`));

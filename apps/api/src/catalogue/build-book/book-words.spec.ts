@@ -1,7 +1,7 @@
 import type { PrintSpecification, RankVoice } from '@windchest/contracts';
 import { bookVoices } from './book-voices.js';
 import { filamentHex, hexToOklch, kitShades, oklchToHex } from './kit-shades.js';
-import { dayText, fixedText, numberText, signedText } from './number-text.js';
+import { dayText, fixedText, numberText, signedText } from '../../typesetting/number-text.js';
 import { specDifference, specDifferences } from './print-spec-words.js';
 
 const spec: PrintSpecification = {
@@ -19,6 +19,8 @@ const part = (code: string, printSpec: PrintSpecification | null) => ({
   code,
   name: code,
   quantity: 1,
+  isGauge: false,
+  clearances: [],
   orientation: 'may-lie' as const,
   sizeMm: null,
   volumeCm3: null,

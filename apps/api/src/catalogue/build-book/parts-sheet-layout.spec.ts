@@ -1,11 +1,13 @@
 import { largestScale, scaleText } from './drawing-scale.js';
-import { mm } from './page-geometry.js';
+import { mm } from '../../typesetting/page-geometry.js';
 import { labelHeight, layOutPartsSheet, type DrawnPart } from './parts-sheet-layout.js';
 
 const drawn = (code: string, widthMm: number, heightMm: number): DrawnPart => ({
   code,
   name: code,
   quantity: 1,
+  isGauge: false,
+  clearances: [],
   orientation: 'may-turn',
   sizeMm: null,
   volumeCm3: null,

@@ -4,19 +4,17 @@ import type { Sequelize } from 'sequelize';
 import { keyOf } from '../../adapters/storage/storage.js';
 import { Clock } from '../../adapters/clock/clock.js';
 import { touchRows } from '../../database/rows.js';
-import type { Tx } from '../../database/transactions.js';
+import { Transactions, type Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { measureFile } from './measure-file.job.js';
 import type { MeshFindings } from './measured-mesh.js';
 import { MeasurementRecord } from './measurement.model.js';
+import { passingFaults } from './passing-faults.js';
 import { StoredFile } from './stored-file.model.js';
 
 /** Goes up when the same bytes would measure differently; files are then measured again as they are used. */
 const MEASURER_VERSION = 2;
-
-/** Faults of the measuring, not of the file: sending the file again tries again. */
-export const passingFaults = ['timed-out', 'out-of-memory', 'worker-ended'] as const;
-export type PassingFault = (typeof passingFaults)[number];
 
 /** What is known of each mesh, by its hash: the same bytes are measured once, wherever they are used. */
 @Injectable()
@@ -25,7 +23,9 @@ export class MeasurementRecords {
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(MeasurementRecord) private readonly records: typeof MeasurementRecord,
     @InjectModel(StoredFile) private readonly stored: typeof StoredFile,
+    private readonly transactions: Transactions,
     private readonly queue: JobQueue,
+    private readonly comparisons: QueueComparisons,
     private readonly clock: Clock,
   ) {}
 
@@ -70,11 +70,15 @@ export class MeasurementRecords {
     return { tries: record.tries, storageKey: keyOf('files', sha256), bytes: file.bytes };
   }
 
+  /** Keeps what was found, and has the mesh compared with what it takes the place of. */
   async keepMeasured(sha256: string, result: MeshFindings): Promise<void> {
-    await this.records.update(
-      { ...result, state: 'measured', fault: null, faultCode: null, measuredAt: this.clock.now() },
-      { where: { sha256, state: 'measuring' } },
-    );
+    await this.transactions.run(async (tx) => {
+      const [kept] = await this.records.update(
+        { ...result, state: 'measured', fault: null, faultCode: null, measuredAt: this.clock.now() },
+        { where: { sha256, state: 'measuring' }, transaction: tx },
+      );
+      if (kept > 0) await this.comparisons.ofMeasuredFile(tx, sha256);
+    });
   }
 
   /** @param fault what is wrong, to follow the file's name in a sentence */

@@ -8,6 +8,7 @@ import { notFound } from '../../http/refusal.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
 import { fromJson } from '../json-column.js';
 import { KitsTooBig } from '../print/kits-too-big.js';
+import { filesOfPart, hasVariants } from '../revisions/part-files.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
 import { labelOf, Revision, type Room } from '../revisions/revision.model.js';
 import { Kit } from './kit.model.js';
@@ -135,6 +136,8 @@ export class ShopKits {
         volumeMm3: part.file?.measured?.volumeMm3 ?? 0,
         areaMm2: part.file?.measured?.areaMm2 ?? 0,
         printSpec: part.printSpec,
+        isGauge: part.isGauge,
+        clearances: hasVariants(part) ? filesOfPart(part).map((one) => one.clearance) : [],
         drawing: tellingDrawing(part.file?.drawings ?? null),
       };
     });

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection } from '@nestjs/sequelize';
-import type { PrintSpecification, VoiceWithNote } from '@windchest/contracts';
+import type { PrintSpecification, VariantClearance, VoiceWithNote } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
@@ -35,7 +35,10 @@ export interface PartOfRevision {
   readonly voice: VoiceWithNote | null;
   readonly mark: ReprintMark | null;
   readonly reason: string;
+  readonly isGauge: boolean;
+  /** The zero where the part comes in several clearances. */
   readonly file: FileOfRevision | null;
+  readonly variants: readonly { readonly clearance: VariantClearance; readonly file: FileOfRevision }[];
 }
 
 interface FileRow {
@@ -63,6 +66,12 @@ interface PartRow {
   voice: unknown;
   reprint_mark: ReprintMark | null;
   reprint_reason: string;
+  is_gauge: number | boolean;
+}
+interface VariantRow {
+  part_id: string;
+  clearance: VariantClearance;
+  file_id: string;
 }
 
 /** Reads what stands in a revision: its files with what they measure, and its parts. */
@@ -85,12 +94,18 @@ export class RevisionContents {
   async partsOf(revisionId: string, tx?: Tx): Promise<PartOfRevision[]> {
     const rows = await selectRows<PartRow>(
       this.database,
-      `SELECT id, revision_id, file_id, code, name, quantity, orientation, print_spec, voice, reprint_mark, reprint_reason
+      `SELECT id, revision_id, file_id, code, name, quantity, orientation, print_spec, voice, reprint_mark, reprint_reason, is_gauge
        FROM parts WHERE revision_id = :revisionId ORDER BY code`,
       { revisionId },
       tx,
     );
     const files = new Map((await this.filesOf(revisionId, tx)).map((file) => [file.id, file]));
+    const variants = await selectRows<VariantRow>(
+      this.database,
+      'SELECT part_id, clearance, file_id FROM part_variants WHERE revision_id = :revisionId ORDER BY clearance',
+      { revisionId },
+      tx,
+    );
     return rows.map((row) => ({
       id: row.id,
       revisionId: row.revision_id,
@@ -102,7 +117,14 @@ export class RevisionContents {
       voice: fromJson<VoiceWithNote>(row.voice),
       mark: row.reprint_mark,
       reason: row.reprint_reason,
+      isGauge: Boolean(row.is_gauge),
       file: row.file_id ? (files.get(row.file_id) ?? null) : null,
+      variants: variants
+        .filter((one) => one.part_id === row.id)
+        .flatMap(({ clearance, file_id }) => {
+          const file = files.get(file_id);
+          return file ? [{ clearance, file }] : [];
+        }),
     }));
   }
 

@@ -55,6 +55,11 @@ export const kitTexts = {
     `Voiced for a room of ${temperature}. The workshop declares that each ${noun} can be set to within ${cents} cents of its note.`,
   partsHeading: 'What you print',
   partsLead: (codes: string, pieces: string) => `${codes}, ${pieces}, drawn to one scale from their files.`,
+  partsClearance: (codes: string, isOne: boolean, clearances: string) =>
+    `${codes} ${isOne ? 'comes' : 'come'} in clearances ${clearances}, for printers differ in the gap they leave.`,
+  partsGauge: (gauge: string) => `Print the gauge first, ${gauge}: it shows which one fits yours.`,
+  inClearances: (clearances: string) => `Comes in ${clearances}.`,
+  isGauge: 'The gauge: print it first.',
   partsLoading: 'The parts cannot be shown',
   partsList: (count: number) => (count === 1 ? 'The part, with its size' : `All ${count} parts, with sizes`),
   partsLabel: (name: string) => `Parts of ${name}`,

@@ -3,7 +3,6 @@ export const platesTexts = {
   loading: 'Fetching the outlines of the parts',
   loadFailed: 'The plates cannot be laid out',
   packing: 'Laying out the plates',
-  measuringUp: 'Measuring the parts',
   refused: 'The plates cannot be laid out so',
 
   summary: (plates: string, hours: string | null, mass: string | null, cost: string | null) =>
@@ -48,7 +47,6 @@ export const platesTexts = {
     turned: (degrees: string) => `turned by ${degrees}°`,
     laid: 'laid on a side',
   },
-  onPlate: (pieces: string) => `${pieces} on it`,
 
   layout: 'Room on the plate',
   gap: 'Between pieces',

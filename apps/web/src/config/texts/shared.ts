@@ -20,6 +20,7 @@ export const faultTexts = {
 
 export const tableTexts = {
   csv: 'Download as CSV',
+  sameAsTable: 'The same as a table',
   search: 'Search',
   sortBy: 'Sort by',
   ascending: 'rising',

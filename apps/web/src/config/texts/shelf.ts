@@ -15,6 +15,8 @@ export const shelfTexts = {
   empty: 'No kits on your shelf yet',
   emptyDetail: 'What you buy stands here, with every later revision and what to reprint for it.',
   seeKits: 'See the kits',
+  resting: (kits: string) =>
+    `Downloads of ${kits} rest while the payment is in dispute. When the bank has decided for the workshop, they go on.`,
 
   hold: 'You hold',
   nothingYet: 'Nothing yet',
@@ -88,6 +90,16 @@ export const shelfKitTexts = {
 
   actions: 'What you can do',
   getBundle: 'Get the whole bundle',
+  getBundleIn: (sign: string) => `Get the bundle in ${sign}`,
+  getAll: 'The bundle with all clearances',
+  clearance: 'Clearance you print',
+  clearanceUnknown: 'Not known yet',
+  clearanceFind: (gauge: string | undefined) =>
+    gauge
+      ? `The whole bundle holds all of them. Print the gauge first, ${gauge}: it shows which one fits.`
+      : 'The whole bundle holds all of them. Print a part in 0 first and see how it fits.',
+  clearanceFailed: 'The clearance was not kept',
+  inClearance: (sign: string) => `in ${sign}`,
   getting: 'Making ready …',
   getFailed: 'The download did not start',
   printed: (label: string) => `I have printed ${label}`,
@@ -114,7 +126,7 @@ export const shelfKitTexts = {
   noNotes: 'No change notes were written for this revision.',
   isWithdrawn: 'withdrawn',
   youHold: 'you hold this',
-  getRevision: (label: string) => `Get ${label}`,
+  getRevision: (label: string, sign?: string) => (sign ? `Get ${label} in ${sign}` : `Get ${label}`),
 
   noTerms: 'The terms stand in the bundle, in LICENCE.txt.',
   noDownloads: 'Nothing was downloaded yet.',
@@ -151,17 +163,24 @@ export const collectTexts = {
       title: 'A newer link has replaced this one',
       detail: 'Look for it in your mail, or have another mailed to the address of the order.',
     },
+    suspended: {
+      title: 'Downloads of this order rest',
+      detail: 'Its payment is in dispute. When the bank has decided for the workshop, they go on.',
+    },
     ended: {
       title: 'This order gives no files any more',
-      detail:
-        'It was refunded, or its payment is in dispute. Answer the mail of your order if you think this is wrong.',
+      detail: 'What was paid for it went back. Answer the mail of your order if you think this is wrong.',
     },
   } satisfies Record<Collection['state'], { title: string; detail: string }>,
 
   get: 'Get the bundle',
+  getOne: (clearance: string) => `Get ${clearance}`,
+  clearances:
+    'Some parts come in clearances: the bundle holds all of them, and its build book says how to find yours. If you know it, take that one alone.',
   getting: 'Making ready …',
   getFailed: 'The download did not start',
   checksum: 'SHA-256',
+  checksumOfAll: 'SHA-256 of the bundle with all clearances',
   copyChecksum: 'Copy the SHA-256',
   of: (kit: string) => `of ${kit}`,
 
@@ -172,6 +191,7 @@ export const collectTexts = {
     expired: 'expired',
     'used-up': 'used up',
     replaced: 'replaced',
+    suspended: 'resting',
     ended: 'ended',
   } satisfies Record<Collection['state'], string>,
   usesLeft: 'Downloads left',

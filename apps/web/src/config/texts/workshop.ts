@@ -9,6 +9,8 @@ export const workshopTexts = {
   overview: 'Overview',
   kits: 'Kits',
   orders: 'Orders',
+  receipts: 'Receipts',
+  ledger: 'Ledger',
   coupons: 'Coupons',
   holders: 'Holders',
   fit: 'Fit',

@@ -1,13 +1,17 @@
 import { Box } from '@chakra-ui/react/box';
+import type { RevisionDetail } from '@windchest/contracts';
+import { paths } from '../../config/paths.js';
 import { partsTexts } from '../../config/texts/workshop-parts.js';
 import { Button } from '../../ui/button.js';
 import { PartThumb } from '../../ui/drawing/parts-sheet.js';
+import { TextLink } from '../../ui/link.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
 import { MarkField } from './mark-field.js';
-import { MeasuredCell } from './measured-cell.js';
+import { MeasuredMeshes } from './measured-meshes.js';
 import type { Difference, PartRow } from './part-rows.js';
+import { useComparedWith } from './use-compared-with.js';
 
 const signs: Record<Difference, SignName> = {
   changed: 'warn',
@@ -37,6 +41,11 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
         <Box color="ink.soft" fontWeight="normal">
           {row.name}
         </Box>
+        {part?.isGauge && (
+          <Box fontSize="sm" fontWeight="normal">
+            {partsTexts.gauge}
+          </Box>
+        )}
         {onEdit && part && (
           <Button
             look="plain"
@@ -54,7 +63,13 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
   );
 };
 
-const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
+const SinceCell = ({
+  row: { comparison, code },
+  toDrawing,
+}: {
+  row: PartRow;
+  toDrawing: (code: string) => string;
+}) =>
   comparison && (
     <Box>
       <StatusMark
@@ -68,24 +83,48 @@ const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
       {comparison.whatDiffers && comparison.difference !== 'dropped' && comparison.difference !== 'new' && (
         <Box lineHeight="snug">{comparison.whatDiffers}</Box>
       )}
+      {comparison.difference === 'changed' && comparison.deviation && (
+        <Box marginTop="1" lineHeight="snug">
+          {comparison.deviation.state === 'waiting' ? (
+            <StatusMark state="wait" fontWeight="normal">
+              {partsTexts.comparingOne}
+            </StatusMark>
+          ) : (
+            <>
+              {comparison.deviation.where}
+              <Box>
+                <TextLink to={toDrawing(code)} aria-label={partsTexts.drawnOf(code)}>
+                  {partsTexts.drawn}
+                </TextLink>
+              </Box>
+            </>
+          )}
+        </Box>
+      )}
     </Box>
   );
 
 export interface PartsTableProps {
   rows: readonly PartRow[];
   comparedWith: string | undefined;
-  revisionId: string;
+  revision: RevisionDetail;
   /** Left out where nothing may be changed. */
   onEdit: ((partId: string) => void) | undefined;
+  isMarkable: boolean;
 }
 
 /** Every part with its drawing, what it measures, what changed, and what buyers should do about it. */
-export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTableProps) {
+export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }: PartsTableProps) {
+  const { withId } = useComparedWith();
+  const changes = paths.workshop.changes.to(
+    { kitId: revision.kit.id, revisionId: revision.id },
+    { with: withId },
+  );
   const columns: Column<PartRow>[] = [
     {
       key: 'part',
       header: partsTexts.columns.part,
-      width: '23%',
+      width: '21%',
       isHeading: true,
       cell: (row) => <PartCell row={row} onEdit={onEdit} />,
     },
@@ -102,27 +141,22 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
     {
       key: 'measured',
       header: partsTexts.columns.measured,
-      width: '22%',
-      cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
+      width: '20%',
+      cell: (row) => row.part && <MeasuredMeshes part={row.part} />,
     },
     {
       key: 'since',
       header: partsTexts.columns.since(comparedWith),
-      width: '22%',
-      cell: (row) => <SinceCell row={row} />,
+      width: '29%',
+      cell: (row) => <SinceCell row={row} toDrawing={(code) => `${changes}#change-${code}`} />,
     },
     {
       key: 'should',
       header: partsTexts.columns.should,
-      width: '27%',
+      width: '24%',
       cell: (row) =>
         row.comparison && (
-          <MarkField
-            key={row.code}
-            revisionId={revisionId}
-            row={row.comparison}
-            isWritable={onEdit !== undefined}
-          />
+          <MarkField key={row.code} revisionId={revision.id} row={row.comparison} isWritable={isMarkable} />
         ),
     },
   ];

@@ -32,6 +32,11 @@ const kitColumn: Column<Line> = {
         <Box fontSize="sm" fontWeight="normal" color="ink.soft">
           {line.licenceName}
         </Box>
+        {(line.right === 'ended' || line.right === 'suspended') && (
+          <Box fontSize="sm" fontWeight="normal" color="ink.soft">
+            {line.right === 'ended' ? orderTexts.rightEnded : orderTexts.rightSuspended}
+          </Box>
+        )}
       </Box>
     </KitColour>
   ),
@@ -101,6 +106,12 @@ export function OrderLines({ order }: { order: BuyerOrder }) {
             {price(line.tax)}
           </Sum>
         ))}
+        {taxes.length === 0 && order.total.minor > 0 && (
+          <Box as="dd" fontSize="sm" color="ink.soft" textAlign="end" paddingInline={{ md: '2.5' }}>
+            {orderTexts.untaxed[order.taxTreatment]}
+          </Box>
+        )}
+        {order.refunded.minor > 0 && <Sum name={orderTexts.refunded}>{less(order.refunded)}</Sum>}
       </Box>
     </>
   );

@@ -1,5 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import type { KitPage, KitPart } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { kitTexts } from '../../config/texts/kit.js';
 import { number } from '../../lib/format.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
@@ -23,6 +24,16 @@ export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitP
               {part.code}
             </Box>{' '}
             {part.name}
+            {part.isGauge && (
+              <Text look="small" isSoft fontWeight="normal">
+                {kitTexts.isGauge}
+              </Text>
+            )}
+            {part.clearances.length > 0 && (
+              <Text look="small" isSoft fontWeight="normal">
+                {kitTexts.inClearances(clearanceTexts.all(part.clearances))}
+              </Text>
+            )}
             {own.length > 0 && (
               <Text look="small" isSoft fontWeight="normal">
                 {kitTexts.ownSettings(own.join(', '))}

@@ -1,6 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import { chakra } from '@chakra-ui/react/styled-system';
 import type { KitPage, KitPart } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { kitTexts } from '../../config/texts/kit.js';
 import { counted } from '../../lib/format.js';
 import type { Answered } from '../../lib/use-endpoint.js';
@@ -18,6 +19,21 @@ const PartLink = chakra('a', {
 const drawnParts = (parts: readonly KitPart[]): DrawnPart[] =>
   parts.flatMap(({ code, name, drawing }) => (drawing ? [{ code, name, ...drawing }] : []));
 
+/** Said where parts come in several clearances: which, and how one finds one's own. */
+function Clearances({ parts }: { parts: readonly KitPart[] }) {
+  const fitted = parts.filter(({ clearances }) => clearances.length > 0);
+  const [first] = fitted;
+  const gauge = parts.find(({ isGauge }) => isGauge);
+  if (!first) return null;
+  const codes = clearanceTexts.codes(fitted.map(({ code }) => code));
+  return (
+    <Text isSoft marginBottom="6" maxWidth="measure">
+      {kitTexts.partsClearance(codes, fitted.length === 1, clearanceTexts.all(first.clearances))}
+      {gauge && ` ${kitTexts.partsGauge(`${gauge.code} ${gauge.name}`)}`}
+    </Text>
+  );
+}
+
 export interface PartsSectionProps {
   kit: KitPage;
   parts: Answered<KitPart[]>;
@@ -34,12 +50,13 @@ export function PartsSection({ kit, parts: { data: parts, fault, mutate } }: Par
   const pieces = parts.reduce((sum, part) => sum + part.quantity, 0);
   return (
     <>
-      <Text isSoft marginBottom="6">
+      <Text isSoft marginBottom={parts.some(({ clearances }) => clearances.length > 0) ? '2' : '6'}>
         {kitTexts.partsLead(
           counted(parts.length, kitTexts.onePart, kitTexts.manyParts),
           counted(pieces, kitTexts.onePiece, kitTexts.manyPieces),
         )}
       </Text>
+      <Clearances parts={parts} />
       <PartsSheet
         parts={drawnParts(parts)}
         label={kitTexts.partsLabel(kit.name)}
