@@ -95,7 +95,14 @@ describe('revisions held between two', () => {
 });
 
 describe('a reprint list', () => {
-  const row = { name: 'x', quantity: 1, whatDiffers: 'taller', drawing: null, reason: '' } as const;
+  const row = {
+    name: 'x',
+    clearance: null,
+    quantity: 1,
+    whatDiffers: 'taller',
+    drawing: null,
+    reason: '',
+  } as const;
   it('has what is needed and new first, then what is only for those it troubles, and nothing else', () => {
     const list = toPrint([
       { ...row, code: 'A-01', difference: 'changed', mark: 'reprint if it troubles you' },
