@@ -152,7 +152,7 @@ export const sendTexts = {
 };
 
 export const sendingTexts = {
-  progress: 'On its way',
+  progress: 'Sent so far',
   words: (done: number, all: number) => `${done} of ${all}`,
   waits: (at: string) => `It goes out on ${at}. Until then it can be taken back.`,
   gathering: 'Gathering its readers …',

@@ -1,5 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import type { LeftOutReason, Letter, OutputOf } from '@windchest/contracts';
+import { useEffect } from 'react';
 import { leftOutTexts, sendingTexts as texts } from '../../config/texts/workshop-letters.js';
 import { apiAddress } from '../../lib/api-address.js';
 import { dateTime } from '../../lib/format.js';
@@ -60,6 +61,9 @@ export function RecipientsTable({ letter }: { letter: Letter }) {
     { params, query: { ...narrowing, page, size } },
     { keepPreviousData: true, refreshInterval: letter.state === 'sending' ? 2000 : 0 },
   );
+  // The letter's own figures are asked for more often; where they move, the rows have moved too.
+  const figures = JSON.stringify(letter.counts);
+  useEffect(() => void mutate(), [figures, mutate]);
   if (fault && !data) return <Fault fault={fault} onAgain={() => void mutate()} level={3} />;
   return (
     <DataTable
