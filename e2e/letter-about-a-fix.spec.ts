@@ -17,7 +17,7 @@ test('a maker writes to the buyers concerned about a fix; each letter names its 
     r: { code: 'R-01', heightMm: 13, because: 'The old rail whistles' },
     b: { code: 'B-01', heightMm: 9, because: 'The old bar rattles' },
   };
-  const kit = await draftSmallKit(demoPerson('maker'), 'Whimbrel');
+  const kit = await draftSmallKit(demoPerson('maker'), `Whimbrel ${run % 10_000}`);
   const later = ({ code, heightMm }: { code: string; heightMm: number }) => ({ code, heightMm });
 
   await test.step('four buyers hold four revisions, each mending one part more', async () => {

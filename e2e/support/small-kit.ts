@@ -60,7 +60,7 @@ export const draftSmallKit = async (
 ): Promise<SmallKit> => {
   const maker = newBrowser();
   await maker.post('/session', { email: signIn.email, passphrase: signIn.passphrase });
-  const slug = `${name.toLowerCase()}-${Date.now()}`;
+  const slug = `${name.toLowerCase().replaceAll(' ', '-')}-${Date.now()}`;
   const { id } = await maker.post<{ id: string }>('/workshop/kits', {
     name,
     slug,
