@@ -194,6 +194,17 @@ export interface DemoWorkshop {
   pledges: DemoPledge[];
   posts: DemoPost[];
   fitReports: DemoFitReport[];
+  newsReaders: string[];
+  letters: DemoLetter[];
+}
+
+/** A letter of the workshop; what is not sent stays a draft. */
+export interface DemoLetter {
+  kind: 'service' | 'news';
+  subject: string;
+  body: string;
+  kitSlug: string | null;
+  isSent: boolean;
 }
 
 /** A part together with what draws its mesh. */

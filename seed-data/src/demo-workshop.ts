@@ -7,6 +7,7 @@ import { turnstone } from './kits/turnstone.js';
 import { fitReports } from './fit-reports.js';
 import { people, printers, purchases } from './people.js';
 import { plans, pledges } from './pledges.js';
+import { letters, newsReaders } from './letters.js';
 import { posts } from './posts.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
@@ -52,4 +53,6 @@ export const demoWorkshop: DemoWorkshop = {
   pledges,
   posts,
   fitReports,
+  newsReaders,
+  letters,
 };

@@ -5,6 +5,7 @@ import { draftKit, releaseRevision } from './load/load-kit.js';
 import { reportFit } from './load/report-fit.js';
 import { makePeople } from './load/make-people.js';
 import { beginPledge, makePlan } from './load/pledge.js';
+import { writeLetter } from './load/write-letter.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
 
@@ -89,6 +90,10 @@ const main = async (): Promise<void> => {
       await releaseRevision(maker, kitIds.get(kit.slug) ?? '', kit, revision);
       say(`${kit.name} ${revision.label} is released`);
     }
+
+  for (const email of demoWorkshop.newsReaders)
+    await (await signIn(email)).put('/account/news', { isWanted: true });
+  for (const letter of demoWorkshop.letters) await writeLetter(maker, letter, kitIds);
 };
 
 main().catch((fault: unknown) => {

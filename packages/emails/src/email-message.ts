@@ -1,3 +1,4 @@
+import type { EmailBlock, EmailContent } from './email-content.js';
 import type { Money } from '@windchest/money';
 import type { PledgeMessage } from './pledge-message.js';
 
@@ -184,6 +185,25 @@ export type FitFixedMessage = {
   link: string;
 };
 
+/** Asks whoever asked for news whether it was them. */
+export type ConfirmNewsMessage = { template: 'confirm-news'; link: string; days: number };
+
+/** A letter from the workshop, filled in for one reader. `blocks` hold its words; its maker made them safe. */
+export type LetterContent = {
+  kind: 'service' | 'news';
+  subject: string;
+  preheader: string;
+  blocks: readonly EmailBlock[];
+  /** The kit a service letter is about; without one it is about the shop. */
+  kit?: string | undefined;
+  accountLink: string;
+  stopLink?: string | undefined;
+  isTest?: boolean;
+};
+
+/** A letter mailed to its writer, to be looked at. */
+export type LetterTestMessage = { template: 'letter-test'; content: EmailContent };
+
 /** Every mail the shop sends by itself, told apart by `template`. */
 export type EmailMessage =
   | VerifyAddressMessage
@@ -200,6 +220,8 @@ export type EmailMessage =
   | GiftReceivedMessage
   | PledgeMessage
   | FitAnsweredMessage
-  | FitFixedMessage;
+  | FitFixedMessage
+  | ConfirmNewsMessage
+  | LetterTestMessage;
 
 export type EmailTemplate = EmailMessage['template'];

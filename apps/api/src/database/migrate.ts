@@ -17,6 +17,7 @@ import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
 import * as gifts from './migrations/0015-gifts.js';
 import * as journal from './migrations/0016-journal.js';
 import * as fitReports from './migrations/0017-fit-reports.js';
+import * as letters from './migrations/0018-letters.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -36,6 +37,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0015-gifts': gifts,
   '0016-journal': journal,
   '0017-fit-reports': fitReports,
+  '0018-letters': letters,
 };
 
 /**

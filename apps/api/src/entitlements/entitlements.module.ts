@@ -17,6 +17,7 @@ import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
 import { PledgeEntitlements } from './pledge-entitlements.js';
+import { ReaderParts } from './reader-parts.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -44,7 +45,8 @@ import { SignedAddress } from './signed-address.js';
     Shelf,
     Holders,
     Holdings,
+    ReaderParts,
   ],
-  exports: [Holdings],
+  exports: [Holdings, DownloadLinks, ReaderParts],
 })
 export class EntitlementsModule {}

@@ -42,6 +42,11 @@ export const paths = {
   cautions: route('/cautions'),
   journal: route('/journal'),
   post: route('/journal/:slug'),
+  letters: route('/letters'),
+  letter: route('/letters/:slug'),
+  news: route('/news'),
+  newsConfirm: route('/news/confirm'),
+  unsubscribe: route('/unsubscribe/:token'),
   support: route('/support'),
 
   join: route('/join'),
@@ -52,6 +57,7 @@ export const paths = {
   verify: route('/verify'),
   account: route('/account'),
   pledge: route('/account/pledge'),
+  ownLetter: route('/account/letters/:recipientId'),
 
   workshop: {
     overview: route('/workshop'),
@@ -92,6 +98,10 @@ export const paths = {
     journal: route('/workshop/journal'),
     newPost: route('/workshop/journal/new'),
     post: route('/workshop/journal/:postId'),
+    letters: route('/workshop/letters'),
+    newLetter: route('/workshop/letters/new'),
+    letter: route('/workshop/letters/:letterId'),
+    deadAddresses: route('/workshop/letters/dead-addresses'),
     people: route('/workshop/people'),
     log: route('/workshop/log'),
   },

@@ -174,6 +174,24 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/journal/edit-post.page.js')).EditPostPage),
   },
   {
+    path: paths.workshop.letters.path,
+    element: lazyPage(async () => (await import('../../features/letters/letters.page.js')).LettersPage),
+  },
+  {
+    path: paths.workshop.newLetter.path,
+    element: lazyPage(async () => (await import('../../features/letters/new-letter.page.js')).NewLetterPage),
+  },
+  {
+    path: paths.workshop.deadAddresses.path,
+    element: lazyPage(
+      async () => (await import('../../features/letters/dead-addresses.page.js')).DeadAddressesPage,
+    ),
+  },
+  {
+    path: paths.workshop.letter.path,
+    element: lazyPage(async () => (await import('../../features/letters/letter.page.js')).WorkshopLetterPage),
+  },
+  {
     path: paths.workshop.people.path,
     element: lazyPage(async () => (await import('../../features/workshop/people.page.js')).PeoplePage),
   },
