@@ -62,6 +62,11 @@ export default defineConfig(({ command }) => ({
         find: `@windchest/${name}`,
         replacement: packageSource(name),
       })),
+      // Emotion's own sheet writes `<style>` elements, which the content security policy blocks.
+      {
+        find: '@emotion/sheet',
+        replacement: fileURLToPath(new URL('./src/ui/theme/adopted-sheet.ts', import.meta.url)),
+      },
       // SWR asks for a stand-in that React has had itself since version 18.
       { find: /^use-sync-external-store\/shim$/, replacement: 'react' },
       ...(command === 'build' ? routerForVisitors : []),
@@ -86,6 +91,8 @@ export default defineConfig(({ command }) => ({
       // To fetch the parts of a dialog at once, the first page would have to name all of them.
       resolveDependencies: (file, parts) => (file.includes('-dialog-') ? [] : parts),
     },
+    // What draws in three dimensions is that large; it is fetched when a visitor asks to turn a part.
+    chunkSizeWarningLimit: 1000,
     rolldownOptions: {
       treeshake: {
         manualPureFunctions: ['defineConfig', 'defineConditions'],

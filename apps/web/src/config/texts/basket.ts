@@ -34,8 +34,10 @@ export const basketTexts = {
   checkout: 'Check out',
   email: 'E-mail',
   emailHint: 'The receipt and the link to your files go there.',
+  emailHintOfGift: 'The receipt goes there, and nothing of it to the one you give to.',
   country: 'Country',
   countryHint: 'Where you live: the tax in the price goes there.',
+  countryHintOfBusiness: 'Where the business is.',
   countryEmpty: 'Choose a country',
   countryMissing: 'Choose the country you live in.',
 

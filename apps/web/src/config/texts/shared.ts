@@ -1,3 +1,5 @@
+/* Words that the first page needs, or may need. */
+
 export const faultTexts = {
   again: 'Try again',
   requestId: 'If you write to the workshop about this, name request',
@@ -6,11 +8,6 @@ export const faultTexts = {
   shopChanged: 'The shop was updated meanwhile',
   shopChangedDetail: 'This page belongs to the version before. Load it again to go on.',
   reload: 'Load again',
-  notFound: 'Nothing stands at this address',
-  notFoundDetail: 'The link may be old or cut off. The kits are all on the front page.',
-  toKits: 'See the kits',
-  forbidden: 'This room is for the workshop’s staff',
-  forbiddenDetail: 'Sign in with an account that may enter it, or ask the owner.',
 };
 
 export const priceTexts = { before: 'before', now: 'now', free: 'Free' };

@@ -295,6 +295,13 @@ export const reconciliationTexts = {
   sumsCaption: 'Both books added up',
   sumColumns: { kind: 'Kind', count: 'Movements', here: 'Here', there: 'There', fees: 'Fees' },
   kinds: { payment: 'payments', refund: 'refunds', dispute: 'disputes', payout: 'payouts', other: 'other' },
+  oneKind: {
+    payment: 'payment',
+    refund: 'refund',
+    dispute: 'dispute',
+    payout: 'payout',
+    other: 'other',
+  },
   kind: 'Kind',
   allKinds: 'all kinds',
   movements: 'Movements',

@@ -106,6 +106,7 @@ export const workshopOrderTexts = {
   resend: 'Mail a fresh link',
   resendAsk: (email: string) => `Mail ${email} a fresh link?`,
   resendWhat: 'The buyer gets a new download link by e-mail. Links mailed earlier stop working.',
+  resendGift: 'Whom the gift is for gets a new download link by e-mail. Links mailed earlier stop working.',
   resendConfirm: 'Mail the link',
   resendDone: 'The mail is on its way.',
   resendFailed: 'No link was mailed',

@@ -92,7 +92,7 @@ export function CheckoutForm({ id, quote, isCurrent, requote, onWishes, onState 
     <Form id={id} onSubmit={pay} aria-label={basketTexts.checkout}>
       <TextField
         label={basketTexts.email}
-        hint={basketTexts.emailHint}
+        hint={isGift ? basketTexts.emailHintOfGift : basketTexts.emailHint}
         type="email"
         autoComplete="email"
         error={errors.email}
@@ -100,7 +100,7 @@ export function CheckoutForm({ id, quote, isCurrent, requote, onWishes, onState 
       />
       <SelectField
         label={basketTexts.country}
-        hint={basketTexts.countryHint}
+        hint={isBusiness ? basketTexts.countryHintOfBusiness : basketTexts.countryHint}
         emptyLabel={basketTexts.countryEmpty}
         options={countries}
         autoComplete="country"

@@ -60,18 +60,23 @@ const State = ({ one }: { one: YearExport }) => {
 };
 
 const columns: Column<YearExport>[] = [
-  { key: 'year', header: texts.columns.year, isHeading: true, cell: (one) => one.year },
+  {
+    key: 'year',
+    header: texts.columns.year,
+    isHeading: true,
+    cell: (one) => <Unbroken>{one.year}</Unbroken>,
+  },
   { key: 'state', header: texts.columns.state, width: '30%', cell: (one) => <State one={one} /> },
   {
     key: 'size',
     header: texts.columns.size,
-    cell: (one) => (one.bytes === null ? ledgerTexts.none : bytes(one.bytes)),
+    cell: (one) => <Unbroken>{one.bytes === null ? ledgerTexts.none : bytes(one.bytes)}</Unbroken>,
   },
   {
     key: 'hash',
     header: texts.columns.hash,
     cell: (one) => (
-      <Box as="span" fontFamily="mono" fontSize="xs">
+      <Box as="span" display="block" maxWidth="15rem" fontFamily="mono" fontSize="xs" overflowWrap="anywhere">
         {one.sha256 ?? ledgerTexts.none}
       </Box>
     ),

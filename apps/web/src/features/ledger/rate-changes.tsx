@@ -6,7 +6,7 @@ import { dateTime } from '../../lib/format.js';
 import { countryName, day } from '../../lib/workshop-format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { Button } from '../../ui/button.js';
-import { tableTexts } from '../../config/texts/controls.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { Fault } from '../../ui/fault.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Heading, Text } from '../../ui/text.js';

@@ -57,7 +57,7 @@ const columns: Column<ReconciliationRow>[] = [
         (row.subject ?? ledgerTexts.none)
       ),
   },
-  { key: 'kind', header: texts.rowColumns.kind, cell: (row) => texts.kinds[row.kind] },
+  { key: 'kind', header: texts.rowColumns.kind, cell: (row) => texts.oneKind[row.kind] },
   { key: 'at', header: texts.rowColumns.at, cell: (row) => <Unbroken>{dateTime(row.at)}</Unbroken> },
   {
     key: 'verdict',

@@ -13,7 +13,7 @@ const amountColumn = (key: 'net' | 'tax' | 'gross'): Column<SummaryRow> => ({
   key,
   header: texts.columns[key],
   isNumeric: true,
-  width: '9rem',
+  width: '14%',
   cell: (row) => <Unbroken>{price(row[key])}</Unbroken>,
 });
 const columnsWith = (missing: readonly string[]): Column<SummaryRow>[] => [
@@ -27,16 +27,24 @@ const columnsWith = (missing: readonly string[]): Column<SummaryRow>[] => [
     key: 'rate',
     header: texts.columns.rate,
     isNumeric: true,
+    width: '11%',
     cell: (row) =>
       row.treatment === 'consumer' && missing.includes(row.country)
         ? texts.noTaxYet
         : ratesTexts.percent(row.ratePercent),
   },
-  { key: 'receipts', header: texts.columns.receipts, isNumeric: true, cell: (row) => number(row.receipts) },
+  {
+    key: 'receipts',
+    header: texts.columns.receipts,
+    isNumeric: true,
+    width: '11%',
+    cell: (row) => number(row.receipts),
+  },
   {
     key: 'creditNotes',
     header: texts.columns.creditNotes,
     isNumeric: true,
+    width: '12%',
     cell: (row) => number(row.creditNotes),
   },
   amountColumn('net'),
@@ -59,7 +67,8 @@ export const SummaryTable = ({ treatment, rows, missingRates }: SummaryTableProp
     <HairlineTable
       caption={texts.captionOf(texts.sections[treatment])}
       columns={columnsWith(missingRates)}
-      rows={rows}
+      // By name, as they are read; the API knows codes alone.
+      rows={rows.toSorted((a, b) => countryName(a.country).localeCompare(countryName(b.country)))}
       rowKey={(row) => `${row.country} ${row.ratePercent} ${row.currency}`}
     />
   </Box>

@@ -1,5 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { type Column, HairlineTable } from '../table/hairline-table.js';
+import { VisuallyHidden } from '../visually-hidden.js';
 
 export interface BarListProps<Row> {
   caption: string;
@@ -42,5 +44,15 @@ export function BarList<Row>({ caption, rows, rowKey, columns, worthOf }: BarLis
       );
     },
   };
-  return <HairlineTable caption={caption} columns={[first, bar, ...rest]} rows={rows} rowKey={rowKey} />;
+  return (
+    <HairlineTable
+      caption={caption}
+      columns={[first, bar, ...rest]}
+      rows={rows}
+      rowKey={rowKey}
+      headOf={(column) => ({
+        content: column === bar ? <VisuallyHidden>{tableTexts.drawn}</VisuallyHidden> : column.header,
+      })}
+    />
+  );
 }

@@ -1,4 +1,4 @@
-// What tables, fields and dialogs say. None of them stands on the first page, which carries the shared texts.
+/* Words of components that no first page shows: they stay out of what every visitor loads. */
 
 export const fieldTexts = {
   optional: '(may be left empty)',
@@ -8,6 +8,7 @@ export const fieldTexts = {
 export const tableTexts = {
   csv: 'Download as CSV',
   sameAsTable: 'The same as a table',
+  drawn: 'As a bar',
   search: 'Search',
   sortBy: 'Sort by',
   ascending: 'rising',
