@@ -54,15 +54,17 @@ test('the bookkeeper gives part of an order back, and the buyer hears of it and 
 
   const mail = await awaitMail(email, /^Refund of €13\.00/);
   expect(mail.text).toContain('your right to the files of Teal ends');
-  const visitor = await browser.newPage();
+  const elsewhere = await browser.newContext();
+  const visitor = await elsewhere.newPage();
   await visitor.goto(linkIn(mail, '/orders'));
   await expect(visitor.getByText('The right to the files has ended.')).toHaveCount(1);
   const papers = visitor.getByRole('link', { name: /^(Receipt|Credit note) \d{4}-/ });
   await expect(papers).toHaveCount(2);
   for (const href of await papers.evaluateAll((links) => links.map((link) => link.getAttribute('href')))) {
-    const pdf = await visitor.request.get(href ?? '');
+    const pdf = await visitor.request.get(new URL(href ?? '', visitor.url()).href);
     expect(pdf.headers()['content-type']).toBe('application/pdf');
     expect((await pdf.body()).subarray(0, 5).toString()).toBe('%PDF-');
   }
   await expectAccessible(visitor, 'an order that was refunded in part');
+  await elsewhere.close();
 });

@@ -76,7 +76,11 @@ export default defineConfig({
     // Data addresses would need `data:` in the content security policy.
     assetsInlineLimit: 0,
     sourcemap: false,
-    modulePreload: { polyfill: false },
+    modulePreload: {
+      polyfill: false,
+      // To fetch the parts of a dialog at once, the first page would have to name all of them.
+      resolveDependencies: (file, parts) => (file.includes('-dialog-') ? [] : parts),
+    },
     // What draws in three dimensions is that large; it is fetched when a visitor asks to turn a part.
     chunkSizeWarningLimit: 1000,
     rolldownOptions: {

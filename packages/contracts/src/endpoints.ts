@@ -3,10 +3,12 @@ import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
 import { healthEndpoints } from './health.js';
 import { kitEndpoints } from './kits.js';
+import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
 import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
+import { supporterEndpoints } from './supporters.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
 
@@ -20,6 +22,8 @@ export const endpoints = {
   ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
+  ...ledgerEndpoints,
+  ...supporterEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

@@ -1,4 +1,5 @@
 import type { Money } from '@windchest/money';
+import type { PledgeMessage } from './pledge-message.js';
 
 /** The workshop as a mail shows it. `locale` is a language tag for amounts and dates, such as `en-GB`. */
 export type EmailWorkshop = {
@@ -60,6 +61,10 @@ export type OrderPaidMessage = {
   couponCode?: string;
   total: Money;
   tax: TaxLine[];
+  /** What is to be said where no tax is charged. */
+  taxNote?: string;
+  /** Bought for somebody else: the address that has the files. The buyer's mail then hands nothing over. */
+  giftTo?: string;
   link: string;
   linkDays: number;
   linkUses: number;
@@ -94,6 +99,8 @@ export type OrderRefundedMessage = {
   couponCode?: string;
   endedKits: string[];
   keptKits?: string[];
+  /** Bought for somebody else, whose rights these are. */
+  giftTo?: string;
   orderLink: string;
 };
 
@@ -141,9 +148,10 @@ export type RevisionReleasedMessage = {
   stopLink?: string;
 };
 
-/** `from` is the giver; without it the kit comes from the workshop itself. `note` is the giver's own words. */
-export type GiftReceivedMessage = KitTitle & {
+/** `from` is the giver; without it the kits come from the workshop itself. `note` is the giver's own words. */
+export type GiftReceivedMessage = {
   template: 'gift-received';
+  kits: KitTitle[];
   name?: string;
   from?: string;
   note?: string;
@@ -166,6 +174,7 @@ export type EmailMessage =
   | PaymentDisputedMessage
   | StaffInviteMessage
   | RevisionReleasedMessage
-  | GiftReceivedMessage;
+  | GiftReceivedMessage
+  | PledgeMessage;
 
 export type EmailTemplate = EmailMessage['template'];

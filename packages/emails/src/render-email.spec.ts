@@ -98,6 +98,16 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'staff-invite': true,
     'revision-released': true,
     'gift-received': true,
+    'pledge-began': true,
+    'pledge-receipt': true,
+    'pledge-payment-failed': true,
+    'pledge-grace-ends-soon': true,
+    'pledge-lapsed': true,
+    'pledge-will-end': true,
+    'pledge-ended': true,
+    'pledge-paused': true,
+    'pledge-resumes-soon': true,
+    'pledge-plan-changes': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(
     new Set(Object.keys(templates)),
@@ -236,7 +246,7 @@ describe('the mail of a new revision', () => {
 
 describe('hostile input', () => {
   /** Told apart by the code, never shown. */
-  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause'];
+  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause', 'keeps'];
   const attack = `<img src=x onerror="alert('1')">&amp;`;
 
   it('is escaped wherever a message or the workshop carries it', () => {
@@ -307,6 +317,41 @@ describe('hostile input', () => {
     const long = text.split('\n').filter((line) => line.length > 78 && !line.startsWith('https://'));
     expect(long).toEqual([]);
     expect(text.replace(/[^o]/g, '').length).toBeGreaterThanOrEqual(500);
+  });
+});
+
+describe('a gift', () => {
+  const gift = sampleMessages.find(({ title }) => title.includes('gift'))?.message;
+  if (gift?.template !== 'order-paid') throw new Error('There is no sample of a gift.');
+
+  it('tells its buyer who has the files, and hands them no link', () => {
+    const { subject, html, text } = renderEmail(gift, sampleWorkshop);
+    expect(subject).toBe('Your gift is on its way: Curlew');
+    for (const form of [html, text]) {
+      expect(form).toContain('wren@mail.example');
+      expect(form).not.toContain('/get/');
+      expect(form).not.toContain('download page');
+      expect(form).toContain(gift.orderLink);
+    }
+    expect(unwrapped(text)).toContain('Reverse charge: your business owes the VAT in its own country.');
+  });
+
+  it('names all its kits to the one who gets it', () => {
+    const kits = ['Curlew', 'Knot', 'Teal'].map((kit) => ({
+      kit,
+      licence: 'personal prints',
+      revision: 'Mk 1.0',
+    }));
+    const { subject, text } = renderEmail(sampleOf('gift-received', { kits }), sampleWorkshop);
+    expect(subject).toBe('Marlow gives you Curlew and 2 more kits');
+    expect(unwrapped(text)).toContain('Marlow gives you Curlew, Knot and Teal, musical instruments');
+    expect(unwrapped(text)).toContain('Knot Mk 1.0, with the licence “personal prints”.');
+  });
+
+  it('says whose rights end when it is refunded', () => {
+    const { text } = renderEmail(sampleOf('order-refunded', { giftTo: 'wren@mail.example' }), sampleWorkshop);
+    expect(unwrapped(text)).toContain('the right of wren@mail.example to the files of');
+    expect(text).not.toContain('your shelf');
   });
 });
 

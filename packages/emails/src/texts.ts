@@ -89,6 +89,12 @@ export const texts = {
     paid: (total: string): string => `Thank you. Your payment of ${total} has arrived.`,
     free: 'Thank you. There was nothing to pay.',
     button: 'Open the download page',
+    giftSubject: (kits: readonly string[]): string => `Your gift is on its way: ${kitsInShort(kits)}`,
+    giftPreheader: (order: string, total: string): string => `Order ${order}, ${total}.`,
+    giftHeading: 'Your gift is on its way',
+    giftSent: (to: string, kits: readonly string[]): string =>
+      `We have written to ${to}, with your line and a link to the files of ${listOf(kits)}. The files are theirs alone.`,
+    openOrder: 'Open your order',
     limits: (linkDays: number, linkUses: number): string =>
       `${linkLimits(linkDays, linkUses)} After that, get a new one on the page of your order.`,
     lineDetail: (revision: string, licence: string, discount: string | undefined): string =>
@@ -132,6 +138,10 @@ export const texts = {
       kits.length === 1
         ? `With this refund your right to the files of ${listOf(kits)} ends. It is no longer on your shelf.`
         : `With this refund your right to the files of ${listOf(kits)} ends. They are no longer on your shelf.`,
+    giftEnded: (to: string, kits: readonly string[]): string =>
+      `With this refund the right of ${to} to the files of ${listOf(kits)} ends.`,
+    giftKept: (to: string, kits: readonly string[]): string =>
+      `${listOf(kits)} ${kits.length === 1 ? 'stays' : 'stay'} with ${to}.`,
     kept: (kits: readonly string[]): string =>
       `${listOf(kits)} ${kits.length === 1 ? 'stays' : 'stay'} on your shelf.`,
     button: 'Open your order',
@@ -211,14 +221,18 @@ export const texts = {
   },
 
   giftReceived: {
-    subject: (from: string, kit: string): string => `${from} gives you ${kit}`,
+    subject: (from: string, kits: readonly string[]): string => `${from} gives you ${kitsInShort(kits)}`,
     preheader: 'Files to print and build an instrument.',
-    heading: (kit: string): string => `${kit} is yours`,
-    body: (from: string, kit: string, revision: string, licence: string): string =>
-      `${from} gives you ${kit}, a musical instrument as files to print and build. You get ${revision}, with the licence “${licence}”.`,
+    heading: (kits: readonly string[]): string => `${listOf(kits)} ${kits.length === 1 ? 'is' : 'are'} yours`,
+    body: (from: string, kits: readonly string[]): string =>
+      kits.length === 1
+        ? `${from} gives you ${listOf(kits)}, a musical instrument as files to print and build.`
+        : `${from} gives you ${listOf(kits)}, musical instruments as files to print and build.`,
+    kit: (kit: string, revision: string, licence: string): string =>
+      `${kit} ${revision}, with the licence “${licence}”.`,
     button: 'Open the download page',
     limits: (linkDays: number, linkUses: number): string =>
-      `${linkLimits(linkDays, linkUses)} To keep the kit and get later revisions, make an account with this address.`,
+      `${linkLimits(linkDays, linkUses)} Make an account with this address, and what you were given stands on your shelf, with all later revisions.`,
     cautions: 'Before you print and play',
     reason: (from: string): string => `You get this because ${from} entered this address for a gift.`,
   },

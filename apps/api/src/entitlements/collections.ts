@@ -60,7 +60,7 @@ export class Collections {
     await this.limits.take('mailed-link-network', network);
     const active = await this.entitlements.findAll({
       attributes: ['orderId'],
-      where: { email, state: 'active', source: 'purchase' },
+      where: { email, state: 'active', source: ['purchase', 'gift'] },
       group: ['orderId'],
       limit: 20,
     });
@@ -72,7 +72,8 @@ export class Collections {
   async resend(orderId: string): Promise<void> {
     const order = await this.orders.byId(orderId);
     if (!order) throw notFound('order');
-    await this.transactions.run((tx) => this.links.replace(tx, order.id, order.email));
+    const holder = order.gift?.email ?? order.email;
+    await this.transactions.run((tx) => this.links.replace(tx, order.id, holder));
   }
 
   private async kitsOf(active: readonly Entitlement[]): Promise<Answer<'GET /collect/:token'>['kits']> {

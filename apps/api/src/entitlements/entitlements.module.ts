@@ -3,6 +3,7 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { OrdersModule } from '../orders/orders.module.js';
+import { SupportersModule } from '../supporters/supporters.module.js';
 import { Collections } from './collections.js';
 import { DeliveryController } from './delivery.controller.js';
 import { DownloadLink } from './download-link.model.js';
@@ -11,8 +12,10 @@ import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
+import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holders } from './holders.js';
+import { PledgeEntitlements } from './pledge-entitlements.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -23,6 +26,7 @@ import { SignedAddress } from './signed-address.js';
     AccountsModule,
     CatalogueModule,
     OrdersModule,
+    SupportersModule,
     SequelizeModule.forFeature([Entitlement, DownloadLink, Download]),
   ],
   controllers: [ShelfController, DeliveryController],
@@ -31,8 +35,10 @@ import { SignedAddress } from './signed-address.js';
     SignedAddress,
     FileGrants,
     ServeFile,
+    GiftMail,
     GiveEntitlements,
     FollowOrderRights,
+    PledgeEntitlements,
     Collections,
     Shelf,
     Holders,

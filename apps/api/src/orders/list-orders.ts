@@ -2,13 +2,13 @@ import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Handled } from '@windchest/contracts';
 import { literal, Op, type Order as Sorting, type WhereOptions } from 'sequelize';
-import { locate } from './location-evidence.js';
+import { placeOf } from './order-country.js';
 import { OrderLine } from './order-line.model.js';
 import type { OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
 
 export type OrderQuery = Handled<'GET /workshop/orders'>['query'];
-export type OrderFilter = Pick<OrderQuery, 'state' | 'moneyBack' | 'flagged' | 'search'>;
+export type OrderFilter = Pick<OrderQuery, 'state' | 'moneyBack' | 'flagged' | 'couponId' | 'search'>;
 type Row = Answer<'GET /workshop/orders'>['items'][number];
 
 const PORTION = 500;
@@ -82,10 +82,11 @@ const below = (last: Order): WhereOptions => ({
   ],
 });
 
-const whereOf = ({ state, moneyBack, flagged, search }: OrderFilter): WhereOptions => {
+const whereOf = ({ state, moneyBack, flagged, couponId, search }: OrderFilter): WhereOptions => {
   const like = `%${search ?? ''}%`;
   return {
     ...(state ? { state } : {}),
+    ...(couponId ? { couponId } : {}),
     ...(moneyBack === 'refunded' ? { refundedMinor: { [Op.gt]: 0 } } : {}),
     [Op.and]: [
       ...(flagged ? [literal('JSON_LENGTH(flags) > 0')] : []),
@@ -108,8 +109,9 @@ const toRow = (order: Order, kits: string[]): Row => ({
   number: order.number,
   state: order.state,
   email: order.email,
-  country: locate(order.declaredCountry, order.paymentCountry, order.cardCountry).country,
+  country: placeOf(order).country,
   kits,
+  discount: { minor: order.discountMinor, currency: order.currency },
   total: { minor: order.totalMinor, currency: order.currency },
   refunded: { minor: order.refundedMinor, currency: order.currency },
   couponCode: order.couponCode,

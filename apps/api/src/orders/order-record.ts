@@ -1,4 +1,4 @@
-import type { orderFlag } from '@windchest/contracts';
+import type { BusinessBuyer, GiftWish, orderFlag, TaxTreatment } from '@windchest/contracts';
 import type { z } from 'zod';
 
 /** An order as other rooms see it. */
@@ -35,6 +35,11 @@ export interface OrderRecord {
   readonly declaredCountry: string;
   readonly paymentCountry: string | null;
   readonly cardCountry: string | null;
+  readonly settledCountry: string | null;
+  readonly taxTreatment: TaxTreatment;
+  readonly business: BusinessBuyer | null;
+  /** Whose the files are, where they are not the buyer's. */
+  readonly gift: GiftWish | null;
   readonly flags: readonly OrderFlag[];
   readonly receiptNumber: string | null;
   readonly createdAt: Date;

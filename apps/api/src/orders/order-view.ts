@@ -78,6 +78,9 @@ export class OrderView {
           net: money(line.netMinor),
           tax: money(line.taxMinor),
         })),
+        taxTreatment: order.taxTreatment,
+        business: order.business,
+        gift: order.gift,
         couponCode: order.couponCode,
         isMine: person !== null && order.personId === person.id,
       };

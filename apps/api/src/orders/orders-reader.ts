@@ -17,6 +17,14 @@ export interface DaySales {
   readonly grossMinor: number;
 }
 
+export interface KitSales {
+  readonly kitId: string;
+  /** As it was called when it was last sold. */
+  readonly name: string;
+  readonly sold: number;
+  readonly grossMinor: number;
+}
+
 /** Orders for other rooms to read. */
 @Injectable()
 export class OrdersReader {
@@ -68,6 +76,24 @@ export class OrdersReader {
       orders: Number(row.orders),
       grossMinor: Number(row.grossMinor),
     }));
+  }
+
+  /** What each kit brought in since then, what went back not taken off; the best first. */
+  async salesByKit(from: Date, currency: string): Promise<KitSales[]> {
+    const rows = await selectRows<{
+      kitId: string;
+      name: string;
+      sold: number | string;
+      grossMinor: number | string;
+    }>(
+      this.database,
+      `SELECT l.kit_id AS kitId, MAX(l.kit_name) AS name, COUNT(*) AS sold, SUM(l.total_minor) AS grossMinor
+       FROM order_lines l JOIN orders o ON o.id = l.order_id
+       WHERE o.paid_at >= :from AND o.currency = :currency
+       GROUP BY l.kit_id ORDER BY grossMinor DESC, sold DESC, kitId`,
+      { from, currency },
+    );
+    return rows.map((row) => ({ ...row, sold: Number(row.sold), grossMinor: Number(row.grossMinor) }));
   }
 
   async countFlagged(): Promise<number> {

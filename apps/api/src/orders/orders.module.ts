@@ -33,7 +33,6 @@ import { OwnOrders } from './own-orders.js';
 import { PlaceOrder } from './place-order.js';
 import { PriceBasket } from './price-basket.js';
 import { QuoteBasket } from './quote-basket.js';
-import { ReceivePaymentEvent } from './receive-payment-event.js';
 import { ReconcileOrder } from './reconcile-order.js';
 import { RefreshOrder } from './refresh-order.js';
 import { AskForRefund } from './refunds/ask-for-refund.js';
@@ -49,9 +48,12 @@ import { RefundView } from './refunds/refund-view.js';
 import { Refund } from './refunds/refund.model.js';
 import { RefundsController } from './refunds/refunds.controller.js';
 import { SettleRefund } from './refunds/settle-refund.js';
+import { SalesTax } from './sales-tax.js';
 import { SettleOrder } from './settle-order.js';
 import { ShowOrder } from './show-order.js';
 import { TakeOffFlag } from './take-off-flag.js';
+import { UnclearOrders } from './unclear-orders.js';
+import { YearRecords } from './year-records.js';
 
 @Module({
   imports: [
@@ -62,6 +64,7 @@ import { TakeOffFlag } from './take-off-flag.js';
   ],
   controllers: [CheckoutController, OrdersController, RefundsController],
   providers: [
+    SalesTax,
     PriceBasket,
     QuoteBasket,
     PlaceOrder,
@@ -74,7 +77,6 @@ import { TakeOffFlag } from './take-off-flag.js';
     CloseOrder,
     SettleOrder,
     ReconcileOrder,
-    ReceivePaymentEvent,
     HandlePaymentEvent,
     OrderHistory,
     OrderFacts,
@@ -97,6 +99,8 @@ import { TakeOffFlag } from './take-off-flag.js';
     CarryOutRefund,
     DecideRights,
     TakeOffFlag,
+    UnclearOrders,
+    YearRecords,
     DisputeSteps,
     DisputeMail,
     DisputeView,
@@ -112,6 +116,9 @@ import { TakeOffFlag } from './take-off-flag.js';
     OrdersReader,
     OrderHistory,
     OrderFacts,
+    SalesTax,
+    UnclearOrders,
+    YearRecords,
   ],
 })
 export class OrdersModule {}

@@ -4,7 +4,7 @@ import type { WorkshopOrder } from '@windchest/contracts';
 import { notFound } from '../http/refusal.js';
 import { MailOutbox } from '../mails/mail-outbox.js';
 import { DisputeView } from './disputes/dispute-view.js';
-import { locate } from './location-evidence.js';
+import { placeOf } from './order-country.js';
 import { OrderFacts } from './order-facts.js';
 import { OrderHistory } from './order-history.js';
 import { OrderView } from './order-view.js';
@@ -39,7 +39,7 @@ export class ShowOrder {
       ...shown,
       // Paying is the buyer's own affair.
       paymentUrl: null,
-      country: locate(order.declaredCountry, order.paymentCountry, order.cardCountry).country,
+      country: placeOf(order).country,
       flags: order.flags,
       refunds,
       disputes,

@@ -3,7 +3,7 @@ import { InjectModel } from '@nestjs/sequelize';
 import { StaffLog } from '../accounts/staff-log.js';
 import { Transactions } from '../database/transactions.js';
 import type { SignedIn } from '../http/person.js';
-import { notFound } from '../http/refusal.js';
+import { notFound, Refusal } from '../http/refusal.js';
 import { FlagOrder } from './flag-order.js';
 import type { OrderFlag } from './order-record.js';
 import { Order } from './order.model.js';
@@ -19,6 +19,11 @@ export class TakeOffFlag {
   ) {}
 
   takeOff(orderId: string, flag: OrderFlag, person: SignedIn): Promise<void> {
+    if (flag === 'location-unclear')
+      throw new Refusal(
+        'conflict',
+        'Which country this order is taxed in must be settled with a reason: do so in the ledger, under Locations.',
+      );
     return this.transactions.run(async (tx) => {
       const order = await this.orders.findByPk(orderId, { transaction: tx, lock: tx.LOCK.UPDATE });
       if (!order) throw notFound('order');

@@ -1,5 +1,6 @@
 import { money } from '@windchest/money';
 import type { EmailMessage, EmailWorkshop } from '../email-message.js';
+import { samplePledges } from './sample-pledges.js';
 
 export const sampleWorkshop: EmailWorkshop = {
   name: 'Saltmarsh Sound Works',
@@ -78,6 +79,26 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       linkDays: 30,
       linkUses: 5,
       orderLink: 'https://saltmarsh.example/orders/W-2026-0417',
+      cautionsLine,
+    },
+  },
+  {
+    title: 'Order paid, a business’s gift',
+    message: {
+      template: 'order-paid',
+      name: 'Marlow',
+      orderNumber: 'W-2026-0419',
+      receiptNumber: '2026-000393',
+      lines: [{ kit: 'Curlew', licence: 'personal prints', revision: 'Mk 1.4', total: eur(2017) }],
+      subtotal: eur(2017),
+      total: eur(2017),
+      tax: [],
+      taxNote: 'Reverse charge: your business owes the VAT in its own country.',
+      giftTo: 'wren@mail.example',
+      link: 'https://saltmarsh.example/orders/W-2026-0419',
+      linkDays: 30,
+      linkUses: 5,
+      orderLink: 'https://saltmarsh.example/orders/W-2026-0419',
       cautionsLine,
     },
   },
@@ -208,9 +229,7 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       template: 'gift-received',
       name: 'Wren',
       from: 'Marlow',
-      kit: 'Curlew',
-      licence: 'personal prints',
-      revision: 'Mk 1.4',
+      kits: [{ kit: 'Curlew', licence: 'personal prints', revision: 'Mk 1.4' }],
       note: 'For the long evenings. I shall want to hear it in spring.',
       link: page,
       linkDays: 90,
@@ -218,4 +237,5 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       cautionsLine,
     },
   },
+  ...samplePledges,
 ];

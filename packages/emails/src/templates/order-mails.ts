@@ -30,15 +30,32 @@ export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): E
           { label: words.discount(message.couponCode), amount: minus(show(discount)) },
         ];
 
+  const kits = message.lines.map(({ kit }) => kit);
+  const { giftTo, taxNote } = message;
+  const handedOver: EmailBlock[] =
+    giftTo === undefined
+      ? [
+          { kind: 'button', label: words.button, link: message.link },
+          { kind: 'paragraph', text: words.limits(message.linkDays, message.linkUses), isSoft: true },
+        ]
+      : [
+          say(words.giftSent(giftTo, kits)),
+          { kind: 'button', label: words.openOrder, link: message.orderLink },
+        ];
+  const cautions: EmailBlock[] =
+    giftTo === undefined ? [{ kind: 'note', label: words.cautions, text: message.cautionsLine }] : [];
+
   return {
-    subject: words.subject(message.lines.map(({ kit }) => kit)),
-    preheader: words.preheader(message.orderNumber, show(message.total)),
-    heading: words.heading,
+    subject: giftTo === undefined ? words.subject(kits) : words.giftSubject(kits),
+    preheader:
+      giftTo === undefined
+        ? words.preheader(message.orderNumber, show(message.total))
+        : words.giftPreheader(message.orderNumber, show(message.total)),
+    heading: giftTo === undefined ? words.heading : words.giftHeading,
     blocks: [
       say(texts.hello(greetedName(message.name))),
       say(isFree ? words.free : words.paid(show(message.total))),
-      { kind: 'button', label: words.button, link: message.link },
-      { kind: 'paragraph', text: words.limits(message.linkDays, message.linkUses), isSoft: true },
+      ...handedOver,
       {
         kind: 'price-table',
         rows: message.lines.map(lineRow),
@@ -52,7 +69,8 @@ export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): E
           })),
         ],
       },
-      { kind: 'note', label: words.cautions, text: message.cautionsLine },
+      ...(taxNote === undefined ? [] : [{ ...say(taxNote), isSoft: true }]),
+      ...cautions,
       {
         kind: 'title-block',
         cells: [
@@ -72,8 +90,11 @@ export function orderRefunded(message: OrderRefundedMessage, workshop: EmailWork
   const isDispute = message.cause === 'dispute';
   const { lines = [], keptKits = [], endedKits, tax = [] } = message;
   const kits: EmailBlock[] = [];
-  if (endedKits.length > 0) kits.push(say(words.ended(endedKits)));
-  if (keptKits.length > 0) kits.push(say(words.kept(keptKits)));
+  const { giftTo } = message;
+  if (endedKits.length > 0)
+    kits.push(say(giftTo === undefined ? words.ended(endedKits) : words.giftEnded(giftTo, endedKits)));
+  if (keptKits.length > 0)
+    kits.push(say(giftTo === undefined ? words.kept(keptKits) : words.giftKept(giftTo, keptKits)));
   if (message.couponCode) kits.push({ ...say(words.couponIsSpent(message.couponCode)), isSoft: true });
 
   return {

@@ -98,6 +98,7 @@ const deviation = {
   placeMm: null,
   placeIsOn: null,
   movedMm: null,
+  clearance: null,
   boxMm: box,
   earlierBoxMm: box,
   where: '',

@@ -113,7 +113,11 @@ const toPart = (part: PartOfRevision, placeOf: Places): PartShape => ({
   drawings: part.file?.drawings ?? null,
   previewBytes: part.file?.measured?.previewBytes ?? null,
   previewSha256: part.file?.previewSha256 ?? null,
-  variants: part.variants.map(({ clearance, file }) => ({ clearance, file: toFile(file, placeOf) })),
+  variants: part.variants.map(({ clearance, file }) => ({
+    clearance,
+    file: toFile(file, placeOf),
+    drawings: file.drawings,
+  })),
 });
 
 const toFile = (file: FileOfRevision, placeOf: Places): FileShape => ({

@@ -1,3 +1,4 @@
+import type { TaxTreatment } from '@windchest/contracts';
 import { money, spread } from '@windchest/money';
 import type { ReceiptBuyer, ReceiptLine, ReceiptSeller, CreditedLine } from '../receipt-parties.js';
 import type { ReceiptTax } from '../receipt.model.js';
@@ -8,6 +9,7 @@ export interface WrittenReceipt {
   readonly orderNumber: string;
   readonly currency: string;
   readonly totalMinor: number;
+  readonly taxTreatment: TaxTreatment;
   readonly tax: readonly ReceiptTax[];
   readonly buyer: ReceiptBuyer;
   readonly seller: ReceiptSeller | null;
@@ -76,7 +78,7 @@ const common = (receipt: WrittenReceipt, { shop, seller, locale }: Letterhead) =
   shop,
   seller: receipt.seller ?? seller,
   buyer: receipt.buyer,
-  isReverseCharge: receipt.buyer.vatNumber !== undefined && receipt.tax.every((one) => one.taxMinor === 0),
+  treatment: receipt.taxTreatment,
   currency: receipt.currency,
   locale,
 });

@@ -1,3 +1,4 @@
+import type { TaxTreatment } from '@windchest/contracts';
 import type { ReceiptBuyer, ReceiptSeller } from '../receipt-parties.js';
 
 /** A receipt, an invoice or a credit note as it is typeset: plain facts, nothing to look up. */
@@ -18,8 +19,7 @@ export interface ReceiptDocument {
   readonly shop: { readonly name: string; readonly address: string };
   readonly seller: ReceiptSeller;
   readonly buyer: ReceiptBuyer;
-  /** The buyer owes the tax, not the seller. */
-  readonly isReverseCharge: boolean;
+  readonly treatment: TaxTreatment;
   readonly currency: string;
   readonly locale: string;
   readonly lines: readonly DocumentLine[];

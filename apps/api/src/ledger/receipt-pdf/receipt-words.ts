@@ -27,9 +27,11 @@ export const leadOf = (document: ReceiptDocument): string => {
 };
 
 /** What the law wants said about the tax, besides its figures. */
-export const taxNoteOf = ({ isReverseCharge, buyer, rates }: ReceiptDocument): string | null => {
-  if (isReverseCharge)
+export const taxNoteOf = ({ treatment, buyer, rates }: ReceiptDocument): string | null => {
+  if (treatment === 'reverse-charge')
     return `Reverse charge: the customer, VAT number ${buyer.vatNumber ?? ''}, is liable for the VAT (Directive 2006/112/EC, articles 44 and 196).`;
+  if (treatment === 'business-abroad')
+    return 'No VAT is charged: the customer is a business established outside the European Union (Directive 2006/112/EC, article 44).';
   if (rates.every((rate) => rate.taxMinor === 0)) return 'No VAT is charged.';
   return null;
 };

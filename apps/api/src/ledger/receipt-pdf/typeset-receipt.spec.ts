@@ -40,6 +40,7 @@ const receipt: WrittenReceipt = {
   orderNumber: 'W-7K2M9Q',
   currency: 'EUR',
   totalMinor: 5500,
+  taxTreatment: 'consumer',
   tax: [{ country: 'FI', ratePercent: '25.5', netMinor: 4382, taxMinor: 1118 }],
   buyer: { email: 'wren@mail.example', country: 'FI' },
   seller: null,
@@ -56,6 +57,7 @@ const business: WrittenReceipt = {
     address: ['Am Deich 14', '26506 Norden'],
     vatNumber: 'DE999999999',
   },
+  taxTreatment: 'reverse-charge',
   tax: [{ country: 'DE', ratePercent: '0', netMinor: 45_000, taxMinor: 0 }],
   lines: Array.from({ length: 30 }, (_, n) => line(`no ${n}`, 1500, 0, '0')),
 };
@@ -129,10 +131,18 @@ describe('a receipt as PDF', () => {
   });
 
   it('says so where no tax is charged', async () => {
-    const untaxed = { ...business, buyer: { email: 'a@mail.example', country: 'US' } };
+    const untaxed: WrittenReceipt = {
+      ...business,
+      taxTreatment: 'consumer',
+      buyer: { email: 'a@mail.example', country: 'US' },
+    };
     const text = words(await typesetReceipt(describeReceipt(untaxed, letterhead)));
     expect(text).toContain('No VAT is charged.');
     expect(text).toContain('Receipt 2026-000391');
+    const abroad: WrittenReceipt = { ...business, taxTreatment: 'business-abroad' };
+    expect(words(await typesetReceipt(describeReceipt(abroad, letterhead)))).toContain(
+      'a business established outside the European Union',
+    );
   });
 
   it('of a credit note names the receipt that it corrects, and takes back its share of the tax', async () => {

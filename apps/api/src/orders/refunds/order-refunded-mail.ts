@@ -45,6 +45,7 @@ export class OrderRefundedMail {
           })),
         endedKits: [...endedKits],
         keptKits: [...keptKits],
+        ...(order.gift ? { giftTo: order.gift.email } : {}),
         ...(order.couponCode ? { couponCode: order.couponCode } : {}),
         orderLink: `${this.config.BASE_URL}/orders/${order.id}#key=${tokenPlaceholder('order-key', order.id)}`,
       },

@@ -7,6 +7,8 @@ export const fieldTexts = {
 
 export const tableTexts = {
   csv: 'Download as CSV',
+  sameAsTable: 'The same as a table',
+  drawn: 'As a bar',
   search: 'Search',
   sortBy: 'Sort by',
   ascending: 'rising',

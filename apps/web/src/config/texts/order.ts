@@ -46,6 +46,12 @@ export const orderTexts = {
   giveUpFailed: 'The order was not given up',
   toBasket: 'Back to the basket',
 
+  gift: 'The gift',
+  giftLead: (email: string) => `We have written to you, and to ${email}.`,
+  giftNext: (email: string) => `The link to the files is in a mail to ${email}, with your line:`,
+  giftLost:
+    'Should the mail be lost, they can ask for a fresh link on the page it leads to. The files are theirs alone.',
+
   next: 'What now',
   toShelf: 'Go to my shelf',
   mineNext: 'Your kits stand on your shelf.',
@@ -80,6 +86,12 @@ export const orderTexts = {
   total: 'Total',
   subtotal: 'Subtotal',
   discountOf: (code: string) => `Discount, code ${code}`,
+  untaxed: {
+    consumer: 'No VAT is charged.',
+    'domestic-business': 'No VAT is charged.',
+    'reverse-charge': 'Without VAT: your business owes it in its own country (reverse charge).',
+    'business-abroad': 'No VAT is charged: your business is outside the European Union.',
+  } satisfies Record<BuyerOrder['taxTreatment'], string>,
   taxOf: (ratePercent: string, net: string) => `VAT ${ratePercent} % on ${net} net, included`,
 
   blockOrder: 'Order',

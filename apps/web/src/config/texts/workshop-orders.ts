@@ -1,3 +1,5 @@
+import type { TaxTreatment } from '@windchest/contracts';
+
 export const ordersTexts = {
   title: 'Orders',
   caption: 'Orders',
@@ -32,7 +34,7 @@ export const ordersTexts = {
   } as Record<string, string>,
   flagDetails: {
     'location-unclear':
-      'No two pieces of evidence of where the buyer is agree. The declared country was taken for the tax; look at the order and decide.',
+      'No two pieces of evidence of where the buyer is agree. The declared country was taken for the tax. Settle it with a reason before the quarter is closed.',
     'amount-differs':
       'What was paid is not what was asked. Compare the order with the payment before handing anything over by hand.',
     'paid-after-end': 'It was paid after it had expired or was given up. It was fulfilled all the same.',
@@ -67,6 +69,20 @@ export const workshopOrderTexts = {
   evidence: 'Buyer and evidence',
   email: 'E-mail',
   country: 'Country',
+  business: 'Business',
+  vatNumber: 'VAT number',
+  formOnly: (number: string) =>
+    `${number} (only its form was checked; ask the tax office’s own service before you rely on it)`,
+  treatment: 'Tax',
+  treatments: {
+    consumer: 'as a consumer, within the price',
+    'domestic-business': 'a business of our own country, within the price',
+    'reverse-charge': 'reverse charge: the buyer owes it',
+    'business-abroad': 'none: a business outside the European Union',
+  } satisfies Record<TaxTreatment, string>,
+  gift: 'Gift',
+  giftTo: (email: string, giver: string, greeting: string) => `for ${email}, from ${giver}: “${greeting}”`,
+  settleLocation: 'Settle the country',
   paymentSession: 'Payment page',
   paymentIntent: 'Payment',
   consent: 'Consent',
@@ -90,6 +106,7 @@ export const workshopOrderTexts = {
   resend: 'Mail a fresh link',
   resendAsk: (email: string) => `Mail ${email} a fresh link?`,
   resendWhat: 'The buyer gets a new download link by e-mail. Links mailed earlier stop working.',
+  resendGift: 'Whom the gift is for gets a new download link by e-mail. Links mailed earlier stop working.',
   resendConfirm: 'Mail the link',
   resendDone: 'The mail is on its way.',
   resendFailed: 'No link was mailed',

@@ -1,10 +1,12 @@
 import { Box } from '@chakra-ui/react/box';
 import type { InputOf, WorkshopOrder } from '@windchest/contracts';
+import { paths } from '../../config/paths.js';
 import { ordersTexts as texts, workshopOrderTexts } from '../../config/texts/workshop-orders.js';
 import { useSession } from '../../lib/session.js';
 import { useAction } from '../../lib/use-action.js';
 import { Button } from '../../ui/button.js';
 import { Fault } from '../../ui/fault.js';
+import { TextLink } from '../../ui/link.js';
 import { StatusLine } from '../../ui/status-mark.js';
 
 type Flag = InputOf<'DELETE /workshop/orders/:orderId/flags/:flag'>['params']['flag'];
@@ -30,7 +32,12 @@ export function OrderFlagLines({ order }: { order: WorkshopOrder }) {
                 {texts.flagDetails[flag]}
               </Box>
             )}
-            {may('orders:refund') && (
+            {flag === 'location-unclear' && may('ledger:read') && (
+              <TextLink to={paths.workshop.locations.to({}, { search: order.number })}>
+                {workshopOrderTexts.settleLocation}
+              </TextLink>
+            )}
+            {flag !== 'location-unclear' && may('orders:refund') && (
               <Button
                 look="plain"
                 size="sm"

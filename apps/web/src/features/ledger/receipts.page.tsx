@@ -18,6 +18,7 @@ import { useTableState } from '../../ui/table/use-table-state.js';
 import { Heading, Text } from '../../ui/text.js';
 import { Unbroken } from '../../ui/unbroken.js';
 import { countryOptions } from '../basket/country-options.js';
+import { LedgerTabs } from './ledger-head.js';
 import { yearsUntil } from './receipt-years.js';
 
 type Query = NonNullable<InputOf<'GET /workshop/receipts'>['query']>;
@@ -61,9 +62,13 @@ const columns: Column<ReceiptRow>[] = [
     header: texts.columns.order,
     cell: (row) => (
       <Box lineHeight="1.4">
-        <TextLink to={paths.workshop.order.to({ orderId: row.orderId })} whiteSpace="nowrap">
-          {row.orderNumber}
-        </TextLink>
+        {row.orderId ? (
+          <TextLink to={paths.workshop.order.to({ orderId: row.orderId })} whiteSpace="nowrap">
+            {row.orderNumber}
+          </TextLink>
+        ) : (
+          <Unbroken>{row.orderNumber}</Unbroken>
+        )}
         <Box color="ink.soft">{row.email}</Box>
       </Box>
     ),
@@ -114,6 +119,7 @@ export function ReceiptsPage() {
   return (
     <Band>
       <PageTitle title={texts.title} />
+      <LedgerTabs />
       <Heading level={1}>{texts.title}</Heading>
       <Text look="lead" marginTop="2" marginBottom="1">
         {texts.lead}

@@ -35,7 +35,7 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
         isOpen={isAsking}
         onClose={() => setIsAsking(false)}
         look="ink"
-        title={texts.resendAsk(order.email)}
+        title={texts.resendAsk(order.gift?.email ?? order.email)}
         confirmLabel={texts.resendConfirm}
         onConfirm={async () => {
           const { isDone } = await run({ params: { orderId: order.id } });
@@ -43,7 +43,7 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
           return isDone;
         }}
       >
-        <Text>{texts.resendWhat}</Text>
+        <Text>{order.gift ? texts.resendGift : texts.resendWhat}</Text>
         {fault && <Fault what={texts.resendFailed} fault={fault} />}
       </ConfirmDialog>
     </Box>

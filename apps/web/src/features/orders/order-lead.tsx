@@ -12,7 +12,7 @@ function words(order: BuyerOrder, isTired: boolean): string {
   switch (order.state) {
     case 'paid':
       if (order.lines.some((line) => line.right === 'suspended')) return orderTexts.restingLead;
-      return orderTexts.paidLead(order.email);
+      return order.gift ? orderTexts.giftLead(order.gift.email) : orderTexts.paidLead(order.email);
     case 'refunded':
       return order.refunds.at(-1)?.cause === 'dispute' ? orderTexts.lostLead : orderTexts.refundedLead;
     case 'cancelled':

@@ -108,6 +108,18 @@ export function OrderLines({ order }: { order: BuyerOrder }) {
         ))}
         {order.refunded.minor > 0 && <Sum name={orderTexts.refunded}>{less(order.refunded)}</Sum>}
       </Box>
+      {taxes.length === 0 && order.total.minor > 0 && (
+        <Box
+          marginLeft="auto"
+          maxWidth={{ md: '26rem' }}
+          paddingInline={{ md: '2.5' }}
+          fontSize="sm"
+          color="ink.soft"
+          textAlign="end"
+        >
+          {orderTexts.untaxed[order.taxTreatment]}
+        </Box>
+      )}
     </>
   );
 }

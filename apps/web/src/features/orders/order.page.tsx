@@ -14,6 +14,7 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { TitleBlock, type TitleBlockField } from '../../ui/title-block.js';
 import { useEmptiedBasket } from './bought-basket.js';
+import { GiftOrder } from './gift-order.js';
 import { OpenOrder } from './open-order.js';
 import { OrderLead } from './order-lead.js';
 import { OrderLines } from './order-lines.js';
@@ -34,6 +35,8 @@ function fieldsOf(order: BuyerOrder): TitleBlockField[] {
 
 function Next({ order, followed }: { order: BuyerOrder; followed: FollowedOrder }) {
   if (order.state === 'open') return <OpenOrder order={order} followed={followed} />;
+  if (order.gift && order.lines.some((line) => line.right === 'active'))
+    return <GiftOrder gift={order.gift} />;
   // After a refund, also of all that was paid, some files may have been left with the buyer.
   if (order.lines.some((line) => line.right === 'active')) return <PaidOrder order={order} />;
   const isUnpaid = order.state === 'cancelled' || order.state === 'expired';
