@@ -24,7 +24,7 @@ test('a buyer redeems the launch discount, pays, gets the e-mail and downloads t
   await test.step('sees the price with the code, and puts it in the basket', async () => {
     await expect(page.getByText(/With code WINDFALL, 1[0-9]{2} of 150 left/)).toBeVisible();
     await expect(page.getByText('€16.00').first()).toBeVisible();
-    await page.getByText('All 27 parts, with sizes').click();
+    await page.getByText('All 28 parts, with sizes').click();
     await expect(page.getByText('P-72').filter({ visible: true }).first()).toBeVisible();
     await expectAccessible(page, 'kit');
     await page.getByRole('button', { name: 'Put in basket' }).click();

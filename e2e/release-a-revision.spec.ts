@@ -81,6 +81,7 @@ test('a maker uploads a new revision, sees every part measured and compared, and
     const row = page.getByRole('row').filter({ hasText: code });
     await expect(row).toContainText('changed');
     await expect(row).toContainText('+1.50 mm');
+    await expect(row).toContainText('up to 1.50 mm, at the top');
     await expect(row).toContainText('watertight');
     await row.getByRole('combobox').selectOption({ label: 'reprint needed' });
     const reason = row.getByRole('textbox');
@@ -91,6 +92,7 @@ test('a maker uploads a new revision, sees every part measured and compared, and
 
   await test.step('writes change notes with the usual headings', async () => {
     await page.getByRole('link', { name: 'Change notes' }).click();
+    await expect(page.getByRole('img', { name: new RegExp(`${code}.*Marked is where`) })).toBeVisible();
     const notes = page.getByRole('textbox', { name: 'Change notes' });
     await notes.fill(`## Changed\n\n- [[${code}]] is 1.5 mm thicker: the old one rattled on its felt.\n`);
     await page.getByRole('button', { name: 'Save the change notes' }).click();

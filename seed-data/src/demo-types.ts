@@ -4,6 +4,8 @@ import type { Solid } from './geometry/solid.js';
 export type FilamentColour = 'orange' | 'teal' | 'violet' | 'ochre' | 'blue' | 'rose' | 'moss';
 export type OrientationRule = 'as-exported' | 'may-turn' | 'may-lie';
 export type LicenceKind = 'personal' | 'small-run' | 'classroom';
+/** A gap smaller or larger than drawn: such a part fits tighter or looser. */
+export type DemoClearance = 'minus' | 'plus';
 export type DemoRole = 'owner' | 'maker' | 'helper' | 'bookkeeper' | 'buyer';
 
 /** A voice with the note it is meant to give; `widthMm` is for drawing a bar or tine, it changes no pitch. */
@@ -30,8 +32,12 @@ export interface DemoPart {
   /** Only where it differs from the revision's. */
   printSpec: DemoPrintSpec | null;
   voice: DemoVoice | null;
+  /** Printed first: it tells which clearance fits a printer. */
+  isGauge: boolean;
   fileName: string;
   fileFormat: 'stl' | '3mf';
+  /** The part in other clearances; its own file is the zero. */
+  variants: { clearance: DemoClearance; fileName: string }[];
 }
 
 export interface DemoHardware {
@@ -103,6 +109,16 @@ export interface DemoPerson {
   isVerified: boolean;
 }
 
+/** A printer of a buyer; the first one of each is the main one. */
+export interface DemoPrinter {
+  ownerEmail: string;
+  name: string;
+  bed: { xMm: number; yMm: number; zMm: number };
+  nozzleMm: number;
+  materials: { material: string; pricePerKgMinor: number | null }[];
+  clearance: 'minus' | 'zero' | 'plus' | null;
+}
+
 export interface DemoPurchase {
   buyerEmail: string;
   lines: { kitSlug: string; licence: LicenceKind }[];
@@ -130,6 +146,7 @@ export interface DemoWorkshop {
     email: string;
   };
   people: DemoPerson[];
+  printers: DemoPrinter[];
   kits: DemoKit[];
   coupons: DemoCoupon[];
   purchases: DemoPurchase[];
@@ -139,6 +156,7 @@ export interface DemoWorkshop {
 export interface PlannedPart {
   part: DemoPart;
   shape: () => Solid;
+  variantShapes: Partial<Record<DemoClearance, () => Solid>>;
 }
 
 export interface KitPlan {

@@ -5,6 +5,7 @@ import {
   licenceBody,
   markBody,
   partBody,
+  printerCardFields,
   revisionBody,
   roles,
 } from '@windchest/contracts';
@@ -42,8 +43,11 @@ describe.each(revisions.map((one) => [one.title, one] as const))('%s', (_title, 
   it('has codes and file names of its own for every part', () => {
     expect(new Set(revision.parts.map(({ code }) => code)).size).toBe(revision.parts.length);
     expect(new Set(revision.parts.map(({ fileName }) => fileName)).size).toBe(revision.parts.length);
-    for (const { code, fileName } of revision.parts)
+    for (const { code, fileName, variants } of revision.parts) {
       expect(fileName).toMatch(new RegExp(`^${code}-[a-z0-9-]+\\.(stl|3mf)$`));
+      for (const variant of variants)
+        expect(variant.fileName).toBe(fileName.replace(/(\.[a-z0-9]+)$/, `-(${variant.clearance})$1`));
+    }
   });
 
   it('links to parts that exist, in steps', () => {
@@ -95,6 +99,10 @@ describe('the demo workshop', () => {
     ]);
     expect(pricesOf('dunlin')).toEqual([['personal', 0]]);
     expect(pricesOf('godwit')).toEqual([['personal', 1400]]);
+    expect(pricesOf('turnstone')).toEqual([
+      ['personal', 1600],
+      ['classroom', 4800],
+    ]);
   });
 
   it('gives coupons and purchases for kits, people and coupons it has', () => {
@@ -108,6 +116,14 @@ describe('the demo workshop', () => {
       for (const { kitSlug, licence } of lines) {
         expect(pricesOf(kitSlug)?.map(([kind]) => kind)).toContain(licence);
       }
+    }
+  });
+
+  it('has printers of its people, as their accounts take them', () => {
+    const emails = demoWorkshop.people.map(({ email }) => email);
+    for (const { ownerEmail, ...printer } of demoWorkshop.printers) {
+      expect(emails).toContain(ownerEmail);
+      expect(printerCardFields.parse(printer)).toEqual(printer);
     }
   });
 

@@ -3,9 +3,10 @@ import { curlew } from './kits/curlew.js';
 import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
-import { people, purchases } from './people.js';
+import { turnstone } from './kits/turnstone.js';
+import { people, printers, purchases } from './people.js';
 
-export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit];
+export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
 
 /** A small workshop that exists nowhere, with all it needs to open its shop. */
 export const demoWorkshop: DemoWorkshop = {
@@ -21,6 +22,7 @@ export const demoWorkshop: DemoWorkshop = {
     email: 'hello@saltmarsh.example',
   },
   people,
+  printers,
   kits: kitPlans.map(({ kit }) => kit),
   coupons: [
     {

@@ -1,8 +1,8 @@
-import type { DemoKit, DemoRevision } from './demo-types.js';
+import type { DemoKit, DemoPart, DemoRevision } from './demo-types.js';
 import { kitPlans } from './demo-workshop.js';
 import { binaryStl } from './formats/binary-stl.js';
 import { threeMf } from './formats/three-mf.js';
-import { edgeFaults, volumeMm3 } from './geometry/solid.js';
+import { edgeFaults, type Solid, volumeMm3 } from './geometry/solid.js';
 
 export interface GeneratedFile {
   fileName: string;
@@ -10,7 +10,8 @@ export interface GeneratedFile {
 }
 
 /**
- * Draws the parts of one revision of a demo kit, in the order of its parts: the same bytes every time.
+ * Draws the parts of one revision of a demo kit, in the order of its parts, each followed by its other
+ * clearances: the same bytes every time.
  *
  * @throws Error naming the kit or revision that the demo workshop does not have, or a part that did not come out as a closed solid
  */
@@ -20,13 +21,19 @@ export function generateFiles(
 ): GeneratedFile[] {
   const planned = kitPlans.find((plan) => plan.kit.slug === kit.slug)?.planned.get(revision.label);
   if (!planned) throw new Error(`The demo workshop has no ${kit.slug} ${revision.label}.`);
-  return planned.map(({ part, shape }) => {
-    const solid = shape();
-    if (edgeFaults(solid) > 0 || volumeMm3(solid) <= 0) {
-      throw new Error(`${part.code} ${part.name} is not a closed solid; mend its drawing.`);
-    }
-    const title = `${part.code} ${part.name}, Saltmarsh Sound Works`;
-    const bytes = part.fileFormat === '3mf' ? threeMf(solid, title) : binaryStl(solid, title);
-    return { fileName: part.fileName, bytes };
-  });
+  return planned.flatMap(({ part, shape, variantShapes }) => [
+    drawFile(part, part.fileName, shape),
+    ...part.variants.map(({ clearance, fileName }) =>
+      drawFile(part, fileName, variantShapes[clearance] ?? shape),
+    ),
+  ]);
+}
+
+function drawFile(part: DemoPart, fileName: string, shape: () => Solid): GeneratedFile {
+  const solid = shape();
+  if (edgeFaults(solid) > 0 || volumeMm3(solid) <= 0) {
+    throw new Error(`${fileName} is not a closed solid; mend its drawing.`);
+  }
+  const title = `${part.code} ${part.name}, Saltmarsh Sound Works`;
+  return { fileName, bytes: part.fileFormat === '3mf' ? threeMf(solid, title) : binaryStl(solid, title) };
 }

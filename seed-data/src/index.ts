@@ -1,5 +1,6 @@
 export { demoWorkshop } from './demo-workshop.js';
 export type {
+  DemoClearance,
   DemoCoupon,
   DemoHardware,
   DemoKit,
@@ -7,6 +8,7 @@ export type {
   DemoMark,
   DemoPart,
   DemoPerson,
+  DemoPrinter,
   DemoPrintSpec,
   DemoPurchase,
   DemoRevision,

@@ -38,6 +38,9 @@ const main = async (): Promise<void> => {
     say(`${kit.name} ${first?.label} is released`);
   }
 
+  for (const { ownerEmail, ...printer } of demoWorkshop.printers)
+    await (await signIn(ownerEmail)).post('/account/printers', { ...printer, isMain: false });
+
   for (const { kitSlugs, ...coupon } of demoWorkshop.coupons)
     await maker.post('/workshop/coupons', {
       ...coupon,

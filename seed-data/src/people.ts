@@ -1,4 +1,4 @@
-import type { DemoPerson, DemoPurchase } from './demo-types.js';
+import type { DemoPerson, DemoPrinter, DemoPurchase } from './demo-types.js';
 
 export const people: DemoPerson[] = [
   {
@@ -38,6 +38,40 @@ export const people: DemoPerson[] = [
     isVerified: true,
   },
   { role: 'buyer', name: 'Rhea Moss', email: 'rhea.moss@mail.example', countryCode: 'FR', isVerified: false },
+];
+
+/** Pia prints on a middling and on a small machine; Jonas on one that is tall and narrow. */
+export const printers: DemoPrinter[] = [
+  {
+    ownerEmail: 'pia.lund@mail.example',
+    name: 'By the window',
+    bed: { xMm: 220, yMm: 220, zMm: 250 },
+    nozzleMm: 0.4,
+    materials: [
+      { material: 'PETG', pricePerKgMinor: 2290 },
+      { material: 'PLA', pricePerKgMinor: 1850 },
+    ],
+    clearance: 'zero',
+  },
+  {
+    ownerEmail: 'pia.lund@mail.example',
+    name: 'The small one',
+    bed: { xMm: 120, yMm: 120, zMm: 120 },
+    nozzleMm: 0.4,
+    materials: [{ material: 'PLA', pricePerKgMinor: 1850 }],
+    clearance: null,
+  },
+  {
+    ownerEmail: 'jonas.abara@mail.example',
+    name: 'Cellar',
+    bed: { xMm: 180, yMm: 180, zMm: 400 },
+    nozzleMm: 0.6,
+    materials: [
+      { material: 'PETG', pricePerKgMinor: 2600 },
+      { material: 'Reed-filled', pricePerKgMinor: 3900 },
+    ],
+    clearance: 'plus',
+  },
 ];
 
 /**

@@ -1,11 +1,20 @@
 import { z } from 'zod';
+import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
 import { differenceKind } from './workshop-revisions.js';
 import { email, filamentColour, id, moment, pageOf, secret, sha256, slug, slugParams } from './values.js';
+import { rankVoice, room } from './voices.js';
 
-/** What may be fetched: the whole bundle of a revision, or one document of it. */
-export const grantBody = z.object({ kitSlug: slug, revisionId: id, file: sha256.optional() });
+/**
+ * What may be fetched: the whole bundle of a revision, its bundle of one clearance, or one document of it.
+ */
+export const grantBody = z.object({
+  kitSlug: slug,
+  revisionId: id,
+  file: sha256.optional(),
+  clearance: clearance.optional(),
+});
 export const grant = z.object({
   url: z.string(),
   expiresAt: moment,
@@ -20,6 +29,8 @@ export const shelfRevision = z.object({
   releasedAt: moment,
   bundleBytes: z.int(),
   bundleSha256: sha256,
+  /** Of one clearance each, tightest first; none where no part comes in several. */
+  bundles: z.array(z.object({ clearance, bytes: z.int(), sha256 })),
   changeNotes: z.string(),
   isWithdrawn: z.boolean(),
 });
@@ -43,6 +54,8 @@ export const shelfPart = z.object({
   code: z.string(),
   name: z.string(),
   quantity: z.int(),
+  /** Which one is compared; null where the part comes in one, or nothing is known of the reader's choice. */
+  clearance: clearance.nullable(),
   difference: differenceKind,
   mark: z.enum(['reprint needed', 'reprint if it troubles you']).nullable(),
   reason: z.string(),
@@ -51,11 +64,22 @@ export const shelfPart = z.object({
 });
 export const shelfKit = shelfItem.extend({
   orderId: id.nullable(),
+  /** Of the newest revision. */
+  clearance: z.object({
+    hasVariants: z.boolean(),
+    gauge: z.object({ code: z.string(), name: z.string() }).nullable(),
+    /** What this person prints: said for this kit, else the habit of their printer. */
+    chosen: clearance.nullable(),
+  }),
   revisions: z.array(shelfRevision),
   parts: z.array(shelfPart),
   documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
   licenceTerms: z.string(),
   cautions: z.string(),
+  /** What the tuner listens for: the voices of the revision held, of the newest where none is. */
+  rank: z.array(rankVoice),
+  room,
+  declaredCents: z.number(),
   downloads: z.array(
     z.object({ at: moment, revision: z.string(), fileName: z.string(), isComplete: z.boolean() }),
   ),
@@ -109,6 +133,13 @@ export const deliveryEndpoints = {
     summary: 'Say which revision one has printed',
     params: slugParams,
     body: z.object({ revisionId: id }),
+    response: shelfKit,
+  }),
+  'PUT /shelf/:slug/clearance': endpoint({
+    access: 'signed-in',
+    summary: 'Say which clearance one prints of a kit; bundle and reprint list then keep to it',
+    params: slugParams,
+    body: z.object({ clearance: clearance.nullable() }),
     response: shelfKit,
   }),
   'POST /shelf/grants': endpoint({

@@ -6,6 +6,7 @@ import { kitEndpoints } from './kits.js';
 import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
 import { refundEndpoints } from './refunds.js';
+import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
@@ -14,6 +15,7 @@ import { workshopSalesEndpoints } from './workshop-sales.js';
 export const endpoints = {
   ...sessionEndpoints,
   ...kitEndpoints,
+  ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
   ...refundEndpoints,

@@ -1,6 +1,7 @@
 import { z } from 'zod';
+import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
-import { filamentColour, id, moment, money, pageOf, pageQuery, slug, slugParams } from './values.js';
+import { filamentColour, id, moment, money, pageOf, pageQuery, sha256, slug, slugParams } from './values.js';
 import { rankVoice, room } from './voices.js';
 
 export const licenceKinds = ['personal', 'small-run', 'classroom'] as const;
@@ -48,6 +49,14 @@ export const drawing = z.object({
 });
 export const drawings = z.object({ front: drawing, side: drawing, top: drawing });
 
+/**
+ * A coarse likeness of a part to turn about, never the printable mesh: how large it is, and the hash that its
+ * address may name so that browsers keep it. Null where there is none.
+ */
+export const previewFields = { previewBytes: z.int().nullable(), previewSha256: sha256.nullable() };
+/** With the preview's hash in `v` the answer may be kept for good. */
+export const previewQuery = z.object({ v: sha256.optional() });
+
 export const licence = z.object({
   id,
   kind: z.enum(licenceKinds),
@@ -89,7 +98,10 @@ export const kitCard = z.object({
   releasedAt: moment,
   compass: z.string(),
   rank: z.array(rankVoice),
+  /** Height of the tallest part as it stands on the bed. */
   tallestPartMm: z.number(),
+  /** The longest side of any part. */
+  longestPartMm: z.number(),
   partCount: z.int(),
   printEstimate: printEstimate.nullable(),
   /** Of the licence for one's own prints, or the cheapest offered. */
@@ -121,10 +133,21 @@ export const kitPart = z.object({
   volumeMm3: z.number(),
   areaMm2: z.number(),
   printSpec: printSpec.nullable(),
+  /** Printed first: it tells which clearance fits a printer. */
+  isGauge: z.boolean(),
+  /** Those the part comes in, tightest first; none where there is only the one file. */
+  clearances: z.array(clearance),
   /** Shown on the sheet: the side that tells most about the part. */
   drawing: drawing.nullable(),
+  ...previewFields,
 });
 export type KitPart = z.output<typeof kitPart>;
+
+const fitsMm = (most: number) => z.coerce.number().positive().max(most).optional();
+/** The bed of a printer, in mm: all three figures or none. */
+const fitsQuery = { fitsX: fitsMm(2000), fitsY: fitsMm(2000), fitsZ: fitsMm(3000) };
+const isWholeBed = ({ fitsX, fitsY, fitsZ }: { fitsX?: number; fitsY?: number; fitsZ?: number }): boolean =>
+  new Set([fitsX, fitsY, fitsZ].map((one) => one === undefined)).size === 1;
 
 export const kitEndpoints = {
   'GET /offers': endpoint({
@@ -134,8 +157,10 @@ export const kitEndpoints = {
   }),
   'GET /kits': endpoint({
     access: 'public',
-    summary: 'Kits on sale, newest first',
-    query: pageQuery.extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest') }),
+    summary: 'Kits on sale, newest first; with fitsX, fitsY, fitsZ only those that print on such a bed',
+    query: pageQuery
+      .extend({ sort: z.enum(['newest', 'name', 'price', 'size']).default('newest'), ...fitsQuery })
+      .refine(isWholeBed, { path: ['fitsX'], message: 'Give width, depth and height of the bed.' }),
     response: pageOf(kitCard),
   }),
   'GET /kits/:slug': endpoint({
@@ -149,5 +174,12 @@ export const kitEndpoints = {
     summary: 'The parts of a kit’s newest revision, drawn',
     params: slugParams,
     response: z.array(kitPart),
+  }),
+  'GET /kits/:slug/parts/:code/preview': endpoint({
+    access: 'public',
+    summary: 'A part of a kit’s newest revision as a coarse model to turn about (GLB), not to print',
+    params: slugParams.extend({ code: z.string().min(1).max(20) }),
+    query: previewQuery,
+    response: 'stream',
   }),
 };

@@ -1,6 +1,7 @@
 import { z } from 'zod';
+import { variantClearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
-import { licence, licenceKinds, revisionState } from './kits.js';
+import { licence, licenceKinds, previewQuery, revisionState } from './kits.js';
 import {
   filamentColour,
   id,
@@ -24,6 +25,9 @@ import {
   revisionBody,
   fileOffer,
   offerAnswer,
+  gateNames,
+  waiverBody,
+  variantBody,
 } from './workshop-revisions.js';
 
 export const revisionSummary = z.object({
@@ -81,6 +85,8 @@ export const licenceBody = z.object({
 
 const inKit = idParams('kitId');
 const inRevision = idParams('revisionId');
+const atGate = inRevision.extend({ gate: z.enum(gateNames) });
+const ofVariant = idParams('revisionId', 'partId').extend({ clearance: variantClearance });
 
 export const workshopKitEndpoints = {
   'GET /workshop/kits': endpoint({
@@ -187,9 +193,29 @@ export const workshopKitEndpoints = {
     response: null,
     status: 204,
   }),
+  'GET /workshop/revisions/:revisionId/parts/:partId/preview': endpoint({
+    access: 'kits:read',
+    summary: 'A part of any revision as a coarse model to turn about (GLB)',
+    params: idParams('revisionId', 'partId'),
+    query: previewQuery,
+    response: 'stream',
+  }),
+  'PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
+    access: 'revisions:write',
+    summary: 'Give a part of a draft another clearance: a mesh of the draft becomes its file',
+    params: ofVariant,
+    body: variantBody,
+    response: part,
+  }),
+  'DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
+    access: 'revisions:write',
+    summary: 'Take a clearance of a part, with its file, out of a draft',
+    params: ofVariant,
+    response: part,
+  }),
   'GET /workshop/revisions/:revisionId/comparison': endpoint({
     access: 'kits:read',
-    summary: 'Part by part against an earlier revision',
+    summary: 'Part by part against an earlier revision; shapes not compared yet are compared next',
     params: inRevision,
     query: z.object({ with: id.optional() }),
     response: comparison,
@@ -200,6 +226,19 @@ export const workshopKitEndpoints = {
     params: inRevision,
     body: markBody,
     response: comparison,
+  }),
+  'PUT /workshop/revisions/:revisionId/waivers/:gate': endpoint({
+    access: 'revisions:release',
+    summary: 'Waive an open gate of a draft, with a reason',
+    params: atGate,
+    body: waiverBody,
+    response: revisionDetail,
+  }),
+  'DELETE /workshop/revisions/:revisionId/waivers/:gate': endpoint({
+    access: 'revisions:release',
+    summary: 'Take a waiver back',
+    params: atGate,
+    response: revisionDetail,
   }),
   'POST /workshop/revisions/:revisionId/release': endpoint({
     access: 'revisions:release',

@@ -1,10 +1,12 @@
 /** Revisions as the workshop sees them: files, parts, comparison, gates, release. */
 import { z } from 'zod';
+import { clearance, variantClearance } from './clearances.js';
 import {
   buildVolume,
   drawings,
   hardwareList,
   orientations,
+  previewFields,
   printSpec,
   revisionState,
   sizeMm,
@@ -54,6 +56,8 @@ export const revisionFile = z.object({
   /** Why a mesh was refused, in a sentence that names the file and the fault. */
   fault: z.string().nullable(),
   partId: id.nullable(),
+  /** Which clearance of its part a mesh is; null for other files. */
+  clearance: clearance.nullable(),
   addedAt: moment,
 });
 export type RevisionFile = z.output<typeof revisionFile>;
@@ -66,8 +70,15 @@ export const part = z.object({
   orientation: z.enum(orientations),
   printSpec: printSpec.nullable(),
   voice: voice.nullable(),
+  /** Tells a buyer which clearance fits their printer. */
+  isGauge: z.boolean(),
   file: revisionFile.nullable(),
   drawings: drawings.nullable(),
+  ...previewFields,
+  /** The part in other clearances, tightest first; `file` is the zero. */
+  variants: z.array(
+    z.object({ clearance: variantClearance, file: revisionFile, drawings: drawings.nullable() }),
+  ),
 });
 export type Part = z.output<typeof part>;
 
@@ -81,10 +92,32 @@ export const partBody = z.object({
   orientation: z.enum(orientations),
   printSpec: printSpec.nullable(),
   voice: voice.nullable(),
+  isGauge: z.boolean().default(false),
 });
+export const variantBody = z.object({ fileId: id });
 
 export const differenceKind = z.enum(['same', 're-exported', 'changed', 'new', 'dropped']);
 export const reprintMark = z.enum(['reprint needed', 'reprint if it troubles you']);
+/** Where a part lies in its file. */
+export const boxMm = z.object({ min: sizeMm, max: sizeMm });
+/** Surface against surface: how far a changed part lies from what it was, and where most. */
+export const deviation = z.object({
+  state: z.enum(['waiting', 'compared', 'failed']),
+  largestMm: z.number().nullable(),
+  /** In the coordinates of the file. */
+  placeMm: sizeMm.nullable(),
+  /** `before`: the place lies on the earlier shape, the present one is far from it there. */
+  placeIsOn: z.enum(['before', 'after']).nullable(),
+  /** How the part as a whole moved in its file; null where it has another shape. */
+  movedMm: sizeMm.nullable(),
+  /** Which clearance this is of, where the part comes in several. */
+  clearance: clearance.nullable(),
+  boxMm,
+  earlierBoxMm: boxMm,
+  /** A sentence for a maker: "up to 0.42 mm, at the top (12.0, 3.5, 41.0 mm)", or why nobody knows. */
+  where: z.string(),
+});
+export type Deviation = z.output<typeof deviation>;
 export const comparisonRow = z.object({
   code: z.string(),
   name: z.string(),
@@ -95,8 +128,12 @@ export const comparisonRow = z.object({
   sizeChangeMm: sizeMm.nullable(),
   volumeChangePercent: z.number().nullable(),
   areaChangePercent: z.number().nullable(),
+  /** Null where there are no two shapes to compare. */
+  deviation: deviation.nullable(),
   mark: reprintMark.nullable(),
   reason: z.string(),
+  /** Clearance by clearance, the zero too, where the part comes in several; `difference` is the strongest of them. */
+  variants: z.array(z.object({ clearance, difference: differenceKind, whatDiffers: z.string() })),
 });
 export const comparison = z.object({
   with: z.object({ id, label: z.string() }).nullable(),
@@ -109,25 +146,37 @@ export const markBody = z.object({
   reason: z.string().trim().max(300),
 });
 
+export const gateNames = [
+  'parts-measured',
+  'watertight',
+  'fits-build-volume',
+  'voices-in-tune',
+  'assembly-notes',
+  'change-notes',
+  'changes-marked',
+  'cautions',
+  'licence-and-price',
+  'proof-round',
+] as const;
 export const gate = z.object({
-  name: z.enum([
-    'parts-measured',
-    'watertight',
-    'fits-build-volume',
-    'voices-in-tune',
-    'assembly-notes',
-    'change-notes',
-    'changes-marked',
-    'cautions',
-    'licence-and-price',
-    'proof-round',
-  ]),
+  name: z.enum(gateNames),
   state: z.enum(['passed', 'open', 'waived', 'not-needed']),
   reason: z.string(),
   mayBeWaived: z.boolean(),
-  waiver: z.object({ by: z.string(), at: moment, reason: z.string() }).nullable(),
+  /**
+   * It counts while the gate says what it said when it was waived (`against`): the state is then `waived`.
+   * With `open` it was written against something else, with `passed` or `not-needed` it has become needless.
+   */
+  waiver: z.object({ by: z.string(), at: moment, reason: z.string(), against: z.string() }).nullable(),
 });
 export type Gate = z.output<typeof gate>;
+export const waiverBody = z.object({
+  reason: z
+    .string()
+    .trim()
+    .min(10, 'Say in at least 10 characters why it may go out like this.')
+    .max(500, 'Say it in 500 characters or fewer.'),
+});
 
 export const releaseProgress = z.object({
   state: z.enum(['not-started', 'waiting', 'building', 'failed', 'done']),
@@ -155,7 +204,10 @@ export const revisionDetail = z.object({
   documents: z.array(revisionFile),
   gates: z.array(gate),
   release: releaseProgress,
+  /** Holds every clearance. */
   bundle: z.object({ sha256, bytes: z.int() }).nullable(),
+  /** One for each clearance, where parts come in several. */
+  bundles: z.array(z.object({ clearance, sha256, bytes: z.int() })),
   totalBytes: z.int(),
   limits: z.object({ fileBytes: z.int(), revisionBytes: z.int() }),
 });

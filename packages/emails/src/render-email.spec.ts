@@ -178,7 +178,7 @@ describe('the mail of a refund', () => {
     expect(text).toContain('your right to the files of Curlew ends. It is no longer on your shelf.');
     expect(text).toContain('Reed Bunting stays on your shelf.');
     expect(text).toContain('Credit note: 2026-C00012');
-    expect(text).toContain('The coupon FIRSTWIND that lowered it stays used.');
+    expect(text).toContain('The coupon FIRSTWIND that lowered the price stays used.');
   });
 
   it('says neither where staff keep everything as it was', () => {

@@ -133,8 +133,7 @@ export const texts = {
     lineDetail: (licence: string, endsRight: boolean): string =>
       endsRight ? `${licence}, right to the files ends` : licence,
     total: 'Goes back',
-    couponIsSpent: (code: string): string =>
-      `What you paid goes back, to the cent. The coupon ${code} that lowered it stays used.`,
+    couponIsSpent: (code: string): string => `The coupon ${code} that lowered the price stays used.`,
     ended: (kits: readonly string[]): string =>
       kits.length === 1
         ? `With this refund your right to the files of ${listOf(kits)} ends. It is no longer on your shelf.`

@@ -3,6 +3,7 @@ import {
   filamentCost,
   filamentOf,
   gramsPerMetre,
+  materialNamed,
   materials,
   metresPerKilogram,
   PlatesError,
@@ -32,6 +33,16 @@ describe('filament', () => {
     expect(filamentCost(3.57, { pricePerKg: 25 })).toBeCloseTo(0.08925, 10);
     expect(filamentCost(3.57, { pricePerKg: 0 })).toBe(0);
     expect(filamentCost(3.57, {})).toBeNull();
+  });
+
+  it('is known by the name on its label, however that is written, and by no other word', () => {
+    expect(materialNamed(' petg ')).toBe(materials.PETG);
+    expect(['PLA silk', '', 'constructor', '__proto__'].map(materialNamed)).toEqual([
+      undefined,
+      undefined,
+      undefined,
+      undefined,
+    ]);
   });
 
   it('comes in whole spools', () => {

@@ -21,4 +21,5 @@ export {
 export { profileOf } from './print-profile.js';
 export { estimateFromProfile, estimatePrint } from './estimate-print.js';
 export { filamentCost, filamentOf, gramsPerMetre, metresPerKilogram, spoolsFor } from './filament.js';
-export { materials, type MaterialDensity, type MaterialName } from './materials.js';
+export { materialNamed, materials, type MaterialDensity, type MaterialName } from './materials.js';
+export { usual } from './usual.js';

@@ -63,3 +63,9 @@ export const materials: Readonly<Record<MaterialName, MaterialDensity>> = {
     note: 'A family: from 1.01 (PA12) to over 1.2 (PA6).',
   },
 };
+
+/** The material a label names, whatever its letters' size; undefined where nobody knows its density. */
+export function materialNamed(label: string): MaterialDensity | undefined {
+  const name = label.trim().toUpperCase();
+  return Object.hasOwn(materials, name) ? materials[name as MaterialName] : undefined;
+}

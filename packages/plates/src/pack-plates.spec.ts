@@ -188,6 +188,19 @@ describe('packing plates', () => {
     expectSound(packed, [bar], bed, 3, 2);
   });
 
+  it('tells how far it is, piece by piece, and ends at the whole', () => {
+    const told: number[] = [];
+    const parts: PartToPack[] = [
+      { code: 'A-1', quantity: 3, sizeMm: [60, 50, 5], heightMm: 5, orientation: 'may-turn' },
+      { code: 'B-1', quantity: 2, sizeMm: [120, 10, 5], heightMm: 5, orientation: 'may-turn' },
+    ];
+    packPlates(parts, bed, { gapMm: 2, marginMm: 5, onProgress: (done) => told.push(done) });
+    expect(told.length % 5).toBe(0);
+    expect(told).toEqual(told.toSorted((a, b) => a - b));
+    expect(told.at(0)).toBeGreaterThan(0);
+    expect(told.at(-1)).toBe(1);
+  });
+
   it('packs nothing into no plates', () => {
     expect(packPlates([], bed, { gapMm: 2, marginMm: 5 })).toEqual({ plates: [], tooBig: [] });
   });

@@ -20,6 +20,8 @@ export interface PackingOptions {
   readonly gapMm: number;
   /** Along the edges of the bed. */
   readonly marginMm: number;
+  /** Told how much of the work is done, as a share from 0 to 1, while it goes on. */
+  readonly onProgress?: (done: number) => void;
 }
 
 export interface Placement {
@@ -67,7 +69,7 @@ const PATIENT_PIECES = 80;
 export function packPlates(
   parts: readonly PartToPack[],
   bed: Bed,
-  { gapMm, marginMm }: PackingOptions,
+  { gapMm, marginMm, onProgress }: PackingOptions,
 ): PackedPlates {
   requireNotNegative('The gap in mm', gapMm);
   const room = roomOn(bed, marginMm);
@@ -94,7 +96,7 @@ export function packPlates(
     };
     pieces.push(...Array.from({ length: part.quantity }, () => piece));
   }
-  const fillings = bestFillings(pieces, room);
+  const fillings = bestFillings(pieces, room, onProgress);
   return { plates: fillings.map((filling) => plateOf(filling, marginMm)), tooBig };
 }
 
@@ -105,7 +107,11 @@ interface Filling {
   readonly full: Set<string>;
 }
 
-function bestFillings(pieces: readonly Piece[], room: { widthMm: number; depthMm: number }): Filling[] {
+function bestFillings(
+  pieces: readonly Piece[],
+  room: { widthMm: number; depthMm: number },
+  onProgress?: (done: number) => void,
+): Filling[] {
   const byArea = pieces.toSorted((a, b) => b.areaMm2 - a.areaMm2 || compareCodes(a, b));
   const byLength = pieces.toSorted((a, b) => b.longestMm - a.longestMm || compareCodes(a, b));
   const attempts: [readonly Piece[], FillOrder][] = [
@@ -117,8 +123,11 @@ function bestFillings(pieces: readonly Piece[], room: { widthMm: number; depthMm
   let best: Filling[] | undefined;
   const isOneOrder = byArea.every((piece, i) => piece === byLength[i]);
   const most = pieces.length > PATIENT_PIECES ? 1 : isOneOrder ? 2 : attempts.length;
+  const total = most * pieces.length;
+  let laid = 0;
+  const onPiece = (): void => onProgress?.((laid += 1) / total);
   for (const [order, fillOrder] of attempts.slice(0, most)) {
-    const fillings = fill(order, room, fillOrder);
+    const fillings = fill(order, room, fillOrder, onPiece);
     if (best === undefined || isBetter(fillings, best)) best = fillings;
   }
   return best ?? [];
@@ -128,6 +137,7 @@ function fill(
   pieces: readonly Piece[],
   { widthMm, depthMm }: { widthMm: number; depthMm: number },
   order: FillOrder,
+  onPiece: () => void,
 ): Filling[] {
   const fillings: Filling[] = [];
   for (const { code, poses } of pieces) {
@@ -137,13 +147,13 @@ function fill(
       full.add(code);
       return false;
     });
-    if (placedOn !== undefined) {
-      placedOn.codes.push(code);
-      continue;
+    if (placedOn !== undefined) placedOn.codes.push(code);
+    else {
+      const plate = new PlateFilling(widthMm, depthMm, order);
+      plate.place(poses);
+      fillings.push({ plate, codes: [code], full: new Set() });
     }
-    const plate = new PlateFilling(widthMm, depthMm, order);
-    plate.place(poses);
-    fillings.push({ plate, codes: [code], full: new Set() });
+    onPiece();
   }
   return fillings;
 }

@@ -46,7 +46,12 @@ export const curlewCautions = cautions({
   ],
 });
 
-export const curlewNotes = `## 1. Print
+export const curlewGaugeNotes = `Find out first which tongues your printer needs. Print the gauge [[G-01]] and push its three lugs down into a slot of [[B-01]], one after the other. One dimple marks the clearance −, two mark 0, three mark +. Take the one that goes in under your thumb and does not rattle, and print [[J-01]] in it.
+
+`;
+
+/** @param gauge what stands before the tongues go in */
+export const curlewNotes = (gauge: string): string => `## 1. Print
 
 Print the eighteen pipes [[P-72]] to [[P-89]] upright, foot down, as they come. Two perimeters fill the wall. Print the blocks [[B-01]], [[B-02]] and [[B-03]] with their sockets upright. None of the parts needs supports or a brim on a clean bed.
 
@@ -62,7 +67,7 @@ Roll an elastic ring up each pipe from below until it presses against the block.
 
 ## 4. Lock the row
 
-Stand the blocks side by side on the table. Push one [[J-01]] down between [[B-01]] and [[B-02]], the other between [[B-02]] and [[B-03]], bevelled end first. Thumb pressure is enough; if it is not, clean the slots. An M3 screw turned a little into the hole on top pulls a tongue out again.
+${gauge}Stand the blocks side by side on the table. Push one [[J-01]] down between [[B-01]] and [[B-02]], the other between [[B-02]] and [[B-03]], bevelled end first. Thumb pressure is enough; if it is not, clean the slots. An M3 screw turned a little into the hole on top pulls a tongue out again.
 
 Push the two [[J-02]] into the free slots at either end.
 
@@ -89,6 +94,10 @@ export const curlewSecondChanges = `### Fixed
 ### Changed
 
 - Lip rail [[R-01]] is 1.5 mm taller, 1 mm under the mouths. On the first one the lip sank between the pipes and the top octave hissed.
+
+### Added
+
+- Locking tongue [[J-01]] also comes 0.1 mm tighter (−) and 0.1 mm looser (+) on each cheek. The gauge [[G-01]] tells which one your printer needs.
 
 All other parts are the same files as in Mk 1.0.
 `;

@@ -1,12 +1,14 @@
 import { lengthForMm, midiToNote, noteLabel } from '@windchest/voicing';
 import type { PlannedPart } from '../demo-types.js';
 import { curlewBlock, endTongue, lockingTongue, pipesPerBlock } from '../shapes/curlew-block.js';
+import { tongueGauge } from '../shapes/curlew-gauge.js';
 import { curlewPipe, curlewSizes, tuningPlug } from '../shapes/curlew-pipe.js';
 import { lipRail } from '../shapes/curlew-rail.js';
 import {
   curlewCautions,
   curlewDescription,
   curlewFirstChanges,
+  curlewGaugeNotes,
   curlewHardware,
   curlewNotes,
   curlewSecondChanges,
@@ -46,9 +48,19 @@ const blocks = [
   ),
 );
 
-const tongues = (cheekGapMm: number) => [
-  plannedPart({ code: 'J-01', name: 'Locking tongue', quantity: 2, orientation: 'may-turn' }, () =>
-    lockingTongue(cheekGapMm),
+/** What one clearance of the locking tongue has more or less of a gap than the next, on each cheek. */
+const clearanceStepMm = 0.1;
+
+const tongues = (cheekGapMm: number, hasClearances: boolean) => [
+  plannedPart(
+    { code: 'J-01', name: 'Locking tongue', quantity: 2, orientation: 'may-turn' },
+    () => lockingTongue(cheekGapMm),
+    hasClearances
+      ? {
+          minus: () => lockingTongue(cheekGapMm - clearanceStepMm),
+          plus: () => lockingTongue(cheekGapMm + clearanceStepMm),
+        }
+      : {},
   ),
   plannedPart({ code: 'J-02', name: 'End tongue', quantity: 2, orientation: 'may-lie' }, endTongue),
 ];
@@ -69,12 +81,24 @@ const plugs = [
   ),
 );
 
-const parts = ({ cheekGapMm, railMm }: { cheekGapMm: number; railMm: number }): PlannedPart[] => [
+const gauge = (cheekGapMm: number) =>
+  plannedPart({ code: 'G-01', name: 'Tongue gauge', orientation: 'may-turn', isGauge: true }, () =>
+    tongueGauge([cheekGapMm - clearanceStepMm, cheekGapMm, cheekGapMm + clearanceStepMm]),
+  );
+
+interface Drawn {
+  cheekGapMm: number;
+  railMm: number;
+  hasClearances: boolean;
+}
+
+const parts = ({ cheekGapMm, railMm, hasClearances }: Drawn): PlannedPart[] => [
   ...pipes,
   ...blocks,
-  ...tongues(cheekGapMm),
+  ...tongues(cheekGapMm, hasClearances),
   rail(railMm),
   ...plugs,
+  ...(hasClearances ? [gauge(cheekGapMm)] : []),
 ];
 
 const common = {
@@ -87,7 +111,6 @@ const common = {
   buildVolume: workshopBuildVolume,
   declaredCents: 5,
   room: workshopRoom,
-  assemblyNotes: curlewNotes,
 };
 
 export const curlew = planKit(
@@ -104,16 +127,18 @@ export const curlew = planKit(
       ...common,
       mark: 1,
       issue: 0,
+      assemblyNotes: curlewNotes(''),
       changeNotes: curlewFirstChanges,
-      planned: parts({ cheekGapMm: 0.1, railMm: 7.5 }),
+      planned: parts({ cheekGapMm: 0.1, railMm: 7.5, hasClearances: false }),
       marks: [],
     },
     {
       ...common,
       mark: 1,
       issue: 1,
+      assemblyNotes: curlewNotes(curlewGaugeNotes),
       changeNotes: curlewSecondChanges,
-      planned: parts({ cheekGapMm: 0.22, railMm: 9 }),
+      planned: parts({ cheekGapMm: 0.22, railMm: 9, hasClearances: true }),
       marks: [
         {
           code: 'J-01',

@@ -1,10 +1,25 @@
-import type { DemoKit, DemoPart, DemoRevision, DemoVoice, KitPlan, PlannedPart } from '../demo-types.js';
+import type {
+  DemoClearance,
+  DemoKit,
+  DemoPart,
+  DemoRevision,
+  DemoVoice,
+  KitPlan,
+  PlannedPart,
+} from '../demo-types.js';
 import type { Solid } from '../geometry/solid.js';
 
 type PartWords = Pick<DemoPart, 'code' | 'name' | 'orientation'> & Partial<Omit<DemoPart, 'fileName'>>;
 
-/** A part with its file's name made from its code and name: `P-73-pipe-c-sharp-5.stl`. */
-export function plannedPart(words: PartWords, shape: () => Solid): PlannedPart {
+/**
+ * A part with its file's name made from its code and name: `P-73-pipe-c-sharp-5.stl`; in another clearance
+ * `J-01-locking-tongue-(plus).stl`.
+ */
+export function plannedPart(
+  words: PartWords,
+  shape: () => Solid,
+  variantShapes: PlannedPart['variantShapes'] = {},
+): PlannedPart {
   const fileFormat = words.fileFormat ?? 'stl';
   const stem = words.name
     .replaceAll('♯', '-sharp-')
@@ -13,13 +28,19 @@ export function plannedPart(words: PartWords, shape: () => Solid): PlannedPart {
     .replaceAll(/^-|-$/g, '');
   return {
     shape,
+    variantShapes,
     part: {
       quantity: 1,
       printSpec: null,
       voice: null,
+      isGauge: false,
       ...words,
       fileFormat,
       fileName: `${words.code}-${stem}.${fileFormat}`,
+      variants: (Object.keys(variantShapes) as DemoClearance[]).map((clearance) => ({
+        clearance,
+        fileName: `${words.code}-${stem}-(${clearance}).${fileFormat}`,
+      })),
     },
   };
 }

@@ -1,15 +1,41 @@
-import type { DemoKit, DemoRevision } from '../demo-types.js';
-import { generateFiles } from '../generate-files.js';
+import { createHash } from 'node:crypto';
+import { isDeepStrictEqual } from 'node:util';
+import type { DemoKit, DemoPart, DemoRevision } from '../demo-types.js';
+import { generateFiles, type GeneratedFile } from '../generate-files.js';
 import { waitFor, type ShopBrowser } from './shop-browser.js';
 
+type PartWords = Pick<
+  DemoPart,
+  'code' | 'name' | 'quantity' | 'orientation' | 'printSpec' | 'voice' | 'isGauge'
+>;
 interface RevisionAnswer {
   id: string;
   label: string;
   state: string;
-  parts: { id: string; code: string; file: { measuring: string; fault: string | null } | null }[];
+  parts: (PartWords & {
+    id: string;
+    file: { measuring: string } | null;
+    variants: { file: { measuring: string } }[];
+  })[];
   gates: { name: string; state: string; reason: string }[];
   release: { state: string; fault: string | null };
 }
+
+interface ComparisonAnswer {
+  rows: { deviation: { state: string } | null }[];
+}
+const wordsOf = ({ code, name, quantity, orientation, printSpec, voice, isGauge }: PartWords): PartWords => ({
+  code,
+  name,
+  quantity,
+  orientation,
+  printSpec,
+  voice,
+  isGauge,
+});
+
+const isMeasured = (file: { measuring: string } | null): boolean =>
+  file?.measuring === 'measured' || file?.measuring === 'refused';
 
 /** Drafts a kit with its licences. @returns its id */
 export const draftKit = async (maker: ShopBrowser, kit: DemoKit): Promise<string> => {
@@ -23,6 +49,22 @@ export const draftKit = async (maker: ShopBrowser, kit: DemoKit): Promise<string
   for (const licence of kit.licences)
     await maker.post(`/workshop/kits/${id}/licences`, { ...licence, isOffered: true });
   return id;
+};
+
+/** Offers files by their hash first: what an earlier revision has is not sent again. */
+const sendFiles = async (maker: ShopBrowser, at: string, files: readonly GeneratedFile[]): Promise<void> => {
+  const answers = await maker.post<{ answer: string; detail: string }[]>(`${at}/offers`, {
+    files: files.map(({ fileName, bytes }) => ({
+      fileName,
+      sha256: createHash('sha256').update(bytes).digest('hex'),
+      bytes: bytes.length,
+    })),
+  });
+  for (const [index, { fileName, bytes }] of files.entries()) {
+    const { answer, detail } = answers[index] ?? { answer: 'refused', detail: 'It was not answered.' };
+    if (answer === 'refused') throw new Error(`${fileName}: ${detail}`);
+    if (answer === 'send') await maker.upload(`${at}/files`, fileName, bytes);
+  }
 };
 
 /** Uploads a revision, sets its parts and notes, waits for the measurements, releases it. */
@@ -40,8 +82,7 @@ export const releaseRevision = async (
     throw new Error(`${kit.name}: the shop starts ${draft.label}, the demo has ${revision.label}.`);
   const at = `/workshop/revisions/${draft.id}`;
 
-  for (const { fileName, bytes } of generateFiles(kit, revision))
-    await maker.upload(`${at}/files`, fileName, bytes);
+  await sendFiles(maker, at, generateFiles(kit, revision));
   const { assemblyNotes, changeNotes, cautions, printSpec, hardware, buildVolume, declaredCents, room } =
     revision;
   await maker.patch(at, {
@@ -56,15 +97,25 @@ export const releaseRevision = async (
   });
 
   const { parts } = await maker.get<RevisionAnswer>(at);
-  for (const { code, name, quantity, orientation, printSpec: own, voice } of revision.parts) {
-    const part = parts.find((one) => one.code === code);
-    if (!part) throw new Error(`${kit.name} ${revision.label}: no uploaded file became part ${code}.`);
-    await maker.put(`${at}/parts/${part.id}`, { code, name, quantity, orientation, printSpec: own, voice });
+  for (const wanted of revision.parts) {
+    const part = parts.find(({ code }) => code === wanted.code);
+    if (!part) throw new Error(`${kit.name} ${revision.label}: no uploaded file became part ${wanted.code}.`);
+    // Parts that were carried over are what they were.
+    const body = wordsOf(wanted);
+    if (!isDeepStrictEqual(wordsOf(part), body)) await maker.put(`${at}/parts/${part.id}`, body);
   }
   await waitFor(
     'The measuring',
     () => maker.get<RevisionAnswer>(at),
-    (one) => one.parts.every(({ file }) => file?.measuring === 'measured' || file?.measuring === 'refused'),
+    (one) =>
+      one.parts.every(({ file, variants }) =>
+        [file, ...variants.map((variant) => variant.file)].every((each) => isMeasured(each)),
+      ),
+  );
+  await waitFor(
+    'The comparing',
+    () => maker.get<ComparisonAnswer>(`${at}/comparison`),
+    ({ rows }) => rows.every(({ deviation }) => deviation?.state !== 'waiting'),
   );
   if (!isFirst)
     for (const { code, mark, reason } of revision.marks)

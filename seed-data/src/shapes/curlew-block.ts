@@ -15,7 +15,7 @@ export const railScrewsXMm = [1, 3, 5].map((pipes) => pipes * curlewSizes.pitchM
 export const railScrewsYMm = 2.8;
 
 /** Half a bow tie: narrow at the joint, wide inside the block, so that what slides in cannot be pulled out sideways. */
-const dovetail = { reachMm: 7, neckHalfMm: 3, wideHalfMm: 4.5 } as const;
+export const dovetail = { reachMm: 7, neckHalfMm: 3, wideHalfMm: 4.5 } as const;
 
 /**
  * A rack of six pipes, underside down. All three blocks are level on top; the one for the longest
@@ -87,7 +87,7 @@ function socket(x: number, heightMm: number): Passage {
 }
 
 const tongueHeightMm = 18.6;
-const tongueEndGapMm = 0.2;
+export const tongueEndGapMm = 0.2;
 
 /**
  * The bow tie that draws two blocks together, pushed down into the slots of both.

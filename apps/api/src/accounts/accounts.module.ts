@@ -12,6 +12,10 @@ import { OwnSessions } from './own-sessions.js';
 import { Passphrases } from './passphrases.js';
 import { AddressVerifiedSteps, People } from './people.js';
 import { Person } from './person.model.js';
+import { ChangePrinterCards } from './printers/change-printer-cards.js';
+import { PrinterCardRecord } from './printers/printer-card.model.js';
+import { PrinterCards } from './printers/printer-cards.js';
+import { PrintersController } from './printers/printers.controller.js';
 import { SessionController } from './session.controller.js';
 import { SessionRecord } from './session.model.js';
 import { SessionSerializer } from './session-serializer.js';
@@ -26,9 +30,9 @@ import { SweepSessions } from './sweep-sessions.js';
 @Module({
   imports: [
     PassportModule.register({ session: true }),
-    SequelizeModule.forFeature([Person, SessionRecord, OneTimeToken, StaffLogEntry]),
+    SequelizeModule.forFeature([Person, SessionRecord, OneTimeToken, StaffLogEntry, PrinterCardRecord]),
   ],
-  controllers: [SessionController, AccountController, StaffController],
+  controllers: [SessionController, AccountController, PrintersController, StaffController],
   providers: [
     People,
     AddressVerifiedSteps,
@@ -45,7 +49,9 @@ import { SweepSessions } from './sweep-sessions.js';
     Staff,
     StaffLog,
     SweepSessions,
+    PrinterCards,
+    ChangePrinterCards,
   ],
-  exports: [People, AddressVerifiedSteps, StaffLog],
+  exports: [People, AddressVerifiedSteps, StaffLog, PrinterCards],
 })
 export class AccountsModule {}

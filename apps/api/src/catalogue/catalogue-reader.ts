@@ -1,18 +1,21 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { FilamentColour } from '@windchest/contracts';
+import type { Clearance, FilamentColour, RankVoice } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { Differences, type ReprintRow } from './comparison/differences.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
+import { rankOf } from './kits/rank.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
-import { bundleName, servable, type ServableFile } from './release/stored-file-of.js';
+import { ReleasedBundles, type BundleFile, type ClearanceBundle } from './release/released-bundles.js';
+import { servable, type ServableFile } from './release/stored-file-of.js';
+import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
-import { Revision } from './revisions/revision.model.js';
+import { Revision, type Room } from './revisions/revision.model.js';
 
-export type { OfferedLicence, ReprintRow, ServableFile };
+export type { BundleFile, OfferedLicence, ReprintRow, ServableFile };
 
 export interface KitFacts {
   readonly id: string;
@@ -29,8 +32,17 @@ export interface ReleasedRevision {
   readonly releasedAt: Date;
   readonly bundleSha256: string;
   readonly bundleBytes: number;
+  /** Of one clearance each, tightest first; none where no part comes in several. */
+  readonly bundles: readonly ClearanceBundle[];
   readonly changeNotes: string;
   readonly isWithdrawn: boolean;
+}
+
+/** What a revision is meant to sound like. */
+export interface Voicing {
+  readonly rank: RankVoice[];
+  readonly room: Room;
+  readonly declaredCents: number;
 }
 
 /** What other rooms may know of the catalogue: plain facts, nothing of a draft. */
@@ -42,6 +54,7 @@ export class CatalogueReader {
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     private readonly offered: OfferedLicences,
     private readonly contents: RevisionContents,
+    private readonly bundles: ReleasedBundles,
     private readonly changes: Differences,
   ) {}
 
@@ -83,24 +96,28 @@ export class CatalogueReader {
         ['issue', 'DESC'],
       ],
     });
-    return rows.map(toReleased);
+    return this.toReleased(rows);
   }
 
   async revisionById(id: string): Promise<ReleasedRevision | null> {
     const revision = await this.finalById(id);
-    return revision && toReleased(revision);
+    return revision && ((await this.toReleased([revision]))[0] ?? null);
   }
 
-  async bundleFile(revisionId: string): Promise<ServableFile | null> {
-    const revision = await this.finalById(revisionId);
-    const kit = revision && (await this.kits.findByPk(revision.kitId));
-    if (!kit || !revision?.bundleSha256) return null;
-    return servable('bundles', {
-      sha256: revision.bundleSha256,
-      bytes: revision.bundleBytes ?? 0,
-      fileName: bundleName(kit.slug, revision),
-      contentType: 'application/zip',
-    });
+  /** The bundle that holds every clearance, or of the one that is asked for; null where there is none. */
+  async bundleFile(revisionId: string, clearance: Clearance | null = null): Promise<BundleFile | null> {
+    return (
+      (await this.bundles.filesOf(await this.finalById(revisionId))).find(
+        (one) => one.clearance === clearance,
+      ) ?? null
+    );
+  }
+
+  async bundleByHash(revisionId: string, sha256: string): Promise<BundleFile | null> {
+    return (
+      (await this.bundles.filesOf(await this.finalById(revisionId))).find((one) => one.sha256 === sha256) ??
+      null
+    );
   }
 
   /** Any file of a released revision by its hash: a part, a document, a picture, a sound. */
@@ -125,9 +142,43 @@ export class CatalogueReader {
     return (await this.finalById(revisionId))?.cautions ?? '';
   }
 
-  /** Part by part, what differs between a revision held (or none) and another one of the same kit. */
-  differences(fromRevisionId: string | null, toRevisionId: string): Promise<ReprintRow[]> {
-    return this.changes.reprintRows(fromRevisionId, toRevisionId);
+  async voicingOf(revisionId: string): Promise<Voicing | null> {
+    const revision = await this.finalById(revisionId);
+    if (!revision) return null;
+    const { room, declaredCents } = revision;
+    return { rank: rankOf(await this.contents.voicesOf(revisionId)), room, declaredCents };
+  }
+
+  /** Whether parts of a revision come in several clearances, and the part that tells which one to print. */
+  async clearancesOf(
+    revisionId: string,
+  ): Promise<{ hasVariants: boolean; gauge: { code: string; name: string } | null }> {
+    const parts = (await this.finalById(revisionId)) ? await this.contents.partsOf(revisionId) : [];
+    const gauge = parts.find((part) => part.isGauge);
+    return {
+      hasVariants: parts.some(hasVariants),
+      gauge: gauge ? { code: gauge.code, name: gauge.name } : null,
+    };
+  }
+
+  /**
+   * Part by part, what differs between a revision held (or none) and another one of the same kit, for
+   * somebody who prints in this clearance; where that is not known, in any of them.
+   */
+  differences(
+    fromRevisionId: string | null,
+    toRevisionId: string,
+    clearance: Clearance | null = null,
+  ): Promise<ReprintRow[]> {
+    return this.changes.reprintRows(fromRevisionId, toRevisionId, clearance);
+  }
+
+  private async toReleased(revisions: readonly Revision[]): Promise<ReleasedRevision[]> {
+    const bundles = await this.bundles.ofEach(revisions.map(({ id }) => id));
+    return revisions.map((revision) => ({
+      ...releasedFacts(revision),
+      bundles: bundles.get(revision.id) ?? [],
+    }));
   }
 
   private finalById(id: string): Promise<Revision | null> {
@@ -146,7 +197,7 @@ const toKit = ({ id, slug, name, tagline, colour, newestRevisionId }: Kit): KitF
   newestRevisionId,
 });
 
-const toReleased = (revision: Revision): ReleasedRevision => ({
+const releasedFacts = (revision: Revision): Omit<ReleasedRevision, 'bundles'> => ({
   id: revision.id,
   kitId: revision.kitId,
   label: revision.label,

@@ -7,6 +7,9 @@ import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
 import * as printProfiles from './migrations/0007-print-profiles.js';
+import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
+import * as printerCards from './migrations/0009-printer-cards.js';
+import * as partVariants from './migrations/0010-part-variants.js';
 import * as refunds from './migrations/0011-refunds.js';
 import * as couponRules from './migrations/0013-coupon-rules.js';
 import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
@@ -20,6 +23,9 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
+  '0008-mesh-comparisons': meshComparisons,
+  '0009-printer-cards': printerCards,
+  '0010-part-variants': partVariants,
   '0011-refunds': refunds,
   '0013-coupon-rules': couponRules,
   '0014-tax-and-business': taxAndBusiness,
@@ -53,9 +59,10 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
       logger: undefined,
     });
     const done = await umzug.up();
-    await database.query("SELECT RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     return done.map((one) => one.name);
   } finally {
+    // The connection goes back to the pool alive: without this a failed migration would block every other process.
+    await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }
 };

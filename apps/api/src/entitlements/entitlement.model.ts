@@ -1,3 +1,4 @@
+import type { Clearance } from '@windchest/contracts';
 import { Column, DataType, Model, Table } from 'sequelize-typescript';
 import { IdColumn, MomentColumn } from '../database/columns.js';
 
@@ -18,6 +19,8 @@ export class Entitlement extends Model {
   @Column(DataType.STRING(20)) declare state: EntitlementState;
   @Column(DataType.CHAR(36)) declare heldRevisionId: string | null;
   @MomentColumn({ isNullable: true }) declare heldSince: Date | null;
+  /** What its owner prints of this kit, once they have said or shown it. */
+  @Column(DataType.STRING(10)) declare clearance: Clearance | null;
   @MomentColumn() declare createdAt: Date;
   @MomentColumn() declare updatedAt: Date;
   @MomentColumn({ isNullable: true }) declare endedAt: Date | null;

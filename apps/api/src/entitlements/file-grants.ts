@@ -1,7 +1,7 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Answer } from '@windchest/contracts';
+import type { Answer, Clearance } from '@windchest/contracts';
 import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { InjectConfig, type Config } from '../config/config.js';
@@ -15,7 +15,12 @@ import { Entitlement } from './entitlement.model.js';
 import { mayDownload, type DownloadDecision } from './may-download.js';
 import { SignedAddress, type AddressFacts } from './signed-address.js';
 
-export type Wish = { kitSlug: string; revisionId: string; file?: string | undefined };
+export type Wish = {
+  kitSlug: string;
+  revisionId: string;
+  file?: string | undefined;
+  clearance?: Clearance | undefined;
+};
 type Grant = Answer<'POST /shelf/grants'>;
 
 /** The hash under which a browser's own cookie is written into an address. */
@@ -79,7 +84,8 @@ export class FileGrants {
     if (!decision.isAllowed) throw refusalFor(decision.why);
     const file = wish.file
       ? await this.catalogue.fileOf(revision.id, wish.file)
-      : await this.catalogue.bundleFile(revision.id);
+      : await this.catalogue.bundleFile(revision.id, wish.clearance);
+    if (!file && !wish.file && wish.clearance) throw noSuchClearance(revision.label);
     if (!file) throw notFound('file');
     return { entitlementId: decision.entitlementId, file };
   }
@@ -138,6 +144,9 @@ const sentences: Record<Extract<DownloadDecision, { isAllowed: false }>['why'], 
 };
 const refusalFor = (why: keyof typeof sentences): Refusal =>
   new Refusal(why === 'not-entitled' ? 'not-found' : 'forbidden', sentences[why]);
+
+const noSuchClearance = (label: string): Refusal =>
+  new Refusal('not-found', `${label} has no bundle of that clearance. Take its whole bundle.`);
 
 const closedLink = (state: 'expired' | 'used-up' | 'replaced'): Refusal =>
   state === 'expired'

@@ -45,6 +45,11 @@ export class FollowOrderRights implements OnModuleInit {
       if (changed > 0) ended.push(kitName);
     }
     back.facts.endedKits = [...new Set(ended)];
+    const rights = await this.rightsOf([back.order.id], tx);
+    const kept = back.lines.filter(
+      ({ orderLineId, amountMinor }) => amountMinor > 0 && (rights.get(orderLineId) ?? 'ended') !== 'ended',
+    );
+    back.facts.keptKits = [...new Set(kept.map((line) => line.kitName))];
   }
 
   private async turn(tx: Tx, { orderId, rights }: DisputeTurn): Promise<void> {
@@ -75,13 +80,14 @@ export class FollowOrderRights implements OnModuleInit {
     );
   }
 
-  private async rightsOf(orderIds: readonly string[]): Promise<ReadonlyMap<string, Right>> {
+  private async rightsOf(orderIds: readonly string[], tx?: Tx): Promise<ReadonlyMap<string, Right>> {
     if (orderIds.length === 0) return new Map();
     const rows = await selectRows<{ lineId: string; state: Right }>(
       this.database,
       `SELECT order_line_id AS lineId, state FROM entitlements
        WHERE order_id IN (:orderIds) AND order_line_id IS NOT NULL`,
       { orderIds: [...orderIds] },
+      tx,
     );
     return new Map(rows.map((row) => [row.lineId, row.state]));
   }

@@ -4,7 +4,7 @@ import type { Response } from 'express';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { Storage } from '../adapters/storage/storage.js';
-import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { CatalogueReader, type BundleFile, type ServableFile } from '../catalogue/catalogue-reader.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { touchRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
@@ -53,8 +53,8 @@ export class ServeFile {
       throw new Refusal('forbidden', 'Downloads of this kit rest while its payment is in dispute.');
     if (!download || entitlement?.state !== 'active')
       throw new Refusal('forbidden', 'The right to this file has ended.');
-    const file = download.isBundle
-      ? await this.catalogue.bundleFile(download.revisionId)
+    const file: (ServableFile & Partial<BundleFile>) | null = download.isBundle
+      ? await this.catalogue.bundleByHash(download.revisionId, download.sha256)
       : await this.catalogue.fileOf(download.revisionId, download.sha256);
     if (!file) throw new Refusal('not-found', 'There is no file at this address.');
 
@@ -63,7 +63,9 @@ export class ServeFile {
       accelPrefix: this.config.ACCEL_PREFIX,
       fileAddressSeconds: this.config.FILE_ADDRESS_MINUTES * 60,
     });
-    if (!isHead) await this.countSent(download, sent.bytes, sent.reachedEnd);
+    if (isHead) return;
+    await this.countSent(download, sent.bytes, sent.reachedEnd);
+    if (sent.reachedEnd && download.isBundle) await this.noteHeld(download, file.clearance ?? null);
   }
 
   private async countRequest(id: string): Promise<void> {
@@ -86,15 +88,26 @@ export class ServeFile {
         now,
       },
     );
-    if (reachedEnd && download.isBundle)
+  }
+
+  /** Whoever fetched a bundle holds its revision; whoever fetched one clearance, and said no other, prints that. */
+  private async noteHeld(download: Download, clearance: BundleFile['clearance']): Promise<void> {
+    const values = {
+      id: download.entitlementId,
+      revisionId: download.revisionId,
+      clearance,
+      now: this.clock.now(),
+    };
+    await touchRows(
+      this.database,
+      'UPDATE entitlements SET held_revision_id = :revisionId, held_since = :now, updated_at = :now WHERE id = :id AND NOT (held_revision_id <=> :revisionId)',
+      values,
+    );
+    if (clearance)
       await touchRows(
         this.database,
-        'UPDATE entitlements SET held_revision_id = :revisionId, held_since = :now, updated_at = :now WHERE id = :id AND NOT (held_revision_id <=> :revisionId)',
-        {
-          id: download.entitlementId,
-          revisionId: download.revisionId,
-          now,
-        },
+        'UPDATE entitlements SET clearance = :clearance, updated_at = :now WHERE id = :id AND clearance IS NULL',
+        values,
       );
   }
 }

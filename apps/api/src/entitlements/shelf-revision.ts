@@ -9,6 +9,7 @@ export const toShelfRevision = (revision: ReleasedRevision): ShelfRevision => ({
   releasedAt: revision.releasedAt.toISOString(),
   bundleBytes: revision.bundleBytes,
   bundleSha256: revision.bundleSha256,
+  bundles: [...revision.bundles],
   changeNotes: revision.changeNotes,
   isWithdrawn: revision.isWithdrawn,
 });

@@ -41,6 +41,14 @@ export class ShelfController {
     return this.shelf.sayHeld(person, params.slug, body.revisionId);
   }
 
+  @Endpoint('PUT /shelf/:slug/clearance')
+  sayClearance(
+    @ThisPerson() person: SignedIn,
+    @Input() { params, body }: Handled<'PUT /shelf/:slug/clearance'>,
+  ): Promise<Answer<'GET /shelf/:slug'>> {
+    return this.shelf.sayClearance(person, params.slug, body.clearance);
+  }
+
   @Endpoint('POST /shelf/grants')
   grant(
     @ThisPerson() person: SignedIn,

@@ -1,12 +1,13 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer } from '@windchest/contracts';
+import type { Answer, Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
 import { notFound, Refusal } from '../http/refusal.js';
+import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { toShelfRevision } from './shelf-revision.js';
@@ -69,24 +70,31 @@ export class Shelf {
       throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
-    const [revisions, parts, documents, cautions, downloads, [licence]] = await Promise.all([
-      this.catalogue.revisionsOf(kit.id),
-      this.catalogue.differences(item.held?.id ?? null, item.newest.id),
-      this.catalogue.documentsOf(item.newest.id),
-      this.catalogue.cautionsOf(item.newest.id),
-      this.downloadsOf(person, kit.id),
-      this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
-    ]);
+    const chosen = clearanceFor(best, null);
+    const [revisions, parts, clearances, documents, cautions, voicing, downloads, [licence]] =
+      await Promise.all([
+        this.catalogue.revisionsOf(kit.id),
+        this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+        this.catalogue.clearancesOf(item.newest.id),
+        this.catalogue.documentsOf(item.newest.id),
+        this.catalogue.cautionsOf(item.newest.id),
+        this.catalogue.voicingOf((item.held ?? item.newest).id),
+        this.downloadsOf(person, kit.id),
+        this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
+      ]);
+    if (!voicing) throw notFound('kit on your shelf');
     const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
       // The order behind a gift is the giver's own affair.
       orderId: best && best.source !== 'gift' ? best.orderId : null,
+      clearance: { ...clearances, chosen },
       revisions: revisions.map(toShelfRevision),
       parts,
       documents,
       licenceTerms: licence?.terms ?? '',
       cautions,
+      ...voicing,
       downloads: downloads.map((one) => ({
         at: one.grantedAt.toISOString(),
         revision: labels.get(one.revisionId) ?? '',
@@ -106,6 +114,23 @@ export class Shelf {
       { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
       { where: { personId: person.id, kitId: best.kitId, state: 'active' } },
     );
+    return this.read(person, slug);
+  }
+
+  /** Null forgets what was said. */
+  async sayClearance(
+    person: SignedIn,
+    slug: string,
+    clearance: Clearance | null,
+  ): Promise<Answer<'GET /shelf/:slug'>> {
+    const kit = await this.catalogue.kitBySlug(slug);
+    const [said] = kit
+      ? await this.entitlements.update(
+          { clearance, updatedAt: this.clock.now() },
+          { where: { personId: person.id, kitId: kit.id, state: 'active' } },
+        )
+      : [0];
+    if (said === 0) throw notFound('kit on your shelf');
     return this.read(person, slug);
   }
 

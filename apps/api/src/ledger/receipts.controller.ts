@@ -3,6 +3,8 @@ import { Controller, StreamableFile } from '@nestjs/common';
 import type { Answer, Handled } from '@windchest/contracts';
 import { Endpoint, Input } from '../http/endpoint.js';
 import { MaybePerson, type SignedIn } from '../http/person.js';
+import { RateLimits } from '../http/rate-limits.js';
+import type { OrderRecord } from '../orders/order-record.js';
 import { OrdersReader } from '../orders/orders-reader.js';
 import { ExportReceipts } from './export-receipts.js';
 import { ListReceipts } from './list-receipts.js';
@@ -15,6 +17,7 @@ export class ReceiptsController {
     private readonly files: ReceiptFiles,
     private readonly listing: ListReceipts,
     private readonly exporting: ExportReceipts,
+    private readonly limits: RateLimits,
   ) {}
 
   @Endpoint('GET /orders/:orderId/receipt.pdf')
@@ -22,7 +25,7 @@ export class ReceiptsController {
     @Input() { params, query }: Handled<'GET /orders/:orderId/receipt.pdf'>,
     @MaybePerson() person: SignedIn | null,
   ): Promise<StreamableFile> {
-    const order = await this.orders.ofBuyer(params.orderId, person, query.key);
+    const order = await this.ownOrder(params.orderId, person, query.key);
     return asPdf(await this.files.receipt(order.id));
   }
 
@@ -31,7 +34,7 @@ export class ReceiptsController {
     @Input() { params, query }: Handled<'GET /orders/:orderId/credit-notes/:creditNoteId.pdf'>,
     @MaybePerson() person: SignedIn | null,
   ): Promise<StreamableFile> {
-    const order = await this.orders.ofBuyer(params.orderId, person, query.key);
+    const order = await this.ownOrder(params.orderId, person, query.key);
     return asPdf(await this.files.creditNote(order.id, params.creditNoteId));
   }
 
@@ -60,6 +63,16 @@ export class ReceiptsController {
       type: 'text/csv; charset=utf-8',
       disposition: 'attachment; filename="receipts.csv"',
     });
+  }
+
+  private async ownOrder(
+    orderId: string,
+    person: SignedIn | null,
+    key: string | undefined,
+  ): Promise<OrderRecord> {
+    const order = await this.orders.ofBuyer(orderId, person, key);
+    await this.limits.take('papers', order.id);
+    return order;
   }
 }
 

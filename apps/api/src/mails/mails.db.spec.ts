@@ -15,17 +15,13 @@ describe('the outbox of e-mails', () => {
   });
 
   const add = (key: string) =>
-    shop.app
-      .get(Transactions, { strict: false })
-      .run((tx) =>
-        shop.app
-          .get(MailOutbox, { strict: false })
-          .add(tx, {
-            to: 'wren@mail.example',
-            key,
-            message: { template: 'sign-in-link', link: 'http://127.0.0.1/x', minutes: 20 },
-          }),
-      );
+    shop.app.get(Transactions, { strict: false }).run((tx) =>
+      shop.app.get(MailOutbox, { strict: false }).add(tx, {
+        to: 'wren@mail.example',
+        key,
+        message: { template: 'sign-in-link', link: 'http://127.0.0.1/x', minutes: 20 },
+      }),
+    );
   const states = async () =>
     (await selectRows<{ state: string }>(shop.database, 'SELECT state FROM mails')).map((row) => row.state);
 

@@ -2,10 +2,13 @@ import { existsSync } from 'node:fs';
 import { Module } from '@nestjs/common';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { CONFIG, type Config } from '../config/config.js';
+import { CompareMeshes } from './compare-meshes.js';
 import { InlineMeshRunner } from './inline-mesh-runner.js';
 import { EstimatePrint } from './estimate-print.js';
 import { MeasureFile } from './measure-file.js';
 import { MeshRunner } from './mesh-runner.js';
+import { RenewMeasurement } from './renew-measurement.js';
+import { StoredMeshes } from './stored-meshes.js';
 import { ThreadMeshRunner } from './thread-mesh-runner.js';
 
 const TIMEOUT_MS = 10 * 60_000;
@@ -14,7 +17,10 @@ const MAX_HEAP_MB = 2048;
 @Module({
   imports: [CatalogueModule],
   providers: [
+    StoredMeshes,
     MeasureFile,
+    RenewMeasurement,
+    CompareMeshes,
     EstimatePrint,
     {
       provide: MeshRunner,

@@ -22,11 +22,31 @@ describe('the threads that measure', () => {
     expect(await run('next.stl')).toMatchObject({ fault: 'next.stl' });
   });
 
+  it('compare beside measuring, and make a sentence of what goes wrong there too', async () => {
+    const compare = (afterPath: string, runner = patient) =>
+      runner.compare({ beforePath: '/nowhere', afterPath });
+    expect(await compare('b.stl')).toEqual({ isCompared: false, code: 'fine', fault: 'b.stl' });
+    expect(await compare('fill')).toMatchObject({ isCompared: false, code: 'out-of-memory' });
+    expect(await compare('hang', hurried)).toMatchObject({
+      isCompared: false,
+      code: 'timed-out',
+      fault: 'comparing the two files takes longer than 1 s. Export the part with fewer triangles.',
+    });
+  });
+
   it('give up on work that takes too long, and go on with the next file', async () => {
     const outcome = await run('hang', hurried);
     expect(outcome).toMatchObject({ isMeasured: false, code: 'timed-out' });
     expect((outcome as { fault: string }).fault).toMatch(/takes longer than 1 s to measure/);
     expect(await run('next.stl', hurried)).toMatchObject({ fault: 'next.stl' });
+  });
+
+  it('say when there is more work than threads', async () => {
+    const both = [run('one.stl'), run('two.stl')];
+    await new Promise(setImmediate);
+    expect(patient.isCrowded).toBe(true);
+    await Promise.all(both);
+    expect(patient.isCrowded).toBe(false);
   });
 
   it('give each file its whole time, however long it waited for a thread', async () => {

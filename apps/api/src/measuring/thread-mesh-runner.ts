@@ -1,6 +1,13 @@
 import { Piscina } from 'piscina';
-import type { PassingFault } from '../catalogue/files/measurement-records.js';
-import { MeshRunner, type MeshOutcome, type MeshTask } from './mesh-runner.js';
+import type { PassingFault } from '../catalogue/files/passing-faults.js';
+import {
+  MeshRunner,
+  type MeshFault,
+  type MeshOutcome,
+  type MeshPairOutcome,
+  type MeshPairTask,
+  type MeshTask,
+} from './mesh-runner.js';
 
 export interface ThreadOptions {
   /** The compiled module each thread runs. */
@@ -10,9 +17,9 @@ export interface ThreadOptions {
   readonly maxHeapMb: number;
 }
 
-/** Measures in worker threads with a limit of memory and time; a thread that ends is replaced. */
+/** Measures and compares in worker threads with a limit of memory and time; a thread that ends is replaced. */
 export class ThreadMeshRunner extends MeshRunner {
-  private readonly pool: Piscina<MeshTask, MeshOutcome>;
+  private readonly pool: Piscina<unknown, unknown>;
   private readonly timeoutMs: number;
   private free: number;
   private readonly waiting: (() => void)[] = [];
@@ -21,7 +28,7 @@ export class ThreadMeshRunner extends MeshRunner {
     super();
     this.timeoutMs = timeoutMs;
     this.free = threads;
-    this.pool = new Piscina<MeshTask, MeshOutcome>({
+    this.pool = new Piscina<unknown, unknown>({
       filename: worker.href,
       minThreads: 0,
       maxThreads: threads,
@@ -34,18 +41,35 @@ export class ThreadMeshRunner extends MeshRunner {
   }
 
   async run(task: MeshTask): Promise<MeshOutcome> {
+    const done = await this.inThread<MeshOutcome>('measureMesh', task);
+    return 'answer' in done ? done.answer : { isMeasured: false, ...measuringFault(done.cut) };
+  }
+
+  async compare(task: MeshPairTask): Promise<MeshPairOutcome> {
+    const done = await this.inThread<MeshPairOutcome>('compareMeshFiles', task);
+    return 'answer' in done ? done.answer : { isCompared: false, ...comparingFault(done.cut) };
+  }
+
+  private async inThread<Outcome>(
+    name: 'measureMesh' | 'compareMeshFiles',
+    task: unknown,
+  ): Promise<{ answer: Outcome } | { cut: Cut }> {
     // Waiting for a thread happens here, not in the pool: the time limit is for the work alone.
     await this.turn();
     const stop = new AbortController();
     const timer = setTimeout(() => stop.abort(), this.timeoutMs);
     try {
-      return await this.pool.run(task, { signal: stop.signal });
+      return { answer: (await this.pool.run(task, { name, signal: stop.signal })) as Outcome };
     } catch (fault) {
-      return outcomeOf(fault, stop.signal.aborted, this.timeoutMs);
+      return { cut: cutOf(fault, stop.signal.aborted, this.timeoutMs) };
     } finally {
       clearTimeout(timer);
       this.passOn();
     }
+  }
+
+  get isCrowded(): boolean {
+    return this.waiting.length > 0;
   }
 
   close(): Promise<void> {
@@ -65,26 +89,35 @@ export class ThreadMeshRunner extends MeshRunner {
   }
 }
 
-const outcomeOf = (fault: unknown, isLate: boolean, timeoutMs: number): MeshOutcome => {
-  const refused = (code: PassingFault, sentence: string): MeshOutcome => ({
-    isMeasured: false,
-    code,
-    fault: sentence,
-  });
-  if (isLate)
-    return refused(
-      'timed-out',
-      `takes longer than ${Math.round(timeoutMs / 1000)} s to measure. Export it with fewer triangles.`,
-    );
+/** How the work in a thread came to an end without an answer, and the limit or the fault in words. */
+interface Cut {
+  readonly code: PassingFault;
+  readonly words: string;
+}
+
+const cutOf = (fault: unknown, isLate: boolean, timeoutMs: number): Cut => {
+  if (isLate) return { code: 'timed-out', words: `${Math.round(timeoutMs / 1000)} s` };
   if ((fault as { code?: unknown }).code === 'ERR_WORKER_OUT_OF_MEMORY')
-    return refused(
-      'out-of-memory',
-      'needs more memory to measure than one file may have. Export it with fewer triangles.',
-    );
+    return { code: 'out-of-memory', words: '' };
   const { message } = fault as { message?: unknown };
-  const detail = typeof message === 'string' ? ` (${message})` : '';
-  return refused(
-    'worker-ended',
-    `could not be measured: the measuring of it ended by itself${detail}. Send it again, or export it anew.`,
-  );
+  return { code: 'worker-ended', words: typeof message === 'string' ? ` (${message})` : '' };
+};
+
+const measuringFault = ({ code, words }: Cut): MeshFault => {
+  const sentences: Record<PassingFault, string> = {
+    'timed-out': `takes longer than ${words} to measure. Export it with fewer triangles.`,
+    'out-of-memory': 'needs more memory to measure than one file may have. Export it with fewer triangles.',
+    'worker-ended': `could not be measured: the measuring of it ended by itself${words}. Send it again, or export it anew.`,
+  };
+  return { code, fault: sentences[code] };
+};
+
+const comparingFault = ({ code, words }: Cut): MeshFault => {
+  const sentences: Record<PassingFault, string> = {
+    'timed-out': `comparing the two files takes longer than ${words}. Export the part with fewer triangles.`,
+    'out-of-memory':
+      'comparing the two files needs more memory than they may have. Export the part with fewer triangles.',
+    'worker-ended': `the comparing of the two files ended by itself${words}. Send the file again, or export it anew.`,
+  };
+  return { code, fault: sentences[code] };
 };

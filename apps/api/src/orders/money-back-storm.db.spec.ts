@@ -2,7 +2,7 @@ import { selectRows } from '../database/rows.js';
 import { startRefundingShop, type RefundingShop } from '../testing/money-back.js';
 
 /** Of each kind: refunds asked for here, refunds made at the service, disputes lost, disputes won. */
-const EACH = 4;
+const EACH = 3;
 
 describe('a storm of events about money that goes back', () => {
   let shop: RefundingShop;

@@ -12,15 +12,33 @@ const FACES = [
   [3, 0, 4, 3, 4, 7],
 ].flat();
 
-/** A closed box as a binary STL, standing on the bed. */
-export const boxStl = (xMm: number, yMm: number, zMm: number): Buffer => {
-  const corners = [0, zMm].flatMap((z) => [
+const boxCorners = (xMm: number, yMm: number, zMm: number): number[][] =>
+  [0, zMm].flatMap((z) => [
     [0, 0, z],
     [xMm, 0, z],
     [xMm, yMm, z],
     [0, yMm, z],
   ]);
+
+/** A closed box as a binary STL, standing on the bed. */
+export const boxStl = (xMm: number, yMm: number, zMm: number): Buffer => {
+  const corners = boxCorners(xMm, yMm, zMm);
   return Buffer.from(writeBinaryStl(FACES.flatMap((corner) => corners[corner]!)));
+};
+
+/** The same box with its top in four triangles about the middle: another geometry hash, the same shape. */
+export const fannedBoxStl = (xMm: number, yMm: number, zMm: number): Buffer => {
+  const corners = [...boxCorners(xMm, yMm, zMm), [xMm / 2, yMm / 2, zMm]];
+  const fan = [4, 5, 8, 5, 6, 8, 6, 7, 8, 7, 4, 8];
+  const faces = [...FACES.slice(0, 6), ...fan, ...FACES.slice(12)];
+  return Buffer.from(writeBinaryStl(faces.flatMap((corner) => corners[corner]!)));
+};
+
+/** A box without its lid. */
+export const leakingBoxStl = (xMm: number, yMm: number, zMm: number): Buffer => {
+  const corners = boxCorners(xMm, yMm, zMm);
+  const faces = [...FACES.slice(0, 6), ...FACES.slice(12)];
+  return Buffer.from(writeBinaryStl(faces.flatMap((corner) => corners[corner]!)));
 };
 
 /** The same triangles in the other order: other bytes, the same shape. */
@@ -102,13 +120,21 @@ export const upload = async (
 export const writeNotes = (maker: Browser, revisionId: string, body: Partial<RevisionDetail>) =>
   maker.patch(`/api/workshop/revisions/${revisionId}`).send(body).expect(200);
 
-export const compare = async (maker: Browser, revisionId: string): Promise<Comparison> =>
-  (await maker.get(`/api/workshop/revisions/${revisionId}/comparison`).expect(200)).body as Comparison;
+export const compare = async (maker: Browser, revisionId: string, withId?: string): Promise<Comparison> =>
+  (
+    await maker
+      .get(`/api/workshop/revisions/${revisionId}/comparison`)
+      .query(withId ? { with: withId } : {})
+      .expect(200)
+  ).body as Comparison;
 
 export const gateOf = (revision: RevisionDetail, name: Gate['name']): Gate =>
   revision.gates.find((gate) => gate.name === name)!;
 
 export const release = async (shop: TestApp, maker: Browser, revisionId: string): Promise<RevisionDetail> => {
+  // As the page does: the gates are read, and what they wait for is done.
+  await readRevision(maker, revisionId);
+  await shop.drain();
   await maker.post(`/api/workshop/revisions/${revisionId}/release`).expect(202);
   await shop.drain();
   return readRevision(maker, revisionId);

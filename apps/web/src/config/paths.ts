@@ -37,6 +37,7 @@ export const paths = {
   collect: route('/collect/:token'),
   shelf: route('/shelf'),
   shelfKit: route('/shelf/:slug'),
+  tuner: route('/shelf/:slug/tuner'),
   cautions: route('/cautions'),
 
   join: route('/join'),

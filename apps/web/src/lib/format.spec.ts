@@ -39,7 +39,7 @@ describe('numbers for readers', () => {
   it('say sizes in mm, masses in g or kg', () => {
     expect(millimetres(158.54)).toBe('158.5 mm');
     expect(millimetres(220)).toBe('220 mm');
-    expect(grams(640)).toBe('640 g');
+    expect([grams(0.42), grams(9.96), grams(640)]).toEqual(['0.4 g', '10 g', '640 g']);
     expect(grams(1240)).toBe('1.24 kg');
     expect(buildVolume({ xMm: 220, yMm: 220, zMm: 250 })).toBe('220 × 220 × 250');
   });
@@ -73,6 +73,7 @@ describe('hoursRange', () => {
 
   it('falls back to minutes, in fives, under an hour', () => {
     expect(hoursRange(0.5, 0.72)).toBe('30–45 min');
+    expect(hoursRange(0.02, 0.05)).toBe('5 min');
   });
 });
 

@@ -45,9 +45,9 @@ export const millimetres = (valueMm: number, decimals = 1): string => `${number(
 export const cents = (value: number): string =>
   `${signed(value)} ${Math.abs(Math.round(value)) === 1 ? 'cent' : 'cents'}`;
 
-/** `640 g`, `1.2 kg`. */
+/** `0.4 g`, `640 g`, `1.2 kg`. */
 export const grams = (valueG: number): string =>
-  valueG < 1000 ? `${number(valueG)} g` : `${number(valueG / 1000, 2)} kg`;
+  valueG < 1000 ? `${number(valueG, valueG < 9.95 ? 1 : 0)} g` : `${number(valueG / 1000, 2)} kg`;
 
 /** `1.1 MB`, in powers of ten as file managers and browsers show downloads. */
 export function bytes(count: number): string {
@@ -63,11 +63,12 @@ export function bytes(count: number): string {
 
 /** `45 min`, `31–38 h`: a range, since nobody knows a print's length to the minute. */
 export function hoursRange(lowHours: number, highHours: number): string {
-  if (highHours < 1)
-    return `${number(Math.max(5, Math.round(lowHours * 12) * 5))}–${number(Math.ceil(highHours * 12) * 5)} min`;
+  const isShort = highHours < 1;
   const decimals = highHours < 10 ? 1 : 0;
-  const [low, high] = [number(lowHours, decimals), number(highHours, decimals)];
-  return low === high ? `${low} h` : `${low}–${high} h`;
+  const [low, high] = isShort
+    ? [number(Math.max(5, Math.round(lowHours * 12) * 5)), number(Math.ceil(highHours * 12) * 5)]
+    : [number(lowHours, decimals), number(highHours, decimals)];
+  return `${low === high ? low : `${low}–${high}`} ${isShort ? 'min' : 'h'}`;
 }
 
 /** `220 × 220 × 250`, in mm. */

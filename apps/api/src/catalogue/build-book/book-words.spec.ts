@@ -19,6 +19,8 @@ const part = (code: string, printSpec: PrintSpecification | null) => ({
   code,
   name: code,
   quantity: 1,
+  isGauge: false,
+  clearances: [],
   orientation: 'may-lie' as const,
   sizeMm: null,
   volumeCm3: null,

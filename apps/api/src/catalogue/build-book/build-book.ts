@@ -1,4 +1,4 @@
-import type { HardwareItem, PrintSpecification, RankVoice } from '@windchest/contracts';
+import type { Clearance, HardwareItem, PrintSpecification, RankVoice } from '@windchest/contracts';
 
 /** What a build book is typeset from: plain facts, nothing to look up. */
 export interface BuildBook {
@@ -38,6 +38,10 @@ export interface BookPart {
   readonly code: string;
   readonly name: string;
   readonly quantity: number;
+  /** Printed first: it tells which clearance a printer needs. */
+  readonly isGauge: boolean;
+  /** The files of a part that comes in several clearances, tightest first; none where it has one. */
+  readonly clearances: readonly { readonly clearance: Clearance; readonly fileName: string }[];
   readonly orientation: 'as-exported' | 'may-turn' | 'may-lie';
   /** x, y, z as the part stands in its file. */
   readonly sizeMm: readonly [number, number, number] | null;

@@ -6,6 +6,8 @@ const drawn = (code: string, widthMm: number, heightMm: number): DrawnPart => ({
   code,
   name: code,
   quantity: 1,
+  isGauge: false,
+  clearances: [],
   orientation: 'may-turn',
   sizeMm: null,
   volumeCm3: null,

@@ -21,6 +21,8 @@ const part = (code: string, over: Partial<BookPart> = {}): BookPart => ({
   code,
   name: `Pipe of ${code}`,
   quantity: 1,
+  isGauge: false,
+  clearances: [],
   orientation: 'may-turn',
   sizeMm: [14, 14, 160.25],
   volumeCm3: 9.4,
@@ -196,6 +198,28 @@ describe('typesetBuildBook', () => {
       'P-73 is 0.12 mm narrower.',
     ])
       expect(text).toContain(told);
+    expect(text).not.toContain('tighter');
+  });
+
+  it('names the gauge to print first, and the file of every clearance', async () => {
+    const files = (['minus', 'zero', 'plus'] as const).map((clearance) => ({
+      clearance,
+      fileName: `S-01 Stopper (${clearance}).stl`,
+    }));
+    const parts = [
+      part('G-01', { name: 'Stopper gauge', isGauge: true }),
+      part('S-01', { name: 'Stopper', clearances: files }),
+    ];
+    const pdf = await typesetBuildBook(book({ parts, assemblyNotes: '', voices: [] }));
+    const text = words(pdf);
+    for (const told of [
+      'Print the gauge first, G-01 Stopper gauge. See which of its clearances fits, then print all parts below in that one.',
+      '− tighter S-01 Stopper (minus).stl',
+      '0 as drawn S-01 Stopper (zero).stl',
+      '+ looser S-01 Stopper (plus).stl',
+    ])
+      expect(text).toContain(told);
+    expect(strayWords(pdf)).toEqual([]);
     expect(text).not.toContain('[[');
   });
 

@@ -9,6 +9,7 @@ import { styles } from '../../typesetting/text-styles.js';
 import { Typeface } from '../../typesetting/typeface.js';
 import { readFontFiles } from '../../typesetting/typeface-files.js';
 import { writeAssembly } from './write-assembly.js';
+import { hasClearances, writeClearances } from './write-clearances.js';
 import { writeContents } from './write-contents.js';
 import { contentsTop, writeCover } from './write-cover.js';
 import { writeHardware, writePartsList, writePrintSpecification, writeVoicing } from './write-lists.js';
@@ -55,6 +56,8 @@ const writeBook = (sheet: BookSheet, book: BuildBook): (() => void) => {
 
   if (book.parts.length > 0) {
     sections.write('Parts sheet', { least: 0, isOnNewPage: true }, () => writePartsSheet(sheet, book.parts));
+    if (hasClearances(book.parts))
+      sections.write('Clearance', { least: mm(60) }, () => writeClearances(sheet, book.parts));
     sections.write('Parts to print', { least: mm(50) }, () => writePartsList(sheet, book));
   }
   sections.write('Hardware', { least: mm(35) }, () => writeHardware(sheet, book));

@@ -1,14 +1,17 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer, Comparison } from '@windchest/contracts';
+import type { Answer, Clearance, Comparison } from '@windchest/contracts';
 import { Op, type Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
-import type { Tx } from '../../database/transactions.js';
+import { Transactions, type Tx } from '../../database/transactions.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
 import type { ReprintMark } from '../revisions/part.model.js';
+import { hasVariants } from '../revisions/part-files.js';
 import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
 import { Revision } from '../revisions/revision.model.js';
-import { comparePart } from './compare-parts.js';
+import { meshPairsOf } from './compare-parts.js';
+import { asPrinted, compareVariants } from './compare-variants.js';
+import { MeshComparisons, type Knowledge, type MeshPair } from './mesh-comparisons.js';
 
 /** One part on a person's reprint list. */
 export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
@@ -16,6 +19,7 @@ export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
 interface Pair {
   readonly row: Comparison['rows'][number];
   readonly after: PartOfRevision | null;
+  readonly hasChoice: boolean;
 }
 type Verdict = { mark: ReprintMark; reasons: string[] };
 
@@ -26,21 +30,29 @@ export class Differences {
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     private readonly contents: RevisionContents,
+    private readonly meshes: MeshComparisons,
+    private readonly transactions: Transactions,
   ) {}
 
   async rows(from: Revision | null, to: Revision, tx?: Tx): Promise<Comparison['rows']> {
-    return (await this.pairs(from, to, tx)).map(({ row }) => row);
+    return (await this.pairs(from, to, { tx })).map(({ row }) => row);
   }
 
-  async reprintRows(fromRevisionId: string | null, toRevisionId: string): Promise<ReprintRow[]> {
+  /** @param clearance what the reader prints: only that of a part counts; null counts all of them */
+  async reprintRows(
+    fromRevisionId: string | null,
+    toRevisionId: string,
+    clearance: Clearance | null = null,
+  ): Promise<ReprintRow[]> {
     const to = await this.revisions.findByPk(toRevisionId);
     if (!to) return [];
     const from = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
-    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to);
-    return pairs.map(({ row, after }) => ({
+    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to, { clearance });
+    return pairs.map(({ row, after, hasChoice }) => ({
       code: row.code,
       name: row.name,
       quantity: row.quantity,
+      clearance: hasChoice ? clearance : null,
       difference: row.difference,
       mark: row.mark,
       reason: row.reason,
@@ -66,16 +78,35 @@ export class Differences {
     });
   }
 
-  private async pairs(from: Revision | null, to: Revision, tx?: Tx): Promise<Pair[]> {
+  private async pairs(
+    from: Revision | null,
+    to: Revision,
+    { tx, clearance = null }: { tx?: Tx | undefined; clearance?: Clearance | null },
+  ): Promise<Pair[]> {
     const before = new Map(
       from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
     );
     const after = await this.contents.partsOf(to.id, tx);
     const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
-    const now = after.map((part) => pairOf(before.get(part.code) ?? null, part, verdicts.get(part.code)));
+    const old = (code: string) => before.get(code) ?? null;
+    const known = await this.knownOf(
+      after.flatMap((part) => meshPairsOf(old(part.code), part)),
+      tx,
+    );
+    const now = after.map((part) =>
+      pairOf(old(part.code), part, { verdict: verdicts.get(part.code), clearance, known }),
+    );
     const codes = new Set(after.map((part) => part.code));
     const gone = [...before.values()].filter((part) => !codes.has(part.code));
-    return [...now, ...gone.map((part) => pairOf(part, null, undefined))];
+    return [...now, ...gone.map((part) => pairOf(part, null, { clearance, known }))];
+  }
+
+  /** What nobody has asked about so far is compared from now on. */
+  private async knownOf(pairs: readonly MeshPair[], tx?: Tx): Promise<Knowledge> {
+    const { of, unasked } = await this.meshes.known(pairs, tx);
+    if (tx) await this.meshes.want(tx, unasked);
+    else if (unasked.length > 0) await this.transactions.run((own) => this.meshes.want(own, unasked));
+    return of;
   }
 
   /**
@@ -113,16 +144,25 @@ export class Differences {
   }
 }
 
+/** By what a pair is judged: the maker's word, what somebody prints, what is known of the meshes. */
+interface Judging {
+  readonly verdict?: Verdict | undefined;
+  readonly clearance: Clearance | null;
+  readonly known: Knowledge;
+}
+
 const pairOf = (
   before: PartOfRevision | null,
-  after: PartOfRevision | null,
-  verdict: Verdict | undefined,
+  whole: PartOfRevision | null,
+  { verdict, clearance, known }: Judging,
 ): Pair => {
-  const part = (after ?? before)!;
-  const difference = comparePart(before, after);
+  const part = (whole ?? before)!;
+  const after = asPrinted(whole, clearance);
+  const difference = compareVariants(asPrinted(before, clearance), after, known);
   const counts = difference.difference === 'changed' && verdict !== undefined;
   return {
     after,
+    hasChoice: whole !== null && hasVariants(whole),
     row: {
       code: part.code,
       name: part.name,

@@ -8,12 +8,12 @@ import { newId } from '../../database/columns.js';
 import { touchRows } from '../../database/rows.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { Drafts } from '../revisions/drafts.js';
-import { Part } from '../revisions/part.model.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
 import { isMeshKind, type FileKind } from './file-kind.js';
 import { MeasurementRecords } from './measurement-records.js';
-import { nextFreeCode, partFromName } from './part-from-name.js';
+import { MeshPlaces, type Places } from './mesh-places.js';
 import { RevisionFile } from './revision-file.model.js';
 import { assertRevisionFits } from './upload-limits.js';
 
@@ -24,18 +24,19 @@ export interface StoredContents {
   readonly fileName: string;
 }
 
-/** Puts stored contents into a draft under a name; a mesh becomes a part, or the new file of one. */
+/** Puts stored contents into a draft under a name; a mesh becomes a part, the new file of one, or one of its clearances. */
 @Injectable()
 export class AttachFile {
   constructor(
     @InjectConnection() private readonly database: Sequelize,
     @InjectConfig() private readonly config: Config,
     @InjectModel(RevisionFile) private readonly files: typeof RevisionFile,
-    @InjectModel(Part) private readonly parts: typeof Part,
     private readonly transactions: Transactions,
     private readonly drafts: Drafts,
     private readonly contents: RevisionContents,
+    private readonly places: MeshPlaces,
     private readonly measurements: MeasurementRecords,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -45,12 +46,12 @@ export class AttachFile {
     return this.transactions.run(async (tx) => {
       const { revision, subject } = await this.drafts.lock(tx, revisionId);
       await this.keepStored(tx, stored);
-      const parts = await this.parts.findAll({ where: { revisionId: revision.id }, transaction: tx });
-      const old = await this.fileToReplace(tx, revision.id, stored, parts);
+      const places = await this.places.of(tx, revision.id);
+      const old = await this.fileToReplace(tx, revision.id, stored, places);
       if (
         old?.sha256 === stored.sha256 &&
         old.fileName === stored.fileName &&
-        this.hasItsPart(old, stored, parts)
+        (!isMeshKind(stored.kind) || this.places.has(old.id, places))
       )
         return old.id;
 
@@ -58,8 +59,9 @@ export class AttachFile {
       await this.assertFits(tx, revision.id, stored, old);
       const file = await this.keepFile(tx, revision.id, stored, old);
       if (isMeshKind(stored.kind)) {
-        await this.keepPart(tx, file, stored, parts);
+        await this.places.keep(tx, file, places);
         await this.measurements.want(tx, stored.sha256, stored.fileName);
+        await this.comparisons.ofSentFile(tx, revision.id, stored.sha256);
       }
       await this.staffLog.record(tx, person, {
         what: old ? 'replaced a file' : 'added a file',
@@ -81,25 +83,20 @@ export class AttachFile {
     );
   }
 
-  /** The file of the same name; else, for a mesh named by a code, the file of the part with that code. */
+  /** The file of the same name; else, for a mesh named by a code, the file of that part in that clearance. */
   private async fileToReplace(
     tx: Tx,
     revisionId: string,
     stored: StoredContents,
-    parts: readonly Part[],
+    places: Places,
   ): Promise<RevisionFile | null> {
     const sameName = await this.files.findOne({
       where: { revisionId, fileName: stored.fileName },
       transaction: tx,
     });
     if (sameName || !isMeshKind(stored.kind)) return sameName;
-    const { code } = partFromName(stored.fileName);
-    const fileId = parts.find((part) => part.code === code)?.fileId;
+    const fileId = this.places.fileIdFor(stored.fileName, places);
     return fileId ? this.files.findByPk(fileId, { transaction: tx }) : null;
-  }
-
-  private hasItsPart(file: RevisionFile, stored: StoredContents, parts: readonly Part[]): boolean {
-    return !isMeshKind(stored.kind) || parts.some((part) => part.fileId === file.id);
   }
 
   private async assertFits(
@@ -123,35 +120,5 @@ export class AttachFile {
     return old
       ? old.update({ sha256, fileName, createdAt }, { transaction: tx })
       : this.files.create({ id: newId(), revisionId, sha256, fileName, createdAt }, { transaction: tx });
-  }
-
-  private async keepPart(
-    tx: Tx,
-    file: RevisionFile,
-    stored: StoredContents,
-    parts: readonly Part[],
-  ): Promise<void> {
-    if (parts.some((part) => part.fileId === file.id)) return;
-    const { code, name } = partFromName(stored.fileName);
-    const updatedAt = this.clock.now();
-    const known = parts.find((part) => part.code === code);
-    if (known) {
-      await known.update({ fileId: file.id, updatedAt }, { transaction: tx });
-      return;
-    }
-    await this.parts.create(
-      {
-        id: newId(),
-        revisionId: file.revisionId,
-        fileId: file.id,
-        code: code ?? nextFreeCode(parts.map((part) => part.code)),
-        name,
-        quantity: 1,
-        orientation: 'may-turn',
-        createdAt: updatedAt,
-        updatedAt,
-      },
-      { transaction: tx },
-    );
   }
 }

@@ -51,8 +51,22 @@ describe('the part that a file name stands for', () => {
     ['mouth_piece v2.stl', null, 'Mouth piece v2'],
     ['ABCD-1 x.stl', null, 'ABCD-1 x'],
     ['J-01tongue.stl', null, 'J-01tongue'],
+    ['J-01- tongue (2).stl', 'J-01', 'Tongue (2)'],
+    ['Tongue (plus).stl', null, 'Tongue (plus)'],
   ])('of %s', (fileName, code, name) => {
-    expect(partFromName(fileName)).toEqual({ code, name });
+    expect(partFromName(fileName)).toEqual({ code, name, clearance: 'zero' });
+  });
+
+  it.each([
+    ['J-01 Locking tongue (plus).stl', 'plus', 'Locking tongue'],
+    ['J-01-locking-tongue-(minus).3mf', 'minus', 'Locking-tongue'],
+    ['j-01(PLUS).stl', 'plus', 'J-01'],
+    ['J-01 (-) Locking tongue.stl', 'minus', 'Locking tongue'],
+    ['J-01 (−) Locking tongue.stl', 'minus', 'Locking tongue'],
+    ['J-01_(+)_Locking tongue.stl', 'plus', 'Locking tongue'],
+    ['J-01 Locking tongue (zero).stl', 'zero', 'Locking tongue'],
+  ])('and the clearance of it, of %s', (fileName, clearance, name) => {
+    expect(partFromName(fileName)).toEqual({ code: 'J-01', name, clearance });
   });
 
   it('gets the lowest free code where the name has none', () => {

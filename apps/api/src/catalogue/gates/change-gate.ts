@@ -4,10 +4,16 @@ import { listed, notNeeded, open, passed, type GateCheck } from './gate-facts.js
 export const changesMarked: GateCheck = ({ changes }) => {
   const name = 'changes-marked';
   if (changes === null) return notNeeded(name, 'The first revision changes nothing.');
-  const changed = changes.filter((row) => row.difference === 'changed');
+  const isWaiting = ({ deviation }: (typeof changes)[number]) => deviation?.state === 'waiting';
+  const waiting = changes.filter(isWaiting).map((row) => row.code);
+  // What turns out to be the same shape needs no mark.
+  const changed = changes.filter((row) => row.difference === 'changed' && !isWaiting(row));
   const unmarked = changed.filter((row) => row.mark === null).map((row) => row.code);
   const unexplained = changed.filter((row) => row.mark !== null && row.reason === '').map((row) => row.code);
   const faults = [
+    ...(waiting.length > 0
+      ? [`${listed(waiting)} ${waiting.length === 1 ? 'is' : 'are'} being compared with the last revision.`]
+      : []),
     ...(unmarked.length > 0 ? [`Mark whether to reprint ${listed(unmarked)}.`] : []),
     ...(unexplained.length > 0 ? [`Give a reason for ${listed(unexplained)}.`] : []),
   ];

@@ -1,8 +1,9 @@
 import type { Comparison } from '@windchest/contracts';
 import type { MeasuredMesh } from '../files/measured-mesh.js';
 import type { FileOfRevision, PartOfRevision } from '../revisions/revision-contents.js';
+import { applyWaiver } from './apply-waiver.js';
 import { changesMarked } from './change-gate.js';
-import type { GateFacts } from './gate-facts.js';
+import { notNeeded, open, passed, type GateFacts } from './gate-facts.js';
 import { fitsBuildVolume, partsMeasured, watertight } from './mesh-gates.js';
 import { licenceAndPrice } from './sale-gate.js';
 import { voicesInTune } from './voice-gate.js';
@@ -37,6 +38,7 @@ const file = (over: Partial<FileOfRevision> = {}): FileOfRevision => ({
   measured: measured([10, 10, 10]),
   geometryHash: 'g',
   drawings: null,
+  previewSha256: null,
   fault: null,
   ...over,
 });
@@ -51,6 +53,8 @@ const part = (over: Partial<PartOfRevision> = {}): PartOfRevision => ({
   voice: null,
   mark: null,
   reason: '',
+  isGauge: false,
+  variants: [],
   file: file(),
   ...over,
 });
@@ -80,10 +84,25 @@ const changed = (over: Partial<Comparison['rows'][number]>): Comparison['rows'][
   sizeChangeMm: null,
   volumeChangePercent: null,
   areaChangePercent: null,
+  deviation: null,
   mark: null,
   reason: '',
+  variants: [],
   ...over,
 });
+
+const box = { min: { x: 0, y: 0, z: 0 }, max: { x: 1, y: 1, z: 1 } };
+const deviation = {
+  state: 'compared' as const,
+  largestMm: 0.4,
+  placeMm: null,
+  placeIsOn: null,
+  movedMm: null,
+  clearance: null,
+  boxMm: box,
+  earlierBoxMm: box,
+  where: '',
+};
 
 describe('the gate', () => {
   it('parts-measured wants parts, each with a measured file', () => {
@@ -111,6 +130,22 @@ describe('the gate', () => {
       reason: 'Not watertight: J-01 (3 open edges, 1 edge with its sides turned).',
     });
     expect(watertight(facts({ parts: [part({ file: null })] })).state).toBe('open');
+  });
+
+  it('parts-measured, watertight and fits-build-volume look at every clearance of a part', () => {
+    const inPlus = (over: Partial<FileOfRevision>) =>
+      facts({ parts: [part({ variants: [{ clearance: 'plus', file: file(over) }] })] });
+    expect(partsMeasured(inPlus({}))).toMatchObject({ state: 'passed', reason: '1 part measured.' });
+    expect(partsMeasured(inPlus({ measuring: 'waiting', measured: null }))).toMatchObject({
+      state: 'open',
+      reason: 'J-01 + is being measured.',
+    });
+    const leaking = measured([1, 1, 1], { watertight: false, openEdges: 3 });
+    expect(watertight(inPlus({ measured: leaking })).reason).toBe('Not watertight: J-01 + (3 open edges).');
+    expect(watertight(inPlus({ measured: null })).state).toBe('open');
+    expect(fitsBuildVolume(inPlus({ measured: measured([10, 10, 190]) })).reason).toContain(
+      'J-01 + is 90.0 mm too tall',
+    );
   });
 
   it.each([
@@ -177,10 +212,59 @@ describe('the gate', () => {
     expect(gate(changed({ difference: 're-exported' }), changed({ difference: 'new' })).state).toBe('passed');
   });
 
+  it('changes-marked waits for the comparing before it asks for marks', () => {
+    const waiting = { ...deviation, state: 'waiting' as const };
+    const marked = { mark: 'reprint needed' as const, reason: 'Cracks.' };
+    expect(changesMarked(facts({ changes: [changed({ ...marked, deviation: waiting })] }))).toMatchObject({
+      state: 'open',
+      mayBeWaived: false,
+      reason: 'J-01 is being compared with the last revision.',
+    });
+    const failed = changed({ ...marked, deviation: { ...deviation, state: 'failed' } });
+    expect(changesMarked(facts({ changes: [failed] })).state).toBe('passed');
+  });
+
   it('cautions and licence-and-price want words and an offer', () => {
     expect(cautions(facts()).state).toBe('passed');
     expect(cautions(facts({ revision: { cautions: '' } })).state).toBe('open');
     expect(licenceAndPrice(facts()).state).toBe('passed');
     expect(licenceAndPrice(facts({ licences: [{ isOffered: false, terms: 'x' }] })).state).toBe('open');
+  });
+});
+
+describe('a waiver', () => {
+  const waiver = {
+    reason: 'The slicer closes it.',
+    waivedAgainst: 'Not watertight: J-01 (3 open edges).',
+    waivedByName: 'Wren',
+    waivedAt: new Date(0),
+  };
+  const stateOf = (gate: Parameters<typeof applyWaiver>[0], isReleased = false) =>
+    applyWaiver(gate, waiver, isReleased).state;
+
+  it('lets the fault pass that it was written against, and no other', () => {
+    expect(applyWaiver(open('watertight', waiver.waivedAgainst), waiver, false)).toMatchObject({
+      state: 'waived',
+      reason: waiver.waivedAgainst,
+      waiver: { by: 'Wren', at: '1970-01-01T00:00:00.000Z', reason: 'The slicer closes it.' },
+    });
+    expect(stateOf(open('watertight', 'Not watertight: J-02 (1 open edge).'))).toBe('open');
+  });
+
+  it('is shown, but counts for nothing, where the gate passes without it', () => {
+    expect(applyWaiver(passed('watertight', ''), waiver, false)).toMatchObject({
+      state: 'passed',
+      waiver: { by: 'Wren' },
+    });
+    expect(stateOf(notNeeded('voices-in-tune', ''))).toBe('not-needed');
+  });
+
+  it('opens no gate that may not be waived', () => {
+    expect(stateOf(open('cautions', waiver.waivedAgainst))).toBe('open');
+    expect(stateOf({ ...open('watertight', waiver.waivedAgainst), mayBeWaived: false })).toBe('open');
+  });
+
+  it('stays with what was released, however the check words it later', () => {
+    expect(stateOf(open('watertight', 'Leaks: J-01.'), true)).toBe('waived');
   });
 });

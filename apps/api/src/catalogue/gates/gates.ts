@@ -5,9 +5,11 @@ import type { Tx } from '../../database/transactions.js';
 import { Differences } from '../comparison/differences.js';
 import { Licence } from '../kits/licence.model.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
-import type { Revision } from '../revisions/revision.model.js';
+import { isFinal, type Revision } from '../revisions/revision.model.js';
+import { applyWaiver } from './apply-waiver.js';
 import { changesMarked } from './change-gate.js';
 import { notNeeded, type GateCheck } from './gate-facts.js';
+import { GateWaiver } from './gate-waiver.model.js';
 import { fitsBuildVolume, partsMeasured, watertight } from './mesh-gates.js';
 import { licenceAndPrice } from './sale-gate.js';
 import { voicesInTune } from './voice-gate.js';
@@ -31,6 +33,7 @@ const checks: readonly GateCheck[] = [
 export class Gates {
   constructor(
     @InjectModel(Licence) private readonly licences: typeof Licence,
+    @InjectModel(GateWaiver) private readonly waivers: typeof GateWaiver,
     private readonly contents: RevisionContents,
     private readonly differences: Differences,
   ) {}
@@ -43,6 +46,14 @@ export class Gates {
     });
     const earlier = await this.differences.lastReleasedBefore(revision, tx);
     const changes = earlier ? await this.differences.rows(earlier, revision, tx) : null;
-    return checks.map((check) => check({ revision, parts, licences, changes }));
+    const waivers = await this.waivers.findAll({
+      where: { revisionId: revision.id },
+      transaction: tx ?? null,
+    });
+    return checks.map((check) => {
+      const gate = check({ revision, parts, licences, changes });
+      const waiver = waivers.find((one) => one.gate === gate.name);
+      return applyWaiver(gate, waiver, isFinal(revision));
+    });
   }
 }

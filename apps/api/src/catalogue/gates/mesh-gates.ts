@@ -1,3 +1,5 @@
+import type { Gate } from '@windchest/contracts';
+import { eachMesh } from '../revisions/part-files.js';
 import type { PartOfRevision } from '../revisions/revision-contents.js';
 import type { BuildVolume } from '../revisions/revision.model.js';
 import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
@@ -5,11 +7,12 @@ import { counted, listed, open, passed, type GateCheck } from './gate-facts.js';
 export const partsMeasured: GateCheck = ({ parts }) => {
   const name = 'parts-measured';
   if (parts.length === 0) return open(name, 'There are no parts yet. Upload their meshes.');
+  const meshes = eachMesh(parts);
   const faults = [
     ...saying(parts, (part) => !part.file, 'has no file', 'have no file'),
-    ...parts.flatMap(({ file }) => (file?.measuring === 'refused' && file.fault ? [file.fault] : [])),
+    ...meshes.flatMap(({ file }) => (file?.measuring === 'refused' && file.fault ? [file.fault] : [])),
     ...saying(
-      parts,
+      meshes,
       ({ file }) => file?.measuring === 'waiting' || file?.measuring === 'measuring',
       'is being measured',
       'are being measured',
@@ -22,7 +25,7 @@ export const partsMeasured: GateCheck = ({ parts }) => {
 
 export const watertight: GateCheck = ({ parts }) => {
   const name = 'watertight';
-  const leaks = parts.flatMap(({ code, file }) => {
+  const leaks = eachMesh(parts).flatMap(({ code, file }) => {
     if (!file?.measured || file.measured.watertight) return [];
     const { openEdges, nonManifoldEdges, windingFaults, shells } = file.measured;
     const faults = [
@@ -43,23 +46,19 @@ export const watertight: GateCheck = ({ parts }) => {
     ];
     return [`${code} (${faults.join(', ')})`];
   });
-  if (leaks.length > 0) return open(name, `Not watertight: ${listed(leaks)}.`, true);
-  return allMeasured(parts)
-    ? passed(name, 'Every part is watertight.', true)
-    : open(name, 'Known when every part is measured.', true);
+  if (leaks.length > 0) return open(name, `Not watertight: ${listed(leaks)}.`);
+  return allMeasured(parts) ? passed(name, 'Every part is watertight.') : notKnownYet(name);
 };
 
 export const fitsBuildVolume: GateCheck = ({ parts, revision: { buildVolume } }) => {
   const name = 'fits-build-volume';
   const volume = `${buildVolume.xMm} × ${buildVolume.yMm} × ${buildVolume.zMm} mm`;
-  const tooBig = parts.flatMap((part) => {
+  const tooBig = eachMesh(parts).flatMap((part) => {
     const excess = part.file?.measured && excessOf(part, part.file.measured.sizeMm, buildVolume);
     return excess ? [`${part.code} is ${excess}`] : [];
   });
-  if (tooBig.length > 0) return open(name, `Too big for ${volume}: ${listed(tooBig)}.`, true);
-  return allMeasured(parts)
-    ? passed(name, `Every part fits ${volume}.`, true)
-    : open(name, 'Known when every part is measured.', true);
+  if (tooBig.length > 0) return open(name, `Too big for ${volume}: ${listed(tooBig)}.`);
+  return allMeasured(parts) ? passed(name, `Every part fits ${volume}.`) : notKnownYet(name);
 };
 
 const AXES = ['wide', 'deep', 'tall'] as const;
@@ -92,8 +91,14 @@ const excessOf = (
   return over.length > 0 ? over.join(' and ') : null;
 };
 
+/** Nobody can answer for a fault that is not known. */
+const notKnownYet = (name: Gate['name']): Gate => ({
+  ...open(name, 'Known when every part is measured.'),
+  mayBeWaived: false,
+});
+
 const allMeasured = (parts: readonly PartOfRevision[]): boolean =>
-  parts.length > 0 && parts.every((part) => part.file?.measured);
+  parts.length > 0 && eachMesh(parts).every((part) => part.file?.measured);
 
 const saying = (
   parts: readonly PartOfRevision[],

@@ -7,6 +7,8 @@ import { selectRows } from '../../database/rows.js';
 import { notFound } from '../../http/refusal.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
 import { fromJson } from '../json-column.js';
+import { KitsTooBig } from '../print/kits-too-big.js';
+import { filesOfPart, hasVariants } from '../revisions/part-files.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
 import { labelOf, Revision, type Room } from '../revisions/revision.model.js';
 import { Kit } from './kit.model.js';
@@ -30,6 +32,7 @@ interface Row {
   print_estimate: unknown;
   price_minor: number;
   tallest_mm: number | null;
+  longest_mm: number | null;
   part_count: number;
   total: number;
 }
@@ -38,8 +41,13 @@ const orders: Record<ListQuery['sort'], string> = {
   newest: 'released_at DESC, name',
   name: 'name',
   price: 'price_minor, name',
-  size: 'tallest_mm, name',
+  size: 'longest_mm, name',
 };
+
+const side = (axis: 0 | 1 | 2): string => `CAST(JSON_VALUE(m.measurement, '$.sizeMm[${axis}]') AS DOUBLE)`;
+const largest = (length: string): string =>
+  `(SELECT MAX(${length}) FROM parts p JOIN revision_files f ON f.id = p.file_id
+    JOIN measurements m ON m.sha256 = f.sha256 WHERE p.revision_id = r.id)`;
 
 /** Kits as everybody sees them: listed, with a released newest revision and something to buy. */
 @Injectable()
@@ -51,12 +59,14 @@ export class ShopKits {
     @InjectModel(Licence) private readonly licences: typeof Licence,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     private readonly contents: RevisionContents,
+    private readonly tooBig: KitsTooBig,
   ) {}
 
   async list({ query }: Handled<'GET /kits'>): Promise<Answer<'GET /kits'>> {
+    const tooBig = await this.tooBigFor(query);
     const rows = await this.rows(
-      'AND (k.name LIKE :like OR k.tagline LIKE :like)',
-      { like: `%${likeText(query.search)}%`, size: query.size, from: (query.page - 1) * query.size },
+      `AND (k.name LIKE :like OR k.tagline LIKE :like) ${tooBig.length > 0 ? 'AND r.id NOT IN (:tooBig)' : ''}`,
+      { like: `%${likeText(query.search)}%`, size: query.size, from: (query.page - 1) * query.size, tooBig },
       `ORDER BY ${orders[query.sort]}, id LIMIT :size OFFSET :from`,
     );
     const voices = await this.voicesOf(rows.map((row) => row.revision_id));
@@ -132,9 +142,23 @@ export class ShopKits {
         volumeMm3: part.file?.measured?.volumeMm3 ?? 0,
         areaMm2: part.file?.measured?.areaMm2 ?? 0,
         printSpec: part.printSpec,
+        isGauge: part.isGauge,
+        clearances: hasVariants(part) ? filesOfPart(part).map((one) => one.clearance) : [],
         drawing: tellingDrawing(part.file?.drawings ?? null),
+        previewBytes: part.file?.measured?.previewBytes ?? null,
+        previewSha256: part.file?.previewSha256 ?? null,
       };
     });
+  }
+
+  /** The revision everybody is offered now. */
+  async newestRevisionId(slug: string): Promise<string> {
+    return (await this.rowOf(slug)).revision_id;
+  }
+
+  private async tooBigFor({ fitsX, fitsY, fitsZ }: ListQuery): Promise<string[]> {
+    if (fitsX === undefined || fitsY === undefined || fitsZ === undefined) return [];
+    return this.tooBig.revisionsFor({ xMm: fitsX, yMm: fitsY, zMm: fitsZ });
   }
 
   private async rowOf(slug: string): Promise<Row> {
@@ -149,9 +173,8 @@ export class ShopKits {
       `SELECT found.*, COUNT(*) OVER () AS total FROM (
          SELECT k.id, k.slug, k.name, k.tagline, k.colour, r.id AS revision_id, r.mark, r.issue, r.released_at, r.room,
                 r.print_estimate, ${PRICE} AS price_minor,
-                (SELECT MAX(CAST(JSON_VALUE(m.measurement, '$.sizeMm[2]') AS DOUBLE)) FROM parts p
-                 JOIN revision_files f ON f.id = p.file_id JOIN measurements m ON m.sha256 = f.sha256
-                 WHERE p.revision_id = r.id) AS tallest_mm,
+                ${largest(side(2))} AS tallest_mm,
+                ${largest(`GREATEST(${side(0)}, ${side(1)}, ${side(2)})`)} AS longest_mm,
                 (SELECT COUNT(*) FROM parts p WHERE p.revision_id = r.id) AS part_count
          FROM kits k JOIN revisions r ON r.id = k.newest_revision_id
          WHERE k.is_listed AND r.state = 'released' ${condition}
@@ -188,6 +211,7 @@ export class ShopKits {
       compass: compassOfRank(rank, room),
       rank,
       tallestPartMm: Number(row.tallest_mm ?? 0),
+      longestPartMm: Number(row.longest_mm ?? 0),
       partCount: Number(row.part_count),
       printEstimate: fromJson<KitCard['printEstimate']>(row.print_estimate),
       price: this.money(row.price_minor),

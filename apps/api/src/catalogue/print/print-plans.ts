@@ -3,11 +3,10 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { KitCard, PrintSpecification } from '@windchest/contracts';
 import type { PrintProfile } from '@windchest/plates';
 import type { Sequelize } from 'sequelize';
-import { selectRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
-import { fromJson } from '../json-column.js';
 import type { Part } from '../revisions/part.model.js';
 import { Revision, type BuildVolume } from '../revisions/revision.model.js';
+import { printedShapesOf } from './printed-shapes.js';
 
 export type KitEstimate = NonNullable<KitCard['printEstimate']>;
 
@@ -27,16 +26,6 @@ export interface PrintPlan {
   readonly parts: readonly PlannedPart[];
 }
 
-interface Row {
-  code: string;
-  quantity: number | string;
-  orientation: Part['orientation'];
-  print_spec: unknown;
-  measurement: unknown;
-  footprint: unknown;
-  print_profile: unknown;
-}
-
 /** What the print estimate of a revision is made from, and where it is kept. */
 @Injectable()
 export class PrintPlans {
@@ -49,33 +38,23 @@ export class PrintPlans {
   async planOf(revisionId: string): Promise<PrintPlan | null> {
     const revision = await this.revisions.findByPk(revisionId);
     if (!revision) return null;
-    const rows = await selectRows<Row>(
-      this.database,
-      `SELECT p.code, p.quantity, p.orientation, p.print_spec, m.measurement, m.footprint, m.print_profile
-       FROM parts p LEFT JOIN revision_files f ON f.id = p.file_id LEFT JOIN measurements m ON m.sha256 = f.sha256
-       WHERE p.revision_id = :revisionId ORDER BY p.code`,
-      { revisionId },
+    const shapes = await printedShapesOf(this.database, revisionId);
+    const parts = shapes.flatMap(({ code, quantity, orientation, printSpec, sizeMm, footprint, profile }) =>
+      profile && footprint && sizeMm
+        ? [
+            {
+              code,
+              quantity,
+              orientation,
+              spec: printSpec ?? revision.printSpec,
+              heightMm: sizeMm[2],
+              footprint,
+              profile,
+            },
+          ]
+        : [],
     );
-    const parts = rows.flatMap((row) => {
-      const profile = fromJson<PrintProfile>(row.print_profile);
-      const footprint = fromJson<[number, number][]>(row.footprint);
-      const measured = fromJson<{ sizeMm: [number, number, number] }>(row.measurement);
-      if (!profile || !footprint || !measured) return [];
-      const spec = fromJson<PrintSpecification>(row.print_spec) ?? revision.printSpec;
-      const { code, orientation } = row;
-      return [
-        {
-          code,
-          quantity: Number(row.quantity),
-          orientation,
-          spec,
-          heightMm: measured.sizeMm[2],
-          footprint,
-          profile,
-        },
-      ];
-    });
-    return parts.length > 0 && parts.length === rows.length ? { bed: revision.buildVolume, parts } : null;
+    return parts.length > 0 && parts.length === shapes.length ? { bed: revision.buildVolume, parts } : null;
   }
 
   async keep(tx: Tx, revisionId: string, estimate: KitEstimate | null): Promise<void> {

@@ -1,5 +1,6 @@
 import { Injectable, Logger } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import type { z } from 'zod';
 import { People, toSignedIn } from '../../accounts/people.js';
@@ -11,14 +12,17 @@ import { touchRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { HandlesJob, type Finish, type JobHandler } from '../../jobs/job.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { Kit } from '../kits/kit.model.js';
 import { Licence } from '../kits/licence.model.js';
 import { estimatePrint } from '../print/estimate-print.job.js';
+import { clearancesOf } from '../revisions/part-files.js';
 import { RevisionContents } from '../revisions/revision-contents.js';
 import { isFinal, Revision } from '../revisions/revision.model.js';
 import { buildRelease } from './build-release.job.js';
 import { bundleEntries } from './bundle-entries.js';
 import { ReleaseProgress } from './release-progress.js';
+import { RevisionBundle } from './revision-bundle.model.js';
 import { verifyBundle } from './verify-bundle.js';
 import { writeBuildBook } from './write-build-book.js';
 import { writeBundle } from './write-bundle.js';
@@ -26,9 +30,14 @@ import { writeBundle } from './write-bundle.js';
 /** Writing takes the first part of the progress shown, reading back the rest. */
 const WRITTEN_PERCENT = 80;
 
+interface BuiltBundle extends HashedObject {
+  /** Left out by the one that holds them all. */
+  readonly clearance?: Clearance;
+}
+
 /**
- * Builds a revision's bundle, reads it back and verifies it; only then one transaction releases the
- * revision. Run again after a crash it starts over: the same files give the same bundle under the same key.
+ * Builds a revision's bundle, and one of each clearance where parts come in several, reads them back and
+ * verifies them; only then one transaction releases the revision. Run again after a crash it starts over: the same files give the same bundle under the same key.
  */
 @Injectable()
 @HandlesJob(buildRelease)
@@ -40,8 +49,10 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     @InjectModel(Kit) private readonly kits: typeof Kit,
     @InjectModel(Licence) private readonly licences: typeof Licence,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
+    @InjectModel(RevisionBundle) private readonly bundles: typeof RevisionBundle,
     @InjectConfig() private readonly config: Config,
     private readonly contents: RevisionContents,
+    private readonly comparisons: QueueComparisons,
     private readonly storage: Storage,
     private readonly people: People,
     private readonly staffLog: StaffLog,
@@ -59,8 +70,8 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     const revision = await this.revisions.findByPk(revisionId);
     if (isMine === 0 || !revision) return;
     try {
-      const bundle = await this.build(revision);
-      return (tx) => this.release(tx, revisionId, bundle);
+      const [bundle, ...others] = await this.build(revision);
+      return (tx) => this.release(tx, revisionId, bundle, others);
     } catch (fault) {
       this.log.error(`The bundle of ${revisionId} failed: ${(fault as Error).stack ?? String(fault)}`);
       await touchRows(
@@ -74,7 +85,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     }
   }
 
-  private async build(revision: Revision): Promise<HashedObject> {
+  private async build(revision: Revision): Promise<[BuiltBundle, ...BuiltBundle[]]> {
     const kit = await this.kits.findByPk(revision.kitId, { rejectOnEmpty: true });
     const [parts, files, licences] = await Promise.all([
       this.contents.partsOf(revision.id),
@@ -82,23 +93,42 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
       this.licences.findAll({ where: { kitId: kit.id, isOffered: true } }),
     ]);
     const buildBook = await writeBuildBook({ workshop: this.config.WORKSHOP_NAME, kit, revision, parts });
-    const entries = bundleEntries({ kit, revision, parts, files, licences, buildBook });
-    const total = entries.reduce((sum, entry) => sum + entry.bytes, 1);
+    const wanted = [{}, ...clearancesOf(parts).map((clearance) => ({ clearance }))].map((one) => ({
+      ...one,
+      entries: bundleEntries({ kit, revision, parts, files, licences, buildBook, ...one }),
+    }));
+    const total = wanted.flatMap(({ entries }) => entries).reduce((sum, entry) => sum + entry.bytes, 1);
     const progress = new ReleaseProgress(this.database, revision.id);
-    const bundle = await writeBundle(this.storage, entries, (writtenBytes) =>
-      progress.show((writtenBytes / total) * WRITTEN_PERCENT),
-    );
+    const built: BuiltBundle[] = [];
+    let before = 0;
+    for (const { entries, ...one } of wanted) {
+      const bundle = await writeBundle(this.storage, entries, (writtenBytes) =>
+        progress.show(((before + writtenBytes) / total) * WRITTEN_PERCENT),
+      );
+      before += bundle.bytes;
+      built.push({ ...bundle, ...one });
+    }
     progress.show(WRITTEN_PERCENT);
-    await verifyBundle(this.storage, bundle);
+    for (const bundle of built) await verifyBundle(this.storage, bundle);
     await progress.settle();
-    return bundle;
+    return built as [BuiltBundle, ...BuiltBundle[]];
   }
 
-  private async release(tx: Tx, revisionId: string, bundle: HashedObject): Promise<void> {
+  private async release(
+    tx: Tx,
+    revisionId: string,
+    bundle: BuiltBundle,
+    others: readonly BuiltBundle[],
+  ): Promise<void> {
     const revision = await this.revisions.findByPk(revisionId, { transaction: tx, lock: tx.LOCK.UPDATE });
     if (!revision || isFinal(revision) || revision.releaseState !== 'building') return;
     const kit = await this.kits.findByPk(revision.kitId, { transaction: tx, rejectOnEmpty: true });
     const now = this.clock.now();
+    // Before the revision is final: then the database takes nothing more.
+    await this.bundles.bulkCreate(
+      others.map(({ clearance, sha256, bytes }) => ({ revisionId, clearance, sha256, bytes })),
+      { transaction: tx },
+    );
     await revision.update(
       {
         state: 'released',
@@ -112,6 +142,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
       },
       { transaction: tx },
     );
+    await this.comparisons.ofRelease(tx, revisionId);
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;

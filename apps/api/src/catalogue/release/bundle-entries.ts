@@ -1,16 +1,20 @@
 import { createHash } from 'node:crypto';
-import type { HardwareItem, PrintSpecification } from '@windchest/contracts';
+import { clearanceSigns, type HardwareItem, type PrintSpecification } from '@windchest/contracts';
 import { keyOf } from '../../adapters/storage/storage.js';
 import { isMeshKind } from '../files/file-kind.js';
 import type { Licence } from '../kits/licence.model.js';
+import { filesOfPart } from '../revisions/part-files.js';
 import type { PartOfRevision } from '../revisions/revision-contents.js';
 import type { Revision } from '../revisions/revision.model.js';
 import type { BundleEntry, BundleSource } from './bundle-entry.js';
 import { bundleManifest } from './bundle-manifest.js';
+import { bundledFiles } from './bundled-files.js';
 
 /** Everything a bundle holds, sorted by path; SHA256SUMS last, for it lists all others. */
 export const bundleEntries = (source: BundleSource): BundleEntry[] => {
-  const { kit, revision, files, licences, parts } = source;
+  const { kit, revision, licences } = source;
+  const isLeftOut = leftOut(source);
+  const files = source.files.filter((file) => !isLeftOut.has(file.id));
   const stored = files.map((file): BundleEntry => ({
     path: `${isMeshKind(file.kind) ? 'parts' : 'documents'}/${file.fileName}`,
     sha256: file.sha256,
@@ -21,7 +25,7 @@ export const bundleEntries = (source: BundleSource): BundleEntry[] => {
     ...(source.buildBook ? [made('build-book.pdf', source.buildBook)] : []),
     text('assembly-notes.md', revision.assemblyNotes),
     ...(revision.changeNotes.trim() === '' ? [] : [text('change-notes.md', revision.changeNotes)]),
-    text('print-specification.md', printSpecificationText(kit.name, revision, parts)),
+    text('print-specification.md', printSpecificationText(source)),
     text('hardware.md', hardwareText(revision.hardware)),
     text('cautions.md', revision.cautions),
     ...licences
@@ -34,6 +38,17 @@ export const bundleEntries = (source: BundleSource): BundleEntry[] => {
   const manifest = text('manifest.json', `${JSON.stringify(bundleManifest(source, listed), null, 2)}\n`);
   const summed = [...listed, manifest].toSorted((a, b) => order(a.path, b.path));
   return [...summed, text('SHA256SUMS', summed.map(({ sha256, path }) => `${sha256}  ${path}\n`).join(''))];
+};
+
+/** The clearances that were not asked for. */
+const leftOut = ({ parts, clearance }: BundleSource): Set<string> => {
+  const kept = new Set(parts.flatMap((part) => bundledFiles(part, clearance)).map(({ file }) => file.id));
+  return new Set(
+    parts
+      .flatMap(filesOfPart)
+      .map(({ file }) => file.id)
+      .filter((id) => !kept.has(id)),
+  );
 };
 
 /** By code units, the same on every machine. */
@@ -91,14 +106,21 @@ const orientationWords: Record<PartOfRevision['orientation'], string> = {
   'may-lie': 'may be laid on any side',
 };
 
-const printSpecificationText = (
-  kitName: string,
-  revision: Revision,
-  parts: readonly PartOfRevision[],
-): string => {
+/** `, clearance +`, `, clearances 0, −, +`, or that it is the gauge. */
+const clearanceWords = (part: PartOfRevision, wanted: BundleSource['clearance']): string => {
+  const signs = bundledFiles(part, wanted).flatMap(({ clearance }) =>
+    clearance ? [clearanceSigns[clearance]] : [],
+  );
+  return [
+    ...(part.isGauge ? [', the gauge: print it first'] : []),
+    ...(signs.length > 0 ? [`, ${signs.length === 1 ? 'clearance' : 'clearances'} ${signs.join(', ')}`] : []),
+  ].join('');
+};
+
+const printSpecificationText = ({ kit, revision, parts, clearance }: BundleSource): string => {
   const { xMm, yMm, zMm } = revision.buildVolume;
   return [
-    `# ${kitName} ${revision.label}: print specification`,
+    `# ${kit.name} ${revision.label}: print specification`,
     '',
     `Build volume: ${xMm} × ${yMm} × ${zMm} mm`,
     '',
@@ -107,7 +129,8 @@ const printSpecificationText = (
     '## Parts',
     '',
     ...parts.map(
-      (part) => `- ${part.code} ${part.name}: ${part.quantity} ×, ${orientationWords[part.orientation]}`,
+      (part) =>
+        `- ${part.code} ${part.name}: ${part.quantity} ×, ${orientationWords[part.orientation]}${clearanceWords(part, clearance)}`,
     ),
     ...parts.flatMap(({ code, name, printSpec }) =>
       printSpec ? ['', `## ${code} ${name}`, '', ...specLines(printSpec)] : [],

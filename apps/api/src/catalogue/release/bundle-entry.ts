@@ -1,3 +1,4 @@
+import type { Clearance } from '@windchest/contracts';
 import type { Licence } from '../kits/licence.model.js';
 import type { FileOfRevision, PartOfRevision } from '../revisions/revision-contents.js';
 import type { Revision } from '../revisions/revision.model.js';
@@ -15,4 +16,6 @@ export interface BundleSource {
   readonly licences: readonly Licence[];
   /** The typeset build book, a PDF. */
   readonly buildBook?: Buffer;
+  /** Holds this clearance alone of parts that come in several; left out it holds all of them. */
+  readonly clearance?: Clearance;
 }

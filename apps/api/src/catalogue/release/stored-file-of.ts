@@ -1,3 +1,4 @@
+import type { Clearance } from '@windchest/contracts';
 import { keyOf } from '../../adapters/storage/storage.js';
 
 /** A stored file as it may be handed out: what to call it, what it is, where it stands. */
@@ -9,8 +10,12 @@ export interface ServableFile {
   readonly contentType: string;
 }
 
-export const bundleName = (kitSlug: string, revision: { mark: number; issue: number }): string =>
-  `${kitSlug}-mk-${revision.mark}.${revision.issue}.zip`;
+export const bundleName = (
+  kitSlug: string,
+  revision: { mark: number; issue: number },
+  clearance?: Clearance | null,
+): string =>
+  `${kitSlug}-mk-${revision.mark}.${revision.issue}${clearance ? `-clearance-${clearance}` : ''}.zip`;
 
 export const servable = (
   shelf: 'files' | 'bundles',

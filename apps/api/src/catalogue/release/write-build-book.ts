@@ -3,6 +3,7 @@ import { bookVoices } from '../build-book/book-voices.js';
 import { filamentHex } from '../build-book/kit-shades.js';
 import { typesetBuildBook } from '../build-book/typeset-build-book.js';
 import { tellingDrawing } from '../files/measured-mesh.js';
+import { filesOfPart, hasVariants } from '../revisions/part-files.js';
 import { compassOfRank, rankOf, voicingRoom } from '../kits/rank.js';
 import type { PartOfRevision } from '../revisions/revision-contents.js';
 import type { Revision } from '../revisions/revision.model.js';
@@ -33,10 +34,17 @@ export const writeBuildBook = ({ workshop, kit, revision, parts }: BookSource): 
     room: voicingRoom(revision.room),
     buildVolume: revision.buildVolume,
     compass: rank.length > 0 ? compassOfRank(rank, revision.room) : '',
-    parts: parts.map(({ code, name, quantity, orientation, printSpec, file }) => ({
+    parts: parts.map(({ code, name, quantity, orientation, printSpec, file, isGauge, variants }) => ({
       code,
       name,
       quantity,
+      isGauge,
+      clearances: hasVariants({ variants })
+        ? filesOfPart({ file, variants }).map((one) => ({
+            clearance: one.clearance,
+            fileName: one.file.fileName,
+          }))
+        : [],
       orientation,
       sizeMm: file?.measured?.sizeMm ?? null,
       volumeCm3: file?.measured ? file.measured.volumeMm3 / 1000 : null,

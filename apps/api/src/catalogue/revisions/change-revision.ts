@@ -7,8 +7,10 @@ import type { SignedIn } from '../../http/person.js';
 import { isDuplicate } from '../../database/errors.js';
 import { Clock } from '../../adapters/clock/clock.js';
 import { notFound, Refusal } from '../../http/refusal.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { RevisionFile } from '../files/revision-file.model.js';
 import { Drafts } from './drafts.js';
+import { PartVariant } from './part-variant.model.js';
 import { Part } from './part.model.js';
 
 /** Changing a draft: its words and specification, its parts; throwing it away. */
@@ -16,9 +18,11 @@ import { Part } from './part.model.js';
 export class ChangeRevision {
   constructor(
     @InjectModel(Part) private readonly parts: typeof Part,
+    @InjectModel(PartVariant) private readonly variants: typeof PartVariant,
     @InjectModel(RevisionFile) private readonly files: typeof RevisionFile,
     private readonly transactions: Transactions,
     private readonly drafts: Drafts,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -61,6 +65,8 @@ export class ChangeRevision {
         if (!part) throw notFound('part');
         const before = Object.fromEntries(Object.keys(body).map((key) => [key, part.get(key) as unknown]));
         await part.update({ ...body, updatedAt: this.clock.now() }, { transaction: tx });
+        // Under another code it follows another part.
+        if (body.code !== before['code']) await this.comparisons.ofDraft(tx, revision.id);
         await this.staffLog.record(tx, person, {
           what: `changed part ${part.code}`,
           subject,
@@ -75,7 +81,7 @@ export class ChangeRevision {
     }
   }
 
-  /** The part goes with its file. */
+  /** The part goes with its files. */
   async dropPart(person: SignedIn, revisionId: string, partId: string): Promise<void> {
     await this.transactions.run(async (tx) => {
       const { revision, subject } = await this.drafts.lock(tx, revisionId);
@@ -84,8 +90,10 @@ export class ChangeRevision {
         transaction: tx,
       });
       if (!part) throw notFound('part');
+      const variants = await this.variants.findAll({ where: { partId: part.id }, transaction: tx });
+      const fileIds = [part.fileId, ...variants.map((one) => one.fileId)].filter((id) => id !== null);
       await part.destroy({ transaction: tx });
-      if (part.fileId) await this.files.destroy({ where: { id: part.fileId }, transaction: tx });
+      await this.files.destroy({ where: { id: fileIds }, transaction: tx });
       await this.staffLog.record(tx, person, {
         what: `dropped part ${part.code}`,
         subject,

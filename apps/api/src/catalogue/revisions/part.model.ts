@@ -15,6 +15,7 @@ export class Part extends Model {
   @Column(DataType.STRING(20)) declare orientation: PartShape['orientation'];
   @Column(DataType.JSON) declare printSpec: PrintSpecification | null;
   @Column(DataType.JSON) declare voice: VoiceWithNote | null;
+  @Column(DataType.BOOLEAN) declare isGauge: boolean;
   @Column(DataType.STRING(40)) declare reprintMark: ReprintMark | null;
   @Column(DataType.STRING(300)) declare reprintReason: string;
   @MomentColumn() declare createdAt: Date;

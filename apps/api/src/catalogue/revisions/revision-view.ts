@@ -1,11 +1,18 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Part as PartShape, RevisionDetail, RevisionFile as FileShape } from '@windchest/contracts';
+import type {
+  Clearance,
+  Part as PartShape,
+  RevisionDetail,
+  RevisionFile as FileShape,
+} from '@windchest/contracts';
 import { InjectConfig, type Config } from '../../config/config.js';
 import { notFound } from '../../http/refusal.js';
 import { Gates } from '../gates/gates.js';
 import { isMeshKind } from '../files/file-kind.js';
 import { Kit } from '../kits/kit.model.js';
+import { ReleasedBundles } from '../release/released-bundles.js';
+import { filesOfPart } from './part-files.js';
 import { RevisionContents, type FileOfRevision, type PartOfRevision } from './revision-contents.js';
 import { Revision } from './revision.model.js';
 
@@ -17,6 +24,7 @@ export class RevisionView {
     @InjectModel(Kit) private readonly kits: typeof Kit,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     private readonly contents: RevisionContents,
+    private readonly bundles: ReleasedBundles,
     private readonly gates: Gates,
   ) {}
 
@@ -24,12 +32,13 @@ export class RevisionView {
     const revision = await this.revisions.findByPk(revisionId);
     const kit = revision && (await this.kits.findByPk(revision.kitId));
     if (!revision || !kit) throw notFound('revision');
-    const [files, parts, gates] = await Promise.all([
+    const [files, parts, gates, bundles] = await Promise.all([
       this.contents.filesOf(revisionId),
       this.contents.partsOf(revisionId),
       this.gates.of(revision),
+      this.bundles.ofEach([revisionId]),
     ]);
-    const partOfFile = partIds(parts);
+    const placeOf = placesOfFiles(parts);
     return {
       id: revision.id,
       kit: { id: kit.id, slug: kit.slug, name: kit.name, colour: kit.colour },
@@ -45,8 +54,8 @@ export class RevisionView {
       buildVolume: revision.buildVolume,
       declaredCents: revision.declaredCents,
       room: revision.room,
-      parts: parts.map((part) => toPart(part, partOfFile)),
-      documents: files.filter((file) => !isMeshKind(file.kind)).map((file) => toFile(file, partOfFile)),
+      parts: parts.map((part) => toPart(part, placeOf)),
+      documents: files.filter((file) => !isMeshKind(file.kind)).map((file) => toFile(file, placeOf)),
       gates,
       release: {
         state: revision.releaseState,
@@ -57,6 +66,7 @@ export class RevisionView {
         revision.bundleSha256 === null
           ? null
           : { sha256: revision.bundleSha256, bytes: revision.bundleBytes ?? 0 },
+      bundles: bundles.get(revisionId) ?? [],
       totalBytes: files.reduce((sum, file) => sum + file.bytes, 0),
       limits: { fileBytes: this.config.MAX_FILE_BYTES, revisionBytes: this.config.MAX_REVISION_BYTES },
     };
@@ -69,21 +79,28 @@ export class RevisionView {
     ]);
     const file = files.find((one) => one.id === fileId);
     if (!file) throw notFound('file');
-    return toFile(file, partIds(parts));
+    return toFile(file, placesOfFiles(parts));
   }
 
   async part(revisionId: string, partId: string): Promise<PartShape> {
     const parts = await this.contents.partsOf(revisionId);
     const part = parts.find((one) => one.id === partId);
     if (!part) throw notFound('part');
-    return toPart(part, partIds(parts));
+    return toPart(part, placesOfFiles(parts));
   }
 }
 
-const partIds = (parts: readonly PartOfRevision[]): Map<string, string> =>
-  new Map(parts.flatMap((part) => (part.file ? [[part.file.id, part.id] as const] : [])));
+type Places = ReadonlyMap<string, { readonly partId: string; readonly clearance: Clearance }>;
 
-const toPart = (part: PartOfRevision, partOfFile: Map<string, string>): PartShape => ({
+/** Which file is which clearance of which part. */
+const placesOfFiles = (parts: readonly PartOfRevision[]): Places =>
+  new Map(
+    parts.flatMap((part) =>
+      filesOfPart(part).map(({ clearance, file }) => [file.id, { partId: part.id, clearance }] as const),
+    ),
+  );
+
+const toPart = (part: PartOfRevision, placeOf: Places): PartShape => ({
   id: part.id,
   code: part.code,
   name: part.name,
@@ -91,11 +108,19 @@ const toPart = (part: PartOfRevision, partOfFile: Map<string, string>): PartShap
   orientation: part.orientation,
   printSpec: part.printSpec,
   voice: part.voice,
-  file: part.file && toFile(part.file, partOfFile),
+  isGauge: part.isGauge,
+  file: part.file && toFile(part.file, placeOf),
   drawings: part.file?.drawings ?? null,
+  previewBytes: part.file?.measured?.previewBytes ?? null,
+  previewSha256: part.file?.previewSha256 ?? null,
+  variants: part.variants.map(({ clearance, file }) => ({
+    clearance,
+    file: toFile(file, placeOf),
+    drawings: file.drawings,
+  })),
 });
 
-const toFile = (file: FileOfRevision, partOfFile: Map<string, string>): FileShape => ({
+const toFile = (file: FileOfRevision, placeOf: Places): FileShape => ({
   id: file.id,
   sha256: file.sha256,
   fileName: file.fileName,
@@ -104,7 +129,8 @@ const toFile = (file: FileOfRevision, partOfFile: Map<string, string>): FileShap
   measuring: file.measuring,
   measurement: measurementOf(file),
   fault: file.fault,
-  partId: partOfFile.get(file.id) ?? null,
+  partId: placeOf.get(file.id)?.partId ?? null,
+  clearance: placeOf.get(file.id)?.clearance ?? null,
   addedAt: file.addedAt.toISOString(),
 });
 

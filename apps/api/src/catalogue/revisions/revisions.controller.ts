@@ -5,10 +5,13 @@ import { Endpoint, Input } from '../../http/endpoint.js';
 import { ThisPerson, type SignedIn } from '../../http/person.js';
 import { Comparison } from '../comparison/comparison.js';
 import { OfferFiles } from '../files/offer-files.js';
+import { PartPreviews } from '../files/part-previews.js';
 import { RemoveFile } from '../files/remove-file.js';
 import { UploadFile } from '../files/upload-file.js';
+import { WaiveGate } from '../gates/waive-gate.js';
 import { RequestRelease } from '../release/request-release.js';
 import { ChangeRevision } from './change-revision.js';
+import { ChangeVariants } from './change-variants.js';
 import { RevisionView } from './revision-view.js';
 import { StartRevision } from './start-revision.js';
 
@@ -18,11 +21,14 @@ export class RevisionsController {
     private readonly view: RevisionView,
     private readonly startRevision: StartRevision,
     private readonly changeRevision: ChangeRevision,
+    private readonly changeVariants: ChangeVariants,
     private readonly offerFiles: OfferFiles,
     private readonly uploadFile: UploadFile,
     private readonly removeFile: RemoveFile,
     private readonly comparison: Comparison,
+    private readonly waiveGate: WaiveGate,
     private readonly requestRelease: RequestRelease,
+    private readonly previews: PartPreviews,
   ) {}
 
   @Endpoint('POST /workshop/kits/:kitId/revisions')
@@ -99,6 +105,36 @@ export class RevisionsController {
     return this.changeRevision.dropPart(person, params.revisionId, params.partId);
   }
 
+  @Endpoint('GET /workshop/revisions/:revisionId/parts/:partId/preview')
+  preview(
+    @Input() { params, query }: Handled<'GET /workshop/revisions/:revisionId/parts/:partId/preview'>,
+    @Res() response: Response,
+  ): Promise<void> {
+    const { revisionId, partId } = params;
+    return this.previews.send(
+      { revisionId, part: { id: partId }, named: query.v, isPublic: false },
+      response,
+    );
+  }
+
+  @Endpoint('PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance')
+  async giveVariant(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance'>,
+  ): Promise<Answer<'PUT /workshop/revisions/:revisionId/parts/:partId'>> {
+    await this.changeVariants.give(person, input);
+    return this.view.part(input.params.revisionId, input.params.partId);
+  }
+
+  @Endpoint('DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance')
+  async takeVariant(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'DELETE /workshop/revisions/:revisionId/parts/:partId/variants/:clearance'>,
+  ): Promise<Answer<'PUT /workshop/revisions/:revisionId/parts/:partId'>> {
+    await this.changeVariants.take(person, input);
+    return this.view.part(input.params.revisionId, input.params.partId);
+  }
+
   @Endpoint('GET /workshop/revisions/:revisionId/comparison')
   compare(
     @Input() { params, query }: Handled<'GET /workshop/revisions/:revisionId/comparison'>,
@@ -112,6 +148,24 @@ export class RevisionsController {
     @Input() input: Handled<'PUT /workshop/revisions/:revisionId/marks'>,
   ): Promise<Answer<'PUT /workshop/revisions/:revisionId/marks'>> {
     return this.comparison.mark(person, input);
+  }
+
+  @Endpoint('PUT /workshop/revisions/:revisionId/waivers/:gate')
+  async waive(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'PUT /workshop/revisions/:revisionId/waivers/:gate'>,
+  ): Promise<RevisionDetail> {
+    await this.waiveGate.waive(person, input);
+    return this.view.read(input.params.revisionId);
+  }
+
+  @Endpoint('DELETE /workshop/revisions/:revisionId/waivers/:gate')
+  async takeWaiverBack(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'DELETE /workshop/revisions/:revisionId/waivers/:gate'>,
+  ): Promise<RevisionDetail> {
+    await this.waiveGate.takeBack(person, input);
+    return this.view.read(input.params.revisionId);
   }
 
   @Endpoint('POST /workshop/revisions/:revisionId/release')

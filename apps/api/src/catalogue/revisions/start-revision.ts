@@ -7,9 +7,11 @@ import { newId } from '../../database/columns.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
 import { notFound, Refusal } from '../../http/refusal.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { RevisionFile } from '../files/revision-file.model.js';
 import { Kit } from '../kits/kit.model.js';
 import { firstRevision } from './first-revision.js';
+import { PartVariant } from './part-variant.model.js';
 import { Part } from './part.model.js';
 import { isFinal, labelOf, Revision } from './revision.model.js';
 
@@ -24,8 +26,10 @@ export class StartRevision {
     @InjectModel(Kit) private readonly kits: typeof Kit,
     @InjectModel(Revision) private readonly revisions: typeof Revision,
     @InjectModel(Part) private readonly parts: typeof Part,
+    @InjectModel(PartVariant) private readonly variants: typeof PartVariant,
     @InjectModel(RevisionFile) private readonly files: typeof RevisionFile,
     private readonly transactions: Transactions,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -71,6 +75,8 @@ export class StartRevision {
         { transaction: tx },
       );
       if (base) await this.carryContents(tx, base.id, id);
+      // Carried over from an older revision, parts may differ from those of the last one.
+      await this.comparisons.ofDraft(tx, id);
       await kit.update({ updatedAt: now }, { transaction: tx });
       await this.staffLog.record(tx, person, {
         what: 'started a revision',
@@ -92,10 +98,11 @@ export class StartRevision {
       }),
       { transaction: tx },
     );
+    const partIds = new Map<string, string>();
     const parts = await this.parts.findAll({ where: { revisionId: fromId }, transaction: tx });
     await this.parts.bulkCreate(
-      parts.map(({ fileId, code, name, quantity, orientation, printSpec, voice }) => ({
-        id: newId(),
+      parts.map(({ id, fileId, code, name, quantity, orientation, printSpec, voice, isGauge }) => ({
+        id: partIds.set(id, newId()).get(id),
         revisionId: toId,
         fileId: fileId === null ? null : (fileIds.get(fileId) ?? null),
         code,
@@ -104,8 +111,20 @@ export class StartRevision {
         orientation,
         printSpec,
         voice,
+        isGauge,
         createdAt: now,
         updatedAt: now,
+      })),
+      { transaction: tx },
+    );
+    const variants = await this.variants.findAll({ where: { revisionId: fromId }, transaction: tx });
+    await this.variants.bulkCreate(
+      variants.map(({ partId, clearance, fileId }) => ({
+        id: newId(),
+        revisionId: toId,
+        partId: partIds.get(partId),
+        clearance,
+        fileId: fileIds.get(fileId),
       })),
       { transaction: tx },
     );

@@ -1,3 +1,4 @@
+import { guardContents, REFUSE } from './released-guards.js';
 import { inOrder } from './statements.js';
 
 /** What makes a revision what it is. Withdrawing, and figures computed from it later, leave these alone. */
@@ -21,17 +22,6 @@ const protectedColumns = [
   'released_by',
   'created_at',
 ];
-const REFUSE = `SIGNAL SQLSTATE '45000' SET MESSAGE_TEXT = 'A released revision never changes.'`;
-const isFinal = (revisionId: string): string =>
-  `EXISTS (SELECT 1 FROM revisions WHERE id = ${revisionId} AND state IN ('released', 'withdrawn'))`;
-
-const guardContents = (table: string): string[] =>
-  (['INSERT', 'UPDATE', 'DELETE'] as const).map((verb) => {
-    const owners = { INSERT: ['NEW'], UPDATE: ['OLD', 'NEW'], DELETE: ['OLD'] }[verb];
-    return `CREATE TRIGGER ${table}_of_released_${verb.toLowerCase()} BEFORE ${verb} ON ${table} FOR EACH ROW
-      IF ${owners.map((row) => isFinal(`${row}.revision_id`)).join(' OR ')} THEN ${REFUSE}; END IF`;
-  });
-
 /**
  * The database itself keeps released revisions as they are: whatever program writes, a mistake becomes a
  * new revision. Withdrawing is the one step that is left to a released one.

@@ -1,8 +1,10 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import { formatMoney } from '@windchest/money';
 import { Op, type Sequelize } from 'sequelize';
 import { Clock } from '../../adapters/clock/clock.js';
 import type { PaymentDispute } from '../../adapters/payments/payments.js';
+import { InjectConfig, type Config } from '../../config/config.js';
 import { newId } from '../../database/columns.js';
 import { selectRows, touchRows } from '../../database/rows.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
@@ -25,6 +27,7 @@ export class FollowDispute {
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(Order) private readonly orders: typeof Order,
     @InjectModel(Dispute) private readonly disputes: typeof Dispute,
+    @InjectConfig() private readonly config: Config,
     private readonly steps: DisputeSteps,
     private readonly losing: LoseDispute,
     private readonly mail: DisputeMail,
@@ -113,8 +116,12 @@ export class FollowDispute {
       { id: dispute.id, now, stand, detail },
       tx,
     );
-    const amount = `${told.amountMinor} minor units of ${told.currency}`;
-    await this.history.add(tx, order.id, `dispute ${stand}`, `${amount}, reason ${told.reason}`);
+    const amount = formatMoney(
+      { minor: told.amountMinor, currency: told.currency },
+      this.config.WORKSHOP_LOCALE,
+    );
+    const reason = told.reason.replaceAll('_', ' ');
+    await this.history.add(tx, order.id, `dispute ${stand}`, `${amount}, reason given: ${reason}`);
     return dispute;
   }
 }

@@ -1,7 +1,9 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
+import { formatMoney } from '@windchest/money';
 import { Clock } from '../../adapters/clock/clock.js';
 import type { PaymentRefund } from '../../adapters/payments/payments.js';
+import { InjectConfig, type Config } from '../../config/config.js';
 import { newId } from '../../database/columns.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
 import { FlagOrder } from '../flag-order.js';
@@ -22,6 +24,7 @@ export class FollowRefund {
   constructor(
     @InjectModel(Order) private readonly orders: typeof Order,
     @InjectModel(Refund) private readonly refunds: typeof Refund,
+    @InjectConfig() private readonly config: Config,
     private readonly book: RefundBook,
     private readonly settling: SettleRefund,
     private readonly transactions: Transactions,
@@ -94,7 +97,11 @@ export class FollowRefund {
       },
       { transaction: tx },
     );
-    const detail = `${told.amountMinor} minor units of ${told.currency} at the payment service, ${told.id}`;
+    const amount = formatMoney(
+      { minor: told.amountMinor, currency: told.currency },
+      this.config.WORKSHOP_LOCALE,
+    );
+    const detail = `${amount} at the payment service, ${told.id}`;
     // What was never handed over has no receipt to correct and no right to end.
     if (order.paidAt)
       await this.settleSpread(tx, order, refund, await this.book.refundableLines(tx, order.id));

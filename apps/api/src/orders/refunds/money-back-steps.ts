@@ -21,8 +21,9 @@ export interface MoneyBack {
   readonly facts: {
     creditNote?: { readonly id: string; readonly number: string };
     tax?: readonly TaxLine[];
-    /** Kits whose right has ended with this, by name. */
+    /** Kits whose right has ended with this, and those of which money went back and the right goes on, by name. */
     endedKits?: readonly string[];
+    keptKits?: readonly string[];
   };
 }
 

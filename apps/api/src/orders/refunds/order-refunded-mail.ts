@@ -18,11 +18,8 @@ export class OrderRefundedMail {
   async queue(tx: Tx, back: MoneyBack, creditNoteNumber: string): Promise<void> {
     const { order, lines } = back;
     const money = (minor: number) => ({ minor, currency: order.currency });
-    const { tax = [], endedKits = [] } = back.facts;
+    const { tax = [], endedKits = [], keptKits = [] } = back.facts;
     const person = order.personId ? await this.people.byId(order.personId, tx) : null;
-    const keptKits = lines
-      .filter((line) => !line.endsRight && line.amountMinor > 0)
-      .map((line) => line.kitName);
     await this.mails.add(tx, {
       to: order.email,
       key: `order-refunded:${back.refundId}`,
@@ -47,7 +44,7 @@ export class OrderRefundedMail {
             endsRight,
           })),
         endedKits: [...endedKits],
-        keptKits,
+        keptKits: [...keptKits],
         ...(order.gift ? { giftTo: order.gift.email } : {}),
         ...(order.couponCode ? { couponCode: order.couponCode } : {}),
         orderLink: `${this.config.BASE_URL}/orders/${order.id}#key=${tokenPlaceholder('order-key', order.id)}`,

@@ -1,12 +1,11 @@
-import { Box } from '@chakra-ui/react/box';
 import { chakra } from '@chakra-ui/react/styled-system';
 import { lazy, Suspense, useState } from 'react';
 import { paths } from '../../config/paths.js';
 import { shopTexts } from '../../config/texts/shop.js';
 import { useBasket } from '../../lib/basket.js';
-import { buildVolume } from '../../lib/format.js';
-import { usePrinterCard } from '../../lib/printer-card.js';
+import { printerText } from '../../lib/printer-text.js';
 import { useSession } from '../../lib/session.js';
+import { useStoredValue } from '../../lib/stored-value.js';
 import { TextLink } from '../../ui/link.js';
 import { RouterLink } from '../../ui/router-link.js';
 import { TitleSuffix } from '../../ui/page-title.js';
@@ -14,8 +13,13 @@ import { Footer } from './footer.js';
 import { Header, HeaderLink } from './header.js';
 import { PageFrame } from './page-frame.js';
 
-const PrinterCardDialog = lazy(async () => ({
-  default: (await import('../../features/bench/printer-card-dialog.js')).PrinterCardDialog,
+const OwnPrinterDialog = lazy(async () => ({
+  default: (await import('../../features/bench/own-printer-dialog.js')).OwnPrinterDialog,
+}));
+
+// Visitors without a printer need neither.
+const PrinterBed = lazy(async () => ({
+  default: (await import('../../features/bench/printer-bed.js')).PrinterBed,
 }));
 
 const PrinterButton = chakra('button', {
@@ -32,7 +36,7 @@ const NameLink = chakra(RouterLink, { base: { borderRadius: 'sm' } });
 export function ShopLayout() {
   const { session, isSignedIn, may } = useSession();
   const { items } = useBasket();
-  const [printer] = usePrinterCard();
+  const mayHavePrinter = useStoredValue(printerText) !== null || isSignedIn;
   const [isPrinterOpen, setIsPrinterOpen] = useState(false);
   const name = session?.workshop.name ?? '';
 
@@ -56,11 +60,10 @@ export function ShopLayout() {
               <>
                 <PrinterButton type="button" aria-haspopup="dialog" onClick={() => setIsPrinterOpen(true)}>
                   {shopTexts.printer}
-                  {printer && (
-                    // Between the two widths the header has no room for three numbers.
-                    <Box as="span" display={{ base: 'inline', md: 'none', lg: 'inline' }}>
-                      : {buildVolume(printer.bed)}
-                    </Box>
+                  {mayHavePrinter && (
+                    <Suspense>
+                      <PrinterBed />
+                    </Suspense>
                   )}
                 </PrinterButton>
                 {isSignedIn ? (
@@ -89,7 +92,7 @@ export function ShopLayout() {
       />
       {isPrinterOpen && (
         <Suspense>
-          <PrinterCardDialog onClose={() => setIsPrinterOpen(false)} />
+          <OwnPrinterDialog onClose={() => setIsPrinterOpen(false)} />
         </Suspense>
       )}
     </TitleSuffix>

@@ -43,4 +43,8 @@ export const accountRoutes: RouteObject[] = [
       async () => (await import('../../features/entitlements/shelf-kit.page.js')).ShelfKitPage,
     ),
   },
+  {
+    path: paths.tuner.path,
+    element: lazyPage(async () => (await import('../../features/entitlements/tuner.page.js')).TunerPage),
+  },
 ];

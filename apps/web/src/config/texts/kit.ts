@@ -40,25 +40,10 @@ export const kitTexts = {
 
   fit: 'Will it print on your machine?',
   fitNobody: (volume: string) =>
-    `Every part keeps to a build volume of ${volume} mm. Write down your printer, and this page checks each part against it.`,
+    `Every part keeps to a build volume of ${volume} mm. Write down your printer, and this page lays the kit out on its plates.`,
   fitOpen: 'Write down my printer',
-  fitChange: 'Change my printer',
-  fitWorking: 'Measuring against your printer …',
-  fitAll: (count: number, volume: string) =>
-    count === 1 ? `The part fits ${volume} mm.` : `All ${count} parts fit ${volume} mm.`,
-  fitMost: (fitting: number, count: number, volume: string) =>
-    `${fitting} of ${count} parts fit ${volume} mm.`,
-  fitTurned: (codes: string) => `Turned on the bed: ${codes}.`,
-  fitTurnedBy: (code: string, degrees: string) => `${code} by ${degrees}°`,
-  fitLaid: (codes: string) => `Laid on another side: ${codes}.`,
-  fitOver: {
-    x: (part: string, over: string) => `${part} is ${over} too wide.`,
-    y: (part: string, over: string) => `${part} is ${over} too deep.`,
-    z: (part: string, over: string) => `${part} is ${over} too tall.`,
-  },
-  fitUnmeasured: (codes: string) => `Without a size yet: ${codes}.`,
-  fitNozzle: (drawnFor: string, yours: string) =>
-    `The kit is drawn for a ${drawnFor} nozzle; yours is ${yours}.`,
+  fitChange: 'Change it',
+  fitWorking: 'Fetching what lays out plates …',
   onePlate: 'plate',
   manyPlates: 'plates',
   fitEstimate: (volume: string, plates: string, hours: string, mass: string, metres: string) =>
@@ -70,6 +55,11 @@ export const kitTexts = {
     `Voiced for a room of ${temperature}. The workshop declares that each ${noun} can be set to within ${cents} cents of its note.`,
   partsHeading: 'What you print',
   partsLead: (codes: string, pieces: string) => `${codes}, ${pieces}, drawn to one scale from their files.`,
+  partsClearance: (codes: string, isOne: boolean, clearances: string) =>
+    `${codes} ${isOne ? 'comes' : 'come'} in clearances ${clearances}, for printers differ in the gap they leave.`,
+  partsGauge: (gauge: string) => `Print the gauge first, ${gauge}: it shows which one fits yours.`,
+  inClearances: (clearances: string) => `Comes in ${clearances}.`,
+  isGauge: 'The gauge: print it first.',
   partsLoading: 'The parts cannot be shown',
   partsList: (count: number) => (count === 1 ? 'The part, with its size' : `All ${count} parts, with sizes`),
   partsLabel: (name: string) => `Parts of ${name}`,

@@ -89,6 +89,16 @@ export const shelfKitTexts = {
 
   actions: 'What you can do',
   getBundle: 'Get the whole bundle',
+  getBundleIn: (sign: string) => `Get the bundle in ${sign}`,
+  getAll: 'The bundle with all clearances',
+  clearance: 'Clearance you print',
+  clearanceUnknown: 'Not known yet',
+  clearanceFind: (gauge: string | undefined) =>
+    gauge
+      ? `The whole bundle holds all of them. Print the gauge first, ${gauge}: it shows which one fits.`
+      : 'The whole bundle holds all of them. Print a part in 0 first and see how it fits.',
+  clearanceFailed: 'The clearance was not kept',
+  inClearance: (sign: string) => `in ${sign}`,
   getting: 'Making ready …',
   getFailed: 'The download did not start',
   printed: (label: string) => `I have printed ${label}`,
@@ -98,6 +108,7 @@ export const shelfKitTexts = {
     `The shelf then compares new revisions with ${label} and says what to reprint from there. You can change it again.`,
   printedConfirm: (label: string) => `Yes, I hold ${label}`,
   printedFailed: 'What you hold was not changed',
+  tune: 'Tune what you printed',
   changeNotes: 'Change notes',
   licence: 'Licence',
   cautions: 'Cautions',
@@ -115,7 +126,7 @@ export const shelfKitTexts = {
   noNotes: 'No change notes were written for this revision.',
   isWithdrawn: 'withdrawn',
   youHold: 'you hold this',
-  getRevision: (label: string) => `Get ${label}`,
+  getRevision: (label: string, sign?: string) => (sign ? `Get ${label} in ${sign}` : `Get ${label}`),
 
   noTerms: 'The terms stand in the bundle, in LICENCE.txt.',
   noDownloads: 'Nothing was downloaded yet.',
@@ -163,9 +174,13 @@ export const collectTexts = {
   } satisfies Record<Collection['state'], { title: string; detail: string }>,
 
   get: 'Get the bundle',
+  getOne: (clearance: string) => `Get ${clearance}`,
+  clearances:
+    'Some parts come in clearances: the bundle holds all of them, and its build book says how to find yours. If you know it, take that one alone.',
   getting: 'Making ready …',
   getFailed: 'The download did not start',
   checksum: 'SHA-256',
+  checksumOfAll: 'SHA-256 of the bundle with all clearances',
   copyChecksum: 'Copy the SHA-256',
   of: (kit: string) => `of ${kit}`,
 

@@ -55,6 +55,8 @@ export const filesTexts = {
   removeAsk: (fileName: string) => `Remove ${fileName}?`,
   removeMesh: (code: string) =>
     `It is taken out of this draft, and part ${code} has no file until another one is sent. Other revisions keep it.`,
+  removeVariant: (code: string) =>
+    `It is taken out of this draft: ${code} no longer comes in this clearance. Other revisions keep it.`,
   removeDocument: 'It is taken out of this draft. Other revisions keep it.',
   failed: 'The file was not removed',
 };

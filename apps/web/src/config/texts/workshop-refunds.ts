@@ -52,6 +52,7 @@ export const refundTexts = {
   },
   lineOf: (kit: string, amount: string) => `${kit} ${amount}`,
   keptRight: 'right stays',
+  endingRight: 'right will end',
   endedRight: 'right ended',
   noPaper: '—',
   decide: 'Decide on rights',

@@ -41,6 +41,29 @@ export const gateTexts = {
     string
   >,
   waivedBy: (who: string, when: string, why: string) => `${who} waived it on ${when}: ${why}`,
+  waivedOther: (who: string, when: string, why: string, against: string) =>
+    `${who} waived something else on ${when} (${against}): ${why}`,
+  waiverNeedless: (who: string, when: string) => `The waiver of ${who}, ${when}, is no longer needed.`,
+  waive: 'Waive',
+  waiveOf: (gate: string) => `Waive the gate “${gate}”`,
+  takeBack: 'Take back',
+  takeBackOf: (gate: string) => `Take the waiver of “${gate}” back`,
+};
+
+export const waiverTexts = {
+  title: (gate: string) => `Waive “${gate}”?`,
+  what: (label: string) =>
+    `${label} may then be released although this gate is open. The waiver covers what the gate says now: if that changes, the gate opens again.`,
+  reason: 'Why it may go out like this',
+  reasonHint:
+    'At least 10 characters. The workshop keeps it with the revision and in its log; buyers do not see it.',
+  waive: 'Waive the gate',
+  failed: 'The gate was not waived',
+  takeBackAsk: (gate: string) => `Take the waiver of “${gate}” back?`,
+  takeBackOpens: 'The gate opens again, and the written reason is lost.',
+  takeBackNeedless: 'Nothing needs it any more. The written reason is lost.',
+  takeBack: 'Take it back',
+  takeBackFailed: 'The waiver was not taken back',
 };
 
 const spelled = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten'];
@@ -55,7 +78,9 @@ export const releaseTexts = {
   notAllowed: (label: string) => `${label} is released by a maker`,
   ask: (kit: string, label: string) => `Release ${label} of ${kit}?`,
   what: (label: string, holders: string) =>
-    `The gates are checked once more and the bundle is built. Then ${label} is the newest revision: it is on sale, and ${holders} see on their shelf what to reprint.`,
+    `The gates are checked once more and the bundle is built. Then ${label} is the newest revision: it is on sale, and the shelf tells ${holders} what to reprint.`,
+  waived: (gates: readonly string[]) =>
+    `It goes out with ${gates.length === 1 ? 'one gate' : `${gates.length} gates`} waived: ${gates.join(', ')}.`,
   final: (label: string) =>
     `${label} cannot be changed after that, nor taken back. A mistake is mended by a new revision.`,
   holdersCounted: (count: number) => (count === 1 ? 'its one holder' : `its ${count} holders`),

@@ -19,6 +19,7 @@ import { useEnter } from './enter.js';
 import { NameSection } from './name-section.js';
 import { OrdersSection } from './orders-section.js';
 import { PassphraseSection } from './passphrase-section.js';
+import { PrintersSection } from './printers-section.js';
 import { SessionsSection } from './sessions-section.js';
 
 const signedOut = (session: Session): Session => ({ ...session, person: null, permissions: [] });
@@ -64,6 +65,7 @@ export function AccountPage() {
       {person ? (
         <>
           <OrdersSection />
+          <PrintersSection />
           <NameSection person={person} />
           <AddressSection person={person} />
           <PassphraseSection />

@@ -5,6 +5,7 @@ import { InsertPart } from './insert-part.js';
 import { useInserting } from './markdown-editor.js';
 import { NotesEditor } from './notes-editor.js';
 import { useRevision } from './revision-context.js';
+import { WhatDiffers } from './what-differs.js';
 
 function ChangeHeadings() {
   const insert = useInserting();
@@ -24,21 +25,24 @@ function ChangeHeadings() {
   );
 }
 
-/** What changed, under the headings of Keep a Changelog 1.1.0. */
+/** What changed, under the headings of Keep a Changelog 1.1.0, and how it differs, part by part. */
 export function ChangesTab() {
   const { revision } = useRevision();
   return (
-    <NotesEditor
-      field="changeNotes"
-      label={notesTexts.changes}
-      hint={notesTexts.changesHint}
-      emptyPreview={notesTexts.changesEmpty}
-      tools={
-        <>
-          <ChangeHeadings />
-          <InsertPart parts={revision.parts} />
-        </>
-      }
-    />
+    <>
+      <NotesEditor
+        field="changeNotes"
+        label={notesTexts.changes}
+        hint={notesTexts.changesHint}
+        emptyPreview={notesTexts.changesEmpty}
+        tools={
+          <>
+            <ChangeHeadings />
+            <InsertPart parts={revision.parts} />
+          </>
+        }
+      />
+      <WhatDiffers />
+    </>
   );
 }

@@ -6,16 +6,12 @@ import { Button } from '../../ui/button.js';
 import { ConfirmDialog } from '../../ui/confirm-dialog.js';
 import { Fault } from '../../ui/fault.js';
 import { Text } from '../../ui/text.js';
-
-const stale = [
-  'GET /workshop/revisions/:revisionId',
-  'GET /workshop/revisions/:revisionId/comparison',
-] as const;
+import { staleByParts } from './revision-context.js';
 
 /** Takes a part out of a draft, after asking. */
 export function DropPart({ revisionId, part }: { revisionId: string; part: Part }) {
   const [isAsking, setIsAsking] = useState(false);
-  const { run, fault } = useAction('DELETE /workshop/revisions/:revisionId/parts/:partId', stale);
+  const { run, fault } = useAction('DELETE /workshop/revisions/:revisionId/parts/:partId', staleByParts);
   return (
     <>
       <Button look="plain" marginRight="auto" onClick={() => setIsAsking(true)}>

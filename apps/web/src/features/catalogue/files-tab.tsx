@@ -1,6 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import type { RevisionFile } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { filesTexts as texts } from '../../config/texts/workshop-notes.js';
 import { bytes, counted } from '../../lib/format.js';
 import { LinkButton } from '../../ui/button.js';
@@ -9,6 +10,7 @@ import type { SignName } from '../../ui/sign.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Text } from '../../ui/text.js';
+import { meshesOf } from './part-meshes.js';
 import { RemoveFile } from './remove-file.js';
 import { useRevision } from './revision-context.js';
 
@@ -55,7 +57,12 @@ const columns: Column<FileRow>[] = [
 export function FilesTab() {
   const { revision, isWritable } = useRevision();
   const rows: FileRow[] = [
-    ...revision.parts.flatMap((part) => (part.file ? [{ file: part.file, partCode: part.code }] : [])),
+    ...revision.parts.flatMap((part) =>
+      meshesOf(part).map(({ clearance, file }) => ({
+        file,
+        partCode: clearance === 'zero' ? part.code : `${part.code} ${clearanceTexts.signs[clearance]}`,
+      })),
+    ),
     ...revision.documents.map((file) => ({ file, partCode: null })),
   ].sort(
     (a, b) =>

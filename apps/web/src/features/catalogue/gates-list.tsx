@@ -1,10 +1,10 @@
 import { Box } from '@chakra-ui/react/box';
 import type { Gate, RevisionDetail } from '@windchest/contracts';
 import { gateTexts } from '../../config/texts/workshop-revision.js';
-import { date } from '../../lib/format.js';
 import type { SignName } from '../../ui/sign.js';
 import { StatusLine } from '../../ui/status-mark.js';
 import { Heading } from '../../ui/text.js';
+import { GateWaiver } from './gate-waiver.js';
 
 const signs: Record<Gate['state'], SignName> = {
   passed: 'ok',
@@ -12,9 +12,6 @@ const signs: Record<Gate['state'], SignName> = {
   waived: 'warn',
   'not-needed': 'none',
 };
-
-const reasonOf = ({ waiver, reason }: Gate): string =>
-  waiver ? gateTexts.waivedBy(waiver.by, date(waiver.at), waiver.reason) : reason;
 
 /** What a release waits for: a sign, the gate, how it stands, and why. */
 export const GatesList = ({ revision }: { revision: RevisionDetail }) => (
@@ -37,11 +34,12 @@ export const GatesList = ({ revision }: { revision: RevisionDetail }) => (
               {gateTexts.states[gate.state]}
             </Box>
           </Box>
-          {reasonOf(gate) && (
+          {gate.reason && (
             <Box fontSize="sm" lineHeight="snug" color="ink.soft" overflowWrap="anywhere">
-              {reasonOf(gate)}
+              {gate.reason}
             </Box>
           )}
+          <GateWaiver revision={revision} gate={gate} />
         </StatusLine>
       ))}
     </Box>

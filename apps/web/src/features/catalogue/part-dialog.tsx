@@ -16,15 +16,13 @@ import { SelectField } from '../../ui/field/select-field.js';
 import { TextField } from '../../ui/field/text-field.js';
 import { Form } from '../../ui/form.js';
 import { DropPart } from './drop-part.js';
+import { PartVariants } from './part-variants.js';
 import { partBodyOf, type PartForm, partForm } from './part-form.js';
 import { PrintSpecFields } from './print-spec-fields.js';
+import { staleByParts } from './revision-context.js';
 import { VoiceFields } from './voice-fields.js';
 
 const formId = 'part-form';
-const stale = [
-  'GET /workshop/revisions/:revisionId',
-  'GET /workshop/revisions/:revisionId/comparison',
-] as const;
 
 export interface PartDialogProps {
   revision: RevisionDetail;
@@ -32,9 +30,12 @@ export interface PartDialogProps {
   onClose: () => void;
 }
 
-/** Code, name, pieces, orientation, voice and own settings of one part. */
+/** Code, name, pieces, orientation, voice, own settings and clearances of one part. */
 export function PartDialog({ revision, part, onClose }: PartDialogProps) {
-  const { run, fault, isRunning } = useAction('PUT /workshop/revisions/:revisionId/parts/:partId', stale);
+  const { run, fault, isRunning } = useAction(
+    'PUT /workshop/revisions/:revisionId/parts/:partId',
+    staleByParts,
+  );
   const [hasOwnWords, setHasOwnWords] = useState(false);
   const { register, control, handleSubmit, setError, formState } = useForm({
     defaultValues: partForm(part, revision.printSpec),
@@ -100,7 +101,9 @@ export function PartDialog({ revision, part, onClose }: PartDialogProps) {
         {isSounding && <VoiceFields kind={kind} register={register} errors={errors.voice} />}
         <Checkbox label={texts.ownSpec} {...register('hasOwnSpec')} />
         {hasOwnSpec && <PrintSpecFields register={register} errors={errors.printSpec as never} />}
+        <Checkbox label={texts.gauge} hint={texts.gaugeHint} {...register('isGauge')} />
       </Form>
+      <PartVariants revision={revision} part={part} />
     </Dialog>
   );
 }

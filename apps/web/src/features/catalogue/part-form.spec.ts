@@ -20,8 +20,12 @@ const part = (changes: Partial<Part> = {}): Part => ({
   orientation: 'may-turn',
   printSpec: null,
   voice: null,
+  isGauge: false,
   file: null,
   drawings: null,
+  previewBytes: null,
+  previewSha256: null,
+  variants: [],
   ...changes,
 });
 const voices: NonNullable<Part['voice']>[] = [
@@ -40,12 +44,13 @@ const voices: NonNullable<Part['voice']>[] = [
 
 describe('the form of a part', () => {
   it.each(voices)('gives back a $kind as it was', (voice) => {
-    const whole = part({ voice, printSpec: { ...spec, infill: 0.07 } });
+    const whole = part({ voice, isGauge: true, printSpec: { ...spec, infill: 0.07 } });
     const body = partBody.parse(partBodyOf(partForm(whole, spec)));
     expect(body).toEqual({
       code: 'P-72',
       name: 'Pipe C5',
       quantity: 1,
+      isGauge: true,
       orientation: 'may-turn',
       voice,
       printSpec: { ...spec, infill: 0.07 },

@@ -43,6 +43,7 @@ export interface PartForm {
   name: string;
   quantity: number;
   orientation: Part['orientation'];
+  isGauge: boolean;
   isSounding: boolean;
   voice: VoiceForm;
   hasOwnSpec: boolean;
@@ -77,6 +78,7 @@ export const partForm = (part: Part, revisionSpec: PrintSpecification): PartForm
   name: part.name,
   quantity: part.quantity,
   orientation: part.orientation,
+  isGauge: part.isGauge,
   isSounding: part.voice !== null,
   voice: voiceForm(part.voice),
   hasOwnSpec: part.printSpec !== null,
@@ -109,6 +111,7 @@ export const partBodyOf = (form: PartForm): unknown => ({
   name: form.name,
   quantity: form.quantity,
   orientation: form.orientation,
+  isGauge: form.isGauge,
   voice: form.isSounding ? voiceBody(form.voice) : null,
   printSpec: form.hasOwnSpec ? printSpecBody(form.printSpec) : null,
 });

@@ -1,5 +1,5 @@
 import type { Comparison, Part } from '@windchest/contracts';
-import { countedDifferences, partRows } from './part-rows.js';
+import { countedDifferences, isDifferent, partRows } from './part-rows.js';
 
 const part = (code: string): Part => ({
   id: code,
@@ -9,8 +9,12 @@ const part = (code: string): Part => ({
   orientation: 'as-exported',
   printSpec: null,
   voice: null,
+  isGauge: false,
   file: null,
   drawings: null,
+  previewBytes: null,
+  previewSha256: null,
+  variants: [],
 });
 const row = (code: string, difference: Comparison['rows'][number]['difference']) => ({
   code,
@@ -21,8 +25,10 @@ const row = (code: string, difference: Comparison['rows'][number]['difference'])
   sizeChangeMm: null,
   volumeChangePercent: null,
   areaChangePercent: null,
+  deviation: null,
   mark: null,
   reason: '',
+  variants: [],
 });
 const withEarlier = { id: 'x', label: 'Mk 1.0' };
 
@@ -44,6 +50,20 @@ describe('partRows', () => {
       ['B-4', true],
       ['P-1', false],
     ]);
+  });
+
+  it('leaves out what is the same where only changes are asked for', () => {
+    const rows = partRows([part('P-1'), part('P-2'), part('P-3'), part('P-4')], {
+      with: withEarlier,
+      rows: [
+        row('P-1', 'same'),
+        row('P-2', 'changed'),
+        row('P-3', 're-exported'),
+        row('P-4', 'new'),
+        row('B-4', 'dropped'),
+      ],
+    });
+    expect(rows.filter(isDifferent).map((one) => one.code)).toEqual(['P-2', 'P-4', 'B-4']);
   });
 
   it('compares with nothing where there is no earlier revision', () => {

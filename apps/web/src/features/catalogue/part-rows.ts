@@ -38,6 +38,10 @@ export function partRows(parts: readonly Part[], comparison: Comparison | undefi
   return [...present, ...dropped].sort((a, b) => rankOf(a) - rankOf(b) || byCode.compare(a.code, b.code));
 }
 
+/** Whether a reader who looks for changes wants to see it. */
+export const isDifferent = ({ comparison }: PartRow): boolean =>
+  comparison !== null && comparison.difference !== 'same' && comparison.difference !== 're-exported';
+
 /** How many parts differ in which way, in the order they are told; nothing where the count is nought. */
 export function countedDifferences(
   rows: readonly ComparisonRow[],

@@ -1,52 +1,29 @@
 import { Box } from '@chakra-ui/react/box';
-import type { Part } from '@windchest/contracts';
-import { lazy, Suspense, useEffect, useRef, useState } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { lazy, Suspense, useState } from 'react';
 import { partsTexts } from '../../config/texts/workshop-parts.js';
-import { useEndpoint } from '../../lib/use-endpoint.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
+import { Checkbox } from '../../ui/field/checkbox.js';
+import { Text } from '../../ui/text.js';
 import { ComparisonLine } from './comparison-line.js';
-import { partRows } from './part-rows.js';
+import { isDifferent, partRows } from './part-rows.js';
 import { PartsTable } from './parts-table.js';
 import { useRevision } from './revision-context.js';
 import { Upload } from './upload/upload.js';
+import { useComparedWith } from './use-compared-with.js';
+import { useComparison } from './use-comparison.js';
 
 const PartDialog = lazy(async () => ({ default: (await import('./part-dialog.js')).PartDialog }));
-
-/** What a comparison was made from; when it changes, the comparison is old. */
-const fingerprint = (parts: readonly Part[]) =>
-  parts
-    .map((part) => `${part.code} ${part.quantity} ${part.file?.sha256} ${part.file?.measuring}`)
-    .sort()
-    .join();
-
-function useComparison(revisionId: string, withId: string | undefined, parts: readonly Part[]) {
-  const answer = useEndpoint(
-    'GET /workshop/revisions/:revisionId/comparison',
-    { params: { revisionId }, query: { with: withId } },
-    { keepPreviousData: true },
-  );
-  const { mutate } = answer;
-  const made = fingerprint(parts);
-  const lastMade = useRef(made);
-  useEffect(() => {
-    if (made === lastMade.current) return;
-    lastMade.current = made;
-    void mutate();
-  }, [made, mutate]);
-  return answer;
-}
 
 /** The parts of a revision, measured and compared; files are dropped here. */
 export function PartsTab() {
   const { revision, isWritable } = useRevision();
-  const [params, setParams] = useSearchParams();
-  const withId = params.get('with') ?? undefined;
-  const { data: comparison, fault, mutate } = useComparison(revision.id, withId, revision.parts);
+  const { withId, isOnlyChanged, change } = useComparedWith();
+  const { data: comparison, fault, mutate } = useComparison(revision, withId);
   const [editedId, setEditedId] = useState<string>();
   const edited = revision.parts.find((part) => part.id === editedId);
   const rows = partRows(revision.parts, comparison);
+  const shown = isOnlyChanged && comparison?.with ? rows.filter(isDifferent) : rows;
 
   return (
     <>
@@ -61,19 +38,30 @@ export function PartsTab() {
         </EmptyState>
       ) : (
         <>
-          <ComparisonLine
-            revision={revision}
-            comparison={comparison}
-            withId={withId}
-            onWith={(id) => setParams(id ? { with: id } : {}, { replace: true })}
-          />
+          <ComparisonLine revision={revision} comparison={comparison}>
+            {comparison?.with && (
+              <Box marginTop="2">
+                <Checkbox
+                  label={partsTexts.onlyChanged}
+                  checked={isOnlyChanged}
+                  onChange={(event) => change({ only: event.target.checked ? 'changed' : '' })}
+                />
+              </Box>
+            )}
+          </ComparisonLine>
           {fault && <Fault fault={fault} onAgain={() => void mutate()} />}
-          <PartsTable
-            rows={rows}
-            comparedWith={comparison?.with?.label}
-            revisionId={revision.id}
-            onEdit={isWritable ? setEditedId : undefined}
-          />
+          {shown.length === 0 ? (
+            <Text isSoft>{partsTexts.allTheSame}</Text>
+          ) : (
+            <PartsTable
+              rows={shown}
+              comparedWith={comparison?.with?.label}
+              revision={revision}
+              onEdit={isWritable ? setEditedId : undefined}
+              // Marks are given against what buyers hold now, so against the last released revision.
+              isMarkable={isWritable && withId === undefined}
+            />
+          )}
         </>
       )}
       {edited && (

@@ -1,13 +1,21 @@
 import { Box } from '@chakra-ui/react/box';
+import type { RevisionDetail } from '@windchest/contracts';
+import { paths } from '../../config/paths.js';
 import { partsTexts } from '../../config/texts/workshop-parts.js';
 import { Button } from '../../ui/button.js';
 import { PartThumb } from '../../ui/drawing/parts-sheet.js';
+import { TextLink } from '../../ui/link.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
+import type { PreviewedPart } from '../bench/part-preview/part-turner.js';
+import { previewOfPart } from '../bench/part-preview/previewed-part.js';
+import { TurnButton } from '../bench/part-preview/turn-button.js';
+import { useTurning } from '../bench/part-preview/use-turning.js';
 import { MarkField } from './mark-field.js';
-import { MeasuredCell } from './measured-cell.js';
+import { MeasuredMeshes } from './measured-meshes.js';
 import type { Difference, PartRow } from './part-rows.js';
+import { useComparedWith } from './use-compared-with.js';
 
 const signs: Record<Difference, SignName> = {
   changed: 'warn',
@@ -24,9 +32,16 @@ const drawingOf = ({ part }: PartRow) => {
   return front.widthMm * front.heightMm >= top.widthMm * top.heightMm ? front : top;
 };
 
-const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => void) | undefined }) => {
+interface PartCellProps extends Pick<PartsTableProps, 'onEdit'> {
+  revisionId: string;
+  row: PartRow;
+  onTurn: (part: PreviewedPart) => void;
+}
+
+const PartCell = ({ row, revisionId, onEdit, onTurn }: PartCellProps) => {
   const drawing = drawingOf(row);
   const { part } = row;
+  const preview = part && previewOfPart(revisionId, part, drawing);
   return (
     <Box id={`part-${row.code}`} display="flex" gap="3.5" alignItems="center" scrollMarginTop="4">
       <Box width="2.75rem" flex="none" display="grid" placeItems="center">
@@ -37,24 +52,38 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
         <Box color="ink.soft" fontWeight="normal">
           {row.name}
         </Box>
-        {onEdit && part && (
-          <Button
-            look="plain"
-            size="sm"
-            minHeight="1.5rem"
-            paddingBlock="0"
-            onClick={() => onEdit(part.id)}
-            aria-label={partsTexts.editOf(row.code)}
-          >
-            {partsTexts.edit}
-          </Button>
+        {part?.isGauge && (
+          <Box fontSize="sm" fontWeight="normal">
+            {partsTexts.gauge}
+          </Box>
         )}
+        <Box display="flex" flexWrap="wrap" columnGap="4">
+          {onEdit && part && (
+            <Button
+              look="plain"
+              size="sm"
+              minHeight="1.5rem"
+              paddingBlock="0"
+              onClick={() => onEdit(part.id)}
+              aria-label={partsTexts.editOf(row.code)}
+            >
+              {partsTexts.edit}
+            </Button>
+          )}
+          {preview && <TurnButton code={row.code} onTurn={() => onTurn(preview)} />}
+        </Box>
       </Box>
     </Box>
   );
 };
 
-const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
+const SinceCell = ({
+  row: { comparison, code },
+  toDrawing,
+}: {
+  row: PartRow;
+  toDrawing: (code: string) => string;
+}) =>
   comparison && (
     <Box>
       <StatusMark
@@ -68,26 +97,51 @@ const SinceCell = ({ row: { comparison } }: { row: PartRow }) =>
       {comparison.whatDiffers && comparison.difference !== 'dropped' && comparison.difference !== 'new' && (
         <Box lineHeight="snug">{comparison.whatDiffers}</Box>
       )}
+      {comparison.difference === 'changed' && comparison.deviation && (
+        <Box marginTop="1" lineHeight="snug">
+          {comparison.deviation.state === 'waiting' ? (
+            <StatusMark state="wait" fontWeight="normal">
+              {partsTexts.comparingOne}
+            </StatusMark>
+          ) : (
+            <>
+              {comparison.deviation.where}
+              <Box>
+                <TextLink to={toDrawing(code)} aria-label={partsTexts.drawnOf(code)}>
+                  {partsTexts.drawn}
+                </TextLink>
+              </Box>
+            </>
+          )}
+        </Box>
+      )}
     </Box>
   );
 
 export interface PartsTableProps {
   rows: readonly PartRow[];
   comparedWith: string | undefined;
-  revisionId: string;
+  revision: RevisionDetail;
   /** Left out where nothing may be changed. */
   onEdit: ((partId: string) => void) | undefined;
+  isMarkable: boolean;
 }
 
 /** Every part with its drawing, what it measures, what changed, and what buyers should do about it. */
-export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTableProps) {
+export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }: PartsTableProps) {
+  const [turning, turn] = useTurning();
+  const { withId } = useComparedWith();
+  const changes = paths.workshop.changes.to(
+    { kitId: revision.kit.id, revisionId: revision.id },
+    { with: withId },
+  );
   const columns: Column<PartRow>[] = [
     {
       key: 'part',
       header: partsTexts.columns.part,
-      width: '23%',
+      width: '21%',
       isHeading: true,
-      cell: (row) => <PartCell row={row} onEdit={onEdit} />,
+      cell: (row) => <PartCell row={row} revisionId={revision.id} onEdit={onEdit} onTurn={turn} />,
     },
     {
       key: 'quantity',
@@ -102,31 +156,29 @@ export function PartsTable({ rows, comparedWith, revisionId, onEdit }: PartsTabl
     {
       key: 'measured',
       header: partsTexts.columns.measured,
-      width: '22%',
-      cell: (row) => row.part && <MeasuredCell file={row.part.file} />,
+      width: '20%',
+      cell: (row) => row.part && <MeasuredMeshes part={row.part} />,
     },
     {
       key: 'since',
       header: partsTexts.columns.since(comparedWith),
-      width: '22%',
-      cell: (row) => <SinceCell row={row} />,
+      width: '29%',
+      cell: (row) => <SinceCell row={row} toDrawing={(code) => `${changes}#change-${code}`} />,
     },
     {
       key: 'should',
       header: partsTexts.columns.should,
-      width: '27%',
+      width: '24%',
       cell: (row) =>
         row.comparison && (
-          <MarkField
-            key={row.code}
-            revisionId={revisionId}
-            row={row.comparison}
-            isWritable={onEdit !== undefined}
-          />
+          <MarkField key={row.code} revisionId={revision.id} row={row.comparison} isWritable={isMarkable} />
         ),
     },
   ];
   return (
-    <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+    <>
+      <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+      {turning}
+    </>
   );
 }

@@ -2,7 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import type { RevisionDetail } from '@windchest/contracts';
 import { useState } from 'react';
 import { useSWRConfig } from 'swr';
-import { releaseTexts } from '../../config/texts/workshop-revision.js';
+import { gateTexts, releaseTexts } from '../../config/texts/workshop-revision.js';
 import { useSession } from '../../lib/session.js';
 import { isAnswerOf, useAction } from '../../lib/use-action.js';
 import { Button } from '../../ui/button.js';
@@ -37,6 +37,9 @@ export function ReleaseAction({
   const { run, fault } = useAction('POST /workshop/revisions/:revisionId/release', stale);
   const { label, release, kit } = revision;
   const open = revision.gates.filter((gate) => gate.state === 'open').length;
+  const waived = revision.gates.flatMap(({ state, name }) =>
+    state === 'waived' ? gateTexts.names[name] : [],
+  );
 
   if (isBeingReleased(revision))
     return (
@@ -84,6 +87,7 @@ export function ReleaseAction({
             holders === undefined ? releaseTexts.holdersUnknown : releaseTexts.holdersCounted(holders),
           )}
         </Text>
+        {waived.length > 0 && <Text marginTop="3">{releaseTexts.waived(waived)}</Text>}
         <Text marginTop="3">{releaseTexts.final(label)}</Text>
       </ConfirmDialog>
     </>

@@ -6,6 +6,7 @@ import { useSession } from '../../lib/session.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { TitleBlock, type TitleBlockField } from '../../ui/title-block.js';
 import { ReleaseAction } from './release-action.js';
+import { useComparison } from './use-comparison.js';
 
 /** How many people are entitled to a kit; undefined while it is not known, or not theirs to know. */
 export function useHolderCount(kitId: string): number | undefined {
@@ -21,9 +22,7 @@ export function useHolderCount(kitId: string): number | undefined {
 export function ReleaseBlock({ revision }: { revision: RevisionDetail }) {
   const holders = useHolderCount(revision.kit.id);
   const isDraft = revision.state === 'draft' || revision.state === 'proving';
-  const { data: comparison } = useEndpoint('GET /workshop/revisions/:revisionId/comparison', {
-    params: { revisionId: revision.id },
-  });
+  const { data: comparison } = useComparison(revision);
   const toReprint = comparison?.rows.filter((row) => row.mark === 'reprint needed').length;
   const fields: TitleBlockField[] = [
     {

@@ -6,6 +6,7 @@ import { Button } from '../../ui/button.js';
 import { ConfirmDialog } from '../../ui/confirm-dialog.js';
 import { Fault } from '../../ui/fault.js';
 import { Text } from '../../ui/text.js';
+import { staleByParts } from './revision-context.js';
 
 export interface RemoveFileProps {
   revisionId: string;
@@ -16,10 +17,7 @@ export interface RemoveFileProps {
 /** Takes a file out of a draft, after asking. */
 export function RemoveFile({ revisionId, file, partCode }: RemoveFileProps) {
   const [isAsking, setIsAsking] = useState(false);
-  const { run, fault } = useAction('DELETE /workshop/revisions/:revisionId/files/:fileId', [
-    'GET /workshop/revisions/:revisionId',
-    'GET /workshop/revisions/:revisionId/comparison',
-  ]);
+  const { run, fault } = useAction('DELETE /workshop/revisions/:revisionId/files/:fileId', staleByParts);
   return (
     <>
       <Button
@@ -39,7 +37,13 @@ export function RemoveFile({ revisionId, file, partCode }: RemoveFileProps) {
         confirmLabel={texts.remove}
         onConfirm={async () => (await run({ params: { revisionId, fileId: file.id } })).isDone}
       >
-        <Text>{partCode ? texts.removeMesh(partCode) : texts.removeDocument}</Text>
+        <Text>
+          {partCode === null
+            ? texts.removeDocument
+            : file.clearance === 'zero'
+              ? texts.removeMesh(partCode)
+              : texts.removeVariant(partCode)}
+        </Text>
         {fault && <Fault what={texts.failed} fault={fault} />}
       </ConfirmDialog>
     </>

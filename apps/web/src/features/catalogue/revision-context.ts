@@ -2,6 +2,7 @@ import type { RevisionDetail } from '@windchest/contracts';
 import { useOutletContext } from 'react-router-dom';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { useSession } from '../../lib/session.js';
+import { filesOfParts } from './part-meshes.js';
 import { progressOf } from './upload/upload-item.js';
 import { useUploads } from './upload/uploads.js';
 
@@ -15,10 +16,16 @@ export interface RevisionContext {
 export const useRevision = () => useOutletContext<RevisionContext>();
 
 /** Asked again while something goes on: this often, in ms. */
-const lookAgainMs = 1500;
+export const lookAgainMs = 1500;
+
+/** What is old once a part or its files were changed. */
+export const staleByParts = [
+  'GET /workshop/revisions/:revisionId',
+  'GET /workshop/revisions/:revisionId/comparison',
+] as const;
 
 const isUnmeasured = (revision: RevisionDetail) =>
-  revision.parts.some((part) => part.file?.measuring === 'waiting' || part.file?.measuring === 'measuring');
+  filesOfParts(revision.parts).some(({ measuring }) => measuring === 'waiting' || measuring === 'measuring');
 
 export const isBeingReleased = ({ release }: Pick<RevisionDetail, 'release'>) =>
   release.state === 'waiting' || release.state === 'building';

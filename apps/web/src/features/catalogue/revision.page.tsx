@@ -18,12 +18,14 @@ import { GatesList } from './gates-list.js';
 import { ReleaseBlock } from './release-block.js';
 import { type RevisionContext, useIsWritable, useRevisionDetail } from './revision-context.js';
 import { ThrowAway } from './throw-away.js';
+import { useComparedWith } from './use-compared-with.js';
 
-const tabsOf = (params: { kitId: string; revisionId: string }) => [
-  { to: paths.workshop.revision.to(params), label: revisionTexts.tabs.parts },
+const tabsOf = (params: { kitId: string; revisionId: string }, withId: string | undefined) => [
+  // What is compared with stays the same from tab to tab.
+  { to: paths.workshop.revision.to(params, { with: withId }), label: revisionTexts.tabs.parts },
   { to: paths.workshop.notes.to(params), label: revisionTexts.tabs.notes },
   { to: paths.workshop.specification.to(params), label: revisionTexts.tabs.specification },
-  { to: paths.workshop.changes.to(params), label: revisionTexts.tabs.changes },
+  { to: paths.workshop.changes.to(params, { with: withId }), label: revisionTexts.tabs.changes },
   { to: paths.workshop.files.to(params), label: revisionTexts.tabs.files },
 ];
 
@@ -48,6 +50,7 @@ function ReadOnlyLine({ revision }: Pick<RevisionContext, 'revision'>) {
 /** One revision: its parts, words and files at the left, what its release waits for at the right. */
 export function RevisionPage() {
   const { kitId = '', revisionId = '' } = useParams();
+  const { withId } = useComparedWith();
   const { data: revision, fault, mutate, uploaded } = useRevisionDetail(revisionId);
   const isWritable = useIsWritable(revision);
   // The last answer of the polling may be older than the last file.
@@ -84,7 +87,7 @@ export function RevisionPage() {
               </Box>
             </Heading>
             <Box marginTop="5" marginBottom="5">
-              <Tabs label={revisionTexts.tabs.label} tabs={tabsOf({ kitId, revisionId })} />
+              <Tabs label={revisionTexts.tabs.label} tabs={tabsOf({ kitId, revisionId }, withId)} />
             </Box>
             {isWritable && (
               <Text display={{ lg: 'none' }} marginBottom="5">

@@ -1,5 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import type { Collection } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { collectTexts } from '../../config/texts/shelf.js';
 import { bytes, date } from '../../lib/format.js';
 import { Button } from '../../ui/button.js';
@@ -19,7 +20,9 @@ export interface CollectKitProps {
 /** The hash in the same letters as checksum tools print it, and the verb that copies it. */
 const Checksum = ({ kit }: { kit: CollectKitProps['kit'] }) => (
   <Box marginTop="4" fontSize="sm">
-    <Box color="ink.soft">{collectTexts.checksum}</Box>
+    <Box color="ink.soft">
+      {kit.newest.bundles.length > 0 ? collectTexts.checksumOfAll : collectTexts.checksum}
+    </Box>
     <Box display="flex" flexWrap="wrap" columnGap="4" rowGap="2" alignItems="center">
       <Box as="code" fontFamily="mono" fontSize="0.9em" overflowWrap="anywhere" minWidth="0" flex="0 1 auto">
         {kit.newest.bundleSha256}
@@ -30,6 +33,32 @@ const Checksum = ({ kit }: { kit: CollectKitProps['kit'] }) => (
         look="plain"
         aria-description={collectTexts.of(kit.name)}
       />
+    </Box>
+  </Box>
+);
+
+/** For those who know which clearance their printer needs. */
+const OneClearance = ({ kit, download }: Required<CollectKitProps>) => (
+  <Box marginTop="4">
+    <Text look="small" isSoft>
+      {collectTexts.clearances}
+    </Text>
+    <Box display="flex" flexWrap="wrap" gap="2" marginTop="2">
+      {kit.newest.bundles.map(({ clearance, bytes: size }) => {
+        const wish = { kitSlug: kit.slug, revisionId: kit.newest.id, clearance };
+        return (
+          <Button
+            key={clearance}
+            look="outline"
+            size="sm"
+            onClick={() => void download.start(wish)}
+            isBusy={download.isStarting(wish)}
+            busyWords={collectTexts.getting}
+          >
+            {collectTexts.getOne(clearanceTexts.named(clearance))} · {bytes(size)}
+          </Button>
+        );
+      })}
     </Box>
   </Box>
 );
@@ -84,6 +113,7 @@ export function CollectKit({ kit, download }: CollectKitProps) {
             </Button>
           )}
         </Box>
+        {download && kit.newest.bundles.length > 0 && <OneClearance kit={kit} download={download} />}
         {download && <Checksum kit={kit} />}
       </Box>
     </KitColour>

@@ -7,6 +7,7 @@ const part = (code: string, more: Partial<ShelfPart> = {}): ShelfPart => ({
   code,
   name: 'Pipe',
   quantity: 1,
+  clearance: null,
   difference: 'same',
   mark: null,
   reason: '',

@@ -38,6 +38,8 @@ export function countReprints(parts: readonly ShelfPart[]): ReprintCount {
 export interface ReprintRow {
   codes: string[];
   name: string;
+  /** Which of it to print; null where it comes in one, or nothing is chosen. */
+  clearance: ShelfPart['clearance'];
   /** Of all its codes together. */
   pieces: number;
   advice: ReprintAdvice;
@@ -53,13 +55,13 @@ export function reprintRows(parts: readonly ShelfPart[]): ReprintRow[] {
   for (const part of parts) {
     const advice = adviceFor(part);
     if (!advice) continue;
-    const { code, name, quantity, whatDiffers, reason } = part;
-    const alike = JSON.stringify([name, advice, whatDiffers, reason]);
+    const { code, name, clearance, quantity, whatDiffers, reason } = part;
+    const alike = JSON.stringify([name, clearance, advice, whatDiffers, reason]);
     const row = rows.get(alike);
     if (row) {
       row.codes.push(code);
       row.pieces += quantity;
-    } else rows.set(alike, { codes: [code], name, pieces: quantity, advice, whatDiffers, reason });
+    } else rows.set(alike, { codes: [code], name, clearance, pieces: quantity, advice, whatDiffers, reason });
   }
   return [...rows.values()].sort((a, b) => order.indexOf(a.advice) - order.indexOf(b.advice));
 }

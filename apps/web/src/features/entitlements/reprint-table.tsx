@@ -1,5 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Unbroken } from '../../ui/unbroken.js';
@@ -24,6 +25,11 @@ const columns: readonly Column<ReprintRow>[] = [
           {row.codes.join(', ')}
         </Box>{' '}
         {row.name}
+        {row.clearance && (
+          <Box as="span" fontWeight="normal">
+            , {shelfKitTexts.inClearance(clearanceTexts.signs[row.clearance])}
+          </Box>
+        )}
       </span>
     ),
   },

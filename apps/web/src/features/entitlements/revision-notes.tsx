@@ -1,11 +1,13 @@
 import { Box } from '@chakra-ui/react/box';
 import { chakra } from '@chakra-ui/react/styled-system';
 import type { ShelfKit } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { bytes, date } from '../../lib/format.js';
 import { Button } from '../../ui/button.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { Heading, Text } from '../../ui/text.js';
+import { chosenBundle } from './chosen-bundle.js';
 import { SmallMarkdown } from './small-markdown.js';
 import type { Download } from './use-download.js';
 
@@ -38,7 +40,7 @@ export function RevisionNotes({ kit, download, onPrinted }: RevisionNotesProps) 
     <Box borderBottomWidth="1px" borderColor="hairline">
       {kit.revisions.map((revision, at) => {
         const isHeld = revision.id === kit.held?.id;
-        const wish = { kitSlug: kit.slug, revisionId: revision.id };
+        const { wish, bytes: size, clearance } = chosenBundle(kit, revision);
         return (
           <Details key={revision.id} open={at === 0 || at < heldAt}>
             <Summary>
@@ -66,7 +68,11 @@ export function RevisionNotes({ kit, download, onPrinted }: RevisionNotesProps) 
                     isBusy={download.isStarting(wish)}
                     busyWords={shelfKitTexts.getting}
                   >
-                    {shelfKitTexts.getRevision(revision.label)} · {bytes(revision.bundleBytes)}
+                    {shelfKitTexts.getRevision(
+                      revision.label,
+                      clearance ? clearanceTexts.signs[clearance] : undefined,
+                    )}{' '}
+                    · {bytes(size)}
                   </Button>
                 )}
                 {!isHeld && (

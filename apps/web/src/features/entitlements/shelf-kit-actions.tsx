@@ -1,10 +1,13 @@
 import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { bytes } from '../../lib/format.js';
 import { Button } from '../../ui/button.js';
 import { Fault } from '../../ui/fault.js';
+import { chosenBundle } from './chosen-bundle.js';
+import { ClearanceChoice } from './clearance-choice.js';
 import { RowAnchor, RowButton, RowLink } from './ruled-rows.js';
 import { sectionIds } from './section-ids.js';
 import type { Download } from './use-download.js';
@@ -19,19 +22,21 @@ export interface ShelfKitActionsProps {
 export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsProps) {
   const { newest, held } = kit;
   const bundle = { kitSlug: kit.slug, revisionId: newest.id };
+  const { wish: own, bytes: ownBytes, clearance } = chosenBundle(kit, newest);
   return (
     <>
       <Box display="grid" gap="3" marginBottom="4">
+        {newest.bundles.length > 0 && <ClearanceChoice kit={kit} />}
         <Button
-          onClick={() => void download.start(bundle)}
-          isBusy={download.isStarting(bundle)}
+          onClick={() => void download.start(own)}
+          isBusy={download.isStarting(own)}
           busyWords={shelfKitTexts.getting}
         >
           <span>
-            {shelfKitTexts.getBundle}
+            {clearance ? shelfKitTexts.getBundleIn(clearanceTexts.signs[clearance]) : shelfKitTexts.getBundle}
             <Box as="span" fontWeight="normal">
               {' '}
-              · {bytes(newest.bundleBytes)}
+              · {bytes(ownBytes)}
             </Box>
           </span>
         </Button>
@@ -42,6 +47,14 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
         )}
       </Box>
       {download.fault && <Fault level={2} what={shelfKitTexts.getFailed} fault={download.fault} />}
+      {clearance && (
+        <RowButton onClick={() => void download.start(bundle)} aria-busy={download.isStarting(bundle)}>
+          {shelfKitTexts.getAll}
+          <Box as="span" color="ink.soft" whiteSpace="nowrap">
+            {bytes(newest.bundleBytes)}
+          </Box>
+        </RowButton>
+      )}
       {kit.documents.map((document) => {
         const wish = { ...bundle, file: document.sha256 };
         return (
@@ -57,6 +70,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
           </RowButton>
         );
       })}
+      {kit.rank.length > 0 && <RowLink to={paths.tuner.to({ slug: kit.slug })}>{shelfKitTexts.tune}</RowLink>}
       <RowAnchor href={`#${sectionIds.changeNotes}`}>{shelfKitTexts.changeNotes}</RowAnchor>
       <RowAnchor href={`#${sectionIds.licence}`}>{shelfKitTexts.licence}</RowAnchor>
       {kit.cautions && <RowAnchor href={`#${sectionIds.cautions}`}>{shelfKitTexts.cautions}</RowAnchor>}

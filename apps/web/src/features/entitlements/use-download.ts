@@ -1,14 +1,15 @@
-import type { OutputOf } from '@windchest/contracts';
+import type { Clearance, OutputOf } from '@windchest/contracts';
 import { useState } from 'react';
 import { useSWRConfig } from 'swr';
 import type { ApiFault } from '../../lib/api-fault.js';
 import { isAnswerOf, type Outcome, useAction } from '../../lib/use-action.js';
 
-/** A revision's bundle, or one document of it. */
+/** A revision's bundle, its bundle of one clearance, or one document of it. */
 export interface Wish {
   kitSlug: string;
   revisionId: string;
   file?: string;
+  clearance?: Clearance;
 }
 type Grant = OutputOf<'POST /shelf/grants'>;
 
@@ -19,7 +20,7 @@ export interface Download {
   fault: ApiFault | undefined;
 }
 
-const nameOf = (wish: Wish) => [wish.kitSlug, wish.revisionId, wish.file].join();
+const nameOf = (wish: Wish) => [wish.kitSlug, wish.revisionId, wish.file, wish.clearance].join();
 
 function useGrants(ask: (wish: Wish) => Promise<Outcome<Grant>>, fault: ApiFault | undefined): Download {
   const [starting, setStarting] = useState<string>();

@@ -49,7 +49,7 @@ export function RefundLineFields({ order, line, at, register, error, onTyped }: 
       gap="2.5"
       gridTemplateColumns={{ base: 'minmax(0, 1fr)', sm: '11rem minmax(0, 1fr)' }}
       columnGap="6"
-      alignItems="end"
+      alignItems="start"
     >
       <TextField
         label={name}
@@ -60,7 +60,7 @@ export function RefundLineFields({ order, line, at, register, error, onTyped }: 
         {...register(`lines.${at}.amount`, { validate: check, onChange: onTyped })}
       />
       {(line.right === 'active' || line.right === 'suspended') && (
-        <Box paddingBottom={{ sm: '2.5' }}>
+        <Box paddingTop={{ sm: '3.4rem' }}>
           <Checkbox label={texts.keeps(line.kitName)} {...register(`lines.${at}.keepsEntitlement`)} />
         </Box>
       )}

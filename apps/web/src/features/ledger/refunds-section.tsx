@@ -27,6 +27,13 @@ const Soft = ({ children }: { children: string }) =>
     </Box>
   );
 
+/** What failed ended nothing; what waits has not yet. */
+function rightWords({ state }: WorkshopRefund, isKept: boolean): string {
+  if (state === 'failed') return '';
+  if (isKept) return texts.keptRight;
+  return state === 'asked' ? texts.endingRight : texts.endedRight;
+}
+
 const Lines = ({ order, refund }: { order: WorkshopOrder; refund: WorkshopRefund }) =>
   refund.lines.map((line) => (
     <Box key={line.orderLineId}>
@@ -34,7 +41,7 @@ const Lines = ({ order, refund }: { order: WorkshopOrder; refund: WorkshopRefund
         order.lines.find((one) => one.id === line.orderLineId)?.kitName ?? '',
         line.amount.minor > 0 ? price(line.amount) : '',
       )}
-      <Soft>{line.keepsEntitlement ? texts.keptRight : texts.endedRight}</Soft>
+      <Soft>{rightWords(refund, line.keepsEntitlement)}</Soft>
     </Box>
   ));
 
@@ -112,7 +119,7 @@ export function RefundsSection({ order }: { order: WorkshopOrder }) {
             header: '',
             cell: (refund) =>
               canDecide(refund) && (
-                <Button look="outline" size="sm" onClick={() => setDecided(refund)}>
+                <Button look="plain" size="sm" whiteSpace="nowrap" onClick={() => setDecided(refund)}>
                   {texts.decide}
                 </Button>
               ),

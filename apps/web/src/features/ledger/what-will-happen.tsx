@@ -21,7 +21,7 @@ export function WhatWillHappen({ plan, order }: { plan: RefundPlan; order: Works
           ...(order.couponCode ? [texts.willCoupon(order.couponCode)] : []),
         ];
   return (
-    <Box as="ul" role="status" paddingLeft="5" display="grid" gap="1" color="ink.soft">
+    <Box as="ul" paddingLeft="5" listStyleType="disc" display="grid" gap="1" color="ink.soft">
       {sentences.map((sentence) => (
         <li key={sentence}>{sentence}</li>
       ))}

@@ -1,16 +1,19 @@
 import { Box } from '@chakra-ui/react/box';
-import type { KitPage, KitPart } from '@windchest/contracts';
+import type { KitPage } from '@windchest/contracts';
 import { lazy, Suspense, useState } from 'react';
 import { kitTexts } from '../../config/texts/kit.js';
 import { buildVolume, counted, grams, hoursRange, number } from '../../lib/format.js';
-import { usePrinterCard } from '../../lib/printer-card.js';
 import { Button } from '../../ui/button.js';
 import { Text } from '../../ui/text.js';
-import { FitLines } from './fit-lines.js';
+import { usePrinters } from '../bench/use-printers.js';
 
-const PrinterCardDialog = lazy(async () => ({
-  default: (await import('../bench/printer-card-dialog.js')).PrinterCardDialog,
+const OwnPrinterDialog = lazy(async () => ({
+  default: (await import('../bench/own-printer-dialog.js')).OwnPrinterDialog,
 }));
+const PrinterLine = lazy(async () => ({
+  default: (await import('../bench/printer-line.js')).PrinterLine,
+}));
+const KitPlates = lazy(async () => ({ default: (await import('./kit-plates.js')).KitPlates }));
 
 const Estimate = ({ estimate }: { estimate: NonNullable<KitPage['printEstimate']> }) => (
   <Text isSoft>
@@ -24,34 +27,29 @@ const Estimate = ({ estimate }: { estimate: NonNullable<KitPage['printEstimate']
   </Text>
 );
 
-export interface FitSectionProps {
-  kit: KitPage;
-  parts: readonly KitPart[] | undefined;
-}
-
-/** Each part against the visitor's own printer, once it is written down. */
-export function FitSection({ kit, parts }: FitSectionProps) {
-  const [printer] = usePrinterCard();
+/** The kit against one's own printer, once that is written down; nothing of it is fetched before. */
+export function FitSection({ kit }: { kit: KitPage }) {
+  const { chosen, isLoading } = usePrinters();
   const [isOpen, setIsOpen] = useState(false);
+  if (chosen)
+    return (
+      <Suspense fallback={<Text isSoft>{kitTexts.fitWorking}</Text>}>
+        <PrinterLine />
+        <KitPlates slug={kit.slug} printer={chosen} />
+      </Suspense>
+    );
   return (
     <Box display="grid" gap="4" justifyItems="start">
-      {printer ? (
-        <FitLines kit={kit} parts={parts} printer={printer} />
-      ) : (
-        <Text>{kitTexts.fitNobody(buildVolume(kit.buildVolume))}</Text>
-      )}
+      <Text>{kitTexts.fitNobody(buildVolume(kit.buildVolume))}</Text>
       {kit.printEstimate && <Estimate estimate={kit.printEstimate} />}
-      <Button
-        look={printer ? 'plain' : 'outline'}
-        size={printer ? 'sm' : 'md'}
-        aria-haspopup="dialog"
-        onClick={() => setIsOpen(true)}
-      >
-        {printer ? kitTexts.fitChange : kitTexts.fitOpen}
-      </Button>
+      {!isLoading && (
+        <Button look="outline" aria-haspopup="dialog" onClick={() => setIsOpen(true)}>
+          {kitTexts.fitOpen}
+        </Button>
+      )}
       {isOpen && (
         <Suspense>
-          <PrinterCardDialog onClose={() => setIsOpen(false)} />
+          <OwnPrinterDialog onClose={() => setIsOpen(false)} />
         </Suspense>
       )}
     </Box>

@@ -6,7 +6,7 @@ import { Fault } from '../../ui/fault.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band } from '../../ui/sheet.js';
 import { HomeHero } from './home-hero.js';
-import { kitListQuery, newestKits } from './kit-list-query.js';
+import { fitsOf, kitListQuery, newestKits } from './kit-list-query.js';
 import { KitList } from './kit-list.js';
 import { liveOffers } from './offers.js';
 import { KitRowsSkeleton } from './kit-rows-skeleton.js';
@@ -18,6 +18,7 @@ const NoKits = lazy(async () => ({ default: (await import('./no-kits.js')).NoKit
 export function HomePage() {
   const [address] = useSearchParams();
   const query = kitListQuery(address);
+  const fits = fitsOf(address);
   // With the usual sorting both are one question.
   const newest = useEndpoint('GET /kits', { query: newestKits });
   const list = useEndpoint('GET /kits', { query }, { keepPreviousData: true });
@@ -30,10 +31,10 @@ export function HomePage() {
       <Band paddingTop={{ base: '6', md: '7' }}>
         {list.data ? (
           list.data.items.length > 0 ? (
-            <KitList answer={list.data} offers={offers.data ?? []} sort={query.sort} />
+            <KitList answer={list.data} offers={offers.data ?? []} sort={query.sort} fits={fits} />
           ) : (
             <Suspense>
-              <NoKits page={query.page} onAgain={() => void list.mutate()} />
+              <NoKits page={query.page} fits={fits} onAgain={() => void list.mutate()} />
             </Suspense>
           )
         ) : list.fault ? (

@@ -29,8 +29,8 @@ export interface KitSectionsProps {
 /** What stands under the kit's sheet. */
 export const KitSections = ({ kit, parts, inRoom }: KitSectionsProps) => (
   <Band paddingTop={{ base: '2', md: '4' }}>
-    <RuledSection title={kitTexts.fit}>
-      <FitSection kit={kit} parts={parts.data} />
+    <RuledSection title={kitTexts.fit} isWide>
+      <FitSection kit={kit} />
     </RuledSection>
     {kit.description.trim() && (
       <RuledSection title={kitTexts.about}>

@@ -1,40 +1,52 @@
 import { paths } from '../../config/paths.js';
-import { homeTexts } from '../../config/texts/home.js';
+import { noKitsTexts } from '../../config/texts/no-kits.js';
 import { useSession } from '../../lib/session.js';
 import { Button, LinkButton } from '../../ui/button.js';
 import { EmptyState } from '../../ui/empty-state.js';
+import { fitsWords } from './fits-words.js';
+import type { Fits } from './kit-list-query.js';
 
 export interface NoKitsProps {
   page: number;
+  fits: Fits | undefined;
   onAgain: () => void;
 }
 
 /** A shop without kits, or a page after the last one. */
-export function NoKits({ page, onAgain }: NoKitsProps) {
+export function NoKits({ page, fits, onAgain }: NoKitsProps) {
   const { may } = useSession();
   if (page > 1)
     return (
       <EmptyState
-        title={homeTexts.beyond}
-        action={<LinkButton to={paths.home.to()}>{homeTexts.toFirst}</LinkButton>}
+        title={noKitsTexts.beyond}
+        action={<LinkButton to={paths.home.to()}>{noKitsTexts.toFirst}</LinkButton>}
       >
-        {homeTexts.beyondDetail}
+        {noKitsTexts.beyondDetail}
+      </EmptyState>
+    );
+  if (fits)
+    return (
+      <EmptyState
+        title={noKitsTexts.fitsNone(fitsWords(fits))}
+        action={<LinkButton to={paths.home.to()}>{noKitsTexts.fitsAll}</LinkButton>}
+      >
+        {noKitsTexts.fitsNoneDetail}
       </EmptyState>
     );
   return (
     <EmptyState
-      title={homeTexts.empty}
+      title={noKitsTexts.empty}
       action={
         may('kits:write') ? (
-          <LinkButton to={paths.workshop.newKit.to()}>{homeTexts.emptyStaff}</LinkButton>
+          <LinkButton to={paths.workshop.newKit.to()}>{noKitsTexts.emptyStaff}</LinkButton>
         ) : (
           <Button look="outline" onClick={onAgain}>
-            {homeTexts.emptyAgain}
+            {noKitsTexts.emptyAgain}
           </Button>
         )
       }
     >
-      {homeTexts.emptyDetail}
+      {noKitsTexts.emptyDetail}
     </EmptyState>
   );
 }

@@ -1,15 +1,26 @@
 import { Box } from '@chakra-ui/react/box';
 import type { KitPage, KitPart } from '@windchest/contracts';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { kitTexts } from '../../config/texts/kit.js';
 import { number } from '../../lib/format.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Text } from '../../ui/text.js';
+import { partPreviewTexts } from '../../config/texts/part-preview.js';
+import type { PreviewedPart } from '../bench/part-preview/part-turner.js';
+import { previewOfKitPart } from '../bench/part-preview/previewed-part.js';
+import { TurnButton } from '../bench/part-preview/turn-button.js';
 import { ownSettings } from './own-settings.js';
 
 const sizeWords = ({ sizeMm: { x, y, z } }: KitPart) => [x, y, z].map((side) => number(side, 1)).join(' × ');
 
+export interface PartsListProps {
+  parts: readonly KitPart[];
+  kit: KitPage;
+  onTurn: (part: PreviewedPart) => void;
+}
+
 /** The parts of a kit by their codes; assembly and change notes link here. */
-export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitPage }) {
+export function PartsList({ parts, kit, onTurn }: PartsListProps) {
   const columns: Column<KitPart>[] = [
     {
       key: 'part',
@@ -23,6 +34,16 @@ export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitP
               {part.code}
             </Box>{' '}
             {part.name}
+            {part.isGauge && (
+              <Text look="small" isSoft fontWeight="normal">
+                {kitTexts.isGauge}
+              </Text>
+            )}
+            {part.clearances.length > 0 && (
+              <Text look="small" isSoft fontWeight="normal">
+                {kitTexts.inClearances(clearanceTexts.all(part.clearances))}
+              </Text>
+            )}
             {own.length > 0 && (
               <Text look="small" isSoft fontWeight="normal">
                 {kitTexts.ownSettings(own.join(', '))}
@@ -34,6 +55,15 @@ export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitP
     },
     { key: 'quantity', header: kitTexts.quantity, isNumeric: true, cell: (part) => number(part.quantity) },
     { key: 'size', header: kitTexts.size, isNumeric: true, cell: sizeWords },
+    {
+      key: 'turn',
+      header: partPreviewTexts.column,
+      isNumeric: true,
+      cell: (part) => {
+        const preview = previewOfKitPart(kit.slug, part);
+        return preview && <TurnButton code={part.code} onTurn={() => onTurn(preview)} />;
+      },
+    },
   ];
   return (
     <HairlineTable

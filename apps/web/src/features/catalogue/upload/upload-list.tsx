@@ -6,6 +6,7 @@ import { bytes } from '../../../lib/format.js';
 import { Button } from '../../../ui/button.js';
 import type { SignName } from '../../../ui/sign.js';
 import { StatusMark } from '../../../ui/status-mark.js';
+import { filesOfParts } from '../part-meshes.js';
 import { isArrived, type UploadItem } from './upload-item.js';
 
 interface Standing {
@@ -122,7 +123,7 @@ export interface UploadListProps {
 /** Every file of the upload with how far it is. */
 export function UploadList({ items, revision, onRetry }: UploadListProps) {
   const [isWhole, setIsWhole] = useState(false);
-  const files = [...revision.documents, ...revision.parts.flatMap((part) => part.file ?? [])];
+  const files = [...revision.documents, ...filesOfParts(revision.parts)];
   const standing = items.map((item) => ({
     item,
     standing: standingOf(item, isArrived(item) ? fileOf(item, files) : undefined),
