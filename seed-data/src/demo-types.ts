@@ -134,6 +134,22 @@ export interface DemoPurchase {
   paidFrom?: { billing: string; card: string };
 }
 
+export interface DemoPlan {
+  name: string;
+  words: string;
+  amountMinor: number;
+  /** None: all kits, and those to come. */
+  kitSlugs: string[] | null;
+  keepsAfter: 'nothing' | 'released-during' | 'released-before-end';
+}
+
+export interface DemoPledge {
+  supporterEmail: string;
+  planName: string;
+  /** Its end is asked for already: it runs out with the month. */
+  isEnding: boolean;
+}
+
 export interface DemoWorkshop {
   workshop: {
     name: string;
@@ -150,6 +166,8 @@ export interface DemoWorkshop {
   kits: DemoKit[];
   coupons: DemoCoupon[];
   purchases: DemoPurchase[];
+  plans: DemoPlan[];
+  pledges: DemoPledge[];
 }
 
 /** A part together with what draws its mesh. */

@@ -5,6 +5,7 @@ import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { turnstone } from './kits/turnstone.js';
 import { people, printers, purchases } from './people.js';
+import { plans, pledges } from './pledges.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
 
@@ -45,4 +46,6 @@ export const demoWorkshop: DemoWorkshop = {
     },
   ],
   purchases,
+  plans,
+  pledges,
 };

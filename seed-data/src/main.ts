@@ -3,6 +3,7 @@ import { buy } from './load/buy.js';
 import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { makePeople } from './load/make-people.js';
+import { beginPledge, makePlan } from './load/pledge.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
 
@@ -56,6 +57,21 @@ const main = async (): Promise<void> => {
     const orderId = await buy(await signIn(person.email), person, purchase, stripeUrl);
     say(`${person.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
     if (purchase.givenBack) await giveBack(bookkeeper, orderId, purchase.givenBack);
+  }
+
+  const planIds = new Map<string, string>();
+  for (const plan of demoWorkshop.plans) planIds.set(plan.name, await makePlan(maker, plan, kitIds));
+  for (const pledge of demoWorkshop.pledges) {
+    const person = demoWorkshop.people.find((one) => one.email === pledge.supporterEmail);
+    if (person)
+      await beginPledge(
+        await signIn(person.email),
+        person,
+        planIds.get(pledge.planName) ?? '',
+        pledge,
+        stripeUrl,
+      );
+    say(`${person?.name} pledges to ${pledge.planName}`);
   }
 
   for (const kit of demoWorkshop.kits)

@@ -37,6 +37,21 @@ export const people: DemoPerson[] = [
     countryCode: 'DE',
     isVerified: true,
   },
+  { role: 'buyer', name: 'Enno Rask', email: 'enno.rask@mail.example', countryCode: 'NL', isVerified: true },
+  {
+    role: 'buyer',
+    name: 'Sorrel Vane',
+    email: 'sorrel.vane@mail.example',
+    countryCode: 'FR',
+    isVerified: true,
+  },
+  {
+    role: 'buyer',
+    name: 'Bryony Tarn',
+    email: 'bryony.tarn@mail.example',
+    countryCode: 'AT',
+    isVerified: true,
+  },
   { role: 'buyer', name: 'Rhea Moss', email: 'rhea.moss@mail.example', countryCode: 'FR', isVerified: false },
 ];
 

@@ -13,6 +13,8 @@ import { LedgerModule } from './ledger/ledger.module.js';
 import { MailsModule } from './mails/mails.module.js';
 import { MeasuringModule } from './measuring/measuring.module.js';
 import { OrdersModule } from './orders/orders.module.js';
+import { PaymentsModule } from './payments/payments.module.js';
+import { SupportersModule } from './supporters/supporters.module.js';
 import { WorkshopModule } from './workshop/workshop.module.js';
 
 @Module({
@@ -23,6 +25,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     HttpModule,
     JobsModule,
     MailsModule,
+    PaymentsModule,
     ScheduleModule.forRoot(),
     // The rooms, lower ones first.
     AccountsModule,
@@ -30,6 +33,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     MeasuringModule,
     CouponsModule,
     OrdersModule,
+    SupportersModule,
     LedgerModule,
     EntitlementsModule,
     WorkshopModule,

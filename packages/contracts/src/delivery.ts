@@ -43,9 +43,23 @@ export const shelfItem = z.object({
   colour: filamentColour,
   source: entitlementSource,
   since: moment,
+  /** All that holds it on the shelf: one may end and leave the other. */
+  sources: z.array(
+    z.object({
+      source: entitlementSource,
+      since: moment,
+      /** Of a pledge: how far it is paid. */
+      until: moment.nullable(),
+      /** What stays after a pledge: revisions released before this moment. */
+      releasedBefore: moment.nullable(),
+    }),
+  ),
   licenceName: z.string(),
   held: shelfRevision.nullable(),
+  /** The newest one that is theirs. */
   newest: shelfRevision,
+  /** A newer one that a pledge which is over does not include. */
+  newerNotIncluded: z.string().nullable(),
 });
 export type ShelfItem = z.output<typeof shelfItem>;
 

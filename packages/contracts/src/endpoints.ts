@@ -8,6 +8,7 @@ import { peopleEndpoints } from './people.js';
 import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
+import { supporterEndpoints } from './supporters.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
 
@@ -22,6 +23,7 @@ export const endpoints = {
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
   ...ledgerEndpoints,
+  ...supporterEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

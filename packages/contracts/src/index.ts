@@ -17,5 +17,6 @@ export * from './workshop-revisions.js';
 export * from './workshop-sales.js';
 export * from './ledger.js';
 export * from './tax-records.js';
+export * from './supporters.js';
 export * from './people.js';
 export * from './health.js';

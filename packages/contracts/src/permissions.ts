@@ -19,6 +19,8 @@ export const permissionTable = {
   'orders:refund': ['bookkeeper', 'owner'],
   'ledger:read': ['bookkeeper', 'owner'],
   'tax:write': ['bookkeeper', 'owner'],
+  'supporters:read': ['bookkeeper', 'maker', 'owner'],
+  'plans:write': ['maker', 'owner'],
   'buyers:read': ['helper', 'bookkeeper', 'maker', 'owner'],
   'links:resend': ['helper', 'bookkeeper', 'maker', 'owner'],
   'people:read': ['owner'],

@@ -92,7 +92,8 @@ export const receiptRow = z.object({
   kind: z.enum(['receipt', 'credit-note']),
   number: z.string(),
   issuedAt: moment,
-  orderId: id,
+  /** Null for the month of a pledge. */
+  orderId: id.nullable(),
   orderNumber: z.string(),
   email: z.string(),
   country: countryCode,

@@ -1,4 +1,5 @@
 import type { Money } from '@windchest/money';
+import type { PledgeMessage } from './pledge-message.js';
 
 /** The workshop as a mail shows it. `locale` is a language tag for amounts and dates, such as `en-GB`. */
 export type EmailWorkshop = {
@@ -173,6 +174,7 @@ export type EmailMessage =
   | PaymentDisputedMessage
   | StaffInviteMessage
   | RevisionReleasedMessage
-  | GiftReceivedMessage;
+  | GiftReceivedMessage
+  | PledgeMessage;
 
 export type EmailTemplate = EmailMessage['template'];

@@ -23,3 +23,4 @@ export type {
   TaxLine,
   VerifyAddressMessage,
 } from './email-message.js';
+export type { PledgeMessage } from './pledge-message.js';

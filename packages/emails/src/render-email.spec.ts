@@ -98,6 +98,16 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'staff-invite': true,
     'revision-released': true,
     'gift-received': true,
+    'pledge-began': true,
+    'pledge-receipt': true,
+    'pledge-payment-failed': true,
+    'pledge-grace-ends-soon': true,
+    'pledge-lapsed': true,
+    'pledge-will-end': true,
+    'pledge-ended': true,
+    'pledge-paused': true,
+    'pledge-resumes-soon': true,
+    'pledge-plan-changes': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(
     new Set(Object.keys(templates)),
@@ -236,7 +246,7 @@ describe('the mail of a new revision', () => {
 
 describe('hostile input', () => {
   /** Told apart by the code, never shown. */
-  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause'];
+  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause', 'keeps'];
   const attack = `<img src=x onerror="alert('1')">&amp;`;
 
   it('is escaped wherever a message or the workshop carries it', () => {

@@ -7,6 +7,8 @@ import * as accountMails from './templates/account-mails.js';
 import * as disputeMails from './templates/dispute-mails.js';
 import * as deliveryMails from './templates/delivery-mails.js';
 import * as orderMails from './templates/order-mails.js';
+import * as pledgeMails from './templates/pledge-mails.js';
+import * as pledgeRestMails from './templates/pledge-rest-mails.js';
 
 function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent {
   switch (message.template) {
@@ -34,6 +36,24 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return deliveryMails.revisionReleased(message);
     case 'gift-received':
       return deliveryMails.giftReceived(message, workshop);
+    case 'pledge-began':
+      return pledgeMails.pledgeBegan(message, workshop);
+    case 'pledge-receipt':
+      return pledgeMails.pledgeReceipt(message, workshop);
+    case 'pledge-payment-failed':
+    case 'pledge-grace-ends-soon':
+      return pledgeMails.pledgeUnpaid(message, workshop);
+    case 'pledge-plan-changes':
+      return pledgeMails.pledgePlanChanges(message, workshop);
+    case 'pledge-lapsed':
+    case 'pledge-ended':
+      return pledgeRestMails.pledgeOver(message);
+    case 'pledge-will-end':
+      return pledgeRestMails.pledgeWillEnd(message, workshop);
+    case 'pledge-paused':
+      return pledgeRestMails.pledgePaused(message, workshop);
+    case 'pledge-resumes-soon':
+      return pledgeRestMails.pledgeResumesSoon(message, workshop);
   }
 }
 

@@ -1,4 +1,5 @@
 import type { DemoPerson, DemoPurchase } from '../demo-types.js';
+import { pay } from './pay.js';
 import { waitFor, type ShopBrowser } from './shop-browser.js';
 
 interface KitAnswer {
@@ -51,25 +52,4 @@ export const buy = async (
     await buyer.download(grant.url);
   }
   return orderId;
-};
-
-const pay = async (
-  stripeUrl: string,
-  paymentUrl: string,
-  person: DemoPerson,
-  paidFrom: DemoPurchase['paidFrom'],
-): Promise<void> => {
-  const session = /\/(cs_[A-Za-z0-9_]+)/.exec(paymentUrl)?.[1];
-  const response = await fetch(`${stripeUrl}/control/sessions/${session}/pay`, {
-    method: 'POST',
-    headers: { 'Content-Type': 'application/json' },
-    body: JSON.stringify({
-      country: paidFrom?.billing ?? person.countryCode,
-      cardCountry: paidFrom?.card ?? person.countryCode,
-      email: person.email,
-      outcome: 'succeed',
-    }),
-  });
-  if (!response.ok)
-    throw new Error(`The payment stand-in answered ${response.status}: ${await response.text()}`);
 };

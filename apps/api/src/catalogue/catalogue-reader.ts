@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Clearance, FilamentColour, RankVoice } from '@windchest/contracts';
+import type { Clearance, FilamentColour, KitCard, RankVoice } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { Differences, type ReprintRow } from './comparison/differences.js';
@@ -9,6 +9,7 @@ import { Kit } from './kits/kit.model.js';
 import { rankOf } from './kits/rank.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
+import { ShopKits } from './kits/shop-kits.js';
 import { ReleasedBundles, type BundleFile, type ClearanceBundle } from './release/released-bundles.js';
 import { servable, type ServableFile } from './release/stored-file-of.js';
 import { hasVariants } from './revisions/part-files.js';
@@ -56,6 +57,7 @@ export class CatalogueReader {
     private readonly contents: RevisionContents,
     private readonly bundles: ReleasedBundles,
     private readonly changes: Differences,
+    private readonly shop: ShopKits,
   ) {}
 
   /** Those of the licences that can be bought now. */
@@ -72,6 +74,21 @@ export class CatalogueReader {
     return (await this.kits.findAll({ where: { id: [...new Set(ids)] }, order: [['name', 'ASC']] })).map(
       toKit,
     );
+  }
+
+  /** Kits that stand in the shop with a released revision, by name. */
+  async kitsInShop(tx?: Tx): Promise<KitFacts[]> {
+    const rows = await this.kits.findAll({
+      where: { isListed: true, newestRevisionId: { [Op.ne]: null } },
+      order: [['name', 'ASC']],
+      transaction: tx ?? null,
+    });
+    return rows.map(toKit);
+  }
+
+  /** The shop's cards of those kits that are on sale. */
+  shopCards(kitIds: readonly string[]): Promise<(KitCard & { id: string })[]> {
+    return this.shop.cardsByIds(kitIds);
   }
 
   async kitBySlug(slug: string): Promise<KitFacts | null> {

@@ -23,6 +23,7 @@ import { GateWaiver } from './gates/gate-waiver.model.js';
 import { Gates } from './gates/gates.js';
 import { WaiveGate } from './gates/waive-gate.js';
 import { DraftKit } from './kits/draft-kit.js';
+import { KitInShopSteps } from './kits/kit-in-shop-steps.js';
 import { KitPageHead } from './kits/kit-page-head.js';
 import { Kit } from './kits/kit.model.js';
 import { KitsController } from './kits/kits.controller.js';
@@ -71,6 +72,7 @@ import { StartRevision } from './revisions/start-revision.js';
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
   providers: [
     ShopKits,
+    KitInShopSteps,
     KitPageHead,
     WorkshopKits,
     DraftKit,
@@ -107,6 +109,13 @@ import { StartRevision } from './revisions/start-revision.js';
     KitsTooBig,
   ],
   // The measuring room writes what it finds through the records.
-  exports: [CatalogueReader, CatalogueWaiting, MeasurementRecords, MeshComparisons, PrintPlans],
+  exports: [
+    CatalogueReader,
+    KitInShopSteps,
+    CatalogueWaiting,
+    MeasurementRecords,
+    MeshComparisons,
+    PrintPlans,
+  ],
 })
 export class CatalogueModule {}

@@ -79,6 +79,8 @@ export const environmentSchema = z.object({
 
   LINK_DAYS: z.coerce.number().int().min(1).max(365).default(14),
   LINK_USES: z.coerce.number().int().min(1).max(1000).default(10),
+  /** How long a supporter's shelf stays as it is while a payment is open. */
+  PLEDGE_GRACE_DAYS: z.coerce.number().min(1).max(60).default(7),
   FILE_ADDRESS_MINUTES: z.coerce.number().min(1).max(1440).default(60),
 
   JOB_POLL_MS: z.coerce.number().int().min(10).max(60_000).default(500),

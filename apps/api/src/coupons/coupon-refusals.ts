@@ -1,7 +1,7 @@
 import type { CouponOff } from '@windchest/contracts';
 import { formatMoney, fraction, money, percentOf } from '@windchest/money';
 import { discountsOf } from './coupon-rules.js';
-import { isChargeable, smallestChargeOf } from './smallest-charge.js';
+import { isChargeable, smallestChargeOf } from '../payments/smallest-charge.js';
 
 /** A coupon as it is about to be kept. */
 export interface WantedCoupon {

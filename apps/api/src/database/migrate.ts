@@ -14,6 +14,7 @@ import * as refunds from './migrations/0011-refunds.js';
 import * as couponRules from './migrations/0013-coupon-rules.js';
 import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
 import * as gifts from './migrations/0015-gifts.js';
+import * as supporters from './migrations/0012-supporters.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -30,6 +31,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0013-coupon-rules': couponRules,
   '0014-tax-and-business': taxAndBusiness,
   '0015-gifts': gifts,
+  '0012-supporters': supporters,
 };
 
 /**
@@ -62,6 +64,7 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
     return done.map((one) => one.name);
   } finally {
     // The connection goes back to the pool alive: without this a failed migration would block every other process.
+    // Also after a fault: the pooled connection would keep the lock, and with it every other process waiting.
     await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }

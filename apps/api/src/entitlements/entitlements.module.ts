@@ -3,6 +3,7 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { OrdersModule } from '../orders/orders.module.js';
+import { SupportersModule } from '../supporters/supporters.module.js';
 import { Collections } from './collections.js';
 import { DeliveryController } from './delivery.controller.js';
 import { DownloadLink } from './download-link.model.js';
@@ -14,6 +15,7 @@ import { FileGrants } from './file-grants.js';
 import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holders } from './holders.js';
+import { PledgeEntitlements } from './pledge-entitlements.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -24,6 +26,7 @@ import { SignedAddress } from './signed-address.js';
     AccountsModule,
     CatalogueModule,
     OrdersModule,
+    SupportersModule,
     SequelizeModule.forFeature([Entitlement, DownloadLink, Download]),
   ],
   controllers: [ShelfController, DeliveryController],
@@ -35,6 +38,7 @@ import { SignedAddress } from './signed-address.js';
     GiftMail,
     GiveEntitlements,
     FollowOrderRights,
+    PledgeEntitlements,
     Collections,
     Shelf,
     Holders,

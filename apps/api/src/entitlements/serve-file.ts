@@ -12,6 +12,7 @@ import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { browserMark } from './file-grants.js';
+import { covers } from './may-download.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
 
@@ -51,7 +52,7 @@ export class ServeFile {
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
     if (entitlement?.state === 'suspended')
       throw new Refusal('forbidden', 'Downloads of this kit rest while its payment is in dispute.');
-    if (!download || entitlement?.state !== 'active')
+    if (!download || !entitlement || !(await this.isStillTheirs(entitlement, download.revisionId)))
       throw new Refusal('forbidden', 'The right to this file has ended.');
     const file: (ServableFile & Partial<BundleFile>) | null = download.isBundle
       ? await this.catalogue.bundleByHash(download.revisionId, download.sha256)
@@ -66,6 +67,13 @@ export class ServeFile {
     if (isHead) return;
     await this.countSent(download, sent.bytes, sent.reachedEnd);
     if (sent.reachedEnd && download.isBundle) await this.noteHeld(download, file.clearance ?? null);
+  }
+
+  private async isStillTheirs(entitlement: Entitlement, revisionId: string): Promise<boolean> {
+    if (entitlement.state !== 'active') return false;
+    const isBounded = entitlement.releasedFrom !== null || entitlement.releasedBefore !== null;
+    const revision = isBounded ? await this.catalogue.revisionById(revisionId) : null;
+    return covers(entitlement, revision?.releasedAt ?? null);
   }
 
   private async countRequest(id: string): Promise<void> {

@@ -3,13 +3,14 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Answer, Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
-import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { CatalogueReader, type ReleasedRevision } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
 import { notFound, Refusal } from '../http/refusal.js';
 import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { covers } from './may-download.js';
 import { toShelfRevision } from './shelf-revision.js';
 
 const PAGE_SIZE = 24;
@@ -71,25 +72,24 @@ export class Shelf {
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
     const chosen = clearanceFor(best, null);
-    const [revisions, parts, clearances, documents, cautions, voicing, downloads, [licence]] =
-      await Promise.all([
-        this.catalogue.revisionsOf(kit.id),
-        this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
-        this.catalogue.clearancesOf(item.newest.id),
-        this.catalogue.documentsOf(item.newest.id),
-        this.catalogue.cautionsOf(item.newest.id),
-        this.catalogue.voicingOf((item.held ?? item.newest).id),
-        this.downloadsOf(person, kit.id),
-        this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
-      ]);
+    const mine = await this.revisionsOf(person, kit.id);
+    const [parts, clearances, documents, cautions, voicing, downloads, [licence]] = await Promise.all([
+      this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+      this.catalogue.clearancesOf(item.newest.id),
+      this.catalogue.documentsOf(item.newest.id),
+      this.catalogue.cautionsOf(item.newest.id),
+      this.catalogue.voicingOf((item.held ?? item.newest).id),
+      this.downloadsOf(person, kit.id),
+      this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
+    ]);
     if (!voicing) throw notFound('kit on your shelf');
-    const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
+    const labels = new Map(mine.all.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
       // The order behind a gift is the giver's own affair.
       orderId: best && best.source !== 'gift' ? best.orderId : null,
       clearance: { ...clearances, chosen },
-      revisions: revisions.map(toShelfRevision),
+      revisions: mine.covered.map(toShelfRevision),
       parts,
       documents,
       licenceTerms: licence?.terms ?? '',
@@ -140,10 +140,11 @@ export class Shelf {
   ): Promise<Answer<'GET /shelf'>['items'][number] | null> {
     const best = await this.bestOf(person, kitId);
     const [kit] = await this.catalogue.kitsByIds([kitId]);
-    const revisions = await this.catalogue.revisionsOf(kitId);
-    const newest = revisions.find((one) => !one.isWithdrawn);
+    const { all, covered, active, heldRevisionId } = await this.revisionsOf(person, kitId);
+    const newest = covered.find((one) => !one.isWithdrawn);
     if (!best || !kit || !newest) return null;
-    const held = revisions.find((one) => one.id === best.heldRevisionId);
+    const held = all.find((one) => one.id === heldRevisionId);
+    const beyond = all.find((one) => !one.isWithdrawn);
     const [licence] = await this.catalogue.licencesByIds(best.licenceId ? [best.licenceId] : []);
     return {
       slug: kit.slug,
@@ -152,9 +153,35 @@ export class Shelf {
       colour: kit.colour,
       source: best.source,
       since: best.createdAt.toISOString(),
+      sources: active.map((one) => ({
+        source: one.source,
+        since: one.createdAt.toISOString(),
+        until: one.untilAt?.toISOString() ?? null,
+        releasedBefore: one.releasedBefore?.toISOString() ?? null,
+      })),
       licenceName: licence?.name ?? '',
       held: held ? toShelfRevision(held) : null,
       newest: toShelfRevision(newest),
+      newerNotIncluded: beyond && beyond.id !== newest.id ? beyond.label : null,
+    };
+  }
+
+  /** A kit's revisions, those of them that are theirs, and the one held, by whatever right it was fetched. */
+  private async revisionsOf(person: SignedIn, kitId: string): Promise<OwnRevisions> {
+    const mine = await this.entitlements.findAll({
+      where: { personId: person.id, kitId },
+      order: [['createdAt', 'ASC']],
+    });
+    const active = mine.filter((one) => one.state === 'active');
+    const all = await this.catalogue.revisionsOf(kitId);
+    const [held] = mine
+      .filter((one) => one.heldSince !== null)
+      .sort((a, b) => (b.heldSince?.getTime() ?? 0) - (a.heldSince?.getTime() ?? 0));
+    return {
+      all,
+      covered: all.filter(({ releasedAt }) => active.some((one) => covers(one, releasedAt))),
+      active,
+      heldRevisionId: held?.heldRevisionId ?? null,
     };
   }
 
@@ -180,4 +207,11 @@ export class Shelf {
       limit: 20,
     });
   }
+}
+
+interface OwnRevisions {
+  readonly all: ReleasedRevision[];
+  readonly covered: ReleasedRevision[];
+  readonly active: Entitlement[];
+  readonly heldRevisionId: string | null;
 }

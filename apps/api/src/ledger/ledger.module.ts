@@ -2,6 +2,7 @@ import { Module } from '@nestjs/common';
 import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { OrdersModule } from '../orders/orders.module.js';
+import { SupportersModule } from '../supporters/supporters.module.js';
 import { BooksController } from './books/books.controller.js';
 import { LedgerExport } from './books/ledger-export.model.js';
 import { ListPayments } from './books/list-payments.js';
@@ -16,6 +17,7 @@ import { YearFiles } from './books/year-files.js';
 import { CreditNote } from './credit-note.model.js';
 import { ExportOrders } from './export-orders.js';
 import { ExportReceipts } from './export-receipts.js';
+import { ExportSupporters } from './export-supporters.js';
 import { LedgerController } from './ledger.controller.js';
 import { ListReceipts } from './list-receipts.js';
 import { NumberSeries } from './number-series.js';
@@ -35,12 +37,14 @@ import { TaxQuarters } from './tax/tax-quarters.js';
 import { TaxController } from './tax/tax.controller.js';
 import { TaxRates } from './tax-rates.js';
 import { WriteCreditNote } from './write-credit-note.js';
+import { WritePledgeReceipt } from './write-pledge-receipt.js';
 import { WriteReceipt } from './write-receipt.js';
 
 @Module({
   imports: [
     AccountsModule,
     OrdersModule,
+    SupportersModule,
     SequelizeModule.forFeature([Receipt, CreditNote, LedgerExport, Reconciliation]),
   ],
   controllers: [LedgerController, ReceiptsController, TaxController, BooksController],
@@ -48,11 +52,13 @@ import { WriteReceipt } from './write-receipt.js';
     TaxRates,
     NumberSeries,
     WriteReceipt,
+    WritePledgeReceipt,
     WriteCreditNote,
     ReceiptFiles,
     ListReceipts,
     ExportOrders,
     ExportReceipts,
+    ExportSupporters,
     ListRates,
     ChangeRates,
     TaxQuarters,

@@ -14,7 +14,7 @@ export interface WrittenRow {
   readonly kind: 'receipt' | 'credit-note';
   readonly number: string;
   readonly issuedAt: Date;
-  readonly orderId: string;
+  readonly orderId: string | null;
   readonly orderNumber: string;
   readonly email: string;
   readonly country: string;

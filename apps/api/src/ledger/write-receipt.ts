@@ -11,7 +11,7 @@ import { Receipt } from './receipt.model.js';
 import { sellerOf } from './seller.js';
 import { TaxRates } from './tax-rates.js';
 
-const SERIES = 'receipt';
+export const RECEIPT_SERIES = 'receipt';
 
 /** Numbers a receipt for each paid order, with the tax within its total, in the order's own transaction. */
 @Injectable()
@@ -34,13 +34,13 @@ export class WriteReceipt implements OnModuleInit {
     const split = taxFromGross(money(order.totalMinor, order.currency), percent(ratePercent));
     const line = { ratePercent, netMinor: split.net.minor, taxMinor: split.tax.minor };
     const year = order.paidAt.getUTCFullYear();
-    const number = await this.numbers.next(tx, SERIES, year);
+    const number = await this.numbers.next(tx, RECEIPT_SERIES, year);
     const label = `${year}-${String(number).padStart(6, '0')}`;
     await this.receipts.create(
       {
         orderId: order.id,
         orderNumber: order.number,
-        series: SERIES,
+        series: RECEIPT_SERIES,
         year,
         number,
         label,

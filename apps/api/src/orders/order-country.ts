@@ -1,5 +1,5 @@
 import type { TaxTreatment } from '@windchest/contracts';
-import { locate, type Location } from './location-evidence.js';
+import { locate, type Location } from '../payments/location-evidence.js';
 
 export interface PlacedOrder {
   readonly declaredCountry: string;

@@ -33,7 +33,6 @@ import { OwnOrders } from './own-orders.js';
 import { PlaceOrder } from './place-order.js';
 import { PriceBasket } from './price-basket.js';
 import { QuoteBasket } from './quote-basket.js';
-import { ReceivePaymentEvent } from './receive-payment-event.js';
 import { ReconcileOrder } from './reconcile-order.js';
 import { RefreshOrder } from './refresh-order.js';
 import { AskForRefund } from './refunds/ask-for-refund.js';
@@ -78,7 +77,6 @@ import { YearRecords } from './year-records.js';
     CloseOrder,
     SettleOrder,
     ReconcileOrder,
-    ReceivePaymentEvent,
     HandlePaymentEvent,
     OrderHistory,
     OrderFacts,

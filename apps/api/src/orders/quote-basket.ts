@@ -2,7 +2,7 @@ import { Injectable } from '@nestjs/common';
 import type { Answer, Handled } from '@windchest/contracts';
 import { percent, taxFromGross } from '@windchest/money';
 import { InjectConfig, type Config } from '../config/config.js';
-import { isChargeable } from '../coupons/smallest-charge.js';
+import { isChargeable } from '../payments/smallest-charge.js';
 import type { SignedIn } from '../http/person.js';
 import { RateLimits } from '../http/rate-limits.js';
 import { Refusal } from '../http/refusal.js';

@@ -47,6 +47,8 @@ export const paths = {
   reset: route('/reset'),
   verify: route('/verify'),
   account: route('/account'),
+  pledge: route('/account/pledge'),
+  support: route('/support'),
 
   workshop: {
     overview: route('/workshop'),
@@ -77,6 +79,11 @@ export const paths = {
     reconciliation: route('/workshop/ledger/reconciliations/:reconciliationId'),
     exports: route('/workshop/ledger/exports'),
     holders: route('/workshop/holders'),
+    supporters: route('/workshop/supporters'),
+    supporter: route('/workshop/supporters/:pledgeId'),
+    plans: route('/workshop/plans'),
+    newPlan: route('/workshop/plans/new'),
+    plan: route('/workshop/plans/:planId'),
     people: route('/workshop/people'),
     log: route('/workshop/log'),
   },

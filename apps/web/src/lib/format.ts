@@ -3,6 +3,8 @@ import { formatMoney, type Money } from '@windchest/money';
 /** The workshop's language; it is one for the whole page, so a variable serves better than an argument everywhere. */
 let locale = 'en-GB';
 
+export const spokenLocale = (): string => locale;
+
 export function speakLocale(tag: string): void {
   if (tag === locale) return;
   locale = tag;
@@ -95,26 +97,8 @@ export const dateTime = (moment: string): string =>
     minute: '2-digit',
   }).format(new Date(moment));
 
-/** `Germany`, of `DE`. */
-export const countryName = (code: string): string => {
-  try {
-    return new Intl.DisplayNames(locale, { type: 'region' }).of(code) ?? code;
-  } catch {
-    return code;
-  }
-};
-
-/** `Nov 2026`, of `2026-11`. */
-export const month = (yearAndMonth: string): string =>
+/** `Nov 2026`, of a month such as `2026-11`. */
+export const monthName = (month: string): string =>
   new Intl.DateTimeFormat(locale, { month: 'short', year: 'numeric', timeZone: 'UTC' }).format(
-    new Date(`${yearAndMonth}-01T00:00:00Z`),
+    new Date(`${month}-15T00:00:00Z`),
   );
-
-/** `12 Nov 2026`, of a day without a time, which is the same day everywhere. */
-export const day = (isoDay: string): string =>
-  new Intl.DateTimeFormat(locale, {
-    day: 'numeric',
-    month: 'short',
-    year: 'numeric',
-    timeZone: 'UTC',
-  }).format(new Date(`${isoDay}T00:00:00Z`));

@@ -1,5 +1,6 @@
 import { money } from '@windchest/money';
 import type { EmailMessage, EmailWorkshop } from '../email-message.js';
+import { samplePledges } from './sample-pledges.js';
 
 export const sampleWorkshop: EmailWorkshop = {
   name: 'Saltmarsh Sound Works',
@@ -236,4 +237,5 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       cautionsLine,
     },
   },
+  ...samplePledges,
 ];

@@ -78,6 +78,13 @@ export class ShopKits {
     };
   }
 
+  async cardsByIds(kitIds: readonly string[]): Promise<(KitCard & { id: string })[]> {
+    if (kitIds.length === 0) return [];
+    const rows = await this.rows('AND k.id IN (:kitIds)', { kitIds }, 'ORDER BY name, id');
+    const voices = await this.voicesOf(rows.map((row) => row.revision_id));
+    return rows.map((row) => ({ ...this.cardOf(row, voices.get(row.revision_id) ?? []), id: row.id }));
+  }
+
   async read(slug: string): Promise<Answer<'GET /kits/:slug'>> {
     const row = await this.rowOf(slug);
     const [kit, revision, voices, licences, revisions] = await Promise.all([

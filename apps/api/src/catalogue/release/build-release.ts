@@ -13,6 +13,7 @@ import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { HandlesJob, type Finish, type JobHandler } from '../../jobs/job.js';
 import { QueueComparisons } from '../comparison/queue-comparisons.js';
+import { KitInShopSteps } from '../kits/kit-in-shop-steps.js';
 import { Kit } from '../kits/kit.model.js';
 import { Licence } from '../kits/licence.model.js';
 import { estimatePrint } from '../print/estimate-print.job.js';
@@ -57,6 +58,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly people: People,
     private readonly staffLog: StaffLog,
     private readonly jobs: JobQueue,
+    private readonly inShop: KitInShopSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -145,6 +147,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     await this.comparisons.ofRelease(tx, revisionId);
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
+    if (kit.isListed) await this.inShop.run(tx, { kitId: kit.id });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
       what: 'released a revision',

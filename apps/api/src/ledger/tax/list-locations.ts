@@ -38,7 +38,7 @@ export class ListLocations {
 
   async one(receiptId: string): Promise<UnclearLocation> {
     const receipt = await this.receipts.findByPk(receiptId);
-    const [order] = receipt ? await this.unclear.byIds([receipt.orderId]) : [];
+    const [order] = receipt?.orderId ? await this.unclear.byIds([receipt.orderId]) : [];
     if (!receipt || !order) throw notFound('receipt');
     const [settlement] = await this.settlements([receiptId]);
     return this.show(receipt, order, settlement);

@@ -48,7 +48,7 @@ export class SettleLocation {
     const who = `${person.name} (${person.role})`;
     return this.transactions.run(async (tx) => {
       const receipt = await this.receipts.findByPk(receiptId, { transaction: tx, lock: tx.LOCK.UPDATE });
-      if (!receipt) throw notFound('receipt');
+      if (!receipt?.orderId) throw notFound('receipt of an order');
       const order = await this.unclear.settle(tx, receipt.orderId, { country, reason, who });
       await this.quarters.lockOpen(tx, quarterOf(receipt.issuedAt));
       const counted = await this.countedIn(receipt, country, tx);

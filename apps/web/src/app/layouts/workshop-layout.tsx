@@ -1,7 +1,7 @@
 import type { Permission } from '@windchest/contracts';
 import { Navigate, useLocation } from 'react-router-dom';
 import { paths, signInThenBack } from '../../config/paths.js';
-import { faultTexts } from '../../config/texts/shared.js';
+import { noPageTexts } from '../../config/texts/no-page.js';
 import { workshopTexts } from '../../config/texts/workshop.js';
 import { useSession } from '../../lib/session.js';
 import { LinkButton } from '../../ui/button.js';
@@ -27,6 +27,7 @@ const entries: readonly (HeaderEntry & { needs: Permission; unless?: Permission 
   },
   { to: paths.workshop.sales.to(), label: workshopTexts.ledger, needs: 'ledger:read' },
   { to: paths.workshop.coupons.to(), label: workshopTexts.coupons, needs: 'coupons:read' },
+  { to: paths.workshop.supporters.to(), label: workshopTexts.supporters, needs: 'supporters:read' },
   { to: paths.workshop.holders.to(), label: workshopTexts.holders, needs: 'buyers:read' },
   { to: paths.workshop.people.to(), label: workshopTexts.people, needs: 'people:read' },
 ];
@@ -40,9 +41,9 @@ export function WorkshopLayout() {
   const refusal = may('workshop:enter') ? undefined : (
     <Band>
       {session ? (
-        <Fault level={1} fault={{ title: faultTexts.forbidden, detail: faultTexts.forbiddenDetail }}>
+        <Fault level={1} fault={{ title: noPageTexts.forbidden, detail: noPageTexts.forbiddenDetail }}>
           <LinkButton look="outline" size="sm" to={paths.home.to()}>
-            {faultTexts.toKits}
+            {noPageTexts.toKits}
           </LinkButton>
         </Fault>
       ) : fault ? (

@@ -130,6 +130,30 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
   },
   {
+    path: paths.workshop.supporters.path,
+    element: lazyPage(
+      async () => (await import('../../features/supporters/supporters.page.js')).SupportersPage,
+    ),
+  },
+  {
+    path: paths.workshop.supporter.path,
+    element: lazyPage(
+      async () => (await import('../../features/supporters/supporter.page.js')).SupporterPage,
+    ),
+  },
+  {
+    path: paths.workshop.plans.path,
+    element: lazyPage(async () => (await import('../../features/supporters/plans.page.js')).PlansPage),
+  },
+  {
+    path: paths.workshop.newPlan.path,
+    element: lazyPage(async () => (await import('../../features/supporters/new-plan.page.js')).NewPlanPage),
+  },
+  {
+    path: paths.workshop.plan.path,
+    element: lazyPage(async () => (await import('../../features/supporters/plan.page.js')).PlanPage),
+  },
+  {
     path: paths.workshop.people.path,
     element: lazyPage(async () => (await import('../../features/workshop/people.page.js')).PeoplePage),
   },

@@ -12,6 +12,7 @@ export const workshopTexts = {
   receipts: 'Receipts',
   ledger: 'Ledger',
   coupons: 'Coupons',
+  supporters: 'Supporters',
   holders: 'Holders',
   people: 'People',
   toShop: 'To the shop',

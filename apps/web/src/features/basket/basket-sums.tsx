@@ -2,7 +2,8 @@ import { Box } from '@chakra-ui/react/box';
 import type { Quote } from '@windchest/contracts';
 import { basketTexts } from '../../config/texts/basket.js';
 import { priceTexts } from '../../config/texts/shared.js';
-import { countryName, price } from '../../lib/format.js';
+import { price } from '../../lib/format.js';
+import { countryName } from '../../lib/workshop-format.js';
 import { Text } from '../../ui/text.js';
 
 interface SumProps {

@@ -2,7 +2,8 @@ import { Box } from '@chakra-ui/react/box';
 import type { WorkshopOrder } from '@windchest/contracts';
 import type { ReactNode } from 'react';
 import { workshopOrderTexts as texts } from '../../config/texts/workshop-orders.js';
-import { countryName, dateTime, number } from '../../lib/format.js';
+import { dateTime, number } from '../../lib/format.js';
+import { countryName } from '../../lib/workshop-format.js';
 
 const businessFacts = ({ business, taxTreatment }: WorkshopOrder): [string, ReactNode][] =>
   business

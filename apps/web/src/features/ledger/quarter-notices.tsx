@@ -2,7 +2,8 @@ import { Box } from '@chakra-ui/react/box';
 import type { QuarterSummary } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
 import { quarterTexts as texts } from '../../config/texts/workshop-tax.js';
-import { countryName, date } from '../../lib/format.js';
+import { date } from '../../lib/format.js';
+import { countryName } from '../../lib/workshop-format.js';
 import { TextLink } from '../../ui/link.js';
 import { Notice } from '../../ui/notice.js';
 

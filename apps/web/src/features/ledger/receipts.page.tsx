@@ -62,9 +62,13 @@ const columns: Column<ReceiptRow>[] = [
     header: texts.columns.order,
     cell: (row) => (
       <Box lineHeight="1.4">
-        <TextLink to={paths.workshop.order.to({ orderId: row.orderId })} whiteSpace="nowrap">
-          {row.orderNumber}
-        </TextLink>
+        {row.orderId ? (
+          <TextLink to={paths.workshop.order.to({ orderId: row.orderId })} whiteSpace="nowrap">
+            {row.orderNumber}
+          </TextLink>
+        ) : (
+          <Unbroken>{row.orderNumber}</Unbroken>
+        )}
         <Box color="ink.soft">{row.email}</Box>
       </Box>
     ),

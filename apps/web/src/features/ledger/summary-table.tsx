@@ -1,7 +1,8 @@
 import { Box } from '@chakra-ui/react/box';
 import type { SummaryRow } from '@windchest/contracts';
 import { quarterTexts as texts, ratesTexts } from '../../config/texts/workshop-tax.js';
-import { countryName, number, price } from '../../lib/format.js';
+import { number, price } from '../../lib/format.js';
+import { countryName } from '../../lib/workshop-format.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Heading } from '../../ui/text.js';
 import { Unbroken } from '../../ui/unbroken.js';

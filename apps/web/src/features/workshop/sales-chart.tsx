@@ -1,7 +1,8 @@
 import { Box } from '@chakra-ui/react/box';
 import type { OutputOf } from '@windchest/contracts';
 import { overviewTexts as texts } from '../../config/texts/workshop-overview.js';
-import { counted, day as isoDay, number, price } from '../../lib/format.js';
+import { counted, number, price } from '../../lib/format.js';
+import { day as isoDay } from '../../lib/workshop-format.js';
 import { SameAsTable } from '../../ui/chart/same-as-table.js';
 import { TimeBars } from '../../ui/chart/time-bars.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';

@@ -1,5 +1,5 @@
 import { Box } from '@chakra-ui/react/box';
-import { tableTexts } from '../../config/texts/shared.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { type Column, HairlineTable } from '../table/hairline-table.js';
 import { VisuallyHidden } from '../visually-hidden.js';
 

@@ -1,6 +1,6 @@
 import { chakra } from '@chakra-ui/react/styled-system';
 import type { ReactNode } from 'react';
-import { tableTexts } from '../../config/texts/shared.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 
 /** A chart's facts for those who do not see it, or want the figures: opened when asked for. */
 export const SameAsTable = ({ children }: { children: ReactNode }) => (
