@@ -20,11 +20,11 @@ const mayUse = {
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
   letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
-  journal: ['accounts', 'catalogue'],
+  journal: ['accounts', 'catalogue', 'supporters'],
   ledger: ['accounts', 'catalogue', 'orders', 'supporters'],
   workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),
 };
-const lowerLayers = 'adapters database jobs mails payments http config typesetting'.split(' ');
+const lowerLayers = 'adapters database jobs mails payments http pictures config typesetting'.split(' ');
 
 module.exports = {
   forbidden: [

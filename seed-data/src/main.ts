@@ -2,6 +2,7 @@ import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
 import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
+import { reportFit } from './load/report-fit.js';
 import { makePeople } from './load/make-people.js';
 import { beginPledge, makePlan } from './load/pledge.js';
 import { ShopBrowser } from './load/shop-browser.js';
@@ -51,6 +52,12 @@ const main = async (): Promise<void> => {
       isActive: true,
     });
 
+  for (const { kitSlug, ...words } of demoWorkshop.posts) {
+    const kitId = kitSlug === null ? null : (kitIds.get(kitSlug) ?? null);
+    const { id } = await maker.post<{ id: string }>('/workshop/posts', { ...words, kitId });
+    await maker.post(`/workshop/posts/${id}/publication`);
+  }
+
   for (const purchase of demoWorkshop.purchases) {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
     if (!person) continue;
@@ -73,6 +80,9 @@ const main = async (): Promise<void> => {
       );
     say(`${person?.name} pledges to ${pledge.planName}`);
   }
+
+  for (const report of demoWorkshop.fitReports)
+    await reportFit(await signIn(report.buyerEmail), maker, report);
 
   for (const kit of demoWorkshop.kits)
     for (const revision of kit.revisions.slice(1)) {

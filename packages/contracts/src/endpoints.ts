@@ -1,7 +1,9 @@
 import { basketEndpoints } from './basket.js';
 import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
+import { fitEndpoints } from './fit.js';
 import { healthEndpoints } from './health.js';
+import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
 import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
@@ -24,6 +26,8 @@ export const endpoints = {
   ...workshopSalesEndpoints,
   ...ledgerEndpoints,
   ...supporterEndpoints,
+  ...fitEndpoints,
+  ...journalEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

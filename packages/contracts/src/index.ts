@@ -18,5 +18,7 @@ export * from './workshop-sales.js';
 export * from './ledger.js';
 export * from './tax-records.js';
 export * from './supporters.js';
+export * from './fit.js';
+export * from './journal.js';
 export * from './people.js';
 export * from './health.js';

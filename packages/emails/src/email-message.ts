@@ -161,6 +161,29 @@ export type GiftReceivedMessage = {
   cautionsLine: string;
 };
 
+/** The workshop answers a report about how a part fits; `text` is the answer's own words. */
+export type FitAnsweredMessage = {
+  template: 'fit-answered';
+  name?: string;
+  kit: string;
+  revision: string;
+  part: string;
+  by: string;
+  text: string;
+  link: string;
+};
+
+/** The revision that mends a reported part is out. */
+export type FitFixedMessage = {
+  template: 'fit-fixed';
+  name?: string;
+  kit: string;
+  revision: string;
+  part: string;
+  fixedIn: string;
+  link: string;
+};
+
 /** Every mail the shop sends by itself, told apart by `template`. */
 export type EmailMessage =
   | VerifyAddressMessage
@@ -175,6 +198,8 @@ export type EmailMessage =
   | StaffInviteMessage
   | RevisionReleasedMessage
   | GiftReceivedMessage
-  | PledgeMessage;
+  | PledgeMessage
+  | FitAnsweredMessage
+  | FitFixedMessage;
 
 export type EmailTemplate = EmailMessage['template'];

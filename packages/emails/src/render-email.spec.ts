@@ -29,7 +29,7 @@ const wordsOf = (html: string): string =>
     .replace(/&amp;/g, '&')
     .replace(/\s+/g, ' ');
 
-const unwrapped = (text: string): string => text.replace(/\s+/g, ' ');
+const unwrapped = (text: string): string => text.replace(/^> ?/gm, '').replace(/\s+/g, ' ');
 
 /** Every web address anywhere in a message. */
 const linksOf = (message: EmailMessage): string[] =>
@@ -108,6 +108,8 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'pledge-paused': true,
     'pledge-resumes-soon': true,
     'pledge-plan-changes': true,
+    'fit-answered': true,
+    'fit-fixed': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(
     new Set(Object.keys(templates)),

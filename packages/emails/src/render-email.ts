@@ -6,6 +6,7 @@ import { renderText } from './render-text.js';
 import * as accountMails from './templates/account-mails.js';
 import * as disputeMails from './templates/dispute-mails.js';
 import * as deliveryMails from './templates/delivery-mails.js';
+import * as fitMails from './templates/fit-mails.js';
 import * as orderMails from './templates/order-mails.js';
 import * as pledgeMails from './templates/pledge-mails.js';
 import * as pledgeRestMails from './templates/pledge-rest-mails.js';
@@ -54,6 +55,10 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return pledgeRestMails.pledgePaused(message, workshop);
     case 'pledge-resumes-soon':
       return pledgeRestMails.pledgeResumesSoon(message, workshop);
+    case 'fit-answered':
+      return fitMails.fitAnswered(message);
+    case 'fit-fixed':
+      return fitMails.fitFixed(message);
   }
 }
 

@@ -236,4 +236,25 @@ export const texts = {
     cautions: 'Before you print and play',
     reason: (from: string): string => `You get this because ${from} entered this address for a gift.`,
   },
+
+  fitAnswered: {
+    subject: (kit: string, part: string): string => `${kit}: about ${part}`,
+    preheader: (by: string): string => `${by} answers what you said about its fit.`,
+    heading: (part: string): string => `An answer about ${part}`,
+    body: (part: string, kit: string, revision: string): string =>
+      `You told how ${part} of ${kit} ${revision} came out. Here is the answer.`,
+    button: 'See your reports',
+    reason: 'You get this because you reported how a part fits.',
+  },
+
+  fitFixed: {
+    subject: (kit: string, part: string, fixedIn: string): string => `${kit} ${fixedIn}: ${part} is mended`,
+    preheader: (revision: string): string => `What you reported about ${revision} led to it.`,
+    heading: (part: string, fixedIn: string): string => `${part} is mended in ${fixedIn}`,
+    body: (part: string, kit: string, revision: string, fixedIn: string): string =>
+      `You told how ${part} of ${kit} ${revision} came out. ${fixedIn} is released, and that part is changed in it. Your shelf says which pieces to print again.`,
+    thanks: 'Reports like yours are how the parts come to fit. Thank you.',
+    button: 'See what to reprint',
+    reason: 'You get this because you reported how this part fits.',
+  },
 };

@@ -121,6 +121,18 @@ export class CatalogueReader {
     return revision && ((await this.toReleased([revision]))[0] ?? null);
   }
 
+  /** All revisions of a kit, drafts too, newest first: for staff's choices only. */
+  async revisionChoices(kitId: string): Promise<{ id: string; label: string; isReleased: boolean }[]> {
+    const rows = await this.revisions.findAll({
+      where: { kitId },
+      order: [
+        ['mark', 'DESC'],
+        ['issue', 'DESC'],
+      ],
+    });
+    return rows.map(({ id, label, releasedAt }) => ({ id, label, isReleased: releasedAt !== null }));
+  }
+
   /** The bundle that holds every clearance, or of the one that is asked for; null where there is none. */
   async bundleFile(revisionId: string, clearance: Clearance | null = null): Promise<BundleFile | null> {
     return (

@@ -14,6 +14,7 @@ import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
 import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
+import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
 import { PledgeEntitlements } from './pledge-entitlements.js';
 import { ServeFile } from './serve-file.js';
@@ -42,6 +43,8 @@ import { SignedAddress } from './signed-address.js';
     Collections,
     Shelf,
     Holders,
+    Holdings,
   ],
+  exports: [Holdings],
 })
 export class EntitlementsModule {}

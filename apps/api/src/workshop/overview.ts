@@ -4,6 +4,7 @@ import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueWaiting } from '../catalogue/catalogue-waiting.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { CouponsReader } from '../coupons/coupons-reader.js';
+import { ListFitReports } from '../fit/list-fit-reports.js';
 import type { SignedIn } from '../http/person.js';
 import { JobQueue } from '../jobs/job-queue.js';
 import { OrdersReader } from '../orders/orders-reader.js';
@@ -21,6 +22,7 @@ export class Overviews {
     private readonly catalogue: CatalogueWaiting,
     private readonly coupons: CouponsReader,
     private readonly orders: OrdersReader,
+    private readonly fit: ListFitReports,
     private readonly jobs: JobQueue,
     private readonly clock: Clock,
   ) {}
@@ -31,6 +33,7 @@ export class Overviews {
       may(person.role, 'revisions:write') ? this.drafts() : [],
       seesMoney ? this.flaggedOrders() : [],
       may(person.role, 'coupons:read') ? this.lowCoupons() : [],
+      may(person.role, 'fit:read') ? this.fitReports() : [],
       person.role === 'owner' ? this.deadJobs() : [],
     ]);
     return { sales: seesMoney ? await this.sales() : null, waiting: waiting.flat() };
@@ -68,6 +71,11 @@ export class Overviews {
       count: left,
       link: `/workshop/coupons/${id}`,
     }));
+  }
+
+  private async fitReports(): Promise<Waiting> {
+    const count = await this.fit.countNew();
+    return count > 0 ? [{ kind: 'fit-report', label: '', count, link: '/workshop/fit?state=new' }] : [];
   }
 
   private async deadJobs(): Promise<Waiting> {

@@ -1,12 +1,13 @@
 import { Module } from '@nestjs/common';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { CouponsModule } from '../coupons/coupons.module.js';
+import { FitModule } from '../fit/fit.module.js';
 import { OrdersModule } from '../orders/orders.module.js';
 import { Overviews } from './overview.js';
 import { WorkshopController } from './workshop.controller.js';
 
 @Module({
-  imports: [CatalogueModule, CouponsModule, OrdersModule],
+  imports: [CatalogueModule, CouponsModule, FitModule, OrdersModule],
   controllers: [WorkshopController],
   providers: [Overviews],
 })

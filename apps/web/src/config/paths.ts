@@ -38,7 +38,11 @@ export const paths = {
   shelf: route('/shelf'),
   shelfKit: route('/shelf/:slug'),
   tuner: route('/shelf/:slug/tuner'),
+  shelfFit: route('/shelf/:slug/fit'),
   cautions: route('/cautions'),
+  journal: route('/journal'),
+  post: route('/journal/:slug'),
+  support: route('/support'),
 
   join: route('/join'),
   signIn: route('/sign-in'),
@@ -48,7 +52,6 @@ export const paths = {
   verify: route('/verify'),
   account: route('/account'),
   pledge: route('/account/pledge'),
-  support: route('/support'),
 
   workshop: {
     overview: route('/workshop'),
@@ -84,6 +87,11 @@ export const paths = {
     plans: route('/workshop/plans'),
     newPlan: route('/workshop/plans/new'),
     plan: route('/workshop/plans/:planId'),
+    fit: route('/workshop/fit'),
+    fitReport: route('/workshop/fit/:reportId'),
+    journal: route('/workshop/journal'),
+    newPost: route('/workshop/journal/new'),
+    post: route('/workshop/journal/:postId'),
     people: route('/workshop/people'),
     log: route('/workshop/log'),
   },

@@ -238,4 +238,29 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
     },
   },
   ...samplePledges,
+  {
+    title: 'Fit report answered',
+    message: {
+      template: 'fit-answered',
+      name: 'Wren',
+      kit: 'Curlew',
+      revision: 'Mk 1.0',
+      part: 'H-03 Stopper',
+      by: 'Odo',
+      text: 'Thank you for measuring. Take the + clearance for now: it is 0.1 mm smaller on each side.\n\nThe next issue moves the middle one.',
+      link: 'https://saltmarsh.example/shelf/curlew/fit',
+    },
+  },
+  {
+    title: 'Fit report mended',
+    message: {
+      template: 'fit-fixed',
+      name: 'Wren',
+      kit: 'Curlew',
+      revision: 'Mk 1.0',
+      part: 'H-03 Stopper',
+      fixedIn: 'Mk 1.1',
+      link: 'https://saltmarsh.example/shelf/curlew',
+    },
+  },
 ];

@@ -15,6 +15,7 @@ export const shopTexts = {
   navigation: 'Shop',
   footer: 'About this shop',
   cautions: 'Cautions',
+  journal: 'Journal',
   printer: 'My printer',
 };
 

@@ -14,6 +14,8 @@ export const workshopTexts = {
   coupons: 'Coupons',
   supporters: 'Supporters',
   holders: 'Holders',
+  fit: 'Fit',
+  journal: 'Journal',
   people: 'People',
   toShop: 'To the shop',
   footer: 'About the workshop',

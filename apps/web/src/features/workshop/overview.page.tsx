@@ -21,6 +21,7 @@ const signs: Record<Waiting['kind'], SignName> = {
   'dead-job': 'stop',
   'coupon-low': 'note',
   'refused-file': 'stop',
+  'fit-report': 'wait',
 };
 
 const WaitingList = ({ waiting }: { waiting: readonly Waiting[] }) =>
