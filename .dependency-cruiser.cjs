@@ -20,15 +20,15 @@ const mayUse = {
   orders: ['accounts', 'catalogue', 'coupons'],
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
-  letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
-  journal: ['accounts', 'catalogue'],
+  letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements', 'fit'],
+  journal: ['accounts', 'catalogue', 'supporters'],
   ledger: ['accounts', 'catalogue', 'orders', 'supporters'],
   workshop:
     'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(
       ' ',
     ),
 };
-const lowerLayers = 'adapters database jobs mails payments http config typesetting'.split(' ');
+const lowerLayers = 'adapters database jobs mails payments http pictures config typesetting'.split(' ');
 
 module.exports = {
   forbidden: [

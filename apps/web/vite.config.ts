@@ -45,7 +45,16 @@ function letUnusedComponentsGo(): Plugin {
   };
 }
 
-export default defineConfig({
+/** The router's package offers its development build, with all its warnings, to whoever asks; this is the other one. */
+const routerForVisitors = [
+  { find: /^react-router$/, replacement: 'react-router/dist/production/index.mjs' },
+  { find: /^react-router\/dom$/, replacement: 'react-router/dist/production/dom-export.mjs' },
+].map(({ find, replacement }) => ({
+  find,
+  replacement: fileURLToPath(new URL(`../../node_modules/${replacement}`, import.meta.url)),
+}));
+
+export default defineConfig(({ command }) => ({
   plugins: [react(), preloadLatinFont(), letUnusedComponentsGo()],
   resolve: {
     alias: [
@@ -60,6 +69,7 @@ export default defineConfig({
       },
       // SWR asks for a stand-in that React has had itself since version 18.
       { find: /^use-sync-external-store\/shim$/, replacement: 'react' },
+      ...(command === 'build' ? routerForVisitors : []),
     ],
   },
   server: {
@@ -93,4 +103,4 @@ export default defineConfig({
       },
     },
   },
-});
+}));

@@ -150,6 +150,30 @@ export interface DemoPledge {
   isEnding: boolean;
 }
 
+export interface DemoFitReport {
+  buyerEmail: string;
+  kitSlug: string;
+  /** Which part of the revision held, in the order of their codes. */
+  partIndex: number;
+  printerName: string;
+  nozzleMm: number;
+  layerMm: number;
+  material: string;
+  verdict: 'far-too-tight' | 'tight' | 'right' | 'loose' | 'far-too-loose';
+  gapMm: number | null;
+  words: string;
+  answer: string | null;
+}
+
+export interface DemoPost {
+  title: string;
+  slug: string;
+  lead: string;
+  body: string;
+  audience: 'everybody' | 'supporters';
+  kitSlug: string | null;
+}
+
 export interface DemoWorkshop {
   workshop: {
     name: string;
@@ -168,6 +192,19 @@ export interface DemoWorkshop {
   purchases: DemoPurchase[];
   plans: DemoPlan[];
   pledges: DemoPledge[];
+  posts: DemoPost[];
+  fitReports: DemoFitReport[];
+  newsReaders: string[];
+  letters: DemoLetter[];
+}
+
+/** A letter of the workshop; what is not sent stays a draft. */
+export interface DemoLetter {
+  kind: 'service' | 'news';
+  subject: string;
+  body: string;
+  kitSlug: string | null;
+  isSent: boolean;
 }
 
 /** A part together with what draws its mesh. */

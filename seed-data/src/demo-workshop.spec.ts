@@ -119,6 +119,14 @@ describe('the demo workshop', () => {
     }
   });
 
+  it('has printers of its people, as their accounts take them', () => {
+    const emails = demoWorkshop.people.map(({ email }) => email);
+    for (const { ownerEmail, ...printer } of demoWorkshop.printers) {
+      expect(emails).toContain(ownerEmail);
+      expect(printerCardFields.parse(printer)).toEqual(printer);
+    }
+  });
+
   it('has plans of kits it has, and pledges of people it has', () => {
     const slugs = demoWorkshop.kits.map(({ slug }) => slug);
     const planNames = demoWorkshop.plans.map(({ name }) => name);
@@ -128,14 +136,6 @@ describe('the demo workshop', () => {
       expect(planNames).toContain(planName);
       const person = demoWorkshop.people.find(({ email }) => email === supporterEmail);
       expect(person?.isVerified).toBe(true);
-    }
-  });
-
-  it('has printers of its people, as their accounts take them', () => {
-    const emails = demoWorkshop.people.map(({ email }) => email);
-    for (const { ownerEmail, ...printer } of demoWorkshop.printers) {
-      expect(emails).toContain(ownerEmail);
-      expect(printerCardFields.parse(printer)).toEqual(printer);
     }
   });
 

@@ -4,8 +4,11 @@ import { dunlin } from './kits/dunlin.js';
 import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { turnstone } from './kits/turnstone.js';
+import { fitReports } from './fit-reports.js';
 import { people, printers, purchases } from './people.js';
 import { plans, pledges } from './pledges.js';
+import { letters, newsReaders } from './letters.js';
+import { posts } from './posts.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
 
@@ -48,4 +51,8 @@ export const demoWorkshop: DemoWorkshop = {
   purchases,
   plans,
   pledges,
+  posts,
+  fitReports,
+  newsReaders,
+  letters,
 };

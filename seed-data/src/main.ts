@@ -2,8 +2,10 @@ import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
 import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
+import { reportFit } from './load/report-fit.js';
 import { makePeople } from './load/make-people.js';
 import { beginPledge, makePlan } from './load/pledge.js';
+import { writeLetter } from './load/write-letter.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
 
@@ -51,6 +53,12 @@ const main = async (): Promise<void> => {
       isActive: true,
     });
 
+  for (const { kitSlug, ...words } of demoWorkshop.posts) {
+    const kitId = kitSlug === null ? null : (kitIds.get(kitSlug) ?? null);
+    const { id } = await maker.post<{ id: string }>('/workshop/posts', { ...words, kitId });
+    await maker.post(`/workshop/posts/${id}/publication`);
+  }
+
   for (const purchase of demoWorkshop.purchases) {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
     if (!person) continue;
@@ -74,11 +82,18 @@ const main = async (): Promise<void> => {
     say(`${person?.name} pledges to ${pledge.planName}`);
   }
 
+  for (const report of demoWorkshop.fitReports)
+    await reportFit(await signIn(report.buyerEmail), maker, report);
+
   for (const kit of demoWorkshop.kits)
     for (const revision of kit.revisions.slice(1)) {
       await releaseRevision(maker, kitIds.get(kit.slug) ?? '', kit, revision);
       say(`${kit.name} ${revision.label} is released`);
     }
+
+  for (const email of demoWorkshop.newsReaders)
+    await (await signIn(email)).put('/account/news', { isWanted: true });
+  for (const letter of demoWorkshop.letters) await writeLetter(maker, letter, kitIds);
 };
 
 main().catch((fault: unknown) => {

@@ -7,11 +7,15 @@ import { ConfigModule } from './config/config.module.js';
 import { CouponsModule } from './coupons/coupons.module.js';
 import { DatabaseModule } from './database/database.module.js';
 import { EntitlementsModule } from './entitlements/entitlements.module.js';
+import { FitModule } from './fit/fit.module.js';
 import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
+import { JournalModule } from './journal/journal.module.js';
 import { LedgerModule } from './ledger/ledger.module.js';
+import { LettersModule } from './letters/letters.module.js';
 import { MailsModule } from './mails/mails.module.js';
 import { MeasuringModule } from './measuring/measuring.module.js';
+import { PicturesModule } from './pictures/pictures.module.js';
 import { OrdersModule } from './orders/orders.module.js';
 import { PaymentsModule } from './payments/payments.module.js';
 import { SupportersModule } from './supporters/supporters.module.js';
@@ -26,6 +30,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     JobsModule,
     MailsModule,
     PaymentsModule,
+    PicturesModule,
     ScheduleModule.forRoot(),
     // The rooms, lower ones first.
     AccountsModule,
@@ -36,6 +41,9 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     SupportersModule,
     LedgerModule,
     EntitlementsModule,
+    FitModule,
+    LettersModule,
+    JournalModule,
     WorkshopModule,
   ],
 })

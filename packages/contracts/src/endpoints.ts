@@ -1,8 +1,12 @@
 import { basketEndpoints } from './basket.js';
 import { deliveryEndpoints } from './delivery.js';
 import type { CallInput, CallOutput, HandlerInput, HandlerOutput } from './endpoint.js';
+import { fitEndpoints } from './fit.js';
 import { healthEndpoints } from './health.js';
+import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
+import { workshopLetterEndpoints } from './letters.js';
+import { newsEndpoints } from './news.js';
 import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
 import { refundEndpoints } from './refunds.js';
@@ -22,7 +26,12 @@ export const endpoints = {
   ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
+  ...ledgerEndpoints,
   ...supporterEndpoints,
+  ...fitEndpoints,
+  ...journalEndpoints,
+  ...workshopLetterEndpoints,
+  ...newsEndpoints,
   ...ledgerEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,

@@ -220,6 +220,31 @@ export const texts = {
     stop: 'Stop mails about new revisions',
   },
 
+  letter: {
+    times: (quantity: number): string => `×${nbsp}${quantity}`,
+    ifItTroubles: 'Reprint these only if the old ones trouble you:',
+    nothingToReprint: 'For your build there is nothing to reprint.',
+    testSubject: (subject: string): string => `Test: ${subject}`,
+    serviceReason: (kit: string): string =>
+      `You get this because you have the files of ${kit}, and it is about them.`,
+    serviceReasonOfShop: 'You get this because you have files from this workshop, and it is about them.',
+    newsReason: 'You get this because you asked this workshop for news.',
+    stopNews: 'Stop the news',
+    account: 'Your account, and what is kept about you',
+  },
+
+  confirmNews: {
+    subject: (workshop: string): string => `Do you want news from ${workshop}?`,
+    preheader: 'One press, and they come.',
+    heading: 'Confirm that you want the news',
+    body: (workshop: string): string =>
+      `Somebody, most likely you, asked ${workshop} to send news to this address: a letter now and then about new kits and the bench.`,
+    button: 'Send me the news',
+    limits: (days: number): string =>
+      `The link works for ${countOf(days, 'day')}. If it was not you, do nothing: no news will come.`,
+    reason: 'You get this because this address was entered for news.',
+  },
+
   giftReceived: {
     subject: (from: string, kits: readonly string[]): string => `${from} gives you ${kitsInShort(kits)}`,
     preheader: 'Files to print and build an instrument.',
@@ -235,5 +260,26 @@ export const texts = {
       `${linkLimits(linkDays, linkUses)} Make an account with this address, and what you were given stands on your shelf, with all later revisions.`,
     cautions: 'Before you print and play',
     reason: (from: string): string => `You get this because ${from} entered this address for a gift.`,
+  },
+
+  fitAnswered: {
+    subject: (kit: string, part: string): string => `${kit}: about ${part}`,
+    preheader: (by: string): string => `${by} answers what you said about its fit.`,
+    heading: (part: string): string => `An answer about ${part}`,
+    body: (part: string, kit: string, revision: string): string =>
+      `You told how ${part} of ${kit} ${revision} came out. Here is the answer.`,
+    button: 'See your reports',
+    reason: 'You get this because you reported how a part fits.',
+  },
+
+  fitFixed: {
+    subject: (kit: string, part: string, fixedIn: string): string => `${kit} ${fixedIn}: ${part} is mended`,
+    preheader: (revision: string): string => `What you reported about ${revision} led to it.`,
+    heading: (part: string, fixedIn: string): string => `${part} is mended in ${fixedIn}`,
+    body: (part: string, kit: string, revision: string, fixedIn: string): string =>
+      `You told how ${part} of ${kit} ${revision} came out. ${fixedIn} is released, and that part is changed in it. Your shelf says which pieces to print again.`,
+    thanks: 'Reports like yours are how the parts come to fit. Thank you.',
+    button: 'See what to reprint',
+    reason: 'You get this because you reported how this part fits.',
   },
 };

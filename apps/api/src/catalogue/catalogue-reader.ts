@@ -16,6 +16,7 @@ import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision, type Room } from './revisions/revision.model.js';
 
+export { filamentHex } from './build-book/kit-shades.js';
 export type { BundleFile, OfferedLicence, ReprintRow, ServableFile };
 
 export interface KitFacts {
@@ -91,6 +92,15 @@ export class CatalogueReader {
     return this.shop.cardsByIds(kitIds);
   }
 
+  /** Kits of which a revision is out, by name. */
+  async releasedKits(): Promise<KitFacts[]> {
+    const kits = await this.kits.findAll({
+      where: { newestRevisionId: { [Op.ne]: null } },
+      order: [['name', 'ASC']],
+    });
+    return kits.map(toKit);
+  }
+
   async kitBySlug(slug: string): Promise<KitFacts | null> {
     const kit = await this.kits.findOne({ where: { slug } });
     return kit && toKit(kit);
@@ -119,6 +129,18 @@ export class CatalogueReader {
   async revisionById(id: string): Promise<ReleasedRevision | null> {
     const revision = await this.finalById(id);
     return revision && ((await this.toReleased([revision]))[0] ?? null);
+  }
+
+  /** All revisions of a kit, drafts too, newest first: for staff's choices only. */
+  async revisionChoices(kitId: string): Promise<{ id: string; label: string; isReleased: boolean }[]> {
+    const rows = await this.revisions.findAll({
+      where: { kitId },
+      order: [
+        ['mark', 'DESC'],
+        ['issue', 'DESC'],
+      ],
+    });
+    return rows.map(({ id, label, releasedAt }) => ({ id, label, isReleased: releasedAt !== null }));
   }
 
   /** The bundle that holds every clearance, or of the one that is asked for; null where there is none. */

@@ -37,6 +37,7 @@ import { KitsTooBig } from './print/kits-too-big.js';
 import { PrintPlans } from './print/print-plans.js';
 import { PrintSheets } from './print/print-sheets.js';
 import { BuildRelease } from './release/build-release.js';
+import { RevisionReleasedSteps } from './release/revision-released-steps.js';
 import { ReleasedBundles } from './release/released-bundles.js';
 import { RequestRelease } from './release/request-release.js';
 import { TidyDraft } from './release/tidy-draft.js';
@@ -107,6 +108,7 @@ import { StartRevision } from './revisions/start-revision.js';
     PrintPlans,
     PrintSheets,
     KitsTooBig,
+    RevisionReleasedSteps,
   ],
   // The measuring room writes what it finds through the records.
   exports: [
@@ -116,6 +118,7 @@ import { StartRevision } from './revisions/start-revision.js';
     MeasurementRecords,
     MeshComparisons,
     PrintPlans,
+    RevisionReleasedSteps,
   ],
 })
 export class CatalogueModule {}

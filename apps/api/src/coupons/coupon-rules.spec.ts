@@ -1,5 +1,5 @@
-import { discountsOf, faultOf, placesLeft, tooSmallBasket } from './coupon-rules.js';
 import { isChargeable } from '../payments/smallest-charge.js';
+import { discountsOf, faultOf, placesLeft, tooSmallBasket } from './coupon-rules.js';
 
 const now = new Date('2026-12-01T12:00:00Z');
 const terms = {

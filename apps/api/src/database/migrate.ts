@@ -6,15 +6,18 @@ import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
-import * as supporters from './migrations/0012-supporters.js';
 import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
 import * as partVariants from './migrations/0010-part-variants.js';
 import * as refunds from './migrations/0011-refunds.js';
+import * as supporters from './migrations/0012-supporters.js';
 import * as couponRules from './migrations/0013-coupon-rules.js';
 import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
 import * as gifts from './migrations/0015-gifts.js';
+import * as journal from './migrations/0016-journal.js';
+import * as fitReports from './migrations/0017-fit-reports.js';
+import * as letters from './migrations/0018-letters.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -24,14 +27,17 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
-  '0012-supporters': supporters,
   '0008-mesh-comparisons': meshComparisons,
   '0009-printer-cards': printerCards,
   '0010-part-variants': partVariants,
   '0011-refunds': refunds,
+  '0012-supporters': supporters,
   '0013-coupon-rules': couponRules,
   '0014-tax-and-business': taxAndBusiness,
   '0015-gifts': gifts,
+  '0016-journal': journal,
+  '0017-fit-reports': fitReports,
+  '0018-letters': letters,
 };
 
 /**
@@ -63,8 +69,8 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
     const done = await umzug.up();
     return done.map((one) => one.name);
   } finally {
-    // Also after a fault: the pooled connection would keep the lock, and with it every other process waiting.
     // The connection goes back to the pool alive: without this a failed migration would block every other process.
+    // Also after a fault: the pooled connection would keep the lock, and with it every other process waiting.
     await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }

@@ -14,8 +14,10 @@ import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
 import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
+import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
 import { PledgeEntitlements } from './pledge-entitlements.js';
+import { ReaderParts } from './reader-parts.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -37,11 +39,14 @@ import { SignedAddress } from './signed-address.js';
     ServeFile,
     GiftMail,
     GiveEntitlements,
-    PledgeEntitlements,
     FollowOrderRights,
+    PledgeEntitlements,
     Collections,
     Shelf,
     Holders,
+    Holdings,
+    ReaderParts,
   ],
+  exports: [Holdings, DownloadLinks, ReaderParts],
 })
 export class EntitlementsModule {}

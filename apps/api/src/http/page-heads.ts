@@ -8,6 +8,8 @@ export interface PageHead {
   readonly extra?: string;
 }
 export type HeadMaker = (path: string) => Promise<PageHead | null>;
+/** More tags, already escaped. */
+export type TagMaker = (path: string) => Promise<string | null>;
 
 export const escapeHtml = (text: string): string =>
   text.replaceAll('&', '&amp;').replaceAll('<', '&lt;').replaceAll('>', '&gt;').replaceAll('"', '&quot;');
@@ -16,6 +18,7 @@ export const escapeHtml = (text: string): string =>
 @Injectable()
 export class PageHeads {
   private readonly makers: HeadMaker[] = [];
+  private readonly tagMakers: TagMaker[] = [];
 
   constructor(@InjectConfig() private readonly config: Config) {}
 
@@ -23,9 +26,15 @@ export class PageHeads {
     this.makers.push(maker);
   }
 
+  /** Tags that a room adds to another room's page. */
+  registerTags(maker: TagMaker): void {
+    this.tagMakers.push(maker);
+  }
+
   async headFor(path: string): Promise<string> {
     let head: PageHead | null = null;
     for (const maker of this.makers) head ??= await maker(path);
+    const tags = await Promise.all(this.tagMakers.map((maker) => maker(path)));
     const name = this.config.WORKSHOP_NAME;
     const {
       title,
@@ -44,6 +53,7 @@ export class PageHeads {
       `<meta property="og:site_name" content="${escapeHtml(name)}">`,
       `<meta property="og:url" content="${escapeHtml(address)}">`,
       extra,
+      ...tags.filter((tag) => tag !== null),
     ].join('\n    ');
   }
 }

@@ -15,11 +15,11 @@ export interface ReceiptTax {
 @Table({ tableName: 'receipts', timestamps: false })
 export class Receipt extends Model {
   @IdColumn() declare id: string;
-  /** Of an order, or of one payment of a pledge. */
+  /** A receipt is of an order or of one payment of a pledge. */
   @Column(DataType.CHAR(36)) declare orderId: string | null;
   @Column(DataType.CHAR(36)) declare pledgeId: string | null;
   @Column(DataType.CHAR(36)) declare pledgePaymentId: string | null;
-  /** The number of the order, or of the pledge. */
+  /** What the buyer calls it: the number of the order, or of the pledge. */
   @Column(DataType.STRING(20)) declare orderNumber: string;
   @Column(DataType.STRING(20)) declare series: string;
   @Column(DataType.SMALLINT.UNSIGNED) declare year: number;

@@ -84,10 +84,10 @@ export class HandlePaymentEvent implements OnModuleInit {
   /** Money of another payment that names this order, such as one that came after its end. */
   private async noteStray(eventId: string, order: Order, facts: PaymentEventFacts): Promise<string> {
     const outcome = `another payment of ${order.number}`;
-    const what = `another payment: ${facts.subject} ${facts.subjectId ?? ''}`;
     await this.transactions.run(async (tx) => {
       await this.orders.findByPk(order.id, { transaction: tx, lock: tx.LOCK.UPDATE });
-      await this.events.markHandled(tx, eventId, outcome);
+      if (!(await this.events.markHandled(tx, eventId, outcome))) return;
+      const what = `another payment: ${facts.subject} ${facts.subjectId ?? ''}`;
       if (!(await this.history.has(tx, order.id, what.slice(0, 60))))
         await this.history.add(tx, order.id, what, facts.paymentIntentId ?? '');
     }, 'read-committed');

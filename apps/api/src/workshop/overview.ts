@@ -4,8 +4,10 @@ import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueWaiting } from '../catalogue/catalogue-waiting.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { CouponsReader } from '../coupons/coupons-reader.js';
+import { ListFitReports } from '../fit/list-fit-reports.js';
 import type { SignedIn } from '../http/person.js';
 import { JobQueue } from '../jobs/job-queue.js';
+import { ShowLetters } from '../letters/show-letters.js';
 import { OrdersReader } from '../orders/orders-reader.js';
 
 type Overview = Answer<'GET /workshop/overview'>;
@@ -21,6 +23,8 @@ export class Overviews {
     private readonly catalogue: CatalogueWaiting,
     private readonly coupons: CouponsReader,
     private readonly orders: OrdersReader,
+    private readonly fit: ListFitReports,
+    private readonly letters: ShowLetters,
     private readonly jobs: JobQueue,
     private readonly clock: Clock,
   ) {}
@@ -31,6 +35,8 @@ export class Overviews {
       may(person.role, 'revisions:write') ? this.drafts() : [],
       seesMoney ? this.flaggedOrders() : [],
       may(person.role, 'coupons:read') ? this.lowCoupons() : [],
+      may(person.role, 'fit:read') ? this.fitReports() : [],
+      may(person.role, 'letters:read') ? this.lettersUnderWay() : [],
       person.role === 'owner' ? this.deadJobs() : [],
     ]);
     return { sales: seesMoney ? await this.sales() : null, waiting: waiting.flat() };
@@ -67,6 +73,21 @@ export class Overviews {
       label: code,
       count: left,
       link: `/workshop/coupons/${id}`,
+    }));
+  }
+
+  private async fitReports(): Promise<Waiting> {
+    const count = await this.fit.countNew();
+    return count > 0 ? [{ kind: 'fit-report', label: '', count, link: '/workshop/fit?state=new' }] : [];
+  }
+
+  private async lettersUnderWay(): Promise<Waiting> {
+    const letters = await this.letters.underWay();
+    return letters.map(({ id, subject }) => ({
+      kind: 'letter',
+      label: subject,
+      count: 1,
+      link: `/workshop/letters/${id}`,
     }));
   }
 

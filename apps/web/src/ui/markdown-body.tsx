@@ -4,7 +4,8 @@ import ReactMarkdown from 'react-markdown';
 import rehypeSanitize from 'rehype-sanitize';
 import remarkGfm from 'remark-gfm';
 import { markdownTexts } from '../config/texts/furniture.js';
-import { linkParts } from './part-links.js';
+import { linkParts, type MarkdownNode } from './part-links.js';
+import { placePictures } from './placed-pictures.js';
 
 const Prose = chakra('div', {
   base: {
@@ -57,15 +58,23 @@ export interface MarkdownBodyProps {
   text: string;
   /** Where `[[H-03]]` leads; `#part-H-03` by default. */
   partHref?: (code: string) => string;
+  /** Where the picture of `![words](picture:id)` stands; without it such pictures are left out. */
+  pictureSrc?: (id: string) => string;
 }
 
 const anchorOfPart = (code: string) => `#part-${code}`;
 
 /** Sanitized: markup in the text is dropped, links keep http, https, mailto and addresses of this shop. */
-export function MarkdownBody({ text, partHref = anchorOfPart }: MarkdownBodyProps) {
+export function MarkdownBody({ text, partHref = anchorOfPart, pictureSrc }: MarkdownBodyProps) {
   const plugins = useMemo(
-    () => [remarkGfm, () => (tree: Parameters<typeof linkParts>[0]) => linkParts(tree, partHref)],
-    [partHref],
+    () => [
+      remarkGfm,
+      () => (tree: MarkdownNode) => {
+        linkParts(tree, partHref);
+        if (pictureSrc) placePictures(tree, pictureSrc);
+      },
+    ],
+    [partHref, pictureSrc],
   );
   return (
     <Prose>

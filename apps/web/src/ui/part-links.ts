@@ -1,5 +1,5 @@
 /** As much of a Markdown tree as part links need. */
-interface MarkdownNode {
+export interface MarkdownNode {
   type: string;
   value?: string;
   url?: string;

@@ -22,6 +22,7 @@ import { RevisionContents } from '../revisions/revision-contents.js';
 import { isFinal, Revision } from '../revisions/revision.model.js';
 import { buildRelease } from './build-release.job.js';
 import { bundleEntries } from './bundle-entries.js';
+import { RevisionReleasedSteps } from './revision-released-steps.js';
 import { ReleaseProgress } from './release-progress.js';
 import { RevisionBundle } from './revision-bundle.model.js';
 import { verifyBundle } from './verify-bundle.js';
@@ -59,6 +60,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly staffLog: StaffLog,
     private readonly jobs: JobQueue,
     private readonly inShop: KitInShopSteps,
+    private readonly released: RevisionReleasedSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -148,6 +150,11 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
     if (kit.isListed) await this.inShop.run(tx, { kitId: kit.id });
+    await this.released.run(tx, {
+      revisionId,
+      label: revision.label,
+      kit: { id: kit.id, slug: kit.slug, name: kit.name },
+    });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
       what: 'released a revision',

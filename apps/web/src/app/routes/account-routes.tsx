@@ -57,4 +57,8 @@ export const accountRoutes: RouteObject[] = [
     path: paths.tuner.path,
     element: lazyPage(async () => (await import('../../features/entitlements/tuner.page.js')).TunerPage),
   },
+  {
+    path: paths.shelfFit.path,
+    element: lazyPage(async () => (await import('../../features/fit/report-fit.page.js')).ReportFitPage),
+  },
 ];

@@ -50,6 +50,7 @@ export const lostTexts = {
 };
 
 export const shelfKitTexts = {
+  reportFit: 'Say how a part fits',
   failed: 'This kit cannot be shown',
   notYours: 'This kit is not on your shelf',
   notYoursDetail:

@@ -15,6 +15,8 @@ export const shopTexts = {
   navigation: 'Shop',
   footer: 'About this shop',
   cautions: 'Cautions',
+  journal: 'Journal',
+  news: 'News',
   printer: 'My printer',
 };
 

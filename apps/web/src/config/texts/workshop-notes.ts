@@ -12,7 +12,6 @@ export const notesTexts = {
   part: 'Part',
   insertPart: 'Insert the part',
   choosePart: 'Choose a part',
-  preview: 'Preview',
   saveOf: { assemblyNotes: 'Save the assembly notes', changeNotes: 'Save the change notes' },
   saved: 'Saved.',
   unsaved: 'Not saved yet; kept in this browser.',

@@ -2,7 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import { notesTexts } from '../../config/texts/workshop-notes.js';
 import { Button } from '../../ui/button.js';
 import { InsertPart } from './insert-part.js';
-import { useInserting } from './markdown-editor.js';
+import { useInserting } from '../../ui/markdown-editor.js';
 import { NotesEditor } from './notes-editor.js';
 import { useRevision } from './revision-context.js';
 import { WhatDiffers } from './what-differs.js';

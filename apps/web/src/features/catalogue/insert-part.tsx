@@ -4,7 +4,7 @@ import { useState } from 'react';
 import { notesTexts } from '../../config/texts/workshop-notes.js';
 import { Button } from '../../ui/button.js';
 import { SelectField } from '../../ui/field/select-field.js';
-import { useInserting } from './markdown-editor.js';
+import { useInserting } from '../../ui/markdown-editor.js';
 
 /** Chooses a part and puts its link into the text. */
 export function InsertPart({ parts }: { parts: readonly Part[] }) {

@@ -2,23 +2,14 @@ import { Box } from '@chakra-ui/react/box';
 import type { InputOf } from '@windchest/contracts';
 import { Controller, type UseFormReturn } from 'react-hook-form';
 import { kitFormTexts as texts } from '../../config/texts/workshop-kits.js';
+import { slugOf } from '../../lib/slug-of.js';
 import { TextField } from '../../ui/field/text-field.js';
 import type { DrawnVoice } from '../../ui/drawing/rank-layout.js';
 import { ColourField } from './colour-field.js';
-import { MarkdownEditor } from './markdown-editor.js';
+import { MarkdownEditor } from '../../ui/markdown-editor.js';
 
 export type KitWords = InputOf<'POST /workshop/kits'>['body'];
 export const kitWordNames = ['name', 'slug', 'tagline', 'description', 'colour'] as const;
-
-/** `Curlew, small` → `curlew-small`: what an address may hold of a name. */
-export const slugOf = (name: string): string =>
-  name
-    .normalize('NFKD')
-    .replace(/\p{Mark}/gu, '')
-    .toLowerCase()
-    .replace(/[^a-z0-9]+/g, '-')
-    .replace(/^-+|-+$/g, '')
-    .slice(0, 60);
 
 export interface KitWordsFieldsProps {
   form: UseFormReturn<KitWords, unknown, KitWords>;

@@ -9,9 +9,9 @@ import { Fault } from '../../ui/fault.js';
 import { Markdown } from '../../ui/markdown.js';
 import { Notice } from '../../ui/notice.js';
 import { Text } from '../../ui/text.js';
-import { MarkdownEditor } from './markdown-editor.js';
+import { MarkdownEditor } from '../../ui/markdown-editor.js';
 import { useRevision } from './revision-context.js';
-import { useDraftText } from './use-draft-text.js';
+import { useDraftText } from '../../lib/use-draft-text.js';
 
 export interface NotesEditorProps {
   field: 'assemblyNotes' | 'changeNotes';

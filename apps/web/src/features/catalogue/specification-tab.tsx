@@ -13,7 +13,7 @@ import { NumberField } from '../../ui/field/number-field.js';
 import { Form } from '../../ui/form.js';
 import { Heading, Text } from '../../ui/text.js';
 import { HardwareFields } from './hardware-fields.js';
-import { MarkdownEditor, useInserting } from './markdown-editor.js';
+import { MarkdownEditor, useInserting } from '../../ui/markdown-editor.js';
 import { PrintSpecFields } from './print-spec-fields.js';
 import { useRevision } from './revision-context.js';
 import { specificationBody, type SpecificationForm, specificationForm } from './specification-form.js';

@@ -75,6 +75,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
       <RowAnchor href={`#${sectionIds.licence}`}>{shelfKitTexts.licence}</RowAnchor>
       {kit.cautions && <RowAnchor href={`#${sectionIds.cautions}`}>{shelfKitTexts.cautions}</RowAnchor>}
       <RowAnchor href={`#${sectionIds.downloads}`}>{shelfKitTexts.downloads}</RowAnchor>
+      <RowLink to={paths.shelfFit.to({ slug: kit.slug })}>{shelfKitTexts.reportFit}</RowLink>
       {kit.orderId && (
         <RowLink to={paths.order.to({ orderId: kit.orderId })}>{shelfKitTexts.receipt}</RowLink>
       )}

@@ -21,6 +21,7 @@ import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
 import { sourceWords } from './source-words.js';
 import { useShelfDownload } from './use-download.js';
+import { WatchRevisions } from './watch-revisions.js';
 
 /** A download that has not ended yet is looked after for this long, so that the page learns what is held. */
 const watchedMs = 10 * 60_000;
@@ -78,7 +79,12 @@ function Kit({ kit }: { kit: ShelfKit }) {
             {held && <ReprintTable parts={kit.parts} />}
           </>
         }
-        aside={<ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />}
+        aside={
+          <>
+            <ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />
+            <WatchRevisions slug={kit.slug} />
+          </>
+        }
         block={
           <TitleBlock
             columns={2}

@@ -18,7 +18,7 @@ import { RadioRow, RadioRows } from '../../ui/field/radio-rows.js';
 import { TextField } from '../../ui/field/text-field.js';
 import { Form } from '../../ui/form.js';
 import { Text } from '../../ui/text.js';
-import { MarkdownEditor } from '../catalogue/markdown-editor.js';
+import { MarkdownEditor } from '../../ui/markdown-editor.js';
 import { type PlanForm, planBodyOf, planForm } from './plan-form.js';
 
 const Group = chakra('fieldset', { base: { border: '0', padding: '0', margin: '0', minWidth: '0' } });

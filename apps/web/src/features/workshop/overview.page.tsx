@@ -21,6 +21,8 @@ const signs: Record<Waiting['kind'], SignName> = {
   'dead-job': 'stop',
   'coupon-low': 'note',
   'refused-file': 'stop',
+  'fit-report': 'wait',
+  letter: 'wait',
 };
 
 const WaitingList = ({ waiting }: { waiting: readonly Waiting[] }) =>

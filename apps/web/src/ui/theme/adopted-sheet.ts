@@ -1,3 +1,5 @@
+const sheetsOfComponents = new WeakSet<CSSStyleSheet>();
+
 /**
  * Where Emotion puts its rules. Its own sheet writes `<style>` elements, which `style-src 'self'` blocks even
  * while they are empty; a constructed style sheet is the script's own doing and needs neither nonce nor
@@ -17,9 +19,13 @@ class AdoptedSheet {
     this.key = options.key;
     this.container = options.container;
     this.nonce = options.nonce;
-    // The first sheet, of the components' own rules, stays last: global ones name the order of the layers.
+    const isGlobal = options.key.endsWith('-global');
+    if (!isGlobal) sheetsOfComponents.add(this.rules);
+    // Components' rules stay last: global sheets name the order of the layers.
     const adopted = document.adoptedStyleSheets;
-    document.adoptedStyleSheets = [...adopted.slice(0, -1), this.rules, ...adopted.slice(-1)];
+    const before = isGlobal ? adopted.findIndex((sheet) => sheetsOfComponents.has(sheet)) : -1;
+    const at = before < 0 ? adopted.length : before;
+    document.adoptedStyleSheets = [...adopted.slice(0, at), this.rules, ...adopted.slice(at)];
   }
 
   hydrate(): void {}

@@ -47,17 +47,26 @@ function sceneOf(model: BufferGeometry, colours: DrawnColours, radius: number) {
   return { scene, dispose };
 }
 
-function Eye({ orbit, radius }: { orbit: Orbit; radius: number }) {
+interface Looking {
+  orbit: Orbit;
+  radius: number;
+  size: { width: number; height: number };
+}
+
+function aim(eye: PerspectiveCamera, { orbit, radius, size }: Looking): void {
+  // A narrow view is filled by its width.
+  const narrow = Math.max(1, size.height / Math.max(1, size.width));
+  eye.position.set(...eyeOf(orbit, radius * airFactor * narrow, fovDeg));
+  eye.near = radius / 50;
+  eye.far = radius * 60;
+  eye.lookAt(0, 0, 0);
+  eye.updateProjectionMatrix();
+}
+
+function Eye({ orbit, radius }: Pick<Looking, 'orbit' | 'radius'>) {
   const { camera, invalidate, size } = useThree();
   useLayoutEffect(() => {
-    const eye = camera as PerspectiveCamera;
-    // A narrow view is filled by its width.
-    const narrow = Math.max(1, size.height / Math.max(1, size.width));
-    eye.position.set(...eyeOf(orbit, radius * airFactor * narrow, fovDeg));
-    eye.near = radius / 50;
-    eye.far = radius * 60;
-    eye.lookAt(0, 0, 0);
-    eye.updateProjectionMatrix();
+    aim(camera as PerspectiveCamera, { orbit, radius, size });
     invalidate();
   }, [camera, invalidate, orbit, radius, size]);
   // The light comes over the looker's left shoulder, so that every turn shows the faces differently.

@@ -71,7 +71,7 @@ export function PartTurner({ part }: { part: PreviewedPart }) {
   };
 
   return (
-    <Box ref={place} display="grid" gap="3">
+    <Box ref={place} display="grid" gap="3" gridTemplateColumns="minmax(0, 1fr)">
       {canDraw && loading.state === 'loading' && (
         <Box height="min(22rem, 52vh)" display="grid" alignContent="center">
           <Progress label={texts.loading(bytes(part.bytes))} />

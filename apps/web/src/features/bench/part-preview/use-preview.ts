@@ -28,18 +28,20 @@ async function load(address: string): Promise<Loading> {
   }
 }
 
+const isLoading: Loading = { state: 'loading' };
+
 /** A part's likeness and the program that draws it, fetched together, once they are wanted. */
 export function usePreview(address: string, isWanted: boolean): [Loading, again: () => void] {
-  const [loading, setLoading] = useState<Loading>({ state: 'loading' });
   const [tries, setTries] = useState(0);
+  const asked = `${address} ${tries}`;
+  const [answer, setAnswer] = useState({ asked, loading: isLoading });
   useEffect(() => {
     if (!isWanted) return;
     let isGone = false;
-    setLoading({ state: 'loading' });
-    void load(address).then((next) => !isGone && setLoading(next));
+    void load(address).then((loading) => !isGone && setAnswer({ asked, loading }));
     return () => {
       isGone = true;
     };
-  }, [address, isWanted, tries]);
-  return [loading, () => setTries((before) => before + 1)];
+  }, [address, asked, isWanted]);
+  return [answer.asked === asked ? answer.loading : isLoading, () => setTries((before) => before + 1)];
 }

@@ -47,7 +47,8 @@ export function Tuner({ kit, rank, revision, back }: TunerProps) {
       <SplitSheet
         asideLabel={texts.aside}
         main={
-          <Box display="grid" gap="6">
+          // Drawings keep their width until their place takes its own: it must not take theirs.
+          <Box display="grid" gap="6" gridTemplateColumns="minmax(0, 1fr)">
             <Box>
               <Heading level={1} overflowWrap="anywhere">
                 {texts.title(kit.name)}

@@ -1,17 +1,14 @@
 import type { RankVoice } from '@windchest/contracts';
 import type { Room } from '@windchest/voicing';
-import { useCallback, useEffect, useMemo, useState } from 'react';
+import { useMemo, useState } from 'react';
 import { foresee, type Foreseen, judge, type Judging, targetOf, type Verdict } from './judge.js';
 import type { Listening } from './listening.js';
-import type { Reading } from './steady-pitch.js';
-import { useListening } from './use-listening.js';
+import { type Taken, useListening } from './use-listening.js';
 import { type Microphone, useMicrophone } from './use-microphone.js';
 import { type RecordingState, useRecording } from './use-recording.js';
 
-export interface Tuned {
-  reading: Reading;
+export interface Tuned extends Taken {
   verdict: Verdict;
-  judging: Judging;
 }
 
 export interface Tuner {
@@ -19,7 +16,7 @@ export interface Tuner {
   targetHz: number;
   foreseen: Foreseen | undefined;
   listening: Listening;
-  /** Of the voice chosen, since it was chosen. */
+  /** Of the voice chosen. */
   tuned: Tuned | undefined;
   /** Every voice heard well, by its code. */
   soFar: ReadonlyMap<string, Tuned>;
@@ -31,12 +28,21 @@ export interface Tuner {
   chooseRecording: (file: File) => void;
 }
 
+/** Voices that surely sounded themselves, with what to do about them. */
+const heardWell = (taken: ReadonlyMap<string, Taken>): ReadonlyMap<string, Tuned> =>
+  new Map(
+    [...taken].flatMap(([code, one]) => {
+      const verdict = judge(one.reading, one.judging);
+      const isIts = verdict.says === 'advice' && !verdict.nearer;
+      return isIts ? [[code, { ...one, verdict }] as const] : [];
+    }),
+  );
+
 /** The tuner's state: which voice, in which room, what is heard of it and what that means. */
 export function useTuner(rank: readonly [RankVoice, ...RankVoice[]], voicedFor: Room): Tuner {
   const [code, setCode] = useState(rank[0].code);
   const [temperatureC, chooseTemperature] = useState(Math.round(voicedFor.temperatureC));
   const [isForRoom, tuneForRoom] = useState(false);
-  const [soFar, setSoFar] = useState<ReadonlyMap<string, Tuned>>(new Map());
   const microphone = useMicrophone();
   const [recording, chooseRecording, forgetRecording] = useRecording();
 
@@ -49,31 +55,23 @@ export function useTuner(rank: readonly [RankVoice, ...RankVoice[]], voicedFor: 
     }),
     [rank, code, voicedFor, temperatureC, isForRoom],
   );
-  const targetHz = targetOf(judging);
-  const foreseen = useMemo(() => foresee(judging), [judging]);
   const source = {
     microphone: microphone.state.is === 'on' ? microphone.state.microphone : undefined,
     recording: recording.is === 'here' ? recording.recording : undefined,
   };
-  const listening = useListening(source, judging.voice, targetHz);
+  const { listening, taken } = useListening(source, judging);
   const { reading } = listening;
-  const tuned = useMemo(
-    () => reading && { reading, verdict: judge(reading, judging), judging },
-    [reading, judging],
-  );
-
-  useEffect(() => {
-    if (!tuned?.reading.isSteady || tuned.verdict.says !== 'advice' || tuned.verdict.nearer) return;
-    setSoFar((before) => new Map(before).set(tuned.judging.voice.code, tuned));
-  }, [tuned]);
 
   return {
     judging,
-    targetHz,
-    foreseen,
+    targetHz: targetOf(judging),
+    foreseen: useMemo(() => foresee(judging), [judging]),
     listening,
-    tuned,
-    soFar,
+    tuned: useMemo(
+      () => reading && { reading, judging, verdict: judge(reading, judging) },
+      [reading, judging],
+    ),
+    soFar: useMemo(() => heardWell(taken), [taken]),
     microphone: {
       ...microphone,
       start: () => {
@@ -85,12 +83,9 @@ export function useTuner(rank: readonly [RankVoice, ...RankVoice[]], voicedFor: 
     chooseVoice: setCode,
     chooseTemperature,
     tuneForRoom,
-    chooseRecording: useCallback(
-      (file: File) => {
-        microphone.stop();
-        chooseRecording(file);
-      },
-      [microphone, chooseRecording],
-    ),
+    chooseRecording: (file) => {
+      microphone.stop();
+      chooseRecording(file);
+    },
   };
 }

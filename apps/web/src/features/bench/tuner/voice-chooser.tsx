@@ -118,7 +118,7 @@ export function VoiceChooser({ noun, ...choice }: VoiceChooserProps) {
       alignItems="end"
       gridTemplateColumns={{ base: 'minmax(0, 1fr)', md: 'minmax(0, 3fr) minmax(15rem, 2fr)' }}
     >
-      <Box title={texts.rank(noun)}>
+      <Box title={texts.rank(noun)} minWidth="0">
         <DrawnChoice {...choice} />
       </Box>
       <Box display="grid" gap="2" gridTemplateColumns="minmax(0, 1fr) auto auto" alignItems="end">

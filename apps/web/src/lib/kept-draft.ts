@@ -1,4 +1,4 @@
-import { type StoredValue, storedValue } from '../../lib/stored-value.js';
+import { type StoredValue, storedValue } from './stored-value.js';
 
 const kept = new Map<string, StoredValue<string | null>>();
 

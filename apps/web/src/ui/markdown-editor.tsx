@@ -1,10 +1,10 @@
 import { Box } from '@chakra-ui/react/box';
 import { createContext, type ReactNode, useContext, useDeferredValue, useRef } from 'react';
-import { notesTexts } from '../../config/texts/workshop-notes.js';
-import { TextArea } from '../../ui/field/text-field.js';
-import type { FieldCommon } from '../../ui/field/field.js';
-import { Markdown } from '../../ui/markdown.js';
-import { Text } from '../../ui/text.js';
+import { editorTexts } from '../config/texts/furniture.js';
+import { TextArea } from './field/text-field.js';
+import type { FieldCommon } from './field/field.js';
+import { Markdown } from './markdown.js';
+import { Text } from './text.js';
 import { withBlock, withInserted } from './insert-text.js';
 
 export interface Inserting {
@@ -29,6 +29,7 @@ export interface MarkdownEditorProps {
   /** Stands in the preview while nothing is written. */
   emptyPreview?: string;
   partHref?: (code: string) => string;
+  pictureSrc?: (id: string) => string;
   /** Buttons that put something in, by `useInserting`. */
   tools?: ReactNode;
 }
@@ -41,8 +42,9 @@ export function MarkdownEditor({
   value,
   onChange,
   rows = 22,
-  emptyPreview = notesTexts.nothing,
+  emptyPreview = editorTexts.nothing,
   partHref,
+  pictureSrc,
   tools,
 }: MarkdownEditorProps) {
   const area = useRef<HTMLTextAreaElement>(null);
@@ -85,13 +87,13 @@ export function MarkdownEditor({
           value={value}
           onChange={(event) => onChange(event.target.value)}
         />
-        <Box as="section" aria-label={`${notesTexts.preview}: ${label}`} minWidth="0">
+        <Box as="section" aria-label={`${editorTexts.preview}: ${label}`} minWidth="0">
           <Text look="label" fontSize="sm" paddingBottom="1.5" borderBottomWidth="1px" borderColor="hairline">
-            {notesTexts.preview}
+            {editorTexts.preview}
           </Text>
           <Box marginTop="3" overflowX="auto">
             {shown.trim() ? (
-              <Markdown text={shown} partHref={partHref} />
+              <Markdown text={shown} partHref={partHref} pictureSrc={pictureSrc} />
             ) : (
               <Text isSoft>{emptyPreview}</Text>
             )}

@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { useStoredValue } from '../../lib/stored-value.js';
+import { useStoredValue } from './stored-value.js';
 import { keptDraft } from './kept-draft.js';
 
 export interface DraftText {
