@@ -15,6 +15,7 @@ import {
   slug,
   sortBy,
 } from './values.js';
+import { rankVoice } from './voices.js';
 
 /** What stays on the shelf when a pledge ends. */
 export const keepsAfter = z.enum(['nothing', 'released-during', 'released-before-end']);
@@ -98,7 +99,8 @@ export const pledge = z.object({
   plan: z.object({ id, name: z.string() }),
   amount: money,
   keepsAfter,
-  kits: z.array(z.object({ slug, name: z.string(), colour: filamentColour })),
+  /** A kit that does not stand in the shop is not drawn. */
+  kits: z.array(z.object({ slug, name: z.string(), colour: filamentColour, rank: z.array(rankVoice) })),
   /** Chosen already, from the next payment on. */
   nextPlan: z.object({ id, name: z.string(), amount: money, from: moment }).nullable(),
   beganAt: moment.nullable(),

@@ -32,11 +32,7 @@ export class PledgeView {
     const planIds = pledges.flatMap((one) => [one.planId, ...(one.nextPlanId ? [one.nextPlanId] : [])]);
     const plans = await this.plans.findAll({ where: { id: [...new Set(planIds)] } });
     const kitsOf = new Map(
-      await Promise.all(
-        plans.map(
-          async (plan) => [plan.id, await this.catalogue.kitsByIds(await this.kits.idsOf(plan))] as const,
-        ),
-      ),
+      await Promise.all(plans.map(async (plan) => [plan.id, await this.kitsOf(plan)] as const)),
     );
     const nameOf = new Map(plans.map((plan) => [plan.id, plan.name]));
     const firstPayments = await this.firstPayments(pledges.map(({ id }) => id));
@@ -50,7 +46,7 @@ export class PledgeView {
         plan: { id: pledge.planId, name: nameOf.get(pledge.planId) ?? '' },
         amount: { minor: pledge.amountMinor, currency: pledge.currency },
         keepsAfter: pledge.keepsAfter,
-        kits: (kitsOf.get(pledge.planId) ?? []).map(({ slug, name, colour }) => ({ slug, name, colour })),
+        kits: kitsOf.get(pledge.planId) ?? [],
         nextPlan: nextPlanOf(pledge, nameOf),
         beganAt: iso(pledge.beganAt),
         paidUntil: iso(pledge.paidUntil),
@@ -69,6 +65,13 @@ export class PledgeView {
           : [],
       };
     });
+  }
+
+  private async kitsOf(plan: PledgePlan): Promise<PledgeAnswer['kits']> {
+    const ids = await this.kits.idsOf(plan);
+    const drawn = new Map((await this.catalogue.shopCards(ids)).map((card) => [card.id, card.rank]));
+    const kits = await this.catalogue.kitsByIds(ids);
+    return kits.map(({ id, slug, name, colour }) => ({ slug, name, colour, rank: drawn.get(id) ?? [] }));
   }
 
   /** The day of a pledge's first payment says on which day of a month the others are. */

@@ -49,7 +49,7 @@ export const supportTexts = {
   countryMissing: 'Choose the country you live in.',
   terms:
     'The amount is taken each month on the same day. End it whenever you like: it then runs to the end of the month that is paid.',
-  open: (amount: string) => `Pledge ${amount}`,
+  open: (amount: string) => `Pledge ${amount} a month`,
   opening: 'Opening …',
   notOpened: 'No pledge was begun',
   blockPlan: 'Plan',

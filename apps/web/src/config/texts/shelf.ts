@@ -22,6 +22,8 @@ export const shelfTexts = {
   nothingYet: 'Nothing yet',
   newest: 'Newest',
   since: (source: string, date: string) => `${source}, ${date}`,
+  paidUntil: (source: string, date: string) => `${source}, until ${date}`,
+  keptFrom: (source: string, date: string) => `${source}, ended ${date}`,
   get: (label: string) => `Get ${label}`,
   seeReprint: 'See what to reprint',
   upToDate: 'You hold the newest',
@@ -120,8 +122,13 @@ export const shelfKitTexts = {
   blockHold: 'You hold',
   blockNothing: 'Nothing yet',
   blockNewest: 'Newest',
+  notIncludedTitle: (label: string) => `${label} came after your pledge`,
+  notIncluded: (newest: string) =>
+    `What stays of the pledge goes up to ${newest}. Pledge again or buy the kit to get later ones.`,
+  pledgeAgain: 'Pledge again',
+  buyKit: 'See the kit in the shop',
+
   blockSource: 'Yours by',
-  blockSince: 'Since',
   newestOf: (label: string, date: string) => `${label}, ${date}`,
 
   noNotes: 'No change notes were written for this revision.',

@@ -2,9 +2,10 @@ import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
 import { useState } from 'react';
 import { paths } from '../../config/paths.js';
-import { shelfKitTexts, sourceTexts } from '../../config/texts/shelf.js';
+import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { date } from '../../lib/format.js';
 import { PartsSheet } from '../../ui/drawing/parts-sheet.js';
+import { TextLink } from '../../ui/link.js';
 import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { SplitSheet } from '../../ui/sheet.js';
@@ -18,6 +19,7 @@ import { ShelfKitActions } from './shelf-kit-actions.js';
 import { ShelfKitAnswer } from './shelf-kit-answer.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
+import { sourceWords } from './source-words.js';
 import { useShelfDownload } from './use-download.js';
 import { WatchRevisions } from './watch-revisions.js';
 
@@ -60,6 +62,15 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 </Notice>
               </Box>
             )}
+            {kit.newerNotIncluded && (
+              <Box marginTop="5">
+                <Notice title={shelfKitTexts.notIncludedTitle(kit.newerNotIncluded)}>
+                  {shelfKitTexts.notIncluded(newest.label)}{' '}
+                  <TextLink to={paths.support.to()}>{shelfKitTexts.pledgeAgain}</TextLink>{' '}
+                  <TextLink to={paths.kit.to({ slug: kit.slug })}>{shelfKitTexts.buyKit}</TextLink>
+                </Notice>
+              </Box>
+            )}
             {drawn.length > 0 && (
               <Box marginTop="8">
                 <PartsSheet parts={drawn} label={shelfKitTexts.sheet(kit.name)} />
@@ -83,8 +94,10 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 name: shelfKitTexts.blockNewest,
                 value: shelfKitTexts.newestOf(newest.label, date(newest.releasedAt)),
               },
-              { name: shelfKitTexts.blockSource, value: sourceTexts[kit.source] },
-              { name: shelfKitTexts.blockSince, value: date(kit.since) },
+              {
+                name: shelfKitTexts.blockSource,
+                value: sourceWords(kit).map((words) => <Box key={words}>{words}</Box>),
+              },
             ]}
           />
         }

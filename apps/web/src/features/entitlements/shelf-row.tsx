@@ -3,7 +3,6 @@ import { chakra } from '@chakra-ui/react/styled-system';
 import type { ShelfItem } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
 import { shelfTexts, sourceTexts } from '../../config/texts/shelf.js';
-import { date } from '../../lib/format.js';
 import { LinkButton } from '../../ui/button.js';
 import { FilamentSwatch } from '../../ui/drawing/filament-swatch.js';
 import { Facts } from '../../ui/facts.js';
@@ -11,6 +10,7 @@ import { RouterLink } from '../../ui/router-link.js';
 import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { VisuallyHidden } from '../../ui/visually-hidden.js';
+import { sourceWords } from './source-words.js';
 
 const NameLink = chakra(RouterLink, {
   base: { borderRadius: 'sm', _hover: { textDecoration: 'underline', textUnderlineOffset: '0.12em' } },
@@ -77,7 +77,7 @@ export const ShelfRow = ({ item }: { item: ShelfItem }) => {
               { name: shelfTexts.newest, value: newest.label },
               {
                 name: item.licenceName || sourceTexts[item.source],
-                value: shelfTexts.since(sourceTexts[item.source], date(item.since)),
+                value: sourceWords(item).map((words) => <Box key={words}>{words}</Box>),
               },
             ]}
           />

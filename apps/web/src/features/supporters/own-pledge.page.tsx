@@ -7,7 +7,7 @@ import { date, price } from '../../lib/format.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
-import { FilamentSwatch } from '../../ui/drawing/filament-swatch.js';
+import { extentOfAll } from '../../ui/drawing/rank-layout.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
 import { TextLink } from '../../ui/link.js';
@@ -17,10 +17,11 @@ import { Band, SplitSheet } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { Heading, Text } from '../../ui/text.js';
-import { KitColour } from '../../ui/theme/kit-colour.js';
 import { TitleBlock, type TitleBlockField } from '../../ui/title-block.js';
+import { drawnVoices } from '../bench/drawn-voices.js';
 import { EarlierPledges } from './earlier-pledges.js';
 import { PledgeActions } from './pledge-actions.js';
+import { PlanRanks } from './plan-ranks.js';
 import { PledgePayments } from './pledge-payments.js';
 import { isLive, leadOf, pledgeSigns, staysWords } from './pledge-words.js';
 import { type OwnPledge, useOwnPledge } from './use-own-pledge.js';
@@ -47,18 +48,15 @@ function fieldsOf(pledge: Pledge): TitleBlockField[] {
 }
 
 const Kits = ({ pledge }: { pledge: Pledge }) => (
-  <Box as="section" marginTop="8">
-    <Heading level={2} look="subsection" marginBottom="2">
+  <Box as="section" marginTop="10">
+    <Heading level={2} look="subsection" marginBottom="5">
       {texts.kits}
     </Heading>
-    <Box as="ul" listStyle="none" display="flex" flexWrap="wrap" columnGap="6" rowGap="2">
-      {pledge.kits.map((kit) => (
-        <KitColour as="li" key={kit.slug} palette={kit.colour} display="flex" gap="2" alignItems="center">
-          <FilamentSwatch width="0.75rem" height="1.1em" />
-          <TextLink to={paths.shelfKit.to({ slug: kit.slug })}>{kit.name}</TextLink>
-        </KitColour>
-      ))}
-    </Box>
+    <PlanRanks
+      kits={pledge.kits}
+      extent={extentOfAll(pledge.kits.map((kit) => drawnVoices(kit.rank)))}
+      linkOf={(slug) => paths.shelfKit.to({ slug })}
+    />
   </Box>
 );
 

@@ -113,9 +113,11 @@ export function PlanFields({ plan, currency, isWritable, save, fault }: PlanFiel
             </Box>
           )}
           {kitsFault && <FieldFault id="plan-kits-fault">{kitsFault}</FieldFault>}
-          <Text look="small" isSoft marginTop="2">
-            {texts.kitsHint}
-          </Text>
+          {plan && (
+            <Text look="small" isSoft marginTop="2">
+              {texts.kitsHint}
+            </Text>
+          )}
         </Box>
         <Box>
           <RadioRows legend={texts.keeps}>
@@ -123,9 +125,11 @@ export function PlanFields({ plan, currency, isWritable, save, fault }: PlanFiel
               <RadioRow key={value} value={value} label={label} note={note} {...register('keepsAfter')} />
             ))}
           </RadioRows>
-          <Text look="small" isSoft marginTop="2">
-            {texts.keepsHint}
-          </Text>
+          {plan && (
+            <Text look="small" isSoft marginTop="2">
+              {texts.keepsHint}
+            </Text>
+          )}
         </Box>
         <Checkbox label={texts.isOffered} hint={texts.isOfferedHint} {...register('isOffered')} />
       </Group>

@@ -3,17 +3,20 @@ import type { Plan } from '@windchest/contracts';
 import { supportTexts as texts } from '../../config/texts/pledge.js';
 import { Rank } from '../../ui/drawing/rank.js';
 import type { ExtentMm } from '../../ui/drawing/rank-layout.js';
+import { TextLink } from '../../ui/link.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { drawnVoices } from '../bench/drawn-voices.js';
 
 export interface PlanRanksProps {
-  kits: Plan['kits'];
+  kits: readonly Pick<Plan['kits'][number], 'slug' | 'name' | 'colour' | 'rank'>[];
   /** Of the largest rank on the page, so that all are drawn to one scale. */
   extent: ExtentMm;
+  /** Where a kit's name leads. */
+  linkOf?: (slug: string) => string;
 }
 
 /** The kits of a plan, each by its rank, in its own colour. */
-export const PlanRanks = ({ kits, extent }: PlanRanksProps) => (
+export const PlanRanks = ({ kits, extent, linkOf }: PlanRanksProps) => (
   <Box
     as="ul"
     listStyle="none"
@@ -34,7 +37,7 @@ export const PlanRanks = ({ kits, extent }: PlanRanksProps) => (
             description={texts.drawn(kit.name, voices.length)}
           />
           <Box fontSize="sm" marginTop="1" overflowWrap="anywhere">
-            {kit.name}
+            {linkOf ? <TextLink to={linkOf(kit.slug)}>{kit.name}</TextLink> : kit.name}
           </Box>
         </KitColour>
       );

@@ -21,6 +21,8 @@ export interface PledgeDialogProps {
   onClose: () => void;
 }
 
+/** Dialogs stand ready before they are asked for, also for a pledge that has no days yet. */
+const dayOf = (moment: string | null) => (moment ? date(moment) : '');
 const nextAmount = ({ nextPlan, amount }: Pledge) => price(nextPlan?.amount ?? amount);
 
 export function PauseDialog({ pledge, deed, onClose }: PledgeDialogProps) {
@@ -143,7 +145,7 @@ export function KeepDialog({ pledge, deed, onClose }: PledgeDialogProps) {
       look="ink"
       onConfirm={async () => (await run({ params: { pledgeId: pledge.id } })).isDone}
     >
-      <Text>{texts.keepDetail(date(pledge.paidUntil ?? pledge.endsAt ?? ''), nextAmount(pledge))}</Text>
+      <Text>{texts.keepDetail(dayOf(pledge.paidUntil ?? pledge.endsAt), nextAmount(pledge))}</Text>
       {fault && <Fault level={3} what={texts.notDone} fault={fault} />}
     </ConfirmDialog>
   );
@@ -151,7 +153,7 @@ export function KeepDialog({ pledge, deed, onClose }: PledgeDialogProps) {
 
 export function ResumeDialog({ pledge, deed, onClose }: PledgeDialogProps) {
   const { run, fault } = useAction('POST /pledges/:pledgeId/resume', stale);
-  const day = date(pledge.resumesAt ?? pledge.paidUntil ?? '');
+  const day = dayOf(pledge.resumesAt ?? pledge.paidUntil);
   return (
     <ConfirmDialog
       isOpen={deed === 'resume'}

@@ -38,6 +38,8 @@ export function SupportPage() {
   const { data, fault, mutate } = useEndpoint('GET /plans', { query: { page } }, { keepPreviousData: true });
   const own = useEndpoint('GET /account/pledges', person ? { query: {} } : null);
   const [isOpening, setIsOpening] = useState(false);
+  // The address follows a moment later than the ring that was pressed.
+  const [chosen, setChosen] = useState(address.get('plan'));
 
   if (!data || data.total === 0)
     return (
@@ -59,8 +61,9 @@ export function SupportPage() {
       </Band>
     );
 
-  const plan = data.items.find(({ id }) => id === address.get('plan')) ?? data.items[0];
   const standing = own.data ? (standingPledge(own.data.items) ?? null) : undefined;
+  const wanted = chosen ?? standing?.plan.id;
+  const plan = data.items.find(({ id }) => id === wanted) ?? data.items[0];
   const isPledging = standing !== undefined && standing !== null && standing.state !== 'opening';
   const isFormShown = Boolean(person?.isVerified) && standing !== undefined && !isPledging;
   return (
@@ -74,15 +77,16 @@ export function SupportPage() {
             <PlanRows
               plans={data.items}
               chosenId={plan?.id}
-              onChoose={(id) =>
+              onChoose={(id) => {
+                setChosen(id);
                 setAddress(
                   (before) => {
                     before.set('plan', id);
                     return before;
                   },
                   { replace: true, preventScrollReset: true },
-                )
-              }
+                );
+              }}
             />
             <Box marginTop="3">
               <Pager
