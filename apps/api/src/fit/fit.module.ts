@@ -13,7 +13,7 @@ import { FitController } from './fit.controller.js';
 import { ListFitReports } from './list-fit-reports.js';
 import { ReporterParts } from './reporter-parts.js';
 import { ReportFit } from './report-fit.js';
-import { ShowFitReport } from './show-fit-report.js';
+import { ShowFitReport } from './show-reports.js';
 import { WorkshopFitController } from './workshop-fit.controller.js';
 
 @Module({

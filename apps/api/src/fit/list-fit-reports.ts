@@ -5,7 +5,7 @@ import { Op, type WhereOptions } from 'sequelize';
 import { csvRecord } from '../http/csv.js';
 import { notFound } from '../http/refusal.js';
 import { FitReport } from './fit-report.model.js';
-import { ShowFitReport } from './show-fit-report.js';
+import { ShowFitReport } from './show-reports.js';
 
 type Query = Handled<'GET /workshop/fit-reports'>['query'];
 const CSV_PAGE = 200;

@@ -10,7 +10,7 @@ import type { SignedIn } from '../http/person.js';
 import { notFound, Refusal } from '../http/refusal.js';
 import { Pictures } from '../pictures/pictures.js';
 import { FitReport } from './fit-report.model.js';
-import { ShowFitReport } from './show-fit-report.js';
+import { ShowFitReport } from './show-reports.js';
 
 type Body = Handled<'POST /shelf/:slug/fit-reports'>['body'];
 
