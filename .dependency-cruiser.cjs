@@ -6,23 +6,27 @@ const onlyFrom = (name, from, allowed) => ({
   from: { path: from },
   to: { path: '^(apps|packages|fakes|seed-data)/', pathNot: allowed },
 });
-const rooms = '(accounts|catalogue|measuring|coupons|orders|supporters|entitlements|fit|letters|journal|ledger|workshop)';
+const rooms =
+  '(accounts|catalogue|measuring|coupons|orders|supporters|entitlements|fit|letters|journal|ledger|workshop)';
 
 /** room -> the rooms it may use */
 const mayUse = {
   accounts: [],
   catalogue: ['accounts'],
   measuring: ['accounts', 'catalogue'],
-  supporters: ['accounts', 'catalogue'],
-  // A code for supporters only asks whether the buyer is one.
-  coupons: ['accounts', 'catalogue', 'supporters'],
-  orders: ['accounts', 'catalogue', 'coupons', 'supporters'],
+  coupons: ['accounts', 'catalogue'],
+  // Says to the coupons whether a buyer is a supporter.
+  supporters: ['accounts', 'catalogue', 'coupons'],
+  orders: ['accounts', 'catalogue', 'coupons'],
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
   letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements', 'fit'],
   journal: ['accounts', 'catalogue', 'supporters'],
   ledger: ['accounts', 'catalogue', 'orders', 'supporters'],
-  workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),
+  workshop:
+    'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(
+      ' ',
+    ),
 };
 const lowerLayers = 'adapters database jobs mails payments http pictures config typesetting'.split(' ');
 
@@ -38,10 +42,16 @@ module.exports = {
     {
       name: 'pure-packages-do-no-io',
       severity: 'error',
-      from: { path: '^packages/(money|contracts|voicing|meshes|plates|emails)/src', pathNot: '\\.(spec|bench)\\.ts$|/(preview-page|reports?)/|-report\\.ts$' },
+      from: {
+        path: '^packages/(money|contracts|voicing|meshes|plates|emails)/src',
+        pathNot: '\\.(spec|bench)\\.ts$|/(preview-page|reports?)/|-report\\.ts$',
+      },
       to: { dependencyTypes: ['core'] },
     },
-    onlyFrom('web-imports-packages-only', '^apps/web/', ['^apps/web/', '^packages/(money|contracts|voicing|meshes|plates)/']),
+    onlyFrom('web-imports-packages-only', '^apps/web/', [
+      '^apps/web/',
+      '^packages/(money|contracts|voicing|meshes|plates)/',
+    ]),
     {
       name: 'api-imports-packages-only',
       severity: 'error',
@@ -72,13 +82,27 @@ module.exports = {
       from: { path: '^apps/api/src/', pathNot: '^apps/api/src/adapters/|\\.spec\\.ts$|/testing/' },
       to: { path: 'node_modules/(stripe|nodemailer|@aws-sdk)/' },
     },
-    { name: 'web-ui-is-domain-free', severity: 'error', from: { path: '^apps/web/src/(ui|lib|config)/' }, to: { path: '^apps/web/src/(features|app)/' } },
-    { name: 'web-features-below-app', severity: 'error', from: { path: '^apps/web/src/features/' }, to: { path: '^apps/web/src/app/' } },
+    {
+      name: 'web-ui-is-domain-free',
+      severity: 'error',
+      from: { path: '^apps/web/src/(ui|lib|config)/' },
+      to: { path: '^apps/web/src/(features|app)/' },
+    },
+    {
+      name: 'web-features-below-app',
+      severity: 'error',
+      from: { path: '^apps/web/src/features/' },
+      to: { path: '^apps/web/src/app/' },
+    },
   ],
   options: {
     doNotFollow: { path: 'node_modules' },
     exclude: { path: '(^|/)dist/' },
     tsPreCompilationDeps: true,
-enhancedResolveOptions: { exportsFields: ['exports'], conditionNames: ['import', 'types', 'default'], extensions: ['.ts', '.tsx', '.js', '.mjs', '.json'] },
+    enhancedResolveOptions: {
+      exportsFields: ['exports'],
+      conditionNames: ['import', 'types', 'default'],
+      extensions: ['.ts', '.tsx', '.js', '.mjs', '.json'],
+    },
   },
 };

@@ -134,6 +134,8 @@ export const deliveryEndpoints = {
     response: pageOf(shelfItem).extend({
       /** Kits whose downloads rest while a payment is in dispute, by name. */
       resting: z.array(z.string()),
+      /** Kits that are theirs by a pledge alone, while the pledge rests. */
+      restingWithPledge: z.array(z.string()),
     }),
   }),
   'GET /shelf/:slug': endpoint({

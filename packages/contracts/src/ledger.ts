@@ -3,7 +3,14 @@ import { endpoint } from './endpoint.js';
 import { taxRecordEndpoints } from './tax-records.js';
 import { countryCode, currencyCode, day, id, idParams, moment, money, pageOf, pageQuery } from './values.js';
 
-export const salesOfMonth = z.object({ month: z.string(), orders: z.int(), gross: money, refunded: money });
+export const salesOfMonth = z.object({
+  month: z.string(),
+  orders: z.int(),
+  gross: money,
+  /** Of it: months of pledges. */
+  pledged: money,
+  refunded: money,
+});
 export const salesFigures = z.object({
   months: z.array(salesOfMonth),
   countries: z.array(z.object({ country: countryCode, orders: z.int(), gross: money })),

@@ -92,8 +92,10 @@ export const receiptRow = z.object({
   kind: z.enum(['receipt', 'credit-note']),
   number: z.string(),
   issuedAt: moment,
-  /** Null for the month of a pledge. */
   orderId: id.nullable(),
+  /** A receipt is of an order or of a payment of a pledge. */
+  pledge: z.object({ pledgeId: id, paymentId: id }).nullable(),
+  /** The number of either. */
   orderNumber: z.string(),
   email: z.string(),
   country: countryCode,

@@ -92,9 +92,20 @@ export const pledgeDeed = z.enum([
 export type PledgeDeed = z.output<typeof pledgeDeed>;
 export const pauseMonths = z.union([z.literal(1), z.literal(2), z.literal(3)]);
 
+/** What staff should look at. */
+export const pledgeFlag = z.enum([
+  'location-unclear',
+  'amount-differs',
+  'paid-after-end',
+  'disputed',
+  'refunded-outside',
+]);
+
 /** A pledge as its supporter sees it. */
 export const pledge = z.object({
   id,
+  /** What people call it by: `P-7K2M9Q`. */
+  number: z.string(),
   state: pledgeState,
   plan: z.object({ id, name: z.string() }),
   amount: money,
@@ -138,13 +149,14 @@ export type PledgePayment = z.output<typeof pledgePayment>;
 
 export const supporterRow = z.object({
   id,
+  number: z.string(),
   name: z.string(),
   email: z.string(),
   plan: z.object({ id, name: z.string() }),
   state: pledgeState,
   amount: money,
   country: countryCode,
-  flags: z.array(z.string()),
+  flags: z.array(pledgeFlag),
   beganAt: moment.nullable(),
   nextPaymentAt: moment.nullable(),
   endsAt: moment.nullable(),
@@ -159,7 +171,7 @@ export const supporter = pledge
     name: z.string(),
     email: z.string(),
     country: countryCode,
-    flags: z.array(z.string()),
+    flags: z.array(pledgeFlag),
     consentText: z.string(),
     consentAt: moment,
     customerId: z.string().nullable(),
@@ -227,6 +239,12 @@ export const supporterEndpoints = {
     params: pledgeParams,
     query: pageQuery,
     response: pageOf(pledgePayment),
+  }),
+  'GET /pledges/:pledgeId/payments/:paymentId/receipt.pdf': endpoint({
+    access: 'signed-in',
+    summary: 'The receipt of a payment as PDF, for the supporter',
+    params: idParams('pledgeId', 'paymentId'),
+    response: 'stream',
   }),
   'POST /pledges/:pledgeId/refresh': endpoint({
     access: 'signed-in',
@@ -339,6 +357,18 @@ export const supporterEndpoints = {
     summary: 'One supporter’s pledge with its whole history',
     params: pledgeParams,
     response: supporter,
+  }),
+  'DELETE /workshop/supporters/:pledgeId/flags/:flag': endpoint({
+    access: 'orders:refund',
+    summary: 'Take a flag off a pledge that was looked at',
+    params: pledgeParams.extend({ flag: pledgeFlag }),
+    response: null,
+  }),
+  'GET /workshop/supporters/:pledgeId/payments/:paymentId/receipt.pdf': endpoint({
+    access: 'supporters:read',
+    summary: 'The receipt of a payment as PDF',
+    params: idParams('pledgeId', 'paymentId'),
+    response: 'stream',
   }),
   'GET /workshop/supporters/:pledgeId/payments': endpoint({
     access: 'supporters:read',

@@ -117,7 +117,9 @@ export const quarterRow = z.object({
 export const unclearLocation = z.object({
   receiptId: id,
   receiptNumber: z.string(),
-  orderId: id,
+  /** A receipt is of an order or of a payment of a pledge; the number is of either. */
+  orderId: id.nullable(),
+  pledgeId: id.nullable(),
   orderNumber: z.string(),
   email: z.string(),
   issuedAt: moment,

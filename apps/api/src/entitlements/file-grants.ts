@@ -86,7 +86,7 @@ export class FileGrants {
       },
       entitlements,
     });
-    if (!decision.isAllowed) throw refusalFor(decision.why);
+    if (!decision.isAllowed) throw downloadRefusal(decision.why);
     const file = wish.file
       ? await this.catalogue.fileOf(revision.id, wish.file)
       : await this.catalogue.bundleFile(revision.id, wish.clearance);
@@ -151,7 +151,8 @@ const sentences: Record<Extract<DownloadDecision, { isAllowed: false }>['why'], 
   'not-released': 'This revision is not released.',
   withdrawn: 'The workshop has withdrawn this revision. Take the newest one instead.',
 };
-const refusalFor = (why: keyof typeof sentences): Refusal =>
+/** Why no file goes out, in a sentence. */
+export const downloadRefusal = (why: keyof typeof sentences): Refusal =>
   new Refusal(why === 'not-entitled' ? 'not-found' : 'forbidden', sentences[why]);
 
 const noSuchClearance = (label: string): Refusal =>

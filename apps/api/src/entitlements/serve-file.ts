@@ -11,7 +11,7 @@ import type { SignedIn } from '../http/person.js';
 import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
-import { browserMark } from './file-grants.js';
+import { browserMark, downloadRefusal } from './file-grants.js';
 import { covers } from './may-download.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
@@ -51,7 +51,7 @@ export class ServeFile {
     const download = await this.downloads.findByPk(downloadId);
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
     if (entitlement?.state === 'suspended')
-      throw new Refusal('forbidden', 'Downloads of this kit rest while its payment is in dispute.');
+      throw downloadRefusal(entitlement.source === 'pledge' ? 'pledge-rests' : 'suspended');
     if (!download || !entitlement || !(await this.isStillTheirs(entitlement, download.revisionId)))
       throw new Refusal('forbidden', 'The right to this file has ended.');
     const file: (ServableFile & Partial<BundleFile>) | null = download.isBundle

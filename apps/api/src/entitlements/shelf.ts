@@ -48,27 +48,31 @@ export class Shelf {
       page,
       size: PAGE_SIZE,
       total: Number(rows[0]?.total ?? 0),
-      resting: await this.restingOf(person),
+      ...(await this.restingOf(person)),
     };
   }
 
-  /** Names of kits of which all that is left rests while a payment is in dispute. */
-  private async restingOf(person: SignedIn, kitId?: string): Promise<string[]> {
-    const rows = await selectRows<{ kitId: string }>(
+  /** Names of kits of which all that is left rests: while a payment is in dispute, or with a pledge. */
+  private async restingOf(person: SignedIn, kitId?: string): Promise<Resting> {
+    const rows = await selectRows<{ kitId: string; isPledge: number }>(
       this.database,
-      `SELECT kit_id AS kitId FROM entitlements
+      `SELECT kit_id AS kitId, MIN(source = 'pledge') AS isPledge FROM entitlements
        WHERE person_id = :personId AND state <> 'ended' AND (:kitId IS NULL OR kit_id = :kitId)
        GROUP BY kit_id HAVING SUM(state = 'active') = 0`,
       { personId: person.id, kitId: kitId ?? null },
     );
-    return (await this.catalogue.kitsByIds(rows.map((row) => row.kitId))).map((kit) => kit.name);
+    const byPledge = new Set(rows.filter((row) => Number(row.isPledge) === 1).map((row) => row.kitId));
+    const kits = await this.catalogue.kitsByIds(rows.map((row) => row.kitId));
+    return {
+      resting: kits.filter(({ id }) => !byPledge.has(id)).map(({ name }) => name),
+      restingWithPledge: kits.filter(({ id }) => byPledge.has(id)).map(({ name }) => name),
+    };
   }
 
   async read(person: SignedIn, slug: string): Promise<Answer<'GET /shelf/:slug'>> {
     const kit = await this.catalogue.kitBySlug(slug);
     const item = kit && (await this.itemOf(person, kit.id));
-    if (kit && !item && (await this.restingOf(person, kit.id)).length > 0)
-      throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
+    if (kit && !item) await this.refuseResting(person, kit);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
     const chosen = clearanceFor(best, null);
@@ -102,6 +106,17 @@ export class Shelf {
         isComplete: one.completedAt !== null,
       })),
     };
+  }
+
+  private async refuseResting(person: SignedIn, kit: { id: string; name: string }): Promise<void> {
+    const { resting, restingWithPledge } = await this.restingOf(person, kit.id);
+    if (resting.length > 0)
+      throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
+    if (restingWithPledge.length > 0)
+      throw new Refusal(
+        'forbidden',
+        `${kit.name} is on your shelf by your pledge, and the pledge rests now.`,
+      );
   }
 
   async sayHeld(person: SignedIn, slug: string, revisionId: string): Promise<Answer<'GET /shelf/:slug'>> {
@@ -208,6 +223,8 @@ export class Shelf {
     });
   }
 }
+
+type Resting = Pick<Answer<'GET /shelf'>, 'resting' | 'restingWithPledge'>;
 
 interface OwnRevisions {
   readonly all: ReleasedRevision[];

@@ -1,10 +1,11 @@
 import { Injectable } from '@nestjs/common';
 import type { Handled } from '@windchest/contracts';
 import { decimalText } from '@windchest/money';
+import { csvNumber, csvRecord } from '../http/csv.js';
 import { Supporters } from '../supporters/supporters.js';
-import { csvRecord } from '../http/csv.js';
 
 const HEAD = [
+  'number',
   'name',
   'email',
   'plan',
@@ -29,13 +30,14 @@ export class ExportSupporters {
     yield csvRecord(HEAD);
     for await (const one of this.supporters.matching(query))
       yield csvRecord([
+        one.number,
         one.name,
         one.email,
         one.plan.name,
         one.state,
         one.amount.currency,
-        decimalText(one.amount),
-        decimalText(one.paid),
+        csvNumber(decimalText(one.amount)),
+        csvNumber(decimalText(one.paid)),
         one.country,
         one.beganAt,
         one.nextPaymentAt,

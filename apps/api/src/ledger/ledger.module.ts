@@ -35,6 +35,7 @@ import { SettleLocation } from './tax/settle-location.js';
 import { SummariseQuarter } from './tax/summarise-quarter.js';
 import { TaxQuarters } from './tax/tax-quarters.js';
 import { TaxController } from './tax/tax.controller.js';
+import { UnclearPlaces } from './tax/unclear-places.js';
 import { TaxRates } from './tax-rates.js';
 import { WriteCreditNote } from './write-credit-note.js';
 import { WritePledgeReceipt } from './write-pledge-receipt.js';
@@ -68,6 +69,7 @@ import { WriteReceipt } from './write-receipt.js';
     CloseQuarter,
     ExportSummary,
     ListLocations,
+    UnclearPlaces,
     SettleLocation,
     ListSales,
     Movements,

@@ -14,7 +14,10 @@ export interface WrittenRow {
   readonly kind: 'receipt' | 'credit-note';
   readonly number: string;
   readonly issuedAt: Date;
+  /** Null where it is of a pledge, whose number then stands in `orderNumber`. */
   readonly orderId: string | null;
+  readonly pledgeId: string | null;
+  readonly pledgePaymentId: string | null;
   readonly orderNumber: string;
   readonly email: string;
   readonly country: string;
@@ -26,11 +29,12 @@ export interface WrittenRow {
 
 const PORTION = 500;
 const BOTH = `
-  SELECT id, 'receipt' AS kind, label AS number, issued_at AS issuedAt, order_id AS orderId, order_number AS orderNumber,
+  SELECT id, 'receipt' AS kind, label AS number, issued_at AS issuedAt, order_id AS orderId, pledge_id AS pledgeId,
+         pledge_payment_id AS pledgePaymentId, order_number AS orderNumber,
          JSON_VALUE(buyer, '$.email') AS email, country, currency, 1 AS sign, total_minor AS totalMinor, tax, year
   FROM receipts
   UNION ALL
-  SELECT n.id, 'credit-note', n.label, n.issued_at, n.order_id, n.order_number,
+  SELECT n.id, 'credit-note', n.label, n.issued_at, n.order_id, NULL, NULL, n.order_number,
          JSON_VALUE(r.buyer, '$.email'), n.country, n.currency, -1, n.total_minor, n.tax, n.year
   FROM credit_notes n JOIN receipts r ON r.id = n.receipt_id`;
 const WHERE = `
@@ -105,6 +109,8 @@ const toRow = (row: WrittenRow): Answer<'GET /workshop/receipts'>['items'][numbe
     number: row.number,
     issuedAt: row.issuedAt.toISOString(),
     orderId: row.orderId,
+    pledge:
+      row.pledgeId && row.pledgePaymentId ? { pledgeId: row.pledgeId, paymentId: row.pledgePaymentId } : null,
     orderNumber: row.orderNumber,
     email: row.email,
     country: row.country,

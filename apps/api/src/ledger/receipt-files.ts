@@ -24,11 +24,14 @@ export class ReceiptFiles {
 
   /** Whether this person may see the order is for the caller to know. */
   async receipt(orderId: string): Promise<ReceiptFile> {
-    const receipt = await this.receiptOf(orderId);
-    return {
-      fileName: `receipt-${receipt.label}.pdf`,
-      bytes: await typesetReceipt(describeReceipt(receipt, this.letterhead())),
-    };
+    return this.fileOf(await this.receiptOf(orderId));
+  }
+
+  /** Whether this person may see the pledge is for the caller to know. */
+  async pledgeReceipt(pledgeId: string, pledgePaymentId: string): Promise<ReceiptFile> {
+    const receipt = await this.receipts.findOne({ where: { pledgeId, pledgePaymentId } });
+    if (!receipt) throw notFound('receipt of this pledge');
+    return this.fileOf(receipt);
   }
 
   async creditNote(orderId: string, creditNoteId: string): Promise<ReceiptFile> {
@@ -38,6 +41,13 @@ export class ReceiptFiles {
     return {
       fileName: `credit-note-${note.label}.pdf`,
       bytes: await typesetReceipt(describeCreditNote(note, receipt, this.letterhead())),
+    };
+  }
+
+  private async fileOf(receipt: Receipt): Promise<ReceiptFile> {
+    return {
+      fileName: `receipt-${receipt.label}.pdf`,
+      bytes: await typesetReceipt(describeReceipt(receipt, this.letterhead())),
     };
   }
 

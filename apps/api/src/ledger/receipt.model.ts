@@ -17,6 +17,7 @@ export class Receipt extends Model {
   @IdColumn() declare id: string;
   /** A receipt is of an order or of one payment of a pledge. */
   @Column(DataType.CHAR(36)) declare orderId: string | null;
+  @Column(DataType.CHAR(36)) declare pledgeId: string | null;
   @Column(DataType.CHAR(36)) declare pledgePaymentId: string | null;
   /** What the buyer calls it: the number of the order, or of the pledge. */
   @Column(DataType.STRING(20)) declare orderNumber: string;

@@ -2,10 +2,11 @@ import { Readable } from 'node:stream';
 import { Controller, StreamableFile } from '@nestjs/common';
 import type { Answer, Handled } from '@windchest/contracts';
 import { Endpoint, Input } from '../http/endpoint.js';
-import { MaybePerson, type SignedIn } from '../http/person.js';
+import { MaybePerson, ThisPerson, type SignedIn } from '../http/person.js';
 import { RateLimits } from '../http/rate-limits.js';
 import type { OrderRecord } from '../orders/order-record.js';
 import { OrdersReader } from '../orders/orders-reader.js';
+import { Supporters } from '../supporters/supporters.js';
 import { ExportReceipts } from './export-receipts.js';
 import { ListReceipts } from './list-receipts.js';
 import { ReceiptFiles, type ReceiptFile } from './receipt-files.js';
@@ -14,6 +15,7 @@ import { ReceiptFiles, type ReceiptFile } from './receipt-files.js';
 export class ReceiptsController {
   constructor(
     private readonly orders: OrdersReader,
+    private readonly supporters: Supporters,
     private readonly files: ReceiptFiles,
     private readonly listing: ListReceipts,
     private readonly exporting: ExportReceipts,
@@ -50,6 +52,23 @@ export class ReceiptsController {
     @Input() { params }: Handled<'GET /workshop/orders/:orderId/credit-notes/:creditNoteId.pdf'>,
   ): Promise<StreamableFile> {
     return asPdf(await this.files.creditNote(params.orderId, params.creditNoteId));
+  }
+
+  @Endpoint('GET /pledges/:pledgeId/payments/:paymentId/receipt.pdf')
+  async ownPledgeReceipt(
+    @Input() { params }: Handled<'GET /pledges/:pledgeId/payments/:paymentId/receipt.pdf'>,
+    @ThisPerson() person: SignedIn,
+  ): Promise<StreamableFile> {
+    await this.supporters.mustBeOwn(params.pledgeId, person);
+    await this.limits.take('papers', params.pledgeId);
+    return asPdf(await this.files.pledgeReceipt(params.pledgeId, params.paymentId));
+  }
+
+  @Endpoint('GET /workshop/supporters/:pledgeId/payments/:paymentId/receipt.pdf')
+  async pledgeReceipt(
+    @Input() { params }: Handled<'GET /workshop/supporters/:pledgeId/payments/:paymentId/receipt.pdf'>,
+  ): Promise<StreamableFile> {
+    return asPdf(await this.files.pledgeReceipt(params.pledgeId, params.paymentId));
   }
 
   @Endpoint('GET /workshop/receipts')

@@ -4,6 +4,7 @@ import { money, percent, taxFromGross } from '@windchest/money';
 import { InjectConfig, type Config } from '../config/config.js';
 import type { Tx } from '../database/transactions.js';
 import { PledgePaidSteps, type PaidMonth } from '../supporters/pledges/pledge-steps.js';
+import { dayText } from '../typesetting/number-text.js';
 import { NumberSeries } from './number-series.js';
 import { Receipt } from './receipt.model.js';
 import { sellerOf } from './seller.js';
@@ -35,8 +36,9 @@ export class WritePledgeReceipt implements OnModuleInit {
     const label = `${year}-${String(number).padStart(6, '0')}`;
     await this.receipts.create(
       {
+        pledgeId: month.pledgeId,
         pledgePaymentId: month.paymentId,
-        orderNumber: pledgeNumber(month),
+        orderNumber: month.pledgeNumber,
         series: RECEIPT_SERIES,
         year,
         number,
@@ -51,9 +53,9 @@ export class WritePledgeReceipt implements OnModuleInit {
         lines: [
           {
             orderLineId: month.paymentId,
-            kit: month.planName,
-            licence: 'Monthly pledge',
-            revision: `${day(month.periodStart)} to ${day(month.periodEnd)}`,
+            kit: `Pledge “${month.planName}”`,
+            licence: `${dayText(month.periodStart)} to ${dayText(month.periodEnd)}, paid on ${dayText(month.paidAt)}`,
+            revision: '',
             priceMinor: month.amountMinor,
             discountMinor: 0,
             totalMinor: month.amountMinor,
@@ -68,8 +70,3 @@ export class WritePledgeReceipt implements OnModuleInit {
     month.facts.tax = [line];
   }
 }
-
-/** What a receipt calls the pledge: short, and the same every month. */
-const pledgeNumber = ({ pledgeId }: PaidMonth): string => `P-${pledgeId.slice(-8).toUpperCase()}`;
-
-const day = (moment: Date): string => moment.toISOString().slice(0, 10);

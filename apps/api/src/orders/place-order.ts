@@ -16,9 +16,9 @@ import { JobQueue } from '../jobs/job-queue.js';
 import { businessOf, checkGift } from './check-wishes.js';
 import { OrderHistory } from './order-history.js';
 import { OrderLine } from './order-line.model.js';
-import { newOrderNumber } from './order-number.js';
 import { Order } from './order.model.js';
 import { payUntil } from '../payments/pay-until.js';
+import { newSpokenNumber } from '../payments/spoken-number.js';
 import { PriceBasket, type PricedBasket } from './price-basket.js';
 import { FIRST_LOOK_SECONDS, reconcileOrder } from './reconcile-order.job.js';
 import { SalesTax, type TaxTerms } from './sales-tax.js';
@@ -129,7 +129,7 @@ export class PlaceOrder {
     const order = await this.orders.create(
       {
         id,
-        number: newOrderNumber(),
+        number: newSpokenNumber('W'),
         attempt: body.attempt,
         keyHash: this.tokens.hashOf(this.tokens.tokenOf('order-key', id)),
         personId: person?.id ?? null,

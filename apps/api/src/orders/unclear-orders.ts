@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import { literal, Op, type Sequelize } from 'sequelize';
+import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { selectRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
@@ -32,41 +32,6 @@ export class UnclearOrders {
       tx,
     );
     return Number(row?.count ?? 0);
-  }
-
-  /** Oldest first: their quarter is closed first. */
-  async page(query: {
-    page: number;
-    size: number;
-    search?: string | undefined;
-  }): Promise<{ orders: OrderRecord[]; total: number }> {
-    const like = `%${query.search ?? ''}%`;
-    const { rows, count } = await this.orders.findAndCountAll({
-      where: {
-        [Op.and]: [literal(UNCLEAR)],
-        paidAt: { [Op.not]: null },
-        ...(query.search
-          ? {
-              [Op.or]: [
-                { number: { [Op.like]: like.toUpperCase() } },
-                { email: { [Op.like]: like } },
-                { receiptNumber: { [Op.like]: like } },
-              ],
-            }
-          : {}),
-      },
-      order: [
-        ['paidAt', 'ASC'],
-        ['id', 'ASC'],
-      ],
-      limit: query.size,
-      offset: (query.page - 1) * query.size,
-    });
-    return { orders: rows, total: count };
-  }
-
-  byIds(ids: readonly string[]): Promise<OrderRecord[]> {
-    return this.orders.findAll({ where: { id: [...ids] } });
   }
 
   /**

@@ -2,6 +2,7 @@ import { Module } from '@nestjs/common';
 import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
+import { CouponsModule } from '../coupons/coupons.module.js';
 import { FollowPlan } from './plans/follow-plan.js';
 import { PlanKits } from './plans/plan-kits.js';
 import { PlansController } from './plans/plans.controller.js';
@@ -30,16 +31,20 @@ import { Pledge } from './pledges/pledge.model.js';
 import { PledgesController } from './pledges/pledges.controller.js';
 import { RecordPayment } from './pledges/record-payment.js';
 import { RefreshPledge } from './pledges/refresh-pledge.js';
+import { PledgeRecords } from './pledge-records.js';
 import { Supporters } from './supporters.js';
+import { UnclearPledges } from './unclear-pledges.js';
 import { ListSupporters } from './workshop/list-supporters.js';
 import { ShowSupporter } from './workshop/show-supporter.js';
 import { SupporterFigures } from './workshop/supporter-figures.js';
 import { SupportersController } from './workshop/supporters.controller.js';
+import { TakeOffPledgeFlag } from './workshop/take-off-pledge-flag.js';
 
 @Module({
   imports: [
     AccountsModule,
     CatalogueModule,
+    CouponsModule,
     SequelizeModule.forFeature([PledgePlan, PledgePlanKit, Pledge, PledgePayment]),
   ],
   controllers: [PlansController, PledgesController, SupportersController],
@@ -72,7 +77,10 @@ import { SupportersController } from './workshop/supporters.controller.js';
     SupporterFigures,
     ShowSupporter,
     Supporters,
+    PledgeRecords,
+    UnclearPledges,
+    TakeOffPledgeFlag,
   ],
-  exports: [Supporters, PledgePaidSteps, PledgeRightsSteps],
+  exports: [Supporters, PledgeRecords, UnclearPledges, PledgePaidSteps, PledgeRightsSteps],
 })
 export class SupportersModule {}

@@ -1,20 +1,29 @@
-import { Injectable } from '@nestjs/common';
+import { Injectable, type OnModuleInit } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { SupporterRow } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
+import { SupporterCheck } from '../coupons/supporter-check.js';
 import { selectRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
+import type { SignedIn } from '../http/person.js';
+import { OwnPledges } from './pledges/own-pledges.js';
 import { Pledge } from './pledges/pledge.model.js';
 import { ListSupporters, type SupporterFilter } from './workshop/list-supporters.js';
 
 /** What other rooms may ask about supporters. */
 @Injectable()
-export class Supporters {
+export class Supporters implements OnModuleInit {
   constructor(
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(Pledge) private readonly pledges: typeof Pledge,
     private readonly listing: ListSupporters,
+    private readonly own: OwnPledges,
+    private readonly supporterCheck: SupporterCheck,
   ) {}
+
+  onModuleInit(): void {
+    this.supporterCheck.register((personId, tx) => this.isCurrent(personId, tx));
+  }
 
   /** Whether a person pledges now: paid, or within the grace days. A pledge that rests does not count. */
   async isCurrent(personId: string, tx?: Tx): Promise<boolean> {
@@ -23,6 +32,11 @@ export class Supporters {
       transaction: tx ?? null,
     });
     return count > 0;
+  }
+
+  /** @throws Refusal `not-found`, alike where there is no such pledge and where it is not theirs */
+  async mustBeOwn(pledgeId: string, person: SignedIn): Promise<void> {
+    await this.own.find(pledgeId, person);
   }
 
   /** All supporters a query finds, newest first, read in small portions. */

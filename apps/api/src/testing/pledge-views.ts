@@ -70,6 +70,7 @@ export const pledgeRecord = (changes: Partial<PledgeRecord> = {}): PledgeRecord 
   declaredCountry: 'DE',
   paymentCountry: null,
   cardCountry: null,
+  settledCountry: null,
   cardLast4: null,
   flags: [],
   sessionId: 'cs_1',

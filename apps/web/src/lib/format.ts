@@ -96,9 +96,3 @@ export const dateTime = (moment: string): string =>
     hour: '2-digit',
     minute: '2-digit',
   }).format(new Date(moment));
-
-/** `Nov 2026`, of a month such as `2026-11`. */
-export const monthName = (month: string): string =>
-  new Intl.DateTimeFormat(locale, { month: 'short', year: 'numeric', timeZone: 'UTC' }).format(
-    new Date(`${month}-15T00:00:00Z`),
-  );

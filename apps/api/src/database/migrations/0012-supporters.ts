@@ -37,6 +37,7 @@ export const up = inOrder(
   // `looks` counts the times the payment service was asked, `followed_look` is the last of them that was followed.
   `CREATE TABLE pledges (
     id ${ID} NOT NULL PRIMARY KEY,
+    number VARCHAR(20) CHARACTER SET ascii COLLATE ascii_bin NOT NULL,
     person_id ${ID} NOT NULL,
     plan_id ${ID} NOT NULL,
     amount_minor INT UNSIGNED NOT NULL,
@@ -52,6 +53,7 @@ export const up = inOrder(
     declared_country ${COUNTRY} NOT NULL,
     payment_country ${COUNTRY} NULL,
     card_country ${COUNTRY} NULL,
+    settled_country ${COUNTRY} NULL,
     card_last4 CHAR(4) CHARACTER SET ascii NULL,
     flags JSON NOT NULL,
     consent_text TEXT NOT NULL,
@@ -81,6 +83,7 @@ export const up = inOrder(
     followed_look INT UNSIGNED NOT NULL DEFAULT 0,
     created_at DATETIME(6) NOT NULL,
     updated_at DATETIME(6) NOT NULL,
+    UNIQUE KEY pledges_number (number),
     UNIQUE KEY pledges_attempt (attempt),
     UNIQUE KEY pledges_live_person (live_person_id),
     UNIQUE KEY pledges_session (session_id),
@@ -99,7 +102,11 @@ export const up = inOrder(
     payment_intent_id ${SERVICE_ID} NULL,
     amount_minor INT UNSIGNED NOT NULL,
     currency ${CURRENCY} NOT NULL,
+    billing_country ${COUNTRY} NULL,
+    card_country ${COUNTRY} NULL,
     country ${COUNTRY} NOT NULL,
+    is_unclear BOOLEAN NOT NULL DEFAULT FALSE,
+    settled_country ${COUNTRY} NULL,
     period_start DATETIME(6) NOT NULL,
     period_end DATETIME(6) NOT NULL,
     paid_at DATETIME(6) NOT NULL,
@@ -111,6 +118,7 @@ export const up = inOrder(
     KEY pledge_payments_pledge (pledge_id, period_start),
     KEY pledge_payments_intent (payment_intent_id),
     KEY pledge_payments_paid (paid_at),
+    KEY pledge_payments_unclear (is_unclear, created_at),
     CONSTRAINT pledge_payments_pledge_fk FOREIGN KEY (pledge_id) REFERENCES pledges (id)
   )`,
   `CREATE TABLE pledge_history (
@@ -124,8 +132,10 @@ export const up = inOrder(
   )`,
   // A receipt is of an order or of one payment of a pledge.
   `ALTER TABLE receipts MODIFY COLUMN order_id ${ID} NULL,
-    ADD COLUMN pledge_payment_id ${ID} NULL AFTER order_id,
+    ADD COLUMN pledge_id ${ID} NULL AFTER order_id,
+    ADD COLUMN pledge_payment_id ${ID} NULL AFTER pledge_id,
     ADD UNIQUE KEY receipts_pledge_payment (pledge_payment_id),
+    ADD CONSTRAINT receipts_pledge_fk FOREIGN KEY (pledge_id) REFERENCES pledges (id),
     ADD CONSTRAINT receipts_pledge_payment_fk FOREIGN KEY (pledge_payment_id) REFERENCES pledge_payments (id)`,
   // Bounds by the moment of release; `until_at` says how far the pledge behind it is paid.
   `ALTER TABLE entitlements

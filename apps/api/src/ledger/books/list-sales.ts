@@ -11,6 +11,7 @@ interface MonthRow {
   month: string;
   orders: number | string;
   grossMinor: number | string;
+  pledgedMinor: number | string;
   refundedMinor: number | string;
 }
 interface CountryRow {
@@ -47,6 +48,7 @@ export class ListSales {
           month,
           orders: Number(row?.orders ?? 0),
           gross: money(row?.grossMinor ?? 0),
+          pledged: money(row?.pledgedMinor ?? 0),
           refunded: money(row?.refundedMinor ?? 0),
         };
       }),
@@ -67,11 +69,13 @@ export class ListSales {
   private byMonth(from: Date, currency: string): Promise<MonthRow[]> {
     return selectRows<MonthRow>(
       this.database,
-      `SELECT month, SUM(orders) AS orders, SUM(grossMinor) AS grossMinor, SUM(refundedMinor) AS refundedMinor FROM (
-         SELECT DATE_FORMAT(issued_at, '%Y-%m') AS month, 1 AS orders, total_minor AS grossMinor, 0 AS refundedMinor
+      `SELECT month, SUM(orders) AS orders, SUM(grossMinor) AS grossMinor,
+         SUM(pledgedMinor) AS pledgedMinor, SUM(refundedMinor) AS refundedMinor FROM (
+         SELECT DATE_FORMAT(issued_at, '%Y-%m') AS month, order_id IS NOT NULL AS orders, total_minor AS grossMinor,
+           IF(pledge_id IS NULL, 0, total_minor) AS pledgedMinor, 0 AS refundedMinor
          FROM receipts WHERE issued_at >= :from AND currency = :currency
          UNION ALL
-         SELECT DATE_FORMAT(issued_at, '%Y-%m'), 0, 0, total_minor
+         SELECT DATE_FORMAT(issued_at, '%Y-%m'), 0, 0, 0, total_minor
          FROM credit_notes WHERE issued_at >= :from AND currency = :currency
        ) documents GROUP BY month`,
       { from, currency },
@@ -82,7 +86,7 @@ export class ListSales {
   private byCountry(from: Date, currency: string): Promise<CountryRow[]> {
     return selectRows<CountryRow>(
       this.database,
-      `SELECT COALESCE(s.country, r.country) AS country, COUNT(*) AS orders, SUM(r.total_minor) AS grossMinor
+      `SELECT COALESCE(s.country, r.country) AS country, SUM(r.order_id IS NOT NULL) AS orders, SUM(r.total_minor) AS grossMinor
        FROM receipts r LEFT JOIN tax_settlements s ON s.receipt_id = r.id
        WHERE r.issued_at >= :from AND r.currency = :currency
        GROUP BY COALESCE(s.country, r.country) ORDER BY grossMinor DESC, country`,

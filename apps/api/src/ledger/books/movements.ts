@@ -4,6 +4,7 @@ import type { Sequelize } from 'sequelize';
 import { selectPortions } from '../../database/portions.js';
 import { selectRows } from '../../database/rows.js';
 import { ORDER_MOVEMENTS } from '../../orders/money-movements.js';
+import { PLEDGE_MOVEMENTS } from '../../supporters/money-movements.js';
 
 export type MovementKind = 'payment' | 'refund' | 'refund-back' | 'dispute' | 'dispute-back' | 'pledge';
 
@@ -29,7 +30,7 @@ export interface MovementFilter {
   readonly search?: string | undefined;
 }
 
-const ALL = ORDER_MOVEMENTS;
+const ALL = `${ORDER_MOVEMENTS} UNION ALL ${PLEDGE_MOVEMENTS}`;
 const WHERE = `(:anyKind OR kind IN (:kinds)) AND (:from IS NULL OR at >= :from) AND (:until IS NULL OR at < :until)
   AND (:like IS NULL OR subject LIKE UPPER(:like) OR email LIKE LOWER(:like) OR intentId LIKE :like OR serviceId LIKE :like)`;
 

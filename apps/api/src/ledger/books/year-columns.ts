@@ -1,6 +1,7 @@
 import { decimalText } from '@windchest/money';
 import { csvNumber, type CsvValue } from '../../http/csv.js';
 import type { DisputeRow, LineRow, OrderRow, RefundRow } from '../../orders/year-records.js';
+import type { PledgePaymentRow } from '../../supporters/pledge-records.js';
 import { rateText } from '../rate-text.js';
 
 /** A column of an export: its head, and what of a row stands in it. */
@@ -96,6 +97,24 @@ export const disputeColumns: readonly YearColumn<DisputeRow>[] = [
   ['amount', (row) => amount(row.amountMinor, row)],
   ['reason', (row) => row.reason],
   ['payment_reference', (row) => row.serviceId],
+];
+
+export const pledgeColumns: readonly YearColumn<PledgePaymentRow>[] = [
+  ['pledge', (row) => row.pledge],
+  ['plan', (row) => row.plan],
+  ['paid_at', (row) => moment(row.at)],
+  ['from', (row) => moment(row.periodStart)],
+  ['to', (row) => moment(row.periodEnd)],
+  ['email', (row) => row.email],
+  ['declared_country', (row) => row.declaredCountry],
+  ['billing_country', (row) => row.billingCountry],
+  ['card_country', (row) => row.cardCountry],
+  ['tax_country', (row) => row.country],
+  ['currency', (row) => row.currency],
+  ['amount', (row) => amount(row.amountMinor, row)],
+  ['receipt', (row) => row.receipt],
+  ['invoice_reference', (row) => row.invoiceId],
+  ['payment_reference', (row) => row.paymentIntentId],
 ];
 
 export const rateColumns: readonly YearColumn<RateRow>[] = [

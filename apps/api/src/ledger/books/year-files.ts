@@ -4,11 +4,13 @@ import type { Sequelize } from 'sequelize';
 import { selectPortions } from '../../database/portions.js';
 import { csvRecord } from '../../http/csv.js';
 import { YearRecords, type Span } from '../../orders/year-records.js';
+import { PledgeRecords } from '../../supporters/pledge-records.js';
 import { ExportReceipts } from '../export-receipts.js';
 import {
   disputeColumns,
   lineColumns,
   orderColumns,
+  pledgeColumns,
   rateColumns,
   refundColumns,
   settledColumns,
@@ -28,6 +30,7 @@ export class YearFiles {
   constructor(
     @InjectConnection() private readonly database: Sequelize,
     private readonly orders: YearRecords,
+    private readonly pledges: PledgeRecords,
     private readonly receipts: ExportReceipts,
   ) {}
 
@@ -40,6 +43,7 @@ export class YearFiles {
       { name: 'credit-notes.csv', lines: this.receipts.lines({ kind: 'credit-note', year }) },
       { name: 'refunds.csv', lines: csvLines(refundColumns, this.orders.refunds(span)) },
       { name: 'disputes.csv', lines: csvLines(disputeColumns, this.orders.disputes(span)) },
+      { name: 'pledge-payments.csv', lines: csvLines(pledgeColumns, this.pledges.payments(span)) },
       { name: 'tax-rates.csv', lines: csvLines(rateColumns, this.rates()) },
       { name: 'settled-countries.csv', lines: csvLines(settledColumns, this.settlements(span)) },
       { name: 'READ-ME.txt', lines: [readMe(year)] },
@@ -47,8 +51,9 @@ export class YearFiles {
   }
 
   /** About how many lines all files have together. */
-  count(year: number): Promise<number> {
-    return this.orders.count(spanOf(year));
+  async count(year: number): Promise<number> {
+    const span = spanOf(year);
+    return (await this.orders.count(span)) + (await this.pledges.count(span));
   }
 
   /** All rates ever entered: a receipt of this year may rest on one from long before. */
@@ -92,6 +97,7 @@ const readMe = (year: number): string =>
     'orders.csv and order-lines.csv: all orders placed in the year, also those never paid.',
     'receipts.csv and credit-notes.csv: all issued in the year, a row for each rate of tax; credit notes below zero.',
     'refunds.csv and disputes.csv: begun in the year. A refund of origin "dispute" is the loss of one; no money moved with it.',
+    'pledge-payments.csv: the months of pledges paid in the year.',
     'settled-countries.csv: receipts of the year that count in a country chosen by hand; the receipts stay as they are.',
     'tax-rates.csv: every rate ever entered.',
     '',

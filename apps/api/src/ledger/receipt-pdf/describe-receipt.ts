@@ -6,7 +6,9 @@ import type { DocumentLine, ReceiptDocument } from './receipt-document.js';
 
 export interface WrittenReceipt {
   readonly label: string;
+  /** The number of the order, or of the pledge. */
   readonly orderNumber: string;
+  readonly pledgeId: string | null;
   readonly currency: string;
   readonly totalMinor: number;
   readonly taxTreatment: TaxTreatment;
@@ -61,7 +63,7 @@ export const describeCreditNote = (
     cause: note.cause,
   },
   lines: note.lines.map((line) => ({
-    title: `${line.kit} ${line.revision}`,
+    title: titleOf(line),
     licence: line.licence,
     before: null,
     netMinor: line.netMinor,
@@ -74,6 +76,7 @@ export const describeCreditNote = (
 
 const common = (receipt: WrittenReceipt, { shop, seller, locale }: Letterhead) => ({
   suppliedAt: receipt.issuedAt,
+  isOfPledge: receipt.pledgeId !== null,
   orderNumber: receipt.orderNumber,
   shop,
   seller: receipt.seller ?? seller,
@@ -82,6 +85,9 @@ const common = (receipt: WrittenReceipt, { shop, seller, locale }: Letterhead) =
   currency: receipt.currency,
   locale,
 });
+
+/** A month of a pledge has no revision. */
+const titleOf = ({ kit, revision }: { kit: string; revision: string }): string => `${kit} ${revision}`.trim();
 
 /** Without name and address it is a simplified invoice, which the shop calls a receipt. */
 const kindOf = (buyer: ReceiptBuyer): 'receipt' | 'invoice' =>
@@ -98,7 +104,7 @@ const linesOf = ({ lines, tax, currency }: WrittenReceipt): DocumentLine[] => {
     });
   }
   return lines.map((line) => ({
-    title: `${line.kit} ${line.revision}`,
+    title: titleOf(line),
     licence: line.licence,
     before:
       line.discountMinor > 0 ? { priceMinor: line.priceMinor, discountMinor: line.discountMinor } : null,

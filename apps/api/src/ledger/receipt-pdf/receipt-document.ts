@@ -8,6 +8,8 @@ export interface ReceiptDocument {
   readonly issuedAt: Date;
   /** When the files were handed over, which is when the order was paid. */
   readonly suppliedAt: Date;
+  /** Of a month of a pledge, whose line says when it was paid; otherwise of an order. */
+  readonly isOfPledge: boolean;
   readonly orderNumber: string;
   /** What a credit note corrects, and why. */
   readonly corrects: {

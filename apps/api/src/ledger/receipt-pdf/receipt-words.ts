@@ -18,6 +18,7 @@ export const amountText = (minor: number, { currency, locale }: ReceiptDocument)
 /** What the document is about, under its title. */
 export const leadOf = (document: ReceiptDocument): string => {
   const { corrects } = document;
+  if (document.isOfPledge && !corrects) return `Pledge ${document.orderNumber}.`;
   if (!corrects) return `Order ${document.orderNumber}, paid on ${dayText(document.suppliedAt)}.`;
   const why =
     corrects.cause === 'dispute'

@@ -38,6 +38,7 @@ const line = (
 const receipt: WrittenReceipt = {
   label: '2026-000391',
   orderNumber: 'W-7K2M9Q',
+  pledgeId: null,
   currency: 'EUR',
   totalMinor: 5500,
   taxTreatment: 'consumer',

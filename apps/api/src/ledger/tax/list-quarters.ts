@@ -4,8 +4,8 @@ import type { Answer, Handled } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../../adapters/clock/clock.js';
 import { selectRows } from '../../database/rows.js';
-import { UnclearOrders } from '../../orders/unclear-orders.js';
 import { isQuarterOver, quarterDays } from './quarter-days.js';
+import { UnclearPlaces } from './unclear-places.js';
 
 interface Row {
   year: number;
@@ -21,7 +21,7 @@ interface Row {
 export class ListQuarters {
   constructor(
     @InjectConnection() private readonly database: Sequelize,
-    private readonly unclear: UnclearOrders,
+    private readonly unclear: UnclearPlaces,
     private readonly clock: Clock,
   ) {}
 

@@ -10,11 +10,11 @@ import { Transactions, type Tx } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
 import { notFound } from '../../http/refusal.js';
 import { isTaxWithin } from '../../orders/tax-treatment.js';
-import { UnclearOrders } from '../../orders/unclear-orders.js';
 import { Receipt } from '../receipt.model.js';
 import { TaxRates } from '../tax-rates.js';
 import { quarterOf } from './quarter-days.js';
 import { TaxQuarters } from './tax-quarters.js';
+import { UnclearPlaces } from './unclear-places.js';
 
 type Body = Handled<'POST /workshop/ledger/locations/:receiptId'>['body'];
 
@@ -39,7 +39,7 @@ export class SettleLocation {
     private readonly transactions: Transactions,
     private readonly quarters: TaxQuarters,
     private readonly rates: TaxRates,
-    private readonly unclear: UnclearOrders,
+    private readonly unclear: UnclearPlaces,
     private readonly staffLog: StaffLog,
     private readonly clock: Clock,
   ) {}
@@ -48,14 +48,14 @@ export class SettleLocation {
     const who = `${person.name} (${person.role})`;
     return this.transactions.run(async (tx) => {
       const receipt = await this.receipts.findByPk(receiptId, { transaction: tx, lock: tx.LOCK.UPDATE });
-      if (!receipt?.orderId) throw notFound('receipt of an order');
-      const order = await this.unclear.settle(tx, receipt.orderId, { country, reason, who });
+      if (!receipt) throw notFound('receipt');
+      const subject = await this.unclear.settle(tx, receipt, { country, reason, who });
       await this.quarters.lockOpen(tx, quarterOf(receipt.issuedAt));
       const counted = await this.countedIn(receipt, country, tx);
       await this.write(tx, receiptId, counted, reason, who);
       await this.staffLog.record(tx, person, {
-        what: 'settled the country of an order',
-        subject: `order ${order.number}`,
+        what: receipt.orderId ? 'settled the country of an order' : 'settled the country of a pledge',
+        subject,
         before: { country: receipt.country, tax: receipt.tax },
         after: { ...counted, reason },
       });

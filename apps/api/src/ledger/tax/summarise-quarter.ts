@@ -6,11 +6,11 @@ import type { Sequelize } from 'sequelize';
 import { Clock } from '../../adapters/clock/clock.js';
 import { selectRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
-import { UnclearOrders } from '../../orders/unclear-orders.js';
 import { addUp, totalsOf } from './add-up-quarter.js';
 import { isQuarterOver, quarterDays, type Quarter } from './quarter-days.js';
 import { QuarterPortions } from './quarter-portions.js';
 import { TaxQuarters } from './tax-quarters.js';
+import { UnclearPlaces } from './unclear-places.js';
 
 type ReverseChargeRow = {
   vatNumber: string;
@@ -30,7 +30,7 @@ export class SummariseQuarter {
     @InjectConnection() private readonly database: Sequelize,
     private readonly portions: QuarterPortions,
     private readonly quarters: TaxQuarters,
-    private readonly unclear: UnclearOrders,
+    private readonly unclear: UnclearPlaces,
     private readonly clock: Clock,
   ) {}
 

@@ -50,6 +50,7 @@ describe('disputes', () => {
     expect((await browser.get('/api/shelf').expect(200)).body).toMatchObject({
       total: 0,
       resting: ['Knot', 'Plover'],
+      restingWithPledge: [],
     });
     expect((await browser.get(`/api/shelf/${shop.knot.slug}`).expect(403)).body.detail).toBe(
       'Downloads of Knot rest while its payment is in dispute.',

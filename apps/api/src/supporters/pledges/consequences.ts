@@ -1,5 +1,5 @@
 import type { KeepsAfter } from '@windchest/contracts';
-import { locate } from '../../payments/location-evidence.js';
+import { placeOf } from './pledge-place.js';
 import type { InvoiceView, PledgeFlag, PledgeRecord, PledgeView } from './pledge-record.js';
 import { standingOf, type Standing } from './standing.js';
 import { resumesAt } from './wishes.js';
@@ -183,7 +183,7 @@ const differingAmounts = (before: PledgeRecord, invoices: readonly InvoiceView[]
 
 const unclearLocation = (after: PledgeRecord, payments: readonly NewPayment[]): Consequences['flags'] => {
   if (payments.length === 0) return [];
-  const { isClear } = locate(after.declaredCountry, after.paymentCountry, after.cardCountry);
+  const { isClear } = placeOf(after);
   const detail = `declared ${after.declaredCountry}, billing ${after.paymentCountry ?? 'unknown'}, card ${after.cardCountry ?? 'unknown'}`;
   return isClear ? [] : [['location-unclear', detail]];
 };

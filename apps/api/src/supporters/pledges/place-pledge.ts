@@ -10,6 +10,7 @@ import type { SignedIn } from '../../http/person.js';
 import { Refusal } from '../../http/refusal.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { payUntil } from '../../payments/pay-until.js';
+import { newSpokenNumber } from '../../payments/spoken-number.js';
 import { PledgePlan } from '../plans/pledge-plan.model.js';
 import { LIVE_STATES } from './follow-pledge.js';
 import { FIRST_LOOK_SECONDS, lookAfterPledge } from './look-at-pledge.job.js';
@@ -45,7 +46,9 @@ export class PlacePledge {
       );
       return { pledge: placed, isPlaced: true };
     } catch (fault) {
-      if (isDuplicate(fault, 'pledges_attempt')) return this.place(body, person);
+      // The same attempt arrived twice at once, or somebody has the number.
+      if (isDuplicate(fault, 'pledges_attempt') || isDuplicate(fault, 'pledges_number'))
+        return this.place(body, person);
       if (!isDuplicate(fault, 'pledges_live_person')) throw fault;
       const other = await this.pledges.findOne({
         where: { personId: person.id, state: [...LIVE_STATES] },
@@ -59,6 +62,7 @@ export class PlacePledge {
     const pledge = await this.pledges.create(
       {
         id: newId(),
+        number: newSpokenNumber('P'),
         personId: person.id,
         planId: plan.id,
         amountMinor: plan.amountMinor,

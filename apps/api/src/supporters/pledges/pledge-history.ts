@@ -37,6 +37,14 @@ export class PledgeHistory {
     await this.add(tx, pledge.id, `flagged ${flag}`, detail);
   }
 
+  /** What it stood for is over, or somebody has looked. */
+  async dropFlag(tx: Tx, pledge: Pledge, flag: PledgeFlag, detail = ''): Promise<boolean> {
+    if (!pledge.flags.includes(flag)) return false;
+    await pledge.update({ flags: pledge.flags.filter((one) => one !== flag) }, { transaction: tx });
+    await this.add(tx, pledge.id, `no longer flagged ${flag}`, detail);
+    return true;
+  }
+
   list(pledgeId: string): Promise<PledgeHistoryEntry[]> {
     return selectRows<PledgeHistoryEntry>(
       this.database,

@@ -12,7 +12,12 @@ export class PledgePayment extends Model {
   @Column(DataType.STRING(120)) declare paymentIntentId: string | null;
   @Column(DataType.INTEGER.UNSIGNED) declare amountMinor: number;
   @Column(DataType.CHAR(3)) declare currency: string;
+  @Column(DataType.CHAR(2)) declare billingCountry: string | null;
+  @Column(DataType.CHAR(2)) declare cardCountry: string | null;
   @Column(DataType.CHAR(2)) declare country: string;
+  /** No two of declared, billing and card country agree. */
+  @Column(DataType.BOOLEAN) declare isUnclear: boolean;
+  @Column(DataType.CHAR(2)) declare settledCountry: string | null;
   @MomentColumn() declare periodStart: Date;
   @MomentColumn() declare periodEnd: Date;
   @MomentColumn() declare paidAt: Date;

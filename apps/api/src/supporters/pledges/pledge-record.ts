@@ -1,12 +1,11 @@
-import type { KeepsAfter, PledgeState } from '@windchest/contracts';
+import type { KeepsAfter, PledgeState, Supporter } from '@windchest/contracts';
 
 /**
  * What staff should look at. `location-unclear`: no two pieces of evidence agree on the supporter's country.
  * `amount-differs`: another amount was paid than was pledged. `paid-after-end`: money came for a pledge that
  * was over while its supporter had begun another. `disputed`, `refunded-outside`: the payment service says so.
  */
-export type PledgeFlag =
-  'location-unclear' | 'amount-differs' | 'paid-after-end' | 'disputed' | 'refunded-outside';
+export type PledgeFlag = Supporter['flags'][number];
 
 /** Tax within an amount, at one rate. `ratePercent` is decimal text such as `25.5`. */
 export interface TaxLine {
@@ -30,6 +29,8 @@ export interface PledgeRecord {
   readonly declaredCountry: string;
   readonly paymentCountry: string | null;
   readonly cardCountry: string | null;
+  /** By hand, where the evidence agreed on none. */
+  readonly settledCountry: string | null;
   readonly cardLast4: string | null;
   readonly flags: readonly PledgeFlag[];
   readonly sessionId: string | null;

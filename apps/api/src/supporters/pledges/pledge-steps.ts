@@ -7,6 +7,7 @@ import type { PledgeRights } from './rights.js';
 export interface PaidMonth {
   readonly paymentId: string;
   readonly pledgeId: string;
+  readonly pledgeNumber: string;
   readonly personId: string;
   readonly email: string;
   readonly name: string;

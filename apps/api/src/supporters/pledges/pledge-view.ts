@@ -42,6 +42,7 @@ export class PledgeView {
       const ends = isEnding(pledge) ? (pledge.endsAt ?? pledge.paidUntil) : null;
       return {
         id: pledge.id,
+        number: pledge.number,
         state: pledge.state,
         plan: { id: pledge.planId, name: nameOf.get(pledge.planId) ?? '' },
         amount: { minor: pledge.amountMinor, currency: pledge.currency },

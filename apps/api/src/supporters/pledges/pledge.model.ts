@@ -6,6 +6,7 @@ import type { PledgeFlag } from './pledge-record.js';
 @Table({ tableName: 'pledges', timestamps: false })
 export class Pledge extends Model {
   @IdColumn() declare id: string;
+  @Column(DataType.STRING(20)) declare number: string;
   @Column(DataType.CHAR(36)) declare personId: string;
   @Column(DataType.CHAR(36)) declare planId: string;
   @Column(DataType.INTEGER.UNSIGNED) declare amountMinor: number;
@@ -20,6 +21,7 @@ export class Pledge extends Model {
   @Column(DataType.CHAR(2)) declare declaredCountry: string;
   @Column(DataType.CHAR(2)) declare paymentCountry: string | null;
   @Column(DataType.CHAR(2)) declare cardCountry: string | null;
+  @Column(DataType.CHAR(2)) declare settledCountry: string | null;
   @Column(DataType.CHAR(4)) declare cardLast4: string | null;
   @Column(DataType.JSON) declare flags: PledgeFlag[];
   @Column(DataType.TEXT) declare consentText: string;

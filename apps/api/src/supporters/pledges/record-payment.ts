@@ -4,12 +4,12 @@ import { People } from '../../accounts/people.js';
 import { Clock } from '../../adapters/clock/clock.js';
 import { newId } from '../../database/columns.js';
 import type { Tx } from '../../database/transactions.js';
-import { locate } from '../../payments/location-evidence.js';
 import { PledgePlan } from '../plans/pledge-plan.model.js';
 import type { NewPayment } from './consequences.js';
 import { PledgeHistory } from './pledge-history.js';
 import { PledgeMails } from './pledge-mails.js';
 import { PledgePayment } from './pledge-payment.model.js';
+import { placeOf } from './pledge-place.js';
 import { PledgePaidSteps, type PaidMonth } from './pledge-steps.js';
 import type { Pledge } from './pledge.model.js';
 
@@ -31,11 +31,10 @@ export class RecordPayment {
     const plan = await this.plans.findByPk(planId, { transaction: tx, rejectOnEmpty: true });
     const person = await this.people.byId(pledge.personId, tx);
     const now = this.clock.now();
-    const { country } = locate(
-      pledge.declaredCountry,
-      invoice.billingCountry ?? pledge.paymentCountry,
-      invoice.cardCountry ?? pledge.cardCountry,
-    );
+    const billingCountry = invoice.billingCountry ?? pledge.paymentCountry;
+    const cardCountry = invoice.cardCountry ?? pledge.cardCountry;
+    const { declaredCountry, settledCountry } = pledge;
+    const place = placeOf({ declaredCountry, paymentCountry: billingCountry, cardCountry, settledCountry });
     const payment = await this.payments.create(
       {
         id: newId(),
@@ -45,7 +44,10 @@ export class RecordPayment {
         paymentIntentId: invoice.paymentIntentId,
         amountMinor: invoice.amountPaidMinor,
         currency: invoice.currency,
-        country,
+        billingCountry,
+        cardCountry,
+        country: place.country,
+        isUnclear: !place.isClear,
         periodStart: invoice.periodStart,
         periodEnd: invoice.periodEnd,
         paidAt: invoice.paidAt ?? now,
@@ -56,13 +58,14 @@ export class RecordPayment {
     const month: PaidMonth = {
       paymentId: payment.id,
       pledgeId: pledge.id,
+      pledgeNumber: pledge.number,
       personId: pledge.personId,
       email: person?.email ?? '',
       name: person?.name ?? '',
       planName: plan.name,
       amountMinor: payment.amountMinor,
       currency: payment.currency,
-      country,
+      country: place.country,
       periodStart: payment.periodStart,
       periodEnd: payment.periodEnd,
       paidAt: payment.paidAt,

@@ -3,7 +3,7 @@ import { InjectConnection } from '@nestjs/sequelize';
 import type { Answer, Handled, PledgeState, SupporterRow } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
-import { locate } from '../../payments/location-evidence.js';
+import { placeOf } from '../pledges/pledge-place.js';
 import type { PledgeFlag } from '../pledges/pledge-record.js';
 
 type Query = Handled<'GET /workshop/supporters'>['query'];
@@ -11,6 +11,7 @@ export type SupporterFilter = Pick<Query, 'state' | 'planId' | 'flagged' | 'sear
 
 interface Row {
   id: string;
+  number: string;
   name: string | null;
   email: string | null;
   plan_id: string;
@@ -21,6 +22,7 @@ interface Row {
   declared_country: string;
   payment_country: string | null;
   card_country: string | null;
+  settled_country: string | null;
   flags: PledgeFlag[] | string;
   began_at: Date | null;
   next_payment_at: Date | null;
@@ -87,7 +89,7 @@ export class ListSupporters {
        WHERE p.began_at IS NOT NULL
          AND (:state IS NULL OR p.state = :state) AND (:planId IS NULL OR p.plan_id = :planId)
          AND (:flagged IS NULL OR JSON_LENGTH(p.flags) > 0)
-         AND (:search IS NULL OR n.email LIKE :search OR n.name LIKE :search) ${condition} ${tail}`,
+         AND (:search IS NULL OR n.email LIKE :search OR n.name LIKE :search OR p.number LIKE UPPER(:search)) ${condition} ${tail}`,
       {
         state: state ?? null,
         planId: planId ?? null,
@@ -103,12 +105,18 @@ const toRow = (row: Row): SupporterRow => {
   const money = (minor: number | string | null) => ({ minor: Number(minor ?? 0), currency: row.currency });
   return {
     id: row.id,
+    number: row.number,
     name: row.name ?? '',
     email: row.email ?? '',
     plan: { id: row.plan_id, name: row.plan_name },
     state: row.state,
     amount: money(row.amount_minor),
-    country: locate(row.declared_country, row.payment_country, row.card_country).country,
+    country: placeOf({
+      declaredCountry: row.declared_country,
+      paymentCountry: row.payment_country,
+      cardCountry: row.card_country,
+      settledCountry: row.settled_country,
+    }).country,
     flags: typeof row.flags === 'string' ? (JSON.parse(row.flags) as PledgeFlag[]) : row.flags,
     beganAt: row.began_at?.toISOString() ?? null,
     nextPaymentAt: row.next_payment_at?.toISOString() ?? null,

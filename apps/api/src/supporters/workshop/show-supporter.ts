@@ -4,9 +4,9 @@ import type { Answer, Supporter } from '@windchest/contracts';
 import { People } from '../../accounts/people.js';
 import { notFound } from '../../http/refusal.js';
 import { MailOutbox } from '../../mails/mail-outbox.js';
-import { locate } from '../../payments/location-evidence.js';
 import { PledgeHistory } from '../pledges/pledge-history.js';
 import { PledgePayment } from '../pledges/pledge-payment.model.js';
+import { placeOf } from '../pledges/pledge-place.js';
 import { PledgeView } from '../pledges/pledge-view.js';
 import { Pledge } from '../pledges/pledge.model.js';
 
@@ -36,7 +36,7 @@ export class ShowSupporter {
       ...shown,
       name: person?.name ?? '',
       email: person?.email ?? '',
-      country: locate(pledge.declaredCountry, pledge.paymentCountry, pledge.cardCountry).country,
+      country: placeOf(pledge).country,
       flags: pledge.flags,
       consentText: pledge.consentText,
       consentAt: pledge.consentAt.toISOString(),

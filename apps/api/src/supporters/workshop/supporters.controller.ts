@@ -1,9 +1,11 @@
 import { Controller } from '@nestjs/common';
 import type { Answer, Handled } from '@windchest/contracts';
 import { Endpoint, Input } from '../../http/endpoint.js';
+import { ThisPerson, type SignedIn } from '../../http/person.js';
 import { ListSupporters } from './list-supporters.js';
 import { ShowSupporter } from './show-supporter.js';
 import { SupporterFigures } from './supporter-figures.js';
+import { TakeOffPledgeFlag } from './take-off-pledge-flag.js';
 
 @Controller()
 export class SupportersController {
@@ -11,6 +13,7 @@ export class SupportersController {
     private readonly listing: ListSupporters,
     private readonly figures: SupporterFigures,
     private readonly showing: ShowSupporter,
+    private readonly flags: TakeOffPledgeFlag,
   ) {}
 
   @Endpoint('GET /workshop/supporters')
@@ -35,5 +38,14 @@ export class SupportersController {
     @Input() { params, query }: Handled<'GET /workshop/supporters/:pledgeId/payments'>,
   ): Promise<Answer<'GET /workshop/supporters/:pledgeId/payments'>> {
     return this.showing.paymentsOf(params.pledgeId, query);
+  }
+
+  @Endpoint('DELETE /workshop/supporters/:pledgeId/flags/:flag')
+  async takeOffFlag(
+    @Input() { params }: Handled<'DELETE /workshop/supporters/:pledgeId/flags/:flag'>,
+    @ThisPerson() person: SignedIn,
+  ): Promise<null> {
+    await this.flags.takeOff(params.pledgeId, params.flag, person);
+    return null;
   }
 }

@@ -172,7 +172,8 @@ export const ownPledgeTexts = {
   blockSince: 'Since',
   blockAmount: 'Each month',
   cardEnding: (last4: string) => `ends in ${last4}`,
-  none4: '—',
+  noValue: '—',
+  receiptPdf: (number: string) => `Receipt ${number}, PDF`,
 };
 
 export const pledgeSectionTexts = {

@@ -17,6 +17,8 @@ export const shelfTexts = {
   seeKits: 'See the kits',
   resting: (kits: string) =>
     `Downloads of ${kits} rest while the payment is in dispute. When the bank has decided for the workshop, they go on.`,
+  restingWithPledge: (kits: string) => `${kits} ${kits.includes(', ') ? 'rest' : 'rests'} with your pledge.`,
+  seePledge: 'Your pledge',
 
   hold: 'You hold',
   nothingYet: 'Nothing yet',

@@ -19,7 +19,7 @@ export const ledgerTexts = {
 
 export const salesTexts = {
   title: 'Sales',
-  lead: 'By the day a receipt was written, in UTC, tax included.',
+  lead: 'By the day a receipt was written, in UTC, tax and pledges included.',
   span: 'Span',
   spans: { 12: 'last 12 months', 24: 'last 24 months', 36: 'last 36 months' } as Record<number, string>,
   byMonth: 'By month',
@@ -28,7 +28,13 @@ export const salesTexts = {
   none: 'Nothing was sold in this time.',
   month: (month: string, orders: string, gross: string) => `${month}: ${orders}, ${gross}`,
   chart: 'Sales by month, a bar for each',
-  monthColumns: { month: 'Month', orders: 'Orders', gross: 'Sales', refunded: 'Went back' },
+  monthColumns: {
+    month: 'Month',
+    orders: 'Orders',
+    gross: 'Sales',
+    pledged: 'Pledges in it',
+    refunded: 'Went back',
+  },
   monthCaption: 'Sales by month',
   byCountry: 'By country',
   countryCaption: 'Sales by country',
@@ -41,8 +47,8 @@ export const salesTexts = {
 export const paymentsTexts = {
   title: 'Payments',
   lead: 'Money that came and went, newest first.',
-  caption: 'Payments, refunds and disputes',
-  search: 'Order, e-mail or reference',
+  caption: 'Payments, pledges, refunds and disputes',
+  search: 'Order, pledge, e-mail or reference',
   kind: 'Kind',
   allKinds: 'all kinds',
   kinds: { payment: 'payment', refund: 'refund', dispute: 'dispute', pledge: 'pledge' },
@@ -77,7 +83,7 @@ export const paymentsTexts = {
 
 export const exportsTexts = {
   title: 'Exports',
-  lead: 'All records of a year in one zip: orders, lines, receipts, credit notes, refunds, disputes, rates. Keep it where it stays.',
+  lead: 'All records of a year in one zip: orders, lines, receipts, credit notes, refunds, disputes, pledges, rates. Keep it where it stays.',
   year: 'Year',
   ask: 'Write an export',
   asking: 'Asking …',

@@ -43,6 +43,7 @@ export const supportersTexts = {
 };
 
 export const supporterTexts = {
+  number: 'Number',
   notFound: 'The pledge could not be read',
   flags: 'To look at',
   flagDetails: {

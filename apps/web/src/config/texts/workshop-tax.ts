@@ -131,7 +131,7 @@ export const locationsTexts = {
   views: { open: 'to be settled', settled: 'settled by hand' },
   view: 'Show',
   caption: 'Receipts and their countries',
-  search: 'Receipt, order or e-mail',
+  search: 'Receipt, order, pledge or e-mail',
   columns: {
     receipt: 'Receipt',
     issued: 'Issued',
@@ -155,6 +155,7 @@ export const locationsTexts = {
   counts: 'Counts in',
   rate: (country: string, rate: string) => `${country}, ${rate} %`,
   order: 'Order',
+  pledge: 'Pledge',
   rule: 'Two pieces of evidence that agree decide (Implementing Regulation (EU) 282/2011, articles 24b and 24f). What you choose needs a reason that holds without them.',
   stays: 'The receipt stays as it was issued. What was paid stays too: another rate moves what of it is tax.',
   country: 'Country',

@@ -67,9 +67,9 @@ export function AccountPage() {
       {person ? (
         <>
           <OrdersSection />
+          <PledgeSection />
           <LettersSection />
           <PrintersSection />
-          <PledgeSection />
           <NameSection person={person} />
           <AddressSection person={person} />
           <PassphraseSection />

@@ -5,6 +5,7 @@ import { shelfTexts } from '../../config/texts/shelf.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
+import { TextLink } from '../../ui/link.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
 import { Notice } from '../../ui/notice.js';
@@ -44,9 +45,16 @@ function Kits() {
   if (fault && !data)
     return <Fault level={2} what={shelfTexts.failed} fault={fault} onAgain={() => void mutate()} />;
   if (!data) return <SkeletonLines lines={5} />;
-  const resting = data.resting.length > 0 && (
-    <Box marginBottom="6">
-      <Notice tone="warn">{shelfTexts.resting(data.resting.join(', '))}</Notice>
+  const isResting = data.resting.length > 0 || data.restingWithPledge.length > 0;
+  const resting = isResting && (
+    <Box display="grid" gap="3" marginBottom="6">
+      {data.resting.length > 0 && <Notice tone="warn">{shelfTexts.resting(data.resting.join(', '))}</Notice>}
+      {data.restingWithPledge.length > 0 && (
+        <Notice>
+          {shelfTexts.restingWithPledge(data.restingWithPledge.join(', '))}{' '}
+          <TextLink to={paths.pledge.to()}>{shelfTexts.seePledge}</TextLink>
+        </Notice>
+      )}
     </Box>
   );
   if (data.items.length === 0 && resting) return resting;

@@ -16,6 +16,7 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { TitleBlock } from '../../ui/title-block.js';
 import { SettleForm } from './settle-form.js';
+import { SubjectLink } from './subject-link.js';
 
 const Evidence = ({ location }: { location: UnclearLocation }) => (
   <Box as="section" marginTop="8" maxWidth="measure">
@@ -117,12 +118,8 @@ export function LocationPage() {
             fields={[
               { name: texts.columns.issued, value: date(data.issuedAt) },
               {
-                name: texts.order,
-                value: (
-                  <TextLink to={paths.workshop.order.to({ orderId: data.orderId })}>
-                    {data.orderNumber}
-                  </TextLink>
-                ),
+                name: data.pledgeId ? texts.pledge : texts.order,
+                value: <SubjectLink subject={data} />,
               },
               { name: texts.counts, value: texts.rate(countryName(data.country), data.ratePercent) },
               { name: texts.columns.buyer, value: data.email },

@@ -16,6 +16,7 @@ import type { Column } from '../../ui/table/hairline-table.js';
 import { useTableState } from '../../ui/table/use-table-state.js';
 import { Unbroken } from '../../ui/unbroken.js';
 import { LedgerHead } from './ledger-head.js';
+import { SubjectLink } from './subject-link.js';
 
 const orUnknown = (code: string | null) => (code ? countryName(code) : texts.unknown);
 
@@ -41,9 +42,9 @@ const columns: Column<UnclearLocation>[] = [
     cell: (one) => (
       <Box lineHeight="1.4">
         <Box>{one.email}</Box>
-        <TextLink to={paths.workshop.order.to({ orderId: one.orderId })} fontSize="sm">
-          {one.orderNumber}
-        </TextLink>
+        <Box fontSize="sm">
+          <SubjectLink subject={one} />
+        </Box>
       </Box>
     ),
   },

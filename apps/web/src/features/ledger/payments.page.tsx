@@ -35,6 +35,14 @@ const columns: Column<Payment>[] = [
         >
           {one.subject}
         </TextLink>
+      ) : one.kind === 'pledge' ? (
+        <TextLink
+          to={paths.workshop.supporters.to({}, { search: one.subject })}
+          fontWeight="semibold"
+          whiteSpace="nowrap"
+        >
+          {one.subject}
+        </TextLink>
       ) : (
         one.subject
       ),

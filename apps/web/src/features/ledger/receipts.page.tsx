@@ -1,6 +1,5 @@
 import { Box } from '@chakra-ui/react/box';
 import type { InputOf, ReceiptRow } from '@windchest/contracts';
-import { paths } from '../../config/paths.js';
 import { receiptsTexts as texts } from '../../config/texts/workshop-receipts.js';
 import { apiAddress } from '../../lib/api-address.js';
 import { date, price } from '../../lib/format.js';
@@ -9,7 +8,7 @@ import { useEndpoint } from '../../lib/use-endpoint.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
 import { SelectField } from '../../ui/field/select-field.js';
-import { TextAnchor, TextLink } from '../../ui/link.js';
+import { TextAnchor } from '../../ui/link.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band } from '../../ui/sheet.js';
 import { DataTable } from '../../ui/table/data-table.js';
@@ -20,15 +19,22 @@ import { Unbroken } from '../../ui/unbroken.js';
 import { countryOptions } from '../basket/country-options.js';
 import { LedgerTabs } from './ledger-head.js';
 import { yearsUntil } from './receipt-years.js';
+import { SubjectLink } from './subject-link.js';
 
 type Query = NonNullable<InputOf<'GET /workshop/receipts'>['query']>;
 
-const pdfOf = ({ id, kind, orderId }: ReceiptRow): string =>
-  kind === 'receipt'
+const pdfOf = ({ id, kind, orderId, pledge }: ReceiptRow): string => {
+  if (pledge)
+    return apiAddress('GET /workshop/supporters/:pledgeId/payments/:paymentId/receipt.pdf', {
+      params: pledge,
+    });
+  if (!orderId) return '';
+  return kind === 'receipt'
     ? apiAddress('GET /workshop/orders/:orderId/receipt.pdf', { params: { orderId } })
     : apiAddress('GET /workshop/orders/:orderId/credit-notes/:creditNoteId.pdf', {
         params: { orderId, creditNoteId: id },
       });
+};
 
 const amountColumn = (key: 'net' | 'tax' | 'total', isSortable = false): Column<ReceiptRow> => ({
   key,
@@ -62,13 +68,7 @@ const columns: Column<ReceiptRow>[] = [
     header: texts.columns.order,
     cell: (row) => (
       <Box lineHeight="1.4">
-        {row.orderId ? (
-          <TextLink to={paths.workshop.order.to({ orderId: row.orderId })} whiteSpace="nowrap">
-            {row.orderNumber}
-          </TextLink>
-        ) : (
-          <Unbroken>{row.orderNumber}</Unbroken>
-        )}
+        <SubjectLink subject={{ ...row, pledgeId: row.pledge?.pledgeId ?? null }} />
         <Box color="ink.soft">{row.email}</Box>
       </Box>
     ),

@@ -33,6 +33,7 @@ const monthColumns: Column<Month>[] = [
   { key: 'month', header: texts.monthColumns.month, isHeading: true, cell: (one) => month(one.month) },
   { key: 'orders', header: texts.monthColumns.orders, isNumeric: true, cell: (one) => number(one.orders) },
   { key: 'gross', header: texts.monthColumns.gross, isNumeric: true, cell: (one) => amount(one.gross) },
+  { key: 'pledged', header: texts.monthColumns.pledged, isNumeric: true, cell: (one) => amount(one.pledged) },
   {
     key: 'refunded',
     header: texts.monthColumns.refunded,
@@ -77,7 +78,7 @@ function Months({ months }: { months: readonly Month[] }) {
       <TimeBars
         label={texts.chart}
         summary={
-          count === 0
+          count === 0 && sumOf(months, 'gross').minor === 0
             ? texts.none
             : texts.summary(orders(count), price(sumOf(months, 'gross')), price(sumOf(months, 'refunded')))
         }
@@ -93,7 +94,9 @@ function Months({ months }: { months: readonly Month[] }) {
         <HairlineTable
           caption={texts.monthCaption}
           columns={monthColumns}
-          rows={[...months].reverse().filter((one) => one.orders > 0 || one.refunded.minor > 0)}
+          rows={[...months]
+            .reverse()
+            .filter((one) => one.gross.minor > 0 || one.orders > 0 || one.refunded.minor > 0)}
           rowKey={(one) => one.month}
         />
       </SameAsTable>

@@ -26,6 +26,7 @@ export function SettleForm({ location }: { location: UnclearLocation }) {
     'GET /workshop/ledger/locations/:receiptId',
     'GET /workshop/ledger/quarters/:year/:quarter',
     'GET /workshop/orders/:orderId',
+    'GET /workshop/supporters/:pledgeId',
   ]);
   const { register, handleSubmit, setError, formState } = useForm<
     Fields,

@@ -11,7 +11,7 @@ import { Unbroken } from '../../ui/unbroken.js';
 import { pledgeSigns } from './pledge-words.js';
 import type { OwnPledge } from './use-own-pledge.js';
 
-const day = (moment: string | null) => <Unbroken>{moment ? date(moment) : texts.none4}</Unbroken>;
+const day = (moment: string | null) => <Unbroken>{moment ? date(moment) : texts.noValue}</Unbroken>;
 const columns: readonly Column<Pledge>[] = [
   { key: 'plan', header: texts.earlierColumns.plan, isHeading: true, cell: (one) => one.plan.name },
   { key: 'began', header: texts.earlierColumns.began, cell: (one) => day(one.beganAt) },

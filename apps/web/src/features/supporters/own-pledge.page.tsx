@@ -3,6 +3,7 @@ import type { Pledge } from '@windchest/contracts';
 import { Navigate, useSearchParams } from 'react-router-dom';
 import { paths, signInThenBack } from '../../config/paths.js';
 import { ownPledgeTexts as texts, pledgeStateTexts } from '../../config/texts/pledge.js';
+import { apiAddress } from '../../lib/api-address.js';
 import { date, price } from '../../lib/format.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
@@ -27,7 +28,7 @@ import { isLive, leadOf, pledgeSigns, staysWords } from './pledge-words.js';
 import { type OwnPledge, useOwnPledge } from './use-own-pledge.js';
 
 function fieldsOf(pledge: Pledge): TitleBlockField[] {
-  const day = (moment: string | null) => (moment ? date(moment) : texts.none4);
+  const day = (moment: string | null) => (moment ? date(moment) : texts.noValue);
   const next = pledge.endsAt
     ? { name: texts.blockEnds, value: day(pledge.endsAt) }
     : { name: texts.blockNext, value: day(pledge.nextPaymentAt) };
@@ -41,7 +42,7 @@ function fieldsOf(pledge: Pledge): TitleBlockField[] {
     { name: texts.blockPaidUntil, value: day(pledge.paidUntil) },
     {
       name: texts.blockCard,
-      value: pledge.cardLast4 ? texts.cardEnding(pledge.cardLast4) : texts.none4,
+      value: pledge.cardLast4 ? texts.cardEnding(pledge.cardLast4) : texts.noValue,
     },
     { name: texts.blockSince, value: day(pledge.beganAt) },
   ];
@@ -74,6 +75,11 @@ function Payments({ pledge }: { pledge: Pledge }) {
       fault={fault}
       onAgain={() => void mutate()}
       addressOf={(change) => paths.pledge.to({}, { payments: change.page })}
+      pdfOf={(paymentId) =>
+        apiAddress('GET /pledges/:pledgeId/payments/:paymentId/receipt.pdf', {
+          params: { pledgeId: pledge.id, paymentId },
+        })
+      }
     />
   );
 }

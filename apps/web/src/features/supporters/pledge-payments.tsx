@@ -4,13 +4,14 @@ import { ownPledgeTexts as texts } from '../../config/texts/pledge.js';
 import type { ApiFault } from '../../lib/api-fault.js';
 import { date, price } from '../../lib/format.js';
 import { Fault } from '../../ui/fault.js';
+import { TextAnchor } from '../../ui/link.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Pager } from '../../ui/table/pager.js';
 import { Text } from '../../ui/text.js';
 import { Unbroken } from '../../ui/unbroken.js';
 
-const columns: readonly Column<PledgePayment>[] = [
+const columnsFor = (pdfOf: PledgePaymentsProps['pdfOf']): Column<PledgePayment>[] => [
   {
     key: 'paid',
     header: texts.columns.paid,
@@ -26,7 +27,14 @@ const columns: readonly Column<PledgePayment>[] = [
   {
     key: 'receipt',
     header: texts.columns.receipt,
-    cell: (one) => <Unbroken>{one.receiptNumber ?? texts.none4}</Unbroken>,
+    cell: (one) =>
+      one.receiptNumber ? (
+        <TextAnchor href={pdfOf(one.id)} whiteSpace="nowrap" aria-label={texts.receiptPdf(one.receiptNumber)}>
+          {one.receiptNumber}
+        </TextAnchor>
+      ) : (
+        texts.noValue
+      ),
   },
   {
     key: 'amount',
@@ -52,10 +60,12 @@ export interface PledgePaymentsProps {
   fault: ApiFault | undefined;
   onAgain: () => void;
   addressOf: (change: { page: number }) => string;
+  /** Where a payment’s receipt is. */
+  pdfOf: (paymentId: string) => string;
 }
 
 /** The months that were paid, with their receipts. */
-export const PledgePayments = ({ answer, fault, onAgain, addressOf }: PledgePaymentsProps) =>
+export const PledgePayments = ({ answer, fault, onAgain, addressOf, pdfOf }: PledgePaymentsProps) =>
   fault && !answer ? (
     <Fault level={3} what={texts.paymentsFailed} fault={fault} onAgain={onAgain} />
   ) : !answer ? (
@@ -66,7 +76,7 @@ export const PledgePayments = ({ answer, fault, onAgain, addressOf }: PledgePaym
     <>
       <HairlineTable
         caption={texts.payments}
-        columns={columns}
+        columns={columnsFor(pdfOf)}
         rows={answer.items}
         rowKey={(one) => one.id}
       />

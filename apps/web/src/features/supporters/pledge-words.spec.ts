@@ -3,6 +3,7 @@ import { leadOf, restsWords, staysWords } from './pledge-words.js';
 
 const pledge = (changes: Partial<Pledge> = {}): Pledge => ({
   id: '01900000-0000-7000-8000-000000000001',
+  number: 'P-7K2M9Q',
   state: 'current',
   plan: { id: '01900000-0000-7000-8000-000000000002', name: 'High water' },
   amount: { minor: 900, currency: 'EUR' },

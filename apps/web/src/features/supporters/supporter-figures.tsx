@@ -1,7 +1,8 @@
 import { Box } from '@chakra-ui/react/box';
 import type { OutputOf } from '@windchest/contracts';
 import { supportersTexts as texts } from '../../config/texts/workshop-supporters.js';
-import { monthName, number, price } from '../../lib/format.js';
+import { number, price } from '../../lib/format.js';
+import { month as monthName } from '../../lib/workshop-format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { SameAsTable } from '../../ui/chart/same-as-table.js';
 import { TimeBars } from '../../ui/chart/time-bars.js';

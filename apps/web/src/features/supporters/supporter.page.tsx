@@ -5,6 +5,7 @@ import { useParams, useSearchParams } from 'react-router-dom';
 import { paths } from '../../config/paths.js';
 import { keepsTexts, pledgeStateTexts } from '../../config/texts/pledge.js';
 import { supportersTexts, supporterTexts as texts } from '../../config/texts/workshop-supporters.js';
+import { apiAddress } from '../../lib/api-address.js';
 import { date, dateTime, price } from '../../lib/format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { Fault } from '../../ui/fault.js';
@@ -12,11 +13,10 @@ import { TextLink } from '../../ui/link.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band, SplitSheet } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
-import { StatusLine } from '../../ui/status-mark.js';
 import { Heading, Text } from '../../ui/text.js';
 import { TitleBlock } from '../../ui/title-block.js';
-import { ordersTexts } from '../../config/texts/workshop-orders.js';
 import { MailsTable } from './mails-table.js';
+import { PledgeFlagLines } from './pledge-flag-lines.js';
 import { PledgePayments } from './pledge-payments.js';
 
 const Section = ({ title, children }: { title: string; children: ReactNode }) => (
@@ -44,6 +44,7 @@ const Ruled = ({ name, children }: { name: ReactNode; children: ReactNode }) => 
 
 const Evidence = ({ supporter }: { supporter: Supporter }) => {
   const facts: [string, ReactNode][] = [
+    [texts.number, supporter.number],
     [texts.email, supporter.email || texts.none],
     [texts.country, supporter.country],
     [texts.kits, supporter.kits.map(({ name }) => name).join(', ') || texts.none],
@@ -111,6 +112,11 @@ function Payments({ pledgeId }: { pledgeId: string }) {
       fault={fault}
       onAgain={() => void mutate()}
       addressOf={(change) => paths.workshop.supporter.to({ pledgeId }, { payments: change.page })}
+      pdfOf={(paymentId) =>
+        apiAddress('GET /workshop/supporters/:pledgeId/payments/:paymentId/receipt.pdf', {
+          params: { pledgeId, paymentId },
+        })
+      }
     />
   );
 }
@@ -178,16 +184,7 @@ export function SupporterPage() {
                 <Heading level={2} look="subsection" marginBottom="2">
                   {texts.flags}
                 </Heading>
-                <Box as="ul" listStyle="none">
-                  {supporter.flags.map((flag) => (
-                    <StatusLine key={flag} state="warn">
-                      {ordersTexts.flags[flag] ?? flag}
-                      <Box fontSize="sm" lineHeight="snug" color="ink.soft">
-                        {texts.flagDetails[flag]}
-                      </Box>
-                    </StatusLine>
-                  ))}
-                </Box>
+                <PledgeFlagLines supporter={supporter} />
               </Box>
             )}
             <Heading level={2} look="subsection" marginBottom="2">

@@ -1,8 +1,0 @@
-import { randomInt } from 'node:crypto';
-
-/** Crockford's base 32: no I, L, O and U, so that a number read out or written down stays the same. */
-const ALPHABET = '0123456789ABCDEFGHJKMNPQRSTVWXYZ';
-
-/** What buyer and workshop call an order by: `W-7K2M9Q`. Unique by the table, not by itself. */
-export const newOrderNumber = (): string =>
-  `W-${Array.from({ length: 6 }, () => ALPHABET[randomInt(ALPHABET.length)]).join('')}`;
