@@ -10,6 +10,7 @@ test.describe('pages a visitor sees', () => {
     '/shelf',
     '/cautions',
     '/kits/no-such-kit',
+    '/support',
     '/no-such-page',
     '/collect/' + 'x'.repeat(43),
   ])
@@ -57,6 +58,9 @@ test.describe('pages of the workshop', () => {
       '/workshop/coupons',
       '/workshop/coupons/new',
       '/workshop/orders',
+      '/workshop/supporters',
+      '/workshop/plans',
+      '/workshop/plans/new',
       '/workshop/people',
       '/workshop/log',
     ]) {

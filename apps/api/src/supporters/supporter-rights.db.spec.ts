@@ -11,6 +11,7 @@ describe('who may see and do what with supporters', () => {
   let plan: WorkshopPlan;
   let wren: Browser;
   let pledgeId: string;
+  let receiptPath: string;
   beforeAll(async () => {
     shop = await startPaymentShop();
     knot = await putKitOnSale(shop, { name: 'Knot', priceMinor: 900 });
@@ -19,6 +20,8 @@ describe('who may see and do what with supporters', () => {
     await shop.database.query(`UPDATE people SET name = '=1+1' WHERE email = 'wren@mail.example'`);
     pledgeId = await pledgeAs(shop, wren, plan.id);
     await hearAll(shop);
+    const { body } = await wren.get(`/api/pledges/${pledgeId}/payments`).expect(200);
+    receiptPath = `payments/${body.items[0].id}/receipt.pdf`;
   });
   afterAll(() => shop.stop());
 
@@ -27,6 +30,7 @@ describe('who may see and do what with supporters', () => {
     return [
       browser.get(path),
       browser.get(`${path}/payments`),
+      browser.get(`${path}/${receiptPath}`),
       browser.post(`${path}/refresh`),
       browser.post(`${path}/give-up`),
       browser.put(`${path}/plan`).send({ planId: plan.id }),
@@ -56,9 +60,11 @@ describe('who may see and do what with supporters', () => {
       'supporters.csv',
       'supporter-figures',
       `supporters/${pledgeId}`,
+      `supporters/${pledgeId}/${receiptPath}`,
     ])
       await helper.get(`/api/workshop/${path}`).expect(403);
     const bookkeeper = await signInAs(shop, 'bookkeeper');
+    await bookkeeper.get(`/api/workshop/supporters/${pledgeId}/${receiptPath}`).expect(200);
     await bookkeeper
       .post('/api/workshop/plans')
       .send(planBody({ kitIds: [knot.kitId] }))
@@ -88,7 +94,8 @@ describe('who may see and do what with supporters', () => {
     const bookkeeper = await signInAs(shop, 'bookkeeper');
     const { text } = await bookkeeper.get('/api/workshop/supporters.csv').expect(200);
     const [head, row] = text.split('\r\n');
-    expect(head).toMatch(/^name,email,plan,state,currency,amount_each_month/);
+    expect(head).toMatch(/^number,name,email,plan,state,currency,amount_each_month/);
+    expect(row).toMatch(/^P-[0-9A-Z]{6},/);
     expect(row).toContain(`'=1+1,wren@mail.example,Tide table,current,EUR,9.00,9.00,DE,`);
   });
 

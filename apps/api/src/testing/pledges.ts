@@ -35,16 +35,28 @@ export const pledgeBody = (planId: string, changes: object = {}) => ({
 /** What a card does when it is charged later, for `pledgeAs` and `answerOf`. */
 export type Later = 'succeed' | 'decline';
 
+export interface PledgingWish {
+  later?: Later;
+  /** Declared. */
+  country?: string;
+  /** Where billing address and card are from, where that is elsewhere. */
+  paidFrom?: { billing: string; card: string };
+}
+
 /** Opens the page of a pledge and pays there as its visitor does; nothing is delivered yet. */
 export const pledgeAs = async (
   shop: PaymentShop,
   browser: Browser,
   planId: string,
-  { later = 'succeed', country = 'DE' }: { later?: Later; country?: string } = {},
+  { later = 'succeed', country = 'DE', paidFrom }: PledgingWish = {},
 ): Promise<string> => {
   const opened = await browser.post('/api/pledges').send(pledgeBody(planId, { country })).expect(201);
   const { pledgeId, paymentUrl } = opened.body as { pledgeId: string; paymentUrl: string };
-  await shop.control(`/sessions/${sessionIdOf(paymentUrl)}/pay`, { country, cardCountry: country, later });
+  await shop.control(`/sessions/${sessionIdOf(paymentUrl)}/pay`, {
+    country: paidFrom?.billing ?? country,
+    cardCountry: paidFrom?.card ?? country,
+    later,
+  });
   return pledgeId;
 };
 

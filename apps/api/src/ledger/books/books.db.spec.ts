@@ -134,6 +134,7 @@ describe('the books', () => {
       'disputes.csv',
       'order-lines.csv',
       'orders.csv',
+      'pledge-payments.csv',
       'receipts.csv',
       'refunds.csv',
       'settled-countries.csv',
