@@ -69,6 +69,10 @@ export const shelfKit = shelfItem.extend({
     gauge: z.object({ code: z.string(), name: z.string() }).nullable(),
     /** What this person prints: said for this kit, else the habit of their printer. */
     chosen: clearance.nullable(),
+    /** What was said for this kit alone. */
+    said: clearance.nullable(),
+    /** The habit of their main printer, and what they call it. */
+    habit: z.object({ clearance, printer: z.string() }).nullable(),
   }),
   revisions: z.array(shelfRevision),
   parts: z.array(shelfPart),

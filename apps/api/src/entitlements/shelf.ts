@@ -3,6 +3,7 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Answer, Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
+import { PrinterCards } from '../accounts/printers/printer-cards.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import type { SignedIn } from '../http/person.js';
@@ -22,6 +23,7 @@ export class Shelf {
     @InjectModel(Entitlement) private readonly entitlements: typeof Entitlement,
     @InjectModel(Download) private readonly downloads: typeof Download,
     private readonly catalogue: CatalogueReader,
+    private readonly printers: PrinterCards,
     private readonly clock: Clock,
   ) {}
 
@@ -55,7 +57,8 @@ export class Shelf {
     const item = kit && (await this.itemOf(person, kit.id));
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
-    const chosen = clearanceFor(best, null);
+    const card = await this.printers.mainOf(person.id);
+    const chosen = clearanceFor(best, card);
     const [revisions, parts, clearances, documents, cautions, downloads, [licence]] = await Promise.all([
       this.catalogue.revisionsOf(kit.id),
       this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
@@ -69,7 +72,12 @@ export class Shelf {
     return {
       ...item,
       orderId: best?.orderId ?? null,
-      clearance: { ...clearances, chosen },
+      clearance: {
+        ...clearances,
+        chosen,
+        said: best?.clearance ?? null,
+        habit: card?.clearance ? { clearance: card.clearance, printer: card.name } : null,
+      },
       revisions: revisions.map(toShelfRevision),
       parts,
       documents,

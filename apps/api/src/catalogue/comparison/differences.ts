@@ -38,7 +38,7 @@ export class Differences {
     return (await this.pairs(from, to, { tx })).map(({ row }) => row);
   }
 
-  /** @param clearance what the reader prints: only that of a part counts; null counts all of them */
+  /** @param clearance what the reader prints: only that of a part counts, and a gauge part has done its work; null counts all of them */
   async reprintRows(
     fromRevisionId: string | null,
     toRevisionId: string,
@@ -48,17 +48,20 @@ export class Differences {
     if (!to) return [];
     const from = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
     const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to, { clearance });
-    return pairs.map(({ row, after, hasChoice }) => ({
-      code: row.code,
-      name: row.name,
-      quantity: row.quantity,
-      clearance: hasChoice ? clearance : null,
-      difference: row.difference,
-      mark: row.mark,
-      reason: row.reason,
-      whatDiffers: row.whatDiffers,
-      drawing: tellingDrawing(after?.file?.drawings ?? null),
-    }));
+    const isAnswered = ({ after }: Pair): boolean => clearance !== null && after?.isGauge === true;
+    return pairs
+      .filter((pair) => !isAnswered(pair))
+      .map(({ row, after, hasChoice }) => ({
+        code: row.code,
+        name: row.name,
+        quantity: row.quantity,
+        clearance: hasChoice ? clearance : null,
+        difference: row.difference,
+        mark: row.mark,
+        reason: row.reason,
+        whatDiffers: row.whatDiffers,
+        drawing: tellingDrawing(after?.file?.drawings ?? null),
+      }));
   }
 
   /** What buyers hold now: the newest revision before this one that was released. */

@@ -92,6 +92,8 @@ export const shelfKitTexts = {
   getAll: 'The bundle with all clearances',
   clearance: 'Clearance you print',
   clearanceUnknown: 'Not known yet',
+  clearanceHabit: (clearance: string) => `As my printer: ${clearance}`,
+  clearanceFromCard: (printer: string) => `From your printer card, ${printer}.`,
   clearanceFind: (gauge: string | undefined) =>
     gauge
       ? `The whole bundle holds all of them. Print the gauge first, ${gauge}: it shows which one fits.`

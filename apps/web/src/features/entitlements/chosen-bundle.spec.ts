@@ -14,7 +14,7 @@ const revision = (...clearances: ('minus' | 'zero' | 'plus')[]): ShelfKit['newes
 });
 const kit = (chosen: ShelfKit['clearance']['chosen']) => ({
   slug: 'curlew',
-  clearance: { hasVariants: true, gauge: null, chosen },
+  clearance: { hasVariants: true, gauge: null, chosen, said: chosen, habit: null },
 });
 
 describe('the bundle a person fetches', () => {
