@@ -4,6 +4,7 @@ import type { Clearance, FilamentColour } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { Differences, type ReprintRow } from './comparison/differences.js';
+import type { NetRow } from './comparison/net-rows.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
 import { Licence } from './kits/licence.model.js';
@@ -14,7 +15,7 @@ import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision } from './revisions/revision.model.js';
 
-export type { BundleFile, OfferedLicence, ReprintRow, ServableFile };
+export type { BundleFile, NetRow, OfferedLicence, ReprintRow, ServableFile };
 
 export interface KitFacts {
   readonly id: string;
@@ -28,6 +29,8 @@ export interface ReleasedRevision {
   readonly id: string;
   readonly kitId: string;
   readonly label: string;
+  readonly mark: number;
+  readonly issue: number;
   readonly releasedAt: Date;
   readonly bundleSha256: string;
   readonly bundleBytes: number;
@@ -170,6 +173,15 @@ export class CatalogueReader {
     return this.changes.reprintRows(fromRevisionId, toRevisionId, clearance);
   }
 
+  /** The same, net and with each step's mark, for those who know how many pieces are printed. */
+  netDifferences(
+    fromRevisionId: string | null,
+    toRevisionId: string,
+    clearance: Clearance | null,
+  ): Promise<NetRow[]> {
+    return this.changes.net(fromRevisionId, toRevisionId, clearance);
+  }
+
   private async toReleased(revisions: readonly Revision[]): Promise<ReleasedRevision[]> {
     const bundles = await this.bundles.ofEach(revisions.map(({ id }) => id));
     return revisions.map((revision) => ({
@@ -198,6 +210,8 @@ const releasedFacts = (revision: Revision): Omit<ReleasedRevision, 'bundles'> =>
   id: revision.id,
   kitId: revision.kitId,
   label: revision.label,
+  mark: revision.mark,
+  issue: revision.issue,
   releasedAt: revision.releasedAt ?? revision.updatedAt,
   bundleSha256: revision.bundleSha256 ?? '',
   bundleBytes: revision.bundleBytes ?? 0,

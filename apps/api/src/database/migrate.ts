@@ -11,6 +11,7 @@ import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
 import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
+import * as printRecord from './migrations/0019-print-record.js';
 import * as partVariants from './migrations/0010-part-variants.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
@@ -26,6 +27,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0008-mesh-comparisons': meshComparisons,
   '0009-printer-cards': printerCards,
   '0010-part-variants': partVariants,
+  '0019-print-record': printRecord,
 };
 
 /**

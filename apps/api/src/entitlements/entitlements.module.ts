@@ -13,6 +13,9 @@ import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
+import { PrintRecord } from './reprint/print-record.model.js';
+import { PrintRecords } from './reprint/print-records.js';
+import { ReprintLists } from './reprint/reprint-lists.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -23,7 +26,7 @@ import { SignedAddress } from './signed-address.js';
     AccountsModule,
     CatalogueModule,
     OrdersModule,
-    SequelizeModule.forFeature([Entitlement, DownloadLink, Download]),
+    SequelizeModule.forFeature([Entitlement, DownloadLink, Download, PrintRecord]),
   ],
   controllers: [ShelfController, DeliveryController],
   providers: [
@@ -36,7 +39,9 @@ import { SignedAddress } from './signed-address.js';
     Shelf,
     Holders,
     Holdings,
+    PrintRecords,
+    ReprintLists,
   ],
-  exports: [Holdings],
+  exports: [Holdings, ReprintLists],
 })
 export class EntitlementsModule {}

@@ -8,9 +8,10 @@ import { tellingDrawing } from '../files/measured-mesh.js';
 import type { ReprintMark } from '../revisions/part.model.js';
 import { hasVariants } from '../revisions/part-files.js';
 import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
-import { Revision } from '../revisions/revision.model.js';
+import { labelOf, Revision } from '../revisions/revision.model.js';
 import { meshPairsOf } from './compare-parts.js';
 import { asPrinted, compareVariants } from './compare-variants.js';
+import { netRows, type MarkedStep, type NetRow } from './net-rows.js';
 import { MeshComparisons, type Knowledge, type MeshPair } from './mesh-comparisons.js';
 
 /** One part on a person's reprint list. */
@@ -62,6 +63,26 @@ export class Differences {
         whatDiffers: row.whatDiffers,
         drawing: tellingDrawing(after?.file?.drawings ?? null),
       }));
+  }
+
+  /** Net, for somebody who prints in this clearance; @returns nothing for a revision that is not there */
+  async net(
+    fromRevisionId: string | null,
+    toRevisionId: string,
+    clearance: Clearance | null,
+  ): Promise<NetRow[]> {
+    const to = await this.revisions.findByPk(toRevisionId);
+    if (!to) return [];
+    const found = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
+    const from = found?.kitId === to.kitId ? found : null;
+    const [before, after, steps] = await Promise.all([
+      from && this.contents.partsOf(from.id),
+      this.contents.partsOf(to.id),
+      from ? this.stepsBetween(from, to) : [],
+    ]);
+    const old = new Map((before ?? []).map((part) => [part.code, part]));
+    const known = await this.knownOf(after.flatMap((part) => meshPairsOf(old.get(part.code) ?? null, part)));
+    return netRows({ before, after, steps, clearance, known });
   }
 
   /** What buyers hold now: the newest revision before this one that was released. */
@@ -117,9 +138,22 @@ export class Differences {
    * since the held one counts, with every reason, newest first.
    */
   private async verdictsBetween(from: Revision, to: Revision, tx?: Tx): Promise<Map<string, Verdict>> {
-    const rows = await selectRows<{ code: string; mark: ReprintMark; reason: string }>(
+    const verdicts = new Map<string, Verdict>();
+    for (const { code, mark, reason } of await this.stepsBetween(from, to, tx)) {
+      const known = verdicts.get(code) ?? { mark, reasons: [] };
+      if (mark === 'reprint needed') known.mark = mark;
+      if (reason !== '' && !known.reasons.includes(reason)) known.reasons.push(reason);
+      verdicts.set(code, known);
+    }
+    return verdicts;
+  }
+
+  /** Marks of the revisions after the older one up to the newer, newest first: back is as far as forth. */
+  private async stepsBetween(from: Revision, to: Revision, tx?: Tx): Promise<MarkedStep[]> {
+    const [older, newer] = isNewer(from, to) ? [to, from] : [from, to];
+    const rows = await selectRows<MarkedStep & { in_mark: number; in_issue: number }>(
       this.database,
-      `SELECT p.code, p.reprint_mark AS mark, p.reprint_reason AS reason
+      `SELECT p.code, p.reprint_mark AS mark, p.reprint_reason AS reason, r.mark AS in_mark, r.issue AS in_issue
        FROM parts p JOIN revisions r ON r.id = p.revision_id
        WHERE r.kit_id = :kitId AND p.reprint_mark IS NOT NULL
          AND (r.id = :toId OR r.state IN ('released', 'withdrawn'))
@@ -128,24 +162,25 @@ export class Differences {
        ORDER BY r.mark DESC, r.issue DESC`,
       {
         kitId: to.kitId,
-        toId: to.id,
-        fromMark: from.mark,
-        fromIssue: from.issue,
-        toMark: to.mark,
-        toIssue: to.issue,
+        toId: newer.id,
+        fromMark: older.mark,
+        fromIssue: older.issue,
+        toMark: newer.mark,
+        toIssue: newer.issue,
       },
       tx,
     );
-    const verdicts = new Map<string, Verdict>();
-    for (const { code, mark, reason } of rows) {
-      const known = verdicts.get(code) ?? { mark, reasons: [] };
-      if (mark === 'reprint needed') known.mark = mark;
-      if (reason !== '' && !known.reasons.includes(reason)) known.reasons.push(reason);
-      verdicts.set(code, known);
-    }
-    return verdicts;
+    return rows.map(({ code, mark, reason, in_mark, in_issue }) => ({
+      code,
+      revision: labelOf({ mark: in_mark, issue: in_issue }),
+      mark,
+      reason,
+    }));
   }
 }
+
+const isNewer = (one: Revision, other: Revision): boolean =>
+  one.mark > other.mark || (one.mark === other.mark && one.issue > other.issue);
 
 /** By what a pair is judged: the maker's word, what somebody prints, what is known of the meshes. */
 interface Judging {
