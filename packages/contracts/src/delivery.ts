@@ -1,8 +1,7 @@
 import { z } from 'zod';
 import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
-import { drawing } from './kits.js';
-import { differenceKind } from './workshop-revisions.js';
+import { reprintList } from './print-record.js';
 import { email, filamentColour, id, moment, secret, sha256, slug, slugParams } from './values.js';
 
 /**
@@ -48,19 +47,6 @@ export const shelfItem = z.object({
 });
 export type ShelfItem = z.output<typeof shelfItem>;
 
-/** How a part stands between the revision held and the newest one. */
-export const shelfPart = z.object({
-  code: z.string(),
-  name: z.string(),
-  quantity: z.int(),
-  /** Which one is compared; null where the part comes in one, or nothing is known of the reader's choice. */
-  clearance: clearance.nullable(),
-  difference: differenceKind,
-  mark: z.enum(['reprint needed', 'reprint if it troubles you']).nullable(),
-  reason: z.string(),
-  whatDiffers: z.string(),
-  drawing: drawing.nullable(),
-});
 export const shelfKit = shelfItem.extend({
   orderId: id.nullable(),
   /** Of the newest revision. */
@@ -75,7 +61,8 @@ export const shelfKit = shelfItem.extend({
     habit: z.object({ clearance, printer: z.string() }).nullable(),
   }),
   revisions: z.array(shelfRevision),
-  parts: z.array(shelfPart),
+  /** From what is printed, as far as it is known, to the newest revision. */
+  reprint: reprintList,
   documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
   licenceTerms: z.string(),
   cautions: z.string(),
@@ -125,7 +112,7 @@ export const deliveryEndpoints = {
   }),
   'POST /shelf/:slug/held': endpoint({
     access: 'signed-in',
-    summary: 'Say which revision one has printed',
+    summary: 'Say that one has printed all of a revision',
     params: slugParams,
     body: z.object({ revisionId: id }),
     response: shelfKit,

@@ -6,6 +6,7 @@ import { healthEndpoints } from './health.js';
 import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
 import { peopleEndpoints } from './people.js';
+import { printRecordEndpoints } from './print-record.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
@@ -18,6 +19,7 @@ export const endpoints = {
   ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
+  ...printRecordEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,
   ...fitEndpoints,

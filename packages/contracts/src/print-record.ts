@@ -1,8 +1,10 @@
 /** What a person has printed of a kit, and what is to print again for another revision of it. */
 import { z } from 'zod';
 import { clearance } from './clearances.js';
+import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
-import { id } from './values.js';
+import { printSheet } from './printers.js';
+import { id, slugParams } from './values.js';
 import { differenceKind, reprintMark } from './workshop-revisions.js';
 
 /**
@@ -25,7 +27,9 @@ export const reprintPart = z.object({
   print: z.int(),
   /** Pieces to print besides, if the old ones trouble. */
   optional: z.int(),
-  /** Pieces that are printed and not needed any more. */
+  /** Pieces that are printed and stay as they are. */
+  done: z.int(),
+  /** Pieces that are printed as they should be, and more of them than are needed. */
   spare: z.int(),
   /** Net, between what is printed and the wanted revision. */
   difference: differenceKind,
@@ -52,3 +56,70 @@ export const reprintList = z.object({
   parts: z.array(reprintPart),
 });
 export type ReprintList = z.output<typeof reprintList>;
+
+/** The list of one kit on the shelf, with what plates and hours are worked out from. */
+export const reprintPlan = z.object({
+  list: reprintList,
+  /** The parts that are on the list, in the clearance of their reader and in the pieces of the whole kit. */
+  sheet: printSheet,
+});
+export type ReprintPlan = z.output<typeof reprintPlan>;
+
+/** How far a build of one revision is. */
+export const printRecord = z.object({
+  revision: z.object({ id, label: z.string() }),
+  /** Whether anything was said of this kit: until then the revision held counts as printed. */
+  isKept: z.boolean(),
+  parts: z.array(
+    z.object({
+      code: z.string(),
+      name: z.string(),
+      clearance: clearance.nullable(),
+      quantity: z.int(),
+      printed: z.int(),
+      drawing: drawing.nullable(),
+    }),
+  ),
+});
+export type PrintRecordView = z.output<typeof printRecord>;
+
+export const printedBody = z.object({
+  revisionId: id,
+  code: z.string().min(1).max(10),
+  /** Pieces that are there now; none takes the word back. */
+  quantity: z.int().min(0).max(999),
+});
+
+const revisionQuery = z.object({ revision: id.optional() });
+
+export const printRecordEndpoints = {
+  'GET /shelf/:slug/reprint': endpoint({
+    access: 'signed-in',
+    summary:
+      'What to print for another revision, the newest unless one is named; with what plates are laid out from',
+    params: slugParams,
+    query: revisionQuery,
+    response: reprintPlan,
+  }),
+  'GET /shelf/:slug/printed': endpoint({
+    access: 'signed-in',
+    summary: 'What one has printed of a revision, part by part; of the one held unless one is named',
+    params: slugParams,
+    query: revisionQuery,
+    response: printRecord,
+  }),
+  'PUT /shelf/:slug/printed': endpoint({
+    access: 'signed-in',
+    summary: 'Say how many pieces of a part one has printed, as a revision has it',
+    params: slugParams,
+    body: printedBody,
+    response: printRecord,
+  }),
+  'DELETE /shelf/:slug/printed': endpoint({
+    access: 'signed-in',
+    summary: 'Forget all that was said of a kit; the revision held then counts as printed',
+    params: slugParams,
+    response: null,
+    status: 204,
+  }),
+};

@@ -1,21 +1,22 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Clearance, FilamentColour } from '@windchest/contracts';
+import type { Answer, Clearance, FilamentColour } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
-import { Differences, type ReprintRow } from './comparison/differences.js';
+import { Differences } from './comparison/differences.js';
 import type { NetRow } from './comparison/net-rows.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
+import { PrintSheets } from './print/print-sheets.js';
 import { ReleasedBundles, type BundleFile, type ClearanceBundle } from './release/released-bundles.js';
 import { servable, type ServableFile } from './release/stored-file-of.js';
 import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision } from './revisions/revision.model.js';
 
-export type { BundleFile, NetRow, OfferedLicence, ReprintRow, ServableFile };
+export type { BundleFile, NetRow, OfferedLicence, ServableFile };
 
 export interface KitFacts {
   readonly id: string;
@@ -51,6 +52,7 @@ export class CatalogueReader {
     private readonly contents: RevisionContents,
     private readonly bundles: ReleasedBundles,
     private readonly changes: Differences,
+    private readonly sheets: PrintSheets,
   ) {}
 
   /** Those of the licences that can be bought now. */
@@ -162,24 +164,20 @@ export class CatalogueReader {
   }
 
   /**
-   * Part by part, what differs between a revision held (or none) and another one of the same kit, for
-   * somebody who prints in this clearance; where that is not known, in any of them.
+   * Part by part, what differs between a revision (or none) and another one of the same kit, net and with each
+   * step's mark, for somebody who prints in this clearance; where that is not known, in any of them.
    */
-  differences(
-    fromRevisionId: string | null,
-    toRevisionId: string,
-    clearance: Clearance | null = null,
-  ): Promise<ReprintRow[]> {
-    return this.changes.reprintRows(fromRevisionId, toRevisionId, clearance);
-  }
-
-  /** The same, net and with each step's mark, for those who know how many pieces are printed. */
   netDifferences(
     fromRevisionId: string | null,
     toRevisionId: string,
     clearance: Clearance | null,
   ): Promise<NetRow[]> {
     return this.changes.net(fromRevisionId, toRevisionId, clearance);
+  }
+
+  /** What a browser lays a released revision out on plates from. */
+  async printSheetOf(revisionId: string): Promise<Answer<'GET /kits/:slug/print'> | null> {
+    return (await this.finalById(revisionId)) && this.sheets.sheetOf(revisionId);
   }
 
   private async toReleased(revisions: readonly Revision[]): Promise<ReleasedRevision[]> {

@@ -13,8 +13,11 @@ import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
+import { KeepPrintRecord } from './reprint/keep-print-record.js';
+import { PrintRecordController } from './reprint/print-record.controller.js';
 import { PrintRecord } from './reprint/print-record.model.js';
 import { PrintRecords } from './reprint/print-records.js';
+import { ReprintPlans } from './reprint/reprint-plans.js';
 import { ReprintLists } from './reprint/reprint-lists.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
@@ -28,7 +31,7 @@ import { SignedAddress } from './signed-address.js';
     OrdersModule,
     SequelizeModule.forFeature([Entitlement, DownloadLink, Download, PrintRecord]),
   ],
-  controllers: [ShelfController, DeliveryController],
+  controllers: [ShelfController, PrintRecordController, DeliveryController],
   providers: [
     DownloadLinks,
     SignedAddress,
@@ -41,6 +44,8 @@ import { SignedAddress } from './signed-address.js';
     Holdings,
     PrintRecords,
     ReprintLists,
+    KeepPrintRecord,
+    ReprintPlans,
   ],
   exports: [Holdings, ReprintLists],
 })

@@ -6,11 +6,14 @@ import { Clock } from '../adapters/clock/clock.js';
 import { PrinterCards } from '../accounts/printers/printer-cards.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
+import { Transactions } from '../database/transactions.js';
 import type { SignedIn } from '../http/person.js';
 import { notFound } from '../http/refusal.js';
 import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { KeepPrintRecord } from './reprint/keep-print-record.js';
+import { ReprintLists } from './reprint/reprint-lists.js';
 import { toShelfRevision } from './shelf-revision.js';
 
 const PAGE_SIZE = 24;
@@ -24,6 +27,9 @@ export class Shelf {
     @InjectModel(Download) private readonly downloads: typeof Download,
     private readonly catalogue: CatalogueReader,
     private readonly printers: PrinterCards,
+    private readonly lists: ReprintLists,
+    private readonly record: KeepPrintRecord,
+    private readonly transactions: Transactions,
     private readonly clock: Clock,
   ) {}
 
@@ -59,9 +65,9 @@ export class Shelf {
     const best = await this.bestOf(person, kit.id);
     const card = await this.printers.mainOf(person.id);
     const chosen = clearanceFor(best, card);
-    const [revisions, parts, clearances, documents, cautions, downloads, [licence]] = await Promise.all([
+    const [revisions, reprint, clearances, documents, cautions, downloads, [licence]] = await Promise.all([
       this.catalogue.revisionsOf(kit.id),
-      this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+      this.lists.listFor(person, kit.id, item.newest.id),
       this.catalogue.clearancesOf(item.newest.id),
       this.catalogue.documentsOf(item.newest.id),
       this.catalogue.cautionsOf(item.newest.id),
@@ -79,7 +85,7 @@ export class Shelf {
         habit: card?.clearance ? { clearance: card.clearance, printer: card.name } : null,
       },
       revisions: revisions.map(toShelfRevision),
-      parts,
+      reprint,
       documents,
       licenceTerms: licence?.terms ?? '',
       cautions,
@@ -98,10 +104,15 @@ export class Shelf {
     const revision = kit && (await this.catalogue.revisionsOf(kit.id)).find((one) => one.id === revisionId);
     if (!best || !revision) throw notFound('kit on your shelf');
     const now = this.clock.now();
-    await this.entitlements.update(
-      { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
-      { where: { personId: person.id, kitId: best.kitId, state: 'active' } },
-    );
+    const { clearance } = await this.lists.stateOf(person, kit.id);
+    const rows = await this.catalogue.netDifferences(null, revision.id, clearance);
+    await this.transactions.run(async (tx) => {
+      await this.entitlements.update(
+        { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
+        { where: { personId: person.id, kitId: kit.id, state: 'active' }, transaction: tx },
+      );
+      await this.record.fill(tx, { personId: person.id, kitId: kit.id }, rows, revision.id, clearance);
+    });
     return this.read(person, slug);
   }
 

@@ -1,27 +1,17 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer, Clearance, Comparison } from '@windchest/contracts';
+import type { Clearance, Comparison } from '@windchest/contracts';
 import { Op, type Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
-import { tellingDrawing } from '../files/measured-mesh.js';
 import type { ReprintMark } from '../revisions/part.model.js';
-import { hasVariants } from '../revisions/part-files.js';
 import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
 import { labelOf, Revision } from '../revisions/revision.model.js';
 import { meshPairsOf } from './compare-parts.js';
-import { asPrinted, compareVariants } from './compare-variants.js';
+import { compareVariants } from './compare-variants.js';
 import { netRows, type MarkedStep, type NetRow } from './net-rows.js';
 import { MeshComparisons, type Knowledge, type MeshPair } from './mesh-comparisons.js';
 
-/** One part on a person's reprint list. */
-export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
-
-interface Pair {
-  readonly row: Comparison['rows'][number];
-  readonly after: PartOfRevision | null;
-  readonly hasChoice: boolean;
-}
 type Verdict = { mark: ReprintMark; reasons: string[] };
 
 /** What differs between two revisions of a kit, part by part, with what the maker says to do about it. */
@@ -36,33 +26,20 @@ export class Differences {
   ) {}
 
   async rows(from: Revision | null, to: Revision, tx?: Tx): Promise<Comparison['rows']> {
-    return (await this.pairs(from, to, { tx })).map(({ row }) => row);
-  }
-
-  /** @param clearance what the reader prints: only that of a part counts, and a gauge part has done its work; null counts all of them */
-  async reprintRows(
-    fromRevisionId: string | null,
-    toRevisionId: string,
-    clearance: Clearance | null = null,
-  ): Promise<ReprintRow[]> {
-    const to = await this.revisions.findByPk(toRevisionId);
-    if (!to) return [];
-    const from = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
-    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to, { clearance });
-    const isAnswered = ({ after }: Pair): boolean => clearance !== null && after?.isGauge === true;
-    return pairs
-      .filter((pair) => !isAnswered(pair))
-      .map(({ row, after, hasChoice }) => ({
-        code: row.code,
-        name: row.name,
-        quantity: row.quantity,
-        clearance: hasChoice ? clearance : null,
-        difference: row.difference,
-        mark: row.mark,
-        reason: row.reason,
-        whatDiffers: row.whatDiffers,
-        drawing: tellingDrawing(after?.file?.drawings ?? null),
-      }));
+    const before = new Map(
+      from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
+    );
+    const after = await this.contents.partsOf(to.id, tx);
+    const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
+    const old = (code: string) => before.get(code) ?? null;
+    const known = await this.knownOf(
+      after.flatMap((part) => meshPairsOf(old(part.code), part)),
+      tx,
+    );
+    const now = after.map((part) => rowOf(old(part.code), part, { verdict: verdicts.get(part.code), known }));
+    const codes = new Set(after.map((part) => part.code));
+    const gone = [...before.values()].filter((part) => !codes.has(part.code));
+    return [...now, ...gone.map((part) => rowOf(part, null, { known }))];
   }
 
   /** Net, for somebody who prints in this clearance; @returns nothing for a revision that is not there */
@@ -100,29 +77,6 @@ export class Differences {
       ],
       transaction: tx ?? null,
     });
-  }
-
-  private async pairs(
-    from: Revision | null,
-    to: Revision,
-    { tx, clearance = null }: { tx?: Tx | undefined; clearance?: Clearance | null },
-  ): Promise<Pair[]> {
-    const before = new Map(
-      from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
-    );
-    const after = await this.contents.partsOf(to.id, tx);
-    const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
-    const old = (code: string) => before.get(code) ?? null;
-    const known = await this.knownOf(
-      after.flatMap((part) => meshPairsOf(old(part.code), part)),
-      tx,
-    );
-    const now = after.map((part) =>
-      pairOf(old(part.code), part, { verdict: verdicts.get(part.code), clearance, known }),
-    );
-    const codes = new Set(after.map((part) => part.code));
-    const gone = [...before.values()].filter((part) => !codes.has(part.code));
-    return [...now, ...gone.map((part) => pairOf(part, null, { clearance, known }))];
   }
 
   /** What nobody has asked about so far is compared from now on. */
@@ -182,32 +136,26 @@ export class Differences {
 const isNewer = (one: Revision, other: Revision): boolean =>
   one.mark > other.mark || (one.mark === other.mark && one.issue > other.issue);
 
-/** By what a pair is judged: the maker's word, what somebody prints, what is known of the meshes. */
+/** By what a pair is judged: the maker's word, and what is known of the meshes. */
 interface Judging {
   readonly verdict?: Verdict | undefined;
-  readonly clearance: Clearance | null;
   readonly known: Knowledge;
 }
 
-const pairOf = (
+const rowOf = (
   before: PartOfRevision | null,
-  whole: PartOfRevision | null,
-  { verdict, clearance, known }: Judging,
-): Pair => {
-  const part = (whole ?? before)!;
-  const after = asPrinted(whole, clearance);
-  const difference = compareVariants(asPrinted(before, clearance), after, known);
+  after: PartOfRevision | null,
+  { verdict, known }: Judging,
+): Comparison['rows'][number] => {
+  const part = (after ?? before)!;
+  const difference = compareVariants(before, after, known);
   const counts = difference.difference === 'changed' && verdict !== undefined;
   return {
-    after,
-    hasChoice: whole !== null && hasVariants(whole),
-    row: {
-      code: part.code,
-      name: part.name,
-      quantity: part.quantity,
-      ...difference,
-      mark: counts ? verdict.mark : null,
-      reason: counts ? verdict.reasons.join(' · ') : '',
-    },
+    code: part.code,
+    name: part.name,
+    quantity: part.quantity,
+    ...difference,
+    mark: counts ? verdict.mark : null,
+    reason: counts ? verdict.reasons.join(' · ') : '',
   };
 };

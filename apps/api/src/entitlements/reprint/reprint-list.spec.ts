@@ -132,7 +132,7 @@ const expected = (
   return {
     print,
     optional: Math.min(bins.meh, open),
-    spare: Math.max(0, bins.good + bins.meh + bins.other - wanted.quantity),
+    spare: Math.max(0, bins.good - wanted.quantity),
   };
 };
 const told = (part: ReprintPart | undefined) =>

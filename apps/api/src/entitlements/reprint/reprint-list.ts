@@ -140,7 +140,7 @@ const partOf = (row: NetRow, judged: readonly Judged[], isRecorded: boolean): Re
   // Good pieces take their places first, then those that may trouble are replaced.
   const optional = Math.min(count('if-it-does-not-trouble'), Math.max(0, quantity - good - print));
   const unmarked = Math.min(count('unmarked'), Math.max(0, quantity - good - print - optional));
-  const spare = Math.max(0, usable - quantity);
+  const spare = Math.max(0, good - quantity);
   const old = judged.filter(({ use }) => use !== 'as-it-is');
   const steps = unique(old.flatMap((one) => one.row.steps));
   const have = judged.reduce((sum, one) => sum + one.pieces.quantity, 0);
@@ -158,6 +158,7 @@ const partOf = (row: NetRow, judged: readonly Judged[], isRecorded: boolean): Re
               : null,
     print,
     optional,
+    done: Math.min(good, quantity),
     spare,
     difference: differenceOf(judged, old),
     whatDiffers: [
@@ -171,7 +172,7 @@ const partOf = (row: NetRow, judged: readonly Judged[], isRecorded: boolean): Re
   };
 };
 
-const nothing = { print: 0, optional: 0, mark: null };
+const nothing = { print: 0, optional: 0, done: 0, mark: null };
 
 /** Pieces that count as changed for another reason than their shape (mark, clearance) are no less changed. */
 const differenceOf = (judged: readonly Judged[], old: readonly Judged[]): ReprintPart['difference'] => {

@@ -50,9 +50,16 @@ export class ReprintLists {
     kitId: string,
     toRevisionId: string,
   ): Promise<{ list: ReprintList; printed: PrintedState }> {
-    const lists = await this.start(kitId, toRevisionId);
-    const [printed = UNKNOWN] = await this.statesOf(kitId, [{ personId: person.id, email: '' }]);
-    return { list: await lists.of(printed), printed };
+    const printed = await this.stateOf(person, kitId);
+    return { list: await this.listOf(kitId, toRevisionId, printed), printed };
+  }
+
+  async stateOf(person: { id: string }, kitId: string): Promise<PrintedState> {
+    return (await this.statesOf(kitId, [{ personId: person.id, email: '' }]))[0] ?? UNKNOWN;
+  }
+
+  async listOf(kitId: string, toRevisionId: string, printed: PrintedState): Promise<ReprintList> {
+    return (await this.start(kitId, toRevisionId)).of(printed);
   }
 
   /**

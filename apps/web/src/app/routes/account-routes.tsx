@@ -44,6 +44,10 @@ export const accountRoutes: RouteObject[] = [
     ),
   },
   {
+    path: paths.shelfReprint.path,
+    element: lazyPage(async () => (await import('../../features/entitlements/reprint.page.js')).ReprintPage),
+  },
+  {
     path: paths.shelfFit.path,
     element: lazyPage(async () => (await import('../../features/fit/report-fit.page.js')).ReportFitPage),
   },

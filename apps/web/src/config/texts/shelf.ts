@@ -56,6 +56,7 @@ export const shelfKitTexts = {
   holdNothing: (newest: string) => `${newest} is yours.`,
   getIt: (count: number) => `Get the bundle and print ${parts(count)}.`,
   upToDate: 'It is the newest: nothing to reprint.',
+  stillToPrint: (count: number, all: number) => `${count} of ${parts(all)} are still to print.`,
   isOut: (newest: string) => `${newest} is out:`,
   reprint: (needed: number, all: number) => `reprint ${needed} of ${parts(all)}`,
   reprintNone: 'nothing to reprint',
@@ -106,7 +107,7 @@ export const shelfKitTexts = {
   printedThis: 'I have printed this',
   printedTitle: (label: string) => `You have printed ${label}?`,
   printedDetail: (label: string) =>
-    `The shelf then compares new revisions with ${label} and says what to reprint from there. You can change it again.`,
+    `Every part of ${label} is then written down as printed, in place of what you said before. The shelf says from there what to reprint.`,
   printedConfirm: (label: string) => `Yes, I hold ${label}`,
   printedFailed: 'What you hold was not changed',
   changeNotes: 'Change notes',

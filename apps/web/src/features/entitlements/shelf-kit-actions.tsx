@@ -2,6 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
 import { clearanceTexts } from '../../config/texts/clearance.js';
+import { reprintTexts } from '../../config/texts/reprint.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { bytes } from '../../lib/format.js';
 import { Button } from '../../ui/button.js';
@@ -70,6 +71,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
           </RowButton>
         );
       })}
+      <RowAnchor href={`#${sectionIds.build}`}>{reprintTexts.build}</RowAnchor>
       <RowAnchor href={`#${sectionIds.changeNotes}`}>{shelfKitTexts.changeNotes}</RowAnchor>
       <RowAnchor href={`#${sectionIds.licence}`}>{shelfKitTexts.licence}</RowAnchor>
       {kit.cautions && <RowAnchor href={`#${sectionIds.cautions}`}>{shelfKitTexts.cautions}</RowAnchor>}

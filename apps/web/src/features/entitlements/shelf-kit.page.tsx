@@ -8,7 +8,6 @@ import { date } from '../../lib/format.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
-import { PartsSheet } from '../../ui/drawing/parts-sheet.js';
 import { Fault } from '../../ui/fault.js';
 import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
@@ -18,8 +17,7 @@ import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { TitleBlock } from '../../ui/title-block.js';
 import { PrintedDialog } from './printed-dialog.js';
-import { adviceFor } from './reprint-list.js';
-import { ReprintTable } from './reprint-table.js';
+import { ReprintSection } from './reprint-section.js';
 import { ShelfKitActions } from './shelf-kit-actions.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
@@ -30,23 +28,10 @@ const watchedMs = 10 * 60_000;
 const hasRunningDownload = (kit: ShelfKit | undefined): boolean =>
   kit?.downloads.some((one) => !one.isComplete && Date.now() - Date.parse(one.at) < watchedMs) ?? false;
 
-const drawnParts = (kit: ShelfKit) =>
-  kit.parts.flatMap((part) =>
-    part.drawing
-      ? {
-          ...part.drawing,
-          code: part.code,
-          name: part.name,
-          isToReprint: kit.held !== null && adviceFor(part) === 'print',
-        }
-      : [],
-  );
-
 function Kit({ kit }: { kit: ShelfKit }) {
   const download = useShelfDownload();
   const [printed, setPrinted] = useState<ShelfKit['newest']>();
   const { held, newest } = kit;
-  const drawn = drawnParts(kit);
   return (
     <KitColour palette={kit.colour}>
       <SplitSheet
@@ -64,12 +49,7 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 </Notice>
               </Box>
             )}
-            {drawn.length > 0 && (
-              <Box marginTop="8">
-                <PartsSheet parts={drawn} label={shelfKitTexts.sheet(kit.name)} />
-              </Box>
-            )}
-            {held && <ReprintTable parts={kit.parts} />}
+            <ReprintSection kit={kit} />
           </>
         }
         aside={<ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />}

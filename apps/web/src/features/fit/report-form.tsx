@@ -37,7 +37,7 @@ type Report = OutputOf<'POST /shelf/:slug/fit-reports'>;
 
 /** How a part came out: what was printed, how it fits, a picture. */
 export function ReportForm({ kit }: { kit: ShelfKit }) {
-  const [card] = usePrinterCard();
+  const card = usePrinterCard();
   const [picture, setPicture] = useState<{ file: File | undefined; round: number }>({
     file: undefined,
     round: 0,
@@ -90,7 +90,7 @@ export function ReportForm({ kit }: { kit: ShelfKit }) {
   });
 
   const held = kit.held !== null;
-  const parts = kit.parts.filter(({ difference }) => !held || difference !== 'new');
+  const parts = kit.reprint.parts.filter(({ difference }) => !held || difference !== 'new');
   return (
     <Form onSubmit={send}>
       <Row>

@@ -1,0 +1,97 @@
+import { Injectable } from '@nestjs/common';
+import type { Answer, Clearance, Handled } from '@windchest/contracts';
+import { CatalogueReader, type ReleasedRevision } from '../../catalogue/catalogue-reader.js';
+import type { SignedIn } from '../../http/person.js';
+import { notFound } from '../../http/refusal.js';
+import { Holdings } from '../holdings.js';
+import { KeepPrintRecord } from './keep-print-record.js';
+import { ReprintLists } from './reprint-lists.js';
+
+/** What is to print, and what is printed, of a kit on somebody's shelf. */
+@Injectable()
+export class ReprintPlans {
+  constructor(
+    private readonly catalogue: CatalogueReader,
+    private readonly holdings: Holdings,
+    private readonly lists: ReprintLists,
+    private readonly record: KeepPrintRecord,
+  ) {}
+
+  async plan(
+    person: SignedIn,
+    slug: string,
+    revisionId?: string,
+  ): Promise<Answer<'GET /shelf/:slug/reprint'>> {
+    const { kitId, revision } = await this.find(person, slug, revisionId, 'newest');
+    const { list, printed } = await this.lists.withState(person, kitId, revision.id);
+    const sheet = await this.catalogue.printSheetOf(revision.id);
+    if (!sheet) throw notFound('revision');
+    const isListed = (code: string): boolean =>
+      list.parts.some((part) => part.code === code && part.advice !== null && part.quantity > 0);
+    const parts = sheet.parts
+      .filter(({ code }) => isListed(code))
+      .map((part) => inClearance(part, printed.clearance));
+    return {
+      list,
+      sheet: {
+        revision: revision.label,
+        printSpec: sheet.printSpec,
+        parts,
+        unmeasured: sheet.unmeasured.filter(isListed),
+      },
+    };
+  }
+
+  async printed(
+    person: SignedIn,
+    slug: string,
+    revisionId?: string,
+  ): Promise<Answer<'GET /shelf/:slug/printed'>> {
+    const { kitId, revision } = await this.find(person, slug, revisionId, 'held');
+    return this.record.read({ personId: person.id, kitId }, revision);
+  }
+
+  async sayPrinted(
+    person: SignedIn,
+    slug: string,
+    { revisionId, ...said }: Handled<'PUT /shelf/:slug/printed'>['body'],
+  ): Promise<Answer<'PUT /shelf/:slug/printed'>> {
+    const { kitId, revision } = await this.find(person, slug, revisionId, 'held');
+    const whose = { personId: person.id, kitId };
+    await this.record.say(whose, revision, said);
+    return this.record.read(whose, revision);
+  }
+
+  async forget(person: SignedIn, slug: string): Promise<void> {
+    const { kitId } = await this.find(person, slug, undefined, 'newest');
+    await this.record.forget({ personId: person.id, kitId });
+  }
+
+  /** @throws Refusal `not-found` for a kit that is not on the shelf, or a revision it does not have */
+  private async find(
+    person: SignedIn,
+    slug: string,
+    revisionId: string | undefined,
+    otherwise: 'newest' | 'held',
+  ): Promise<{ kitId: string; revision: ReleasedRevision }> {
+    const kit = await this.catalogue.kitBySlug(slug);
+    const holding = kit && (await this.holdings.of(person.id, kit.id));
+    if (!kit || !holding) throw notFound('kit on your shelf');
+    const revisions = await this.catalogue.revisionsOf(kit.id);
+    const newest = revisions.find(({ isWithdrawn }) => !isWithdrawn) ?? revisions[0];
+    const named = revisionId ?? (otherwise === 'held' ? holding.heldRevisionId : null);
+    const revision = named ? revisions.find(({ id }) => id === named) : newest;
+    if (!revision) throw notFound('revision');
+    return { kitId: kit.id, revision };
+  }
+}
+
+type SheetPart = Answer<'GET /kits/:slug/print'>['parts'][number];
+
+/** In the shape somebody prints; nothing is left to choose. */
+const inClearance = (part: SheetPart, clearance: Clearance | null): SheetPart => {
+  const { clearance: _, ...shape } = part.variants.find((one) => one.clearance === clearance) ?? {
+    clearance: null,
+  };
+  return { ...part, ...shape, isGauge: false, variants: [] };
+};
