@@ -31,6 +31,8 @@ export const shelfRevision = z.object({
   bundles: z.array(z.object({ clearance, bytes: z.int(), sha256 })),
   changeNotes: z.string(),
   isWithdrawn: z.boolean(),
+  /** What the workshop says about it; null where it stands. */
+  withdrawnReason: z.string().nullable(),
 });
 export const entitlementSource = z.enum(['purchase', 'pledge', 'gift', 'staff']);
 

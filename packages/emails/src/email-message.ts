@@ -118,6 +118,16 @@ export type RevisionReleasedMessage = {
   stopLink?: string;
 };
 
+/** A revision that the reader holds was withdrawn; `newest` is the one to take instead, where there is one. */
+export type RevisionWithdrawnMessage = {
+  template: 'revision-withdrawn';
+  kit: string;
+  revision: string;
+  reason: string;
+  newest: string | null;
+  link: string;
+};
+
 /** `from` is the giver; without it the kit comes from the workshop itself. `note` is the giver's own words. */
 export type GiftReceivedMessage = KitTitle & {
   template: 'gift-received';
@@ -165,6 +175,7 @@ export type EmailMessage =
   | OrderRefundedMessage
   | StaffInviteMessage
   | RevisionReleasedMessage
+  | RevisionWithdrawnMessage
   | GiftReceivedMessage
   | FitAnsweredMessage
   | FitFixedMessage;

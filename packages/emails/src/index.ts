@@ -17,6 +17,7 @@ export type {
   ReprintRow,
   ResetPassphraseMessage,
   RevisionReleasedMessage,
+  RevisionWithdrawnMessage,
   SignInLinkMessage,
   StaffInviteMessage,
   TaxLine,

@@ -96,6 +96,7 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'order-refunded': true,
     'staff-invite': true,
     'revision-released': true,
+    'revision-withdrawn': true,
     'gift-received': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(

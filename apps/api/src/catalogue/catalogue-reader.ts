@@ -39,6 +39,7 @@ export interface ReleasedRevision {
   readonly bundles: readonly ClearanceBundle[];
   readonly changeNotes: string;
   readonly isWithdrawn: boolean;
+  readonly withdrawnReason: string | null;
 }
 
 /** What other rooms may know of the catalogue: plain facts, nothing of a draft. */
@@ -215,4 +216,5 @@ const releasedFacts = (revision: Revision): Omit<ReleasedRevision, 'bundles'> =>
   bundleBytes: revision.bundleBytes ?? 0,
   changeNotes: revision.changeNotes,
   isWithdrawn: revision.state === 'withdrawn',
+  withdrawnReason: revision.withdrawnReason,
 });

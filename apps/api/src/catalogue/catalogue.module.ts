@@ -37,6 +37,7 @@ import { BuildRelease } from './release/build-release.js';
 import { RevisionReleasedSteps } from './release/revision-released-steps.js';
 import { ReleasedBundles } from './release/released-bundles.js';
 import { RequestRelease } from './release/request-release.js';
+import { RevisionWithdrawnSteps, WithdrawRevision } from './release/withdraw-revision.js';
 import { TidyDraft } from './release/tidy-draft.js';
 import { RevisionBundle } from './release/revision-bundle.model.js';
 import { ChangeRevision } from './revisions/change-revision.js';
@@ -103,6 +104,8 @@ import { StartRevision } from './revisions/start-revision.js';
     PrintSheets,
     KitsTooBig,
     RevisionReleasedSteps,
+    RevisionWithdrawnSteps,
+    WithdrawRevision,
   ],
   // The measuring room writes what it finds through the records.
   exports: [
@@ -112,6 +115,7 @@ import { StartRevision } from './revisions/start-revision.js';
     MeshComparisons,
     PrintPlans,
     RevisionReleasedSteps,
+    RevisionWithdrawnSteps,
   ],
 })
 export class CatalogueModule {}

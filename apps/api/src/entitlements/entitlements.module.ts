@@ -22,6 +22,8 @@ import { ReprintLists } from './reprint/reprint-lists.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
+import { Withdrawals } from './withdrawals/withdrawals.js';
+import { WithdrawalsController } from './withdrawals/withdrawals.controller.js';
 import { SignedAddress } from './signed-address.js';
 
 @Module({
@@ -31,7 +33,7 @@ import { SignedAddress } from './signed-address.js';
     OrdersModule,
     SequelizeModule.forFeature([Entitlement, DownloadLink, Download, PrintRecord]),
   ],
-  controllers: [ShelfController, PrintRecordController, DeliveryController],
+  controllers: [ShelfController, PrintRecordController, WithdrawalsController, DeliveryController],
   providers: [
     DownloadLinks,
     SignedAddress,
@@ -46,6 +48,7 @@ import { SignedAddress } from './signed-address.js';
     ReprintLists,
     KeepPrintRecord,
     ReprintPlans,
+    Withdrawals,
   ],
   exports: [Holdings, ReprintLists],
 })

@@ -3,7 +3,7 @@ import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Clearance } from '@windchest/contracts';
 import { Clock } from '../adapters/clock/clock.js';
-import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { CatalogueReader, type ReleasedRevision } from '../catalogue/catalogue-reader.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { newId } from '../database/columns.js';
 import { Transactions, type Tx } from '../database/transactions.js';
@@ -81,7 +81,8 @@ export class FileGrants {
       revision: { kitId: kit.id, isReleased: true, isWithdrawn: revision.isWithdrawn },
       entitlements,
     });
-    if (!decision.isAllowed) throw refusalFor(decision.why);
+    if (!decision.isAllowed)
+      throw decision.why === 'withdrawn' ? withdrawnRefusal(revision) : refusalFor(decision.why);
     const file = wish.file
       ? await this.catalogue.fileOf(revision.id, wish.file)
       : await this.catalogue.bundleFile(revision.id, wish.clearance);
@@ -135,12 +136,15 @@ interface FileFacts {
   fileName: string;
 }
 
-const sentences: Record<Extract<DownloadDecision, { isAllowed: false }>['why'], string> = {
+export const withdrawnRefusal = ({ label, withdrawnReason }: ReleasedRevision): Refusal =>
+  new Refusal('forbidden', `The workshop has withdrawn ${label}: ${withdrawnReason ?? ''}`.trim());
+
+type Why = Exclude<Extract<DownloadDecision, { isAllowed: false }>['why'], 'withdrawn'>;
+const sentences: Record<Why, string> = {
   'not-entitled': 'This kit is not on your shelf.',
   suspended: 'Downloads of this kit rest while its payment is in dispute.',
   ended: 'The right to this kit’s files has ended, for it was refunded.',
   'not-released': 'This revision is not released.',
-  withdrawn: 'The workshop has withdrawn this revision. Take the newest one instead.',
 };
 const refusalFor = (why: keyof typeof sentences): Refusal =>
   new Refusal(why === 'not-entitled' ? 'not-found' : 'forbidden', sentences[why]);

@@ -11,7 +11,7 @@ import type { SignedIn } from '../http/person.js';
 import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
-import { browserMark } from './file-grants.js';
+import { browserMark, withdrawnRefusal } from './file-grants.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
 
@@ -51,6 +51,8 @@ export class ServeFile {
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
     if (!download || entitlement?.state !== 'active')
       throw new Refusal('forbidden', 'The right to this file has ended.');
+    const revision = await this.catalogue.revisionById(download.revisionId);
+    if (revision?.isWithdrawn) throw withdrawnRefusal(revision);
     const file: (ServableFile & Partial<BundleFile>) | null = download.isBundle
       ? await this.catalogue.bundleByHash(download.revisionId, download.sha256)
       : await this.catalogue.fileOf(download.revisionId, download.sha256);

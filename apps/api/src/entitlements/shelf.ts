@@ -140,7 +140,8 @@ export class Shelf {
     const best = await this.bestOf(person, kitId);
     const [kit] = await this.catalogue.kitsByIds([kitId]);
     const revisions = await this.catalogue.revisionsOf(kitId);
-    const newest = revisions.find((one) => !one.isWithdrawn);
+    // A kit of which nothing stands stays on the shelf, and says why there is nothing to fetch.
+    const newest = revisions.find((one) => !one.isWithdrawn) ?? revisions[0];
     if (!best || !kit || !newest) return null;
     const held = revisions.find((one) => one.id === best.heldRevisionId);
     const [licence] = await this.catalogue.licencesByIds(best.licenceId ? [best.licenceId] : []);

@@ -1,6 +1,6 @@
 import type { OutputOf, RevisionDetail } from '@windchest/contracts';
 import { newId } from '../../database/columns.js';
-import { touchRows } from '../../database/rows.js';
+import { selectRows, touchRows } from '../../database/rows.js';
 import {
   boxStl,
   draftKit,
@@ -13,6 +13,7 @@ import {
 import { putOnShelf } from '../../testing/released-revision.js';
 import { makePerson, signInAs, TEST_PASSPHRASE } from '../../testing/sign-in.js';
 import { startTestApp, type Browser, type TestApp } from '../../testing/test-app.js';
+import { Withdrawals } from '../withdrawals/withdrawals.js';
 import { ReprintLists } from './reprint-lists.js';
 
 type Plan = OutputOf<'GET /shelf/:slug/reprint'>;
@@ -23,6 +24,7 @@ describe('prints, and what to print again', () => {
   let maker: Browser;
   let pia: Browser;
   let piaId: string;
+  let email: string;
   let kitId: string;
   let slug: string;
   const made: RevisionDetail[] = [];
@@ -93,6 +95,7 @@ describe('prints, and what to print again', () => {
     ]);
     const person = await makePerson(shop, 'buyer');
     piaId = person.id;
+    email = person.email;
     pia = shop.browser();
     await pia.post('/api/session').send({ email: person.email, passphrase: TEST_PASSPHRASE }).expect(200);
     await putOnShelf(shop, person, kitId, first.id);
@@ -182,6 +185,82 @@ describe('prints, and what to print again', () => {
       said: null,
       habit: { clearance: 'plus', printer: 'Attic printer' },
     });
+  });
+
+  it('count every part as to print for another mark, and say so', async () => {
+    const second = await next({}, [], 'mark');
+    expect(second.label).toBe('Mk 2.0');
+    const { list } = await plan();
+    expect(list.breaks).toEqual({ from: ['Mk 1'], to: 'Mk 2' });
+    expect(await toPrint()).toEqual(['H-01 print 1+0', 'J-01 print 1+0', 'P-01 print 1+0']);
+  });
+
+  it('rest when a revision is withdrawn: the shop falls back, holders hear of it once, nobody fetches it', async () => {
+    const second = made[3]!;
+    const at = `/api/workshop/revisions/${second.id}/withdrawal`;
+    await pia.post(`/api/shelf/${slug}/held`).send({ revisionId: second.id }).expect(200);
+    await touchRows(shop.database, 'UPDATE kits SET is_listed = TRUE WHERE id = :kitId', { kitId });
+    const newest = async () => (await shop.browser().get(`/api/kits/${slug}`).expect(200)).body.revision;
+    expect(await newest()).toBe('Mk 2.0');
+    expect((await maker.get(at).expect(200)).body).toEqual({ holders: 1, fallsBackTo: 'Mk 1.2' });
+    const given = (
+      await pia.post('/api/shelf/grants').send({ kitSlug: slug, revisionId: second.id }).expect(201)
+    ).body;
+
+    await maker.post(at).send({ reason: 'No.' }).expect(422);
+    const reason = 'The foot breaks when the bellows are full.';
+    const { body } = await maker.post(at).send({ reason }).expect(200);
+    expect(body).toMatchObject({ state: 'withdrawn', withdrawn: { reason } });
+    await maker
+      .post(at)
+      .send({ reason })
+      .expect(409)
+      .expect(({ body: problem }) => expect(problem.detail).toBe('Mk 2.0 was withdrawn already.'));
+    await shop.drain();
+
+    expect(await newest()).toBe('Mk 1.2');
+    const refused = await pia
+      .post('/api/shelf/grants')
+      .send({ kitSlug: slug, revisionId: second.id })
+      .expect(403);
+    expect(refused.body.detail).toBe(`The workshop has withdrawn Mk 2.0: ${reason}`);
+    await pia.get(given.url).expect(403);
+    const shelf = (await pia.get(`/api/shelf/${slug}`).expect(200)).body;
+    expect(shelf).toMatchObject({
+      held: { label: 'Mk 2.0', isWithdrawn: true, withdrawnReason: reason },
+      newest: { label: 'Mk 1.2', isWithdrawn: false },
+      reprint: { to: { label: 'Mk 1.2' }, breaks: { from: ['Mk 2'], to: 'Mk 1' } },
+    });
+    // The job may run again: each address has its one mail.
+    await shop.app.get(Withdrawals).handle({ revisionId: second.id });
+    const mails = await selectRows<{ to_address: string; message: string }>(
+      shop.database,
+      `SELECT to_address, message FROM mails WHERE template = 'revision-withdrawn'`,
+    );
+    expect(mails.map(({ to_address }) => to_address)).toEqual([email]);
+    const log = await selectRows<{ subject: string }>(
+      shop.database,
+      `SELECT subject FROM staff_log WHERE what = 'withdrew a revision'`,
+    );
+    expect(log).toEqual([{ subject: 'Curlew Mk 2.0' }]);
+  });
+
+  it('leave the shop where no revision stands, and stay on the shelf with the reason', async () => {
+    for (const revision of made.slice(0, 3).toReversed())
+      await maker
+        .post(`/api/workshop/revisions/${revision.id}/withdrawal`)
+        .send({ reason: 'The whole kit is taken back.' })
+        .expect(200);
+    await shop.browser().get(`/api/kits/${slug}`).expect(404);
+    expect((await pia.get(`/api/shelf/${slug}`).expect(200)).body.newest).toMatchObject({
+      isWithdrawn: true,
+      withdrawnReason: expect.any(String),
+    });
+    await (
+      await signInAs(shop, 'helper')
+    )
+      .get(`/api/workshop/revisions/${made[0]!.id}/withdrawal`)
+      .expect(403);
   });
 
   it('are nobody else’s to see', async () => {

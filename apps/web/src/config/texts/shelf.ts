@@ -70,9 +70,12 @@ export const shelfKitTexts = {
       : `The other ${count} parts are the same; leave them as they are.`,
   heldIsNewer: (held: string, newest: string) =>
     `You hold ${held}. The workshop has withdrawn it; the newest that stands is ${newest}.`,
-  heldWithdrawnTitle: (held: string) => `${held} was withdrawn`,
-  heldWithdrawn: (newest: string) =>
-    `The workshop no longer hands it out. Take ${newest}; its change notes say why.`,
+  withdrawnTitle: (label: string) => `${label} was withdrawn`,
+  withdrawnTake: (label: string, newest: string) =>
+    `Print no more parts of ${label}. Take ${newest} instead; the list below says what differs from what you have.`,
+  withdrawnWait: (label: string) =>
+    `Print no more parts of ${label}. No other revision stands at the moment; the next one comes here.`,
+  nothingToGet: 'There is nothing to fetch at the moment.',
 
   sheet: (kit: string) => `Parts of ${kit}`,
   differences: 'What differs',

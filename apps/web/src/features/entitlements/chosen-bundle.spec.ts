@@ -11,6 +11,7 @@ const revision = (...clearances: ('minus' | 'zero' | 'plus')[]): ShelfKit['newes
   bundles: clearances.map((clearance, at) => ({ clearance, bytes: 100 + at, sha256 })),
   changeNotes: '',
   isWithdrawn: false,
+  withdrawnReason: null,
 });
 const kit = (chosen: ShelfKit['clearance']['chosen']) => ({
   slug: 'curlew',

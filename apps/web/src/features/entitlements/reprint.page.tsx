@@ -41,6 +41,7 @@ const onPaper = {
 function Sheet({ kit, plan }: { kit: ShelfKit; plan: ReprintPlan }) {
   useLightWhenPrinted();
   const [hasOptional, setHasOptional] = useState(true);
+  const [writtenAt] = useState(() => new Date().toISOString());
   const { list } = plan;
   const { print, optional } = piecesOf(list.parts);
   const drawn = drawnReprints(list);
@@ -71,7 +72,7 @@ function Sheet({ kit, plan }: { kit: ShelfKit; plan: ReprintPlan }) {
                 value: list.from.labels.length > 0 ? list.from.labels.join(', ') : texts.blockNothing,
               },
               { name: texts.blockTo, value: list.to.label },
-              { name: texts.date, value: date(new Date().toISOString()) },
+              { name: texts.date, value: date(writtenAt) },
               { name: texts.blockPieces, value: number(print) },
               { name: texts.blockOptional, value: number(optional) },
             ]}

@@ -22,6 +22,7 @@ export function ShelfKitHeadline({ kit }: { kit: ShelfKit }) {
         {shelfKitTexts.holdNothing(newest.label)} <Strong>{shelfKitTexts.getIt(all)}</Strong>
       </Text>
     );
+  if (newest.isWithdrawn) return null;
   if (held.id === newest.id)
     return (
       <Text {...lead}>

@@ -28,6 +28,24 @@ const watchedMs = 10 * 60_000;
 const hasRunningDownload = (kit: ShelfKit | undefined): boolean =>
   kit?.downloads.some((one) => !one.isComplete && Date.now() - Date.parse(one.at) < watchedMs) ?? false;
 
+/** Why a revision is handed out no more, and what to do. */
+const WithdrawnNotice = ({
+  revision,
+  newest,
+}: {
+  revision: ShelfKit['newest'];
+  newest: ShelfKit['newest'];
+}) => (
+  <Notice tone="warn" title={shelfKitTexts.withdrawnTitle(revision.label)}>
+    {revision.withdrawnReason && <Text marginBottom="1">“{revision.withdrawnReason}”</Text>}
+    <Text>
+      {newest.isWithdrawn
+        ? shelfKitTexts.withdrawnWait(revision.label)
+        : shelfKitTexts.withdrawnTake(revision.label, newest.label)}
+    </Text>
+  </Notice>
+);
+
 function Kit({ kit }: { kit: ShelfKit }) {
   const download = useShelfDownload();
   const [printed, setPrinted] = useState<ShelfKit['newest']>();
@@ -42,11 +60,9 @@ function Kit({ kit }: { kit: ShelfKit }) {
               {kit.name}
             </Heading>
             <ShelfKitHeadline kit={kit} />
-            {held?.isWithdrawn && (
+            {(held?.isWithdrawn || newest.isWithdrawn) && (
               <Box marginTop="5">
-                <Notice tone="warn" title={shelfKitTexts.heldWithdrawnTitle(held.label)}>
-                  {shelfKitTexts.heldWithdrawn(newest.label)}
-                </Notice>
+                <WithdrawnNotice revision={held?.isWithdrawn ? held : newest} newest={newest} />
               </Box>
             )}
             <ReprintSection kit={kit} />

@@ -7,7 +7,6 @@ import { apiAddress } from '../../lib/api-address.js';
 import { ApiFault } from '../../lib/api-fault.js';
 import { showFieldFaults } from '../../lib/form-faults.js';
 import { formResolver } from '../../lib/form-resolver.js';
-import { usePrinterCard } from '../../lib/printer-card.js';
 import { sendPicture } from '../../lib/send-picture.js';
 import { useAction } from '../../lib/use-action.js';
 import { Button } from '../../ui/button.js';
@@ -20,6 +19,7 @@ import { TextArea, TextField } from '../../ui/field/text-field.js';
 import { Form } from '../../ui/form.js';
 import { Notice } from '../../ui/notice.js';
 import { Text } from '../../ui/text.js';
+import { usePrinters } from '../bench/use-printers.js';
 import { fitWordNames, type FitWords, gapOf } from './fit-form.js';
 
 const Row = ({ children }: { children: ReactNode }) => (
@@ -37,7 +37,7 @@ type Report = OutputOf<'POST /shelf/:slug/fit-reports'>;
 
 /** How a part came out: what was printed, how it fits, a picture. */
 export function ReportForm({ kit }: { kit: ShelfKit }) {
-  const card = usePrinterCard();
+  const { chosen: card } = usePrinters();
   const [picture, setPicture] = useState<{ file: File | undefined; round: number }>({
     file: undefined,
     round: 0,
@@ -53,8 +53,8 @@ export function ReportForm({ kit }: { kit: ShelfKit }) {
       revisionId: (kit.held ?? kit.newest).id,
       partCode: '',
       clearance: null,
-      printerName: '',
-      material: card?.material ?? '',
+      printerName: card?.name ?? '',
+      material: card?.materials[0]?.material ?? '',
       nozzleMm: card?.nozzleMm ?? 0.4,
       layerMm: 0.2,
       verdict: 'right',
