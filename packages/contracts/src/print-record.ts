@@ -4,7 +4,7 @@ import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { drawing } from './kits.js';
 import { printSheet } from './printers.js';
-import { id, slugParams } from './values.js';
+import { id, sha256, slugParams } from './values.js';
 import { differenceKind, reprintMark } from './workshop-revisions.js';
 
 /**
@@ -90,6 +90,19 @@ export const printedBody = z.object({
   quantity: z.int().min(0).max(999),
 });
 
+/** A bundle of what is to print alone: made when it is asked for. */
+export const changedParts = z.object({
+  revisionId: id,
+  /** How many parts it holds; none where there is nothing to print. */
+  parts: z.int(),
+  state: z.enum(['not-asked', 'waiting', 'building', 'ready', 'failed']),
+  percent: z.int(),
+  fault: z.string().nullable(),
+  /** To be fetched with a grant that names its hash. */
+  file: z.object({ sha256, bytes: z.int() }).nullable(),
+});
+export type ChangedPartsView = z.output<typeof changedParts>;
+
 const revisionQuery = z.object({ revision: id.optional() });
 
 export const printRecordEndpoints = {
@@ -114,6 +127,22 @@ export const printRecordEndpoints = {
     params: slugParams,
     body: printedBody,
     response: printRecord,
+  }),
+  'GET /shelf/:slug/changed-parts': endpoint({
+    access: 'signed-in',
+    summary: 'How far the bundle of one’s changed parts for a revision is',
+    params: slugParams,
+    query: revisionQuery,
+    response: changedParts,
+  }),
+  'POST /shelf/:slug/changed-parts': endpoint({
+    access: 'signed-in',
+    summary:
+      'Have the bundle of one’s changed parts made; it is fetched by POST /shelf/grants, its hash as the file',
+    params: slugParams,
+    body: z.object({ revisionId: id.optional() }),
+    response: changedParts,
+    status: 202,
   }),
   'DELETE /shelf/:slug/printed': endpoint({
     access: 'signed-in',

@@ -3,6 +3,7 @@ import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Clearance, FilamentColour } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
+import { ChangedBundles } from './changed-parts/changed-bundles.js';
 import { Differences } from './comparison/differences.js';
 import type { NetRow } from './comparison/net-rows.js';
 import { contentTypes } from './files/file-kind.js';
@@ -54,6 +55,7 @@ export class CatalogueReader {
     private readonly bundles: ReleasedBundles,
     private readonly changes: Differences,
     private readonly sheets: PrintSheets,
+    private readonly changedBundles: ChangedBundles,
   ) {}
 
   /** Those of the licences that can be bought now. */
@@ -134,7 +136,8 @@ export class CatalogueReader {
   async fileOf(revisionId: string, sha256: string): Promise<ServableFile | null> {
     if (!(await this.finalById(revisionId))) return null;
     const file = (await this.contents.filesOf(revisionId)).find((one) => one.sha256 === sha256);
-    if (!file) return null;
+    // Bundles of changed parts are files of their revision, too.
+    if (!file) return this.changedBundles.fileOf(revisionId, sha256);
     const { bytes, fileName, kind } = file;
     return servable('files', { sha256, bytes, fileName, contentType: contentTypes[kind] });
   }

@@ -3,6 +3,10 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueReader } from './catalogue-reader.js';
 import { CatalogueWaiting } from './catalogue-waiting.js';
+import { BuildChangedBundle } from './changed-parts/build-changed-bundle.js';
+import { ChangedBundle } from './changed-parts/changed-bundle.model.js';
+import { ChangedBundles } from './changed-parts/changed-bundles.js';
+import { CollectChangedBundles } from './changed-parts/collect-changed-bundles.js';
 import { Comparison } from './comparison/comparison.js';
 import { Differences } from './comparison/differences.js';
 import { MeshComparisonRecord } from './comparison/mesh-comparison.model.js';
@@ -66,6 +70,7 @@ import { StartRevision } from './revisions/start-revision.js';
       MeasurementRecord,
       MeshComparisonRecord,
       GateWaiver,
+      ChangedBundle,
     ]),
   ],
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
@@ -106,6 +111,9 @@ import { StartRevision } from './revisions/start-revision.js';
     RevisionReleasedSteps,
     RevisionWithdrawnSteps,
     WithdrawRevision,
+    ChangedBundles,
+    BuildChangedBundle,
+    CollectChangedBundles,
   ],
   // The measuring room writes what it finds through the records.
   exports: [
@@ -116,6 +124,7 @@ import { StartRevision } from './revisions/start-revision.js';
     PrintPlans,
     RevisionReleasedSteps,
     RevisionWithdrawnSteps,
+    ChangedBundles,
   ],
 })
 export class CatalogueModule {}

@@ -13,6 +13,7 @@ import { FileGrants } from './file-grants.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
+import { ChangedParts } from './reprint/changed-parts.js';
 import { KeepPrintRecord } from './reprint/keep-print-record.js';
 import { PrintRecordController } from './reprint/print-record.controller.js';
 import { PrintRecord } from './reprint/print-record.model.js';
@@ -48,6 +49,7 @@ import { SignedAddress } from './signed-address.js';
     ReprintLists,
     KeepPrintRecord,
     ReprintPlans,
+    ChangedParts,
     Withdrawals,
   ],
   exports: [Holdings, ReprintLists],

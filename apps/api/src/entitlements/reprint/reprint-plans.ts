@@ -68,12 +68,12 @@ export class ReprintPlans {
   }
 
   /** @throws Refusal `not-found` for a kit that is not on the shelf, or a revision it does not have */
-  private async find(
+  async find(
     person: SignedIn,
     slug: string,
     revisionId: string | undefined,
     otherwise: 'newest' | 'held',
-  ): Promise<{ kitId: string; revision: ReleasedRevision }> {
+  ): Promise<{ kitId: string; kitName: string; revision: ReleasedRevision }> {
     const kit = await this.catalogue.kitBySlug(slug);
     const holding = kit && (await this.holdings.of(person.id, kit.id));
     if (!kit || !holding) throw notFound('kit on your shelf');
@@ -82,7 +82,7 @@ export class ReprintPlans {
     const named = revisionId ?? (otherwise === 'held' ? holding.heldRevisionId : null);
     const revision = named ? revisions.find(({ id }) => id === named) : newest;
     if (!revision) throw notFound('revision');
-    return { kitId: kit.id, revision };
+    return { kitId: kit.id, kitName: kit.name, revision };
   }
 }
 

@@ -1,4 +1,7 @@
+import { createHash } from 'node:crypto';
 import type { OutputOf, RevisionDetail } from '@windchest/contracts';
+import { keyOf, Storage } from '../../adapters/storage/storage.js';
+import { CollectChangedBundles } from '../../catalogue/changed-parts/collect-changed-bundles.js';
 import { newId } from '../../database/columns.js';
 import { selectRows, touchRows } from '../../database/rows.js';
 import {
@@ -18,6 +21,24 @@ import { ReprintLists } from './reprint-lists.js';
 
 type Plan = OutputOf<'GET /shelf/:slug/reprint'>;
 type Record = OutputOf<'GET /shelf/:slug/printed'>;
+
+/** A zip as it came, for supertest reads what it takes for text. */
+const rawBody = (
+  response: NodeJS.ReadableStream,
+  done: (fault: Error | null, body: Buffer) => void,
+): void => {
+  const chunks: Buffer[] = [];
+  response.on('data', (chunk: Buffer) => chunks.push(chunk));
+  response.on('end', () => done(null, Buffer.concat(chunks)));
+};
+
+/** Names of a zip's entries, from its central directory (APPNOTE 4.3.12: signature PK 01 02, name after 46 bytes). */
+const namesOf = (zip: Buffer): string[] => {
+  const names: string[] = [];
+  for (let at = zip.indexOf('PK\x01\x02'); at >= 0; at = zip.indexOf('PK\x01\x02', at + 46))
+    names.push(zip.subarray(at + 46, at + 46 + zip.readUInt16LE(at + 28)).toString());
+  return names;
+};
 
 describe('prints, and what to print again', () => {
   let shop: TestApp;
@@ -167,6 +188,54 @@ describe('prints, and what to print again', () => {
     for await (const { list } of shop.app.get(ReprintLists).listsFor(kitId, made[2]!.id, readers))
       told.push(list.parts.filter(({ advice }) => advice).map(({ code, print }) => `${code} ${print}`));
     expect(told).toEqual([['J-01 1'], ['H-01 1', 'J-01 1', 'P-01 1']]);
+  });
+
+  it('come as a bundle of their own, made once for all who need the same', async () => {
+    const at = `/api/shelf/${slug}/changed-parts`;
+    expect((await pia.get(at).expect(200)).body).toMatchObject({ state: 'not-asked', parts: 1, file: null });
+    expect((await pia.post(at).send({}).expect(202)).body).toMatchObject({ state: 'waiting', parts: 1 });
+    await shop.drain();
+    const ready = (await pia.get(at).expect(200)).body;
+    expect(ready).toMatchObject({ state: 'ready', percent: 100 });
+
+    const given = await pia
+      .post('/api/shelf/grants')
+      .send({ kitSlug: slug, revisionId: made[2]!.id, file: ready.file.sha256 })
+      .expect(201);
+    expect(given.body.fileName).toBe(`${slug}-mk-1.2-changed-parts.zip`);
+    const got = await pia.get(given.body.url).buffer(true).parse(rawBody).expect(200);
+    expect(
+      createHash('sha256')
+        .update(got.body as Buffer)
+        .digest('hex'),
+    ).toBe(ready.file.sha256);
+    const names = namesOf(got.body as Buffer);
+    expect(names.filter((name) => name.startsWith('parts/'))).toEqual(['parts/J-01 Tongue.stl']);
+    expect(names).toEqual(expect.arrayContaining(['SHA256SUMS', 'change-notes.md', 'reprint-list.md']));
+    await pia.get(given.body.url).set('Range', 'bytes=0-9').expect(206);
+    // Fetching it says nothing of what is held: the person does, once it is printed.
+    expect((await pia.get(`/api/shelf/${slug}`).expect(200)).body.held.label).toBe('Mk 1.0');
+
+    const other = await makePerson(shop, 'buyer');
+    await putOnShelf(shop, other, kitId, made[0]!.id);
+    const browser = shop.browser();
+    await browser.post('/api/session').send({ email: other.email, passphrase: TEST_PASSPHRASE }).expect(200);
+    expect((await browser.post(at).send({}).expect(202)).body.file).toEqual(ready.file);
+    const stored = await shop.app.get(Storage).head(keyOf('bundles', ready.file.sha256));
+    expect(stored).toEqual({ bytes: ready.file.bytes });
+    await browser.post(at).send({ revisionId: made[0]!.id }).expect(409);
+
+    // Nobody has asked for a month: it goes; asked for again, it comes out the same.
+    const collector = shop.app.get(CollectChangedBundles);
+    expect(await collector.collect()).toBe(0);
+    await touchRows(shop.database, 'UPDATE changed_bundles SET used_at = :then', {
+      then: shop.clock.in(-31 * 86_400),
+    });
+    expect(await collector.collect()).toBe(1);
+    expect(await shop.app.get(Storage).head(keyOf('bundles', ready.file.sha256))).toBeNull();
+    await browser.post(at).send({}).expect(202);
+    await shop.drain();
+    expect((await browser.get(at).expect(200)).body.file).toEqual(ready.file);
   });
 
   it('follow the habit of the printer: the gauge is answered, and the shelf says where it knows from', async () => {

@@ -33,6 +33,11 @@ export const reprintTexts = {
   step: (revision: string, reason: string) => `${revision}: ${reason}`,
   inClearance: (sign: string) => `in ${sign}`,
 
+  getChanged: (count: number) =>
+    count === 1 ? 'Get the one part that changed' : `Get the ${count} changed parts`,
+  changedBuilding: 'Packing the changed parts and the notes',
+  changedFailed: 'The changed parts were not packed',
+
   toPage: 'Plates, filament and a list to print out',
   printOut: 'Print this list',
   back: (kit: string) => `${kit} on the shelf`,

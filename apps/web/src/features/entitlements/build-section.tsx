@@ -18,6 +18,7 @@ type Part = PrintRecordView['parts'][number];
 const touched = [
   'GET /shelf/:slug/printed',
   'GET /shelf/:slug/reprint',
+  'GET /shelf/:slug/changed-parts',
   'GET /shelf/:slug',
   'GET /shelf',
 ] as const;

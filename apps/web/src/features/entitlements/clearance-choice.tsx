@@ -9,7 +9,12 @@ import { RadioRow, RadioRows } from '../../ui/field/radio-rows.js';
 /** Which clearance one prints of a kit: bundle and reprint list keep to it. Kept as soon as it is said. */
 export function ClearanceChoice({ kit }: { kit: ShelfKit }) {
   const name = useId();
-  const { run, fault } = useAction('PUT /shelf/:slug/clearance', ['GET /shelf/:slug']);
+  const { run, fault } = useAction('PUT /shelf/:slug/clearance', [
+    'GET /shelf/:slug',
+    'GET /shelf/:slug/printed',
+    'GET /shelf/:slug/reprint',
+    'GET /shelf/:slug/changed-parts',
+  ]);
   const [said, setSaid] = useState<Clearance | null>();
   const { said: kept, habit, gauge } = kit.clearance;
   const shown = said === undefined ? kept : said;

@@ -19,6 +19,7 @@ export function PrintedDialog({ slug, revision, onClose }: PrintedDialogProps) {
     'GET /shelf',
     'GET /shelf/:slug/printed',
     'GET /shelf/:slug/reprint',
+    'GET /shelf/:slug/changed-parts',
   ]);
   const label = revision?.label ?? '';
   const confirm = async () =>

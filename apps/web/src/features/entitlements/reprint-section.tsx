@@ -9,8 +9,10 @@ import { PartsSheet } from '../../ui/drawing/parts-sheet.js';
 import { Fault } from '../../ui/fault.js';
 import { SelectField } from '../../ui/field/select-field.js';
 import { TextLink } from '../../ui/link.js';
+import { ChangedPartsAction } from './changed-parts-action.js';
 import { ReprintBasis } from './reprint-basis.js';
 import { ReprintTable } from './reprint-table.js';
+import type { Download } from './use-download.js';
 
 /** Every part of the wanted revision; what is to print is filled. */
 export const drawnReprints = (list: ReprintList) =>
@@ -21,7 +23,7 @@ export const drawnReprints = (list: ReprintList) =>
   );
 
 /** What to print for the newest revision, or for another one that is chosen. */
-export function ReprintSection({ kit }: { kit: ShelfKit }) {
+export function ReprintSection({ kit, download }: { kit: ShelfKit; download: Download }) {
   const [chosen, setChosen] = useState<string>();
   const wanted = kit.revisions.find(({ id }) => id === chosen) ?? kit.newest;
   const isNewest = wanted.id === kit.newest.id;
@@ -56,6 +58,9 @@ export function ReprintSection({ kit }: { kit: ShelfKit }) {
         <ReprintBasis list={list} />
       )}
       {hasList && <ReprintTable parts={list.parts} />}
+      {hasList && !wanted.isWithdrawn && (
+        <ChangedPartsAction key={wanted.id} slug={kit.slug} revisionId={wanted.id} download={download} />
+      )}
       {list.parts.some(({ print, optional }) => print + optional > 0) && (
         <TextLink to={paths.shelfReprint.to({ slug: kit.slug }, isNewest ? {} : { revision: wanted.id })}>
           {texts.toPage}

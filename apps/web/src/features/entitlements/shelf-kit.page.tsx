@@ -65,7 +65,7 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 <WithdrawnNotice revision={held?.isWithdrawn ? held : newest} newest={newest} />
               </Box>
             )}
-            <ReprintSection kit={kit} />
+            <ReprintSection kit={kit} download={download} />
           </>
         }
         aside={<ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />}
