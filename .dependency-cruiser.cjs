@@ -13,17 +13,18 @@ const mayUse = {
   accounts: [],
   catalogue: ['accounts'],
   measuring: ['accounts', 'catalogue'],
-  coupons: ['accounts', 'catalogue'],
-  orders: ['accounts', 'catalogue', 'coupons'],
-  supporters: ['accounts', 'catalogue', 'coupons'],
+  supporters: ['accounts', 'catalogue'],
+  // A code for supporters only asks whether the buyer is one.
+  coupons: ['accounts', 'catalogue', 'supporters'],
+  orders: ['accounts', 'catalogue', 'coupons', 'supporters'],
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
   letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
   journal: ['accounts', 'catalogue', 'supporters'],
-  ledger: ['accounts', 'catalogue', 'orders'],
+  ledger: ['accounts', 'catalogue', 'orders', 'supporters'],
   workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),
 };
-const lowerLayers = 'adapters database jobs mails http pictures config'.split(' ');
+const lowerLayers = 'adapters database jobs mails payments http pictures config typesetting'.split(' ');
 
 module.exports = {
   forbidden: [

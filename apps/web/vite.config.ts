@@ -45,7 +45,16 @@ function letUnusedComponentsGo(): Plugin {
   };
 }
 
-export default defineConfig({
+/** The router's package offers its development build, with all its warnings, to whoever asks; this is the other one. */
+const routerForVisitors = [
+  { find: /^react-router$/, replacement: 'react-router/dist/production/index.mjs' },
+  { find: /^react-router\/dom$/, replacement: 'react-router/dist/production/dom-export.mjs' },
+].map(({ find, replacement }) => ({
+  find,
+  replacement: fileURLToPath(new URL(`../../node_modules/${replacement}`, import.meta.url)),
+}));
+
+export default defineConfig(({ command }) => ({
   plugins: [react(), preloadLatinFont(), letUnusedComponentsGo()],
   resolve: {
     alias: [
@@ -53,8 +62,14 @@ export default defineConfig({
         find: `@windchest/${name}`,
         replacement: packageSource(name),
       })),
+      // Emotion's own sheet writes `<style>` elements, which the content security policy blocks.
+      {
+        find: '@emotion/sheet',
+        replacement: fileURLToPath(new URL('./src/ui/theme/adopted-sheet.ts', import.meta.url)),
+      },
       // SWR asks for a stand-in that React has had itself since version 18.
       { find: /^use-sync-external-store\/shim$/, replacement: 'react' },
+      ...(command === 'build' ? routerForVisitors : []),
     ],
   },
   server: {
@@ -71,7 +86,13 @@ export default defineConfig({
     // Data addresses would need `data:` in the content security policy.
     assetsInlineLimit: 0,
     sourcemap: false,
-    modulePreload: { polyfill: false },
+    modulePreload: {
+      polyfill: false,
+      // To fetch the parts of a dialog at once, the first page would have to name all of them.
+      resolveDependencies: (file, parts) => (file.includes('-dialog-') ? [] : parts),
+    },
+    // What draws in three dimensions is that large; it is fetched when a visitor asks to turn a part.
+    chunkSizeWarningLimit: 1000,
     rolldownOptions: {
       treeshake: {
         manualPureFunctions: ['defineConfig', 'defineConditions'],
@@ -82,4 +103,4 @@ export default defineConfig({
       },
     },
   },
-});
+}));

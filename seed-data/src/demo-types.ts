@@ -125,6 +125,29 @@ export interface DemoPurchase {
   couponCode: string | null;
   /** The newest revision of the first kit when it was bought, and so the one the buyer holds. */
   boughtAt: string;
+  /** Of one line, a part that the bookkeeper gave back; the files stay. */
+  givenBack?: { kitSlug: string; minor: number; reason: string };
+  business?: { name: string; address: string; vatNumber: string };
+  /** Then the files are not the buyer's. */
+  gift?: { email: string; giver: string; greeting: string };
+  /** Where billing address and card are from, where that is not the buyer's country. */
+  paidFrom?: { billing: string; card: string };
+}
+
+export interface DemoPlan {
+  name: string;
+  words: string;
+  amountMinor: number;
+  /** None: all kits, and those to come. */
+  kitSlugs: string[] | null;
+  keepsAfter: 'nothing' | 'released-during' | 'released-before-end';
+}
+
+export interface DemoPledge {
+  supporterEmail: string;
+  planName: string;
+  /** Its end is asked for already: it runs out with the month. */
+  isEnding: boolean;
 }
 
 export interface DemoFitReport {
@@ -169,6 +192,8 @@ export interface DemoWorkshop {
   purchases: DemoPurchase[];
   posts: DemoPost[];
   fitReports: DemoFitReport[];
+  plans: DemoPlan[];
+  pledges: DemoPledge[];
 }
 
 /** A part together with what draws its mesh. */

@@ -127,6 +127,18 @@ describe('the demo workshop', () => {
     }
   });
 
+  it('has plans of kits it has, and pledges of people it has', () => {
+    const slugs = demoWorkshop.kits.map(({ slug }) => slug);
+    const planNames = demoWorkshop.plans.map(({ name }) => name);
+    for (const { kitSlugs } of demoWorkshop.plans)
+      expect(slugs).toEqual(expect.arrayContaining(kitSlugs ?? []));
+    for (const { supporterEmail, planName } of demoWorkshop.pledges) {
+      expect(planNames).toContain(planName);
+      const person = demoWorkshop.people.find(({ email }) => email === supporterEmail);
+      expect(person?.isVerified).toBe(true);
+    }
+  });
+
   it('has a sign-in for every person and a person for every role', () => {
     expect(demoSignIns.map(({ email, role }) => [email, role])).toEqual(
       demoWorkshop.people.map(({ email, role }) => [email, role]),

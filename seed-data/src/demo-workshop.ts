@@ -7,6 +7,7 @@ import { turnstone } from './kits/turnstone.js';
 import { fitReports } from './fit-reports.js';
 import { people, printers, purchases } from './people.js';
 import { posts } from './posts.js';
+import { plans, pledges } from './pledges.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
 
@@ -49,4 +50,6 @@ export const demoWorkshop: DemoWorkshop = {
   purchases,
   posts,
   fitReports,
+  plans,
+  pledges,
 };

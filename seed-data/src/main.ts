@@ -1,8 +1,10 @@
 import { demoWorkshop } from './demo-workshop.js';
 import { buy } from './load/buy.js';
+import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { reportFit } from './load/report-fit.js';
 import { makePeople } from './load/make-people.js';
+import { beginPledge, makePlan } from './load/pledge.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
 
@@ -25,6 +27,8 @@ const main = async (): Promise<void> => {
     );
   await makePeople(process.env);
   const maker = await signIn(demoSignIns.find((one) => one.role === 'maker')?.email ?? '');
+
+  const bookkeeper = await signIn(demoSignIns.find((one) => one.role === 'bookkeeper')?.email ?? '');
 
   const kitIds = new Map<string, string>();
   for (const kit of demoWorkshop.kits) {
@@ -56,8 +60,25 @@ const main = async (): Promise<void> => {
 
   for (const purchase of demoWorkshop.purchases) {
     const person = demoWorkshop.people.find((one) => one.email === purchase.buyerEmail);
-    if (person) await buy(await signIn(person.email), person, purchase, stripeUrl);
-    say(`${person?.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+    if (!person) continue;
+    const orderId = await buy(await signIn(person.email), person, purchase, stripeUrl);
+    say(`${person.name} bought ${purchase.lines.map((line) => line.kitSlug).join(', ')}`);
+    if (purchase.givenBack) await giveBack(bookkeeper, orderId, purchase.givenBack);
+  }
+
+  const planIds = new Map<string, string>();
+  for (const plan of demoWorkshop.plans) planIds.set(plan.name, await makePlan(maker, plan, kitIds));
+  for (const pledge of demoWorkshop.pledges) {
+    const person = demoWorkshop.people.find((one) => one.email === pledge.supporterEmail);
+    if (person)
+      await beginPledge(
+        await signIn(person.email),
+        person,
+        planIds.get(pledge.planName) ?? '',
+        pledge,
+        stripeUrl,
+      );
+    say(`${person?.name} pledges to ${pledge.planName}`);
   }
 
   for (const report of demoWorkshop.fitReports)

@@ -37,6 +37,21 @@ export const people: DemoPerson[] = [
     countryCode: 'DE',
     isVerified: true,
   },
+  { role: 'buyer', name: 'Enno Rask', email: 'enno.rask@mail.example', countryCode: 'NL', isVerified: true },
+  {
+    role: 'buyer',
+    name: 'Sorrel Vane',
+    email: 'sorrel.vane@mail.example',
+    countryCode: 'FR',
+    isVerified: true,
+  },
+  {
+    role: 'buyer',
+    name: 'Bryony Tarn',
+    email: 'bryony.tarn@mail.example',
+    countryCode: 'AT',
+    isVerified: true,
+  },
   { role: 'buyer', name: 'Rhea Moss', email: 'rhea.moss@mail.example', countryCode: 'FR', isVerified: false },
 ];
 
@@ -74,7 +89,10 @@ export const printers: DemoPrinter[] = [
   },
 ];
 
-/** Pia bought Curlew before its second issue came out: she has parts to reprint. */
+/**
+ * Pia bought Curlew before its second issue came out: she has parts to reprint. Jonas bought it for his school, and
+ * Pia gave Teal away while she was on the road, so that nobody can be sure where she was.
+ */
 export const purchases: DemoPurchase[] = [
   {
     buyerEmail: 'pia.lund@mail.example',
@@ -90,6 +108,34 @@ export const purchases: DemoPurchase[] = [
     ],
     couponCode: 'CHIME2',
     boughtAt: 'Mk 1.0',
+    givenBack: {
+      kitSlug: 'godwit',
+      minor: 350,
+      reason: 'The first issue came without its reed gauge; a quarter goes back.',
+    },
+  },
+  {
+    buyerEmail: 'jonas.abara@mail.example',
+    lines: [{ kitSlug: 'curlew', licence: 'classroom' }],
+    couponCode: null,
+    boughtAt: 'Mk 1.0',
+    business: {
+      name: 'Abara Music School',
+      address: 'Am Siel 12\n26506 Norden',
+      vatNumber: 'DE123456789',
+    },
+  },
+  {
+    buyerEmail: 'pia.lund@mail.example',
+    lines: [{ kitSlug: 'teal', licence: 'personal' }],
+    couponCode: null,
+    boughtAt: 'Mk 1.0',
+    gift: {
+      email: 'rhea.moss@mail.example',
+      giver: 'Pia',
+      greeting: 'For the evenings that come early now.',
+    },
+    paidFrom: { billing: 'SE', card: 'NO' },
   },
   {
     buyerEmail: 'jonas.abara@mail.example',

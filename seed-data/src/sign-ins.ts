@@ -14,5 +14,8 @@ export const demoSignIns: readonly DemoSignIn[] = [
   { role: 'bookkeeper', email: 'ines@saltmarsh.example', passphrase: 'every cent finds its line' },
   { role: 'buyer', email: 'pia.lund@mail.example', passphrase: 'eighteen pipes on a sill' },
   { role: 'buyer', email: 'jonas.abara@mail.example', passphrase: 'chime bars by the window' },
+  { role: 'buyer', email: 'enno.rask@mail.example', passphrase: 'a flute for every tide' },
+  { role: 'buyer', email: 'sorrel.vane@mail.example', passphrase: 'two kits and the kettle' },
+  { role: 'buyer', email: 'bryony.tarn@mail.example', passphrase: 'until the winter is over' },
   { role: 'buyer', email: 'rhea.moss@mail.example', passphrase: 'still waiting for the post' },
 ];

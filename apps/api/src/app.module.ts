@@ -16,6 +16,8 @@ import { MailsModule } from './mails/mails.module.js';
 import { MeasuringModule } from './measuring/measuring.module.js';
 import { PicturesModule } from './pictures/pictures.module.js';
 import { OrdersModule } from './orders/orders.module.js';
+import { PaymentsModule } from './payments/payments.module.js';
+import { SupportersModule } from './supporters/supporters.module.js';
 import { WorkshopModule } from './workshop/workshop.module.js';
 
 @Module({
@@ -27,6 +29,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     JobsModule,
     MailsModule,
     PicturesModule,
+    PaymentsModule,
     ScheduleModule.forRoot(),
     // The rooms, lower ones first.
     AccountsModule,
@@ -34,6 +37,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     MeasuringModule,
     CouponsModule,
     OrdersModule,
+    SupportersModule,
     LedgerModule,
     EntitlementsModule,
     FitModule,

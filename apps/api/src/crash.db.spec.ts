@@ -13,6 +13,8 @@ import { createTestDatabase, type TestDatabase } from './testing/test-database.j
 const ORDERS = 60;
 const KILLS = 10;
 const CAP = 20;
+/** Of an order, in cents, that goes back. */
+const REFUND = 100;
 const main = join(process.cwd(), 'apps/api/dist/main.js');
 
 const freePort = (): Promise<number> =>
@@ -26,8 +28,8 @@ const pause = (milliseconds: number): Promise<void> =>
   new Promise((resolve) => setTimeout(resolve, milliseconds));
 
 /**
- * The API as a process of its own, killed with SIGKILL at ten moments while sixty people order, pay and
- * give up; started again each time. Nobody but the database, the payment service and the mail server
+ * The API as a process of its own, killed with SIGKILL at ten moments while sixty people order, pay, give up
+ * and get money back; started again each time. Nobody but the database, the payment service and the mail server
  * remembers anything.
  */
 describe('killing the API at any moment', () => {
@@ -150,6 +152,7 @@ describe('killing the API at any moment', () => {
     let isOver = false;
     const paid: string[] = [];
     const givenUp: string[] = [];
+    const refunded: string[] = [];
 
     const order = async (number: number): Promise<void> => {
       await pause(Math.random() * 9000);
@@ -181,6 +184,29 @@ describe('killing the API at any moment', () => {
       });
       expect(answer.status).toBe(200);
       paid.push(orderId);
+      if (number % 5 === 0) await askForRefund(orderId);
+    };
+    /** What the workshop writes in one transaction when somebody asks; the rest is the jobs' affair. */
+    const askForRefund = async (orderId: string): Promise<void> => {
+      const line = `SELECT l.id FROM order_lines l JOIN orders o ON o.id = l.order_id WHERE o.id = '${orderId}' AND o.state = 'paid'`;
+      let lines = await rows<{ id: string }>(line);
+      for (; lines.length === 0; lines = await rows(line)) await pause(100);
+      const id = randomUUID();
+      const now = new Date();
+      const connection = await pool.getConnection();
+      await connection.beginTransaction();
+      await connection.query(
+        `INSERT INTO refunds (id, order_id, attempt, origin, state, amount_minor, currency, created_at, updated_at) VALUES (?, ?, ?, 'workshop', 'asked', ?, 'EUR', ?, ?)`,
+        [id, orderId, randomUUID(), REFUND, now, now],
+      );
+      await connection.query('INSERT INTO refund_lines VALUES (?, ?, ?, FALSE)', [id, lines[0]?.id, REFUND]);
+      await connection.query(
+        `INSERT INTO jobs (name, payload, run_at, created_at) VALUES ('orders.carry-out-refund', ?, ?, ?)`,
+        [JSON.stringify({ refundId: id }), now, now],
+      );
+      await connection.commit();
+      connection.release();
+      refunded.push(orderId);
     };
     const killer = async (): Promise<void> => {
       for (let times = 0; times < KILLS; times++) {
@@ -196,7 +222,7 @@ describe('killing the API at any moment', () => {
     // Whatever was under way is taken up again by itself: leases run out, the payment service is asked.
     for (let tries = 0; tries < 600; tries++) {
       const [left] = await rows<{ n: number }>(
-        `SELECT (SELECT COUNT(*) FROM jobs WHERE state IN ('queued', 'running') AND name <> 'orders.reconcile') + (SELECT COUNT(*) FROM mails WHERE state <> 'sent') + ${paid.length} - (SELECT COUNT(*) FROM orders WHERE state = 'paid') AS n`,
+        `SELECT (SELECT COUNT(*) FROM jobs WHERE state IN ('queued', 'running') AND name <> 'orders.reconcile') + (SELECT COUNT(*) FROM refunds WHERE state = 'asked') + (SELECT COUNT(*) FROM mails WHERE state <> 'sent') + ${paid.length} - (SELECT COUNT(*) FROM orders WHERE state = 'paid') AS n`,
       );
       if (Number(left?.n) === 0) break;
       await pause(200);
@@ -224,8 +250,33 @@ describe('killing the API at any moment', () => {
     );
     expect(new Set(receipts.map((one) => one.order_id)).size).toBe(paid.length);
 
-    const recipients = sink.mails.map((mail) => /^To: (.+)$/im.exec(mail)?.[1]?.trim() ?? '');
-    expect(recipients.sort()).toEqual(paidOrders.map((one) => one.email).sort());
+    const emailOf = new Map(paidOrders.map((one) => [one.id, one.email]));
+    const mailedAbout = (subject: RegExp) =>
+      sink.mails
+        .filter((mail) => subject.test(mail))
+        .map((mail) => /^To: (.+)$/im.exec(mail)?.[1]?.trim() ?? '')
+        .sort();
+    expect(mailedAbout(/^Subject: Your files/im)).toEqual(paidOrders.map((one) => one.email).sort());
+    expect(mailedAbout(/^Subject: .*Refund/im)).toEqual(refunded.map((id) => emailOf.get(id)).sort());
+    expect(sink.mails).toHaveLength(paid.length + refunded.length);
+
+    const answer = await fetch(`${stripe.url}/v1/refunds?limit=100`, {
+      headers: { authorization: `Bearer ${stripe.apiKey}` },
+    });
+    const { data } = (await answer.json()) as { data: { amount: number; metadata: { order: string } }[] };
+    expect(data.map((one) => one.metadata.order).sort()).toEqual([...refunded].sort());
+    const notes = await rows<{ order_id: string; number: number; total_minor: number }>(
+      'SELECT order_id, number, total_minor FROM credit_notes ORDER BY number',
+    );
+    expect(notes.map((one) => Number(one.number))).toEqual(refunded.map((_, index) => index + 1));
+    expect(notes.map((one) => one.order_id).sort()).toEqual([...refunded].sort());
+    expect(
+      (await rows<{ id: string }>(`SELECT order_id AS id FROM entitlements WHERE state = 'ended'`))
+        .map((one) => one.id)
+        .sort(),
+    ).toEqual([...refunded].sort());
+    const [sums] = await rows<{ n: string }>('SELECT SUM(refunded_minor) AS n FROM orders');
+    expect(Number(sums?.n)).toBe(refunded.length * REFUND);
 
     const [coupon] = await rows<{ held: number; redeemed: number }>('SELECT held, redeemed FROM coupons');
     const [places] = await rows<{ held: string; redeemed: string }>(

@@ -1,7 +1,9 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.js';
 import { problemStatus, type ProblemCode } from './problems.js';
-import { countryCode, email, filamentColour, id, moment, money, secret } from './values.js';
+import { lineRight, refund } from './refunds.js';
+import { businessBuyer, taxTreatment } from './tax.js';
+import { countryCode, email, filamentColour, id, line, moment, money, secret } from './values.js';
 
 export const basketItem = z.object({ licenceId: id });
 export const couponCode = z
@@ -44,10 +46,27 @@ export const quote = z.object({
       detail: z.string(),
     })
     .nullable(),
+  /** Null until the buyer's country is known, and where nothing is to pay. */
+  tax: z
+    .object({
+      country: countryCode,
+      treatment: taxTreatment,
+      /** Of the buyer's country; null where the shop knows none. */
+      ratePercent: z.string().nullable(),
+      net: money,
+      tax: money,
+    })
+    .nullable(),
 });
 export type Quote = z.output<typeof quote>;
 
-export const quoteBody = z.object({ items: z.array(basketItem).max(30), couponCode: couponCode.optional() });
+export const quoteBody = z.object({
+  items: z.array(basketItem).max(30),
+  couponCode: couponCode.optional(),
+  country: countryCode.optional(),
+  /** Who buys for a business; a number that is no VAT number of the country counts as none. */
+  business: businessBuyer.pick({ vatNumber: true }).optional(),
+});
 
 /**
  * What the buyer ticks before files are handed over at once (Directive 2011/83/EU, art. 16 m). The page
@@ -56,11 +75,28 @@ export const quoteBody = z.object({ items: z.array(basketItem).max(30), couponCo
 export const consentText =
   'Hand the files over at once. I know that I lose my right to withdraw from the purchase when they are handed over.';
 
+/** The whole basket for somebody else. */
+export const giftWish = z.object({
+  email,
+  /** The giver, as the one who gets it knows them. */
+  giver: line.max(80, 'Write at most 80 characters.'),
+  greeting: z
+    .string()
+    .trim()
+    .min(1, 'Write a line to go with it.')
+    .max(300, 'Write at most 300 characters.')
+    // The mail goes to somebody who never asked for it, in the shop's name.
+    .refine((text) => !/https?:|www\.|:\/\//i.test(text), 'Write words alone, no addresses of web pages.'),
+});
+export type GiftWish = z.output<typeof giftWish>;
+
 export const checkoutBody = z.object({
   items: z.array(basketItem).min(1, 'The basket is empty.').max(30),
   couponCode: couponCode.optional(),
   email,
   country: countryCode,
+  business: businessBuyer.optional(),
+  gift: giftWish.optional(),
   /** To `consentText`. */
   hasConsented: z.literal(true, 'Tick the box: files can only be handed over at once with your consent.'),
   /** Sent again after a broken connection, it opens the same checkout, not a second one. */
@@ -87,6 +123,9 @@ export const orderLine = z.object({
   price: money,
   discount: money,
   total: money,
+  /** Of the total, what went back. */
+  refunded: money,
+  right: lineRight,
 });
 
 /** An order as its buyer sees it. */
@@ -104,7 +143,13 @@ export const buyerOrder = z.object({
   subtotal: money,
   discount: money,
   total: money,
+  refunded: money,
+  refunds: z.array(refund),
   tax: z.array(z.object({ ratePercent: z.string(), net: money, tax: money })),
+  taxTreatment,
+  business: businessBuyer.nullable(),
+  /** For whom it was bought; the files are theirs alone. */
+  gift: giftWish.nullable(),
   couponCode: z.string().nullable(),
   isMine: z.boolean(),
 });

@@ -2,7 +2,8 @@ import { z } from 'zod';
 import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { reprintList } from './print-record.js';
-import { email, filamentColour, id, moment, secret, sha256, slug, slugParams } from './values.js';
+import { email, filamentColour, id, moment, pageOf, secret, sha256, slug, slugParams } from './values.js';
+import { rankVoice, room } from './voices.js';
 
 /**
  * What may be fetched: the whole bundle of a revision, its bundle of one clearance, or one document of it.
@@ -43,9 +44,23 @@ export const shelfItem = z.object({
   colour: filamentColour,
   source: entitlementSource,
   since: moment,
+  /** All that holds it on the shelf: one may end and leave the other. */
+  sources: z.array(
+    z.object({
+      source: entitlementSource,
+      since: moment,
+      /** Of a pledge: how far it is paid. */
+      until: moment.nullable(),
+      /** What stays after a pledge: revisions released before this moment. */
+      releasedBefore: moment.nullable(),
+    }),
+  ),
   licenceName: z.string(),
   held: shelfRevision.nullable(),
+  /** The newest one that is theirs. */
   newest: shelfRevision,
+  /** A newer one that a pledge which is over does not include. */
+  newerNotIncluded: z.string().nullable(),
 });
 export type ShelfItem = z.output<typeof shelfItem>;
 
@@ -68,6 +83,10 @@ export const shelfKit = shelfItem.extend({
   documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
   licenceTerms: z.string(),
   cautions: z.string(),
+  /** What the tuner listens for: the voices of the revision held, of the newest where none is. */
+  rank: z.array(rankVoice),
+  room,
+  declaredCents: z.number(),
   downloads: z.array(
     z.object({ at: moment, revision: z.string(), fileName: z.string(), isComplete: z.boolean() }),
   ),
@@ -79,7 +98,8 @@ export const collection = z.object({
   orderNumber: z.string(),
   expiresAt: moment,
   usesLeft: z.int(),
-  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'ended']),
+  /** `suspended`: the payment is in dispute. `ended`: no right of the order is left. */
+  state: z.enum(['open', 'expired', 'used-up', 'replaced', 'suspended', 'ended']),
   kits: z.array(
     z.object({
       slug,
@@ -104,7 +124,10 @@ export const deliveryEndpoints = {
     access: 'signed-in',
     summary: 'One’s own kits',
     query: z.object({ page: z.coerce.number().int().min(1).default(1) }),
-    response: z.object({ items: z.array(shelfItem), page: z.int(), size: z.int(), total: z.int() }),
+    response: pageOf(shelfItem).extend({
+      /** Kits whose downloads rest while a payment is in dispute, by name. */
+      resting: z.array(z.string()),
+    }),
   }),
   'GET /shelf/:slug': endpoint({
     access: 'signed-in',

@@ -5,10 +5,13 @@ import { fitEndpoints } from './fit.js';
 import { healthEndpoints } from './health.js';
 import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
+import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
 import { printRecordEndpoints } from './print-record.js';
+import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
+import { supporterEndpoints } from './supporters.js';
 import { workshopKitEndpoints } from './workshop-kits.js';
 import { workshopSalesEndpoints } from './workshop-sales.js';
 
@@ -24,6 +27,11 @@ export const endpoints = {
   ...workshopSalesEndpoints,
   ...fitEndpoints,
   ...journalEndpoints,
+  ...refundEndpoints,
+  ...workshopKitEndpoints,
+  ...workshopSalesEndpoints,
+  ...ledgerEndpoints,
+  ...supporterEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

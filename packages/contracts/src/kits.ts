@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
-import { filamentColour, id, moment, money, pageOf, pageQuery, slug, slugParams } from './values.js';
+import { filamentColour, id, moment, money, pageOf, pageQuery, sha256, slug, slugParams } from './values.js';
 import { rankVoice, room } from './voices.js';
 
 export const licenceKinds = ['personal', 'small-run', 'classroom'] as const;
@@ -49,6 +49,14 @@ export const drawing = z.object({
 });
 export const drawings = z.object({ front: drawing, side: drawing, top: drawing });
 
+/**
+ * A coarse likeness of a part to turn about, never the printable mesh: how large it is, and the hash that its
+ * address may name so that browsers keep it. Null where there is none.
+ */
+export const previewFields = { previewBytes: z.int().nullable(), previewSha256: sha256.nullable() };
+/** With the preview's hash in `v` the answer may be kept for good. */
+export const previewQuery = z.object({ v: sha256.optional() });
+
 export const licence = z.object({
   id,
   kind: z.enum(licenceKinds),
@@ -90,7 +98,10 @@ export const kitCard = z.object({
   releasedAt: moment,
   compass: z.string(),
   rank: z.array(rankVoice),
+  /** Height of the tallest part as it stands on the bed. */
   tallestPartMm: z.number(),
+  /** The longest side of any part. */
+  longestPartMm: z.number(),
   partCount: z.int(),
   printEstimate: printEstimate.nullable(),
   /** Of the licence for one's own prints, or the cheapest offered. */
@@ -128,6 +139,7 @@ export const kitPart = z.object({
   clearances: z.array(clearance),
   /** Shown on the sheet: the side that tells most about the part. */
   drawing: drawing.nullable(),
+  ...previewFields,
 });
 export type KitPart = z.output<typeof kitPart>;
 
@@ -162,5 +174,12 @@ export const kitEndpoints = {
     summary: 'The parts of a kit’s newest revision, drawn',
     params: slugParams,
     response: z.array(kitPart),
+  }),
+  'GET /kits/:slug/parts/:code/preview': endpoint({
+    access: 'public',
+    summary: 'A part of a kit’s newest revision as a coarse model to turn about (GLB), not to print',
+    params: slugParams.extend({ code: z.string().min(1).max(20) }),
+    query: previewQuery,
+    response: 'stream',
   }),
 };

@@ -12,6 +12,8 @@ describe('the permission table', () => {
     expect(may('helper', 'orders:read')).toBe(false);
     expect(may('helper', 'orders:refund')).toBe(false);
     expect(may('helper', 'coupons:read')).toBe(false);
+    expect(may('helper', 'supporters:read')).toBe(false);
+    expect(may('bookkeeper', 'plans:write')).toBe(false);
     expect(may('bookkeeper', 'kits:write')).toBe(false);
     expect(may('bookkeeper', 'revisions:release')).toBe(false);
     expect(may('bookkeeper', 'orders:read')).toBe(true);

@@ -22,8 +22,10 @@ export const email = z
 export const sha256 = z.string().regex(/^[0-9a-f]{64}$/);
 /** ISO 8601 in UTC. */
 export const moment = z.iso.datetime();
+/** A day without a time, `2026-12-31`. */
+export const day = z.iso.date('Choose a day.');
 /** ISO 3166-1 alpha-2. */
-export const countryCode = z.string().regex(/^[A-Z]{2}$/);
+export const countryCode = z.string().regex(/^[A-Z]{2}$/, 'Choose a country.');
 export const currencyCode = z.string().regex(/^[A-Z]{3}$/);
 export const money = z.object({ minor: z.int(), currency: currencyCode });
 export const minor = z.int().min(0).max(100_000_000);

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { variantClearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
-import { licence, licenceKinds, revisionState } from './kits.js';
+import { licence, licenceKinds, previewQuery, revisionState } from './kits.js';
 import {
   filamentColour,
   id,
@@ -194,6 +194,13 @@ export const workshopKitEndpoints = {
     params: idParams('revisionId', 'partId'),
     response: null,
     status: 204,
+  }),
+  'GET /workshop/revisions/:revisionId/parts/:partId/preview': endpoint({
+    access: 'kits:read',
+    summary: 'A part of any revision as a coarse model to turn about (GLB)',
+    params: idParams('revisionId', 'partId'),
+    query: previewQuery,
+    response: 'stream',
   }),
   'PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance': endpoint({
     access: 'revisions:write',

@@ -6,6 +6,7 @@ import {
   drawings,
   hardwareList,
   orientations,
+  previewFields,
   printSpec,
   revisionState,
   sizeMm,
@@ -73,8 +74,11 @@ export const part = z.object({
   isGauge: z.boolean(),
   file: revisionFile.nullable(),
   drawings: drawings.nullable(),
+  ...previewFields,
   /** The part in other clearances, tightest first; `file` is the zero. */
-  variants: z.array(z.object({ clearance: variantClearance, file: revisionFile })),
+  variants: z.array(
+    z.object({ clearance: variantClearance, file: revisionFile, drawings: drawings.nullable() }),
+  ),
 });
 export type Part = z.output<typeof part>;
 
@@ -106,6 +110,8 @@ export const deviation = z.object({
   placeIsOn: z.enum(['before', 'after']).nullable(),
   /** How the part as a whole moved in its file; null where it has another shape. */
   movedMm: sizeMm.nullable(),
+  /** Which clearance this is of, where the part comes in several. */
+  clearance: clearance.nullable(),
   boxMm,
   earlierBoxMm: boxMm,
   /** A sentence for a maker: "up to 0.42 mm, at the top (12.0, 3.5, 41.0 mm)", or why nobody knows. */

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { buyerOrder, couponCode, orderState } from './basket.js';
 import { endpoint } from './endpoint.js';
+import { dispute, workshopRefund } from './refunds.js';
 import { countryCode, id, idParams, line, minor, moment, money, pageOf, pageQuery } from './values.js';
 
 /** What a coupon takes off: an exact fraction (a third is 1/3, 15 % is 15/100) or a fixed amount. */
@@ -25,6 +26,10 @@ export const couponBody = z
     endsAt: moment.nullable(),
     cap: z.int().min(1).max(1_000_000).nullable(),
     perBuyer: z.int().min(1).max(1000).nullable(),
+    /** Only for people whose pledge is current. */
+    isForSupporters: z.boolean().default(false),
+    /** The sum of the basket, before the discount, from which on the coupon holds. */
+    minBasketMinor: minor.min(1).nullable().default(null),
     isAnnounced: z.boolean(),
     isActive: z.boolean().default(true),
   })
@@ -35,6 +40,14 @@ export const couponBody = z
   .refine((one) => !one.startsAt || !one.endsAt || one.startsAt < one.endsAt, {
     path: ['endsAt'],
     message: 'The end must come after the start.',
+  })
+  .refine((one) => !one.cap || !one.perBuyer || one.perBuyer <= one.cap, {
+    path: ['perBuyer'],
+    message: 'One buyer cannot have more places than there are in all.',
+  })
+  .refine((one) => !one.isForSupporters || !one.isAnnounced, {
+    path: ['isAnnounced'],
+    message: 'A coupon for supporters is not announced in the shop. Tell supporters of it in a letter.',
   });
 
 export const coupon = z.object({
@@ -47,6 +60,8 @@ export const coupon = z.object({
   endsAt: moment.nullable(),
   cap: z.int().nullable(),
   perBuyer: z.int().nullable(),
+  isForSupporters: z.boolean(),
+  minBasket: money.nullable(),
   isAnnounced: z.boolean(),
   isActive: z.boolean(),
   held: z.int(),
@@ -57,6 +72,16 @@ export const coupon = z.object({
 });
 export type Coupon = z.output<typeof coupon>;
 
+/** Places taken on one day, by what became of them since. Days without any are left out. */
+export const couponDay = z.object({
+  day: z.string(),
+  redeemed: z.int(),
+  held: z.int(),
+  givenBack: z.int(),
+  takenOff: money,
+});
+export type CouponDay = z.output<typeof couponDay>;
+
 export const orderRow = z.object({
   id,
   number: z.string(),
@@ -64,7 +89,9 @@ export const orderRow = z.object({
   email: z.string(),
   country: countryCode,
   kits: z.array(z.string()),
+  discount: money,
   total: money,
+  refunded: money,
   couponCode: z.string().nullable(),
   receiptNumber: z.string().nullable(),
   flags: z.array(z.string()),
@@ -72,10 +99,15 @@ export const orderRow = z.object({
   paidAt: moment.nullable(),
 });
 
+/** Orders of which money went back, also in part; orders whose payment was ever in dispute. */
+export const moneyBack = z.enum(['refunded', 'disputed']);
+
 export const orderHistoryEntry = z.object({ at: moment, what: z.string(), detail: z.string() });
 export const workshopOrder = buyerOrder.extend({
   country: countryCode,
   flags: z.array(z.string()),
+  refunds: z.array(workshopRefund),
+  disputes: z.array(dispute),
   paymentSessionId: z.string().nullable(),
   paymentIntentId: z.string().nullable(),
   consentText: z.string(),
@@ -109,6 +141,14 @@ export const holder = z.object({
   downloads: z.int(),
 });
 
+const orderFilters = {
+  state: orderState.optional(),
+  moneyBack: moneyBack.optional(),
+  /** `1`: only those that staff should look at. */
+  flagged: z.enum(['1']).optional(),
+  couponId: id.optional(),
+};
+
 export const workshopSalesEndpoints = {
   'GET /workshop/holders': endpoint({
     access: 'buyers:read',
@@ -140,6 +180,12 @@ export const workshopSalesEndpoints = {
     params: idParams('couponId'),
     response: coupon,
   }),
+  'GET /workshop/coupons/:couponId/uses': endpoint({
+    access: 'coupons:read',
+    summary: 'How a coupon was used, day by day, oldest first',
+    params: idParams('couponId'),
+    response: z.array(couponDay),
+  }),
   'PUT /workshop/coupons/:couponId': endpoint({
     access: 'coupons:write',
     summary: 'Change a coupon',
@@ -151,9 +197,7 @@ export const workshopSalesEndpoints = {
     access: 'orders:read',
     summary: 'Orders, filtered, searched, paged',
     query: pageQuery.extend({
-      state: orderState.optional(),
-      /** `1`: only those that staff should look at. */
-      flagged: z.enum(['1']).optional(),
+      ...orderFilters,
       sort: z.enum(['placedAt', 'total', 'number']).default('placedAt'),
       order: z.enum(['asc', 'desc']).default('desc'),
     }),
@@ -162,7 +206,7 @@ export const workshopSalesEndpoints = {
   'GET /workshop/orders.csv': endpoint({
     access: 'orders:read',
     summary: 'The same orders as CSV',
-    query: pageQuery.extend({ state: orderState.optional(), flagged: z.enum(['1']).optional() }),
+    query: pageQuery.extend(orderFilters),
     response: 'stream',
   }),
   'GET /workshop/orders/:orderId': endpoint({

@@ -1,4 +1,5 @@
 import type { Money } from '@windchest/money';
+import type { PledgeMessage } from './pledge-message.js';
 
 /** The workshop as a mail shows it. `locale` is a language tag for amounts and dates, such as `en-GB`. */
 export type EmailWorkshop = {
@@ -60,6 +61,10 @@ export type OrderPaidMessage = {
   couponCode?: string;
   total: Money;
   tax: TaxLine[];
+  /** What is to be said where no tax is charged. */
+  taxNote?: string;
+  /** Bought for somebody else: the address that has the files. The buyer's mail then hands nothing over. */
+  giftTo?: string;
   link: string;
   linkDays: number;
   linkUses: number;
@@ -76,17 +81,42 @@ export type NewDownloadLinkMessage = {
   kits: string[];
 };
 
-/** `endedKits` leave the shelf with this refund; `keptKits` stay although money went back. */
+/**
+ * `endedKits` leave the shelf with this refund; `keptKits` stay although money went back. `cause`: the workshop gave
+ * it back, or the buyer's bank took it back in a dispute. `lines` say what went back for which kit.
+ */
 export type OrderRefundedMessage = {
   template: 'order-refunded';
+  cause?: 'refund' | 'dispute';
   name?: string;
   orderNumber: string;
   receiptNumber: string;
   creditNoteNumber: string;
   amount: Money;
   tax?: TaxLine[];
+  lines?: { kit: string; licence: string; amount: Money; endsRight: boolean }[];
+  /** It lowered what was paid, and stays used. */
+  couponCode?: string;
   endedKits: string[];
   keptKits?: string[];
+  /** Bought for somebody else, whose rights these are. */
+  giftTo?: string;
+  orderLink: string;
+};
+
+/**
+ * To staff: a buyer's bank asks for the money of an order back, or has decided. `reason` is the payment service's own
+ * word; `answerBy` an ISO 8601 instant until which evidence may be handed in there.
+ */
+export type PaymentDisputedMessage = {
+  template: 'payment-disputed';
+  name: string;
+  orderNumber: string;
+  buyer: string;
+  stand: 'inquiry' | 'open' | 'won' | 'lost' | 'closed';
+  amount: Money;
+  reason: string;
+  answerBy?: string;
   orderLink: string;
 };
 
@@ -128,9 +158,10 @@ export type RevisionWithdrawnMessage = {
   link: string;
 };
 
-/** `from` is the giver; without it the kit comes from the workshop itself. `note` is the giver's own words. */
-export type GiftReceivedMessage = KitTitle & {
+/** `from` is the giver; without it the kits come from the workshop itself. `note` is the giver's own words. */
+export type GiftReceivedMessage = {
   template: 'gift-received';
+  kits: KitTitle[];
   name?: string;
   from?: string;
   note?: string;
@@ -173,11 +204,13 @@ export type EmailMessage =
   | OrderPaidMessage
   | NewDownloadLinkMessage
   | OrderRefundedMessage
+  | PaymentDisputedMessage
   | StaffInviteMessage
   | RevisionReleasedMessage
   | RevisionWithdrawnMessage
   | GiftReceivedMessage
   | FitAnsweredMessage
-  | FitFixedMessage;
+  | FitFixedMessage
+  | PledgeMessage;
 
 export type EmailTemplate = EmailMessage['template'];

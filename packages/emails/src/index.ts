@@ -13,6 +13,7 @@ export type {
   OrderRefundedMessage,
   PaidLine,
   PassphraseChangedMessage,
+  PaymentDisputedMessage,
   RenderedEmail,
   ReprintRow,
   ResetPassphraseMessage,
@@ -23,3 +24,4 @@ export type {
   TaxLine,
   VerifyAddressMessage,
 } from './email-message.js';
+export type { PledgeMessage } from './pledge-message.js';

@@ -94,10 +94,23 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'order-paid': true,
     'new-download-link': true,
     'order-refunded': true,
+    'payment-disputed': true,
     'staff-invite': true,
     'revision-released': true,
     'revision-withdrawn': true,
     'gift-received': true,
+    'fit-answered': true,
+    'fit-fixed': true,
+    'pledge-began': true,
+    'pledge-receipt': true,
+    'pledge-payment-failed': true,
+    'pledge-grace-ends-soon': true,
+    'pledge-lapsed': true,
+    'pledge-will-end': true,
+    'pledge-ended': true,
+    'pledge-paused': true,
+    'pledge-resumes-soon': true,
+    'pledge-plan-changes': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(
     new Set(Object.keys(templates)),
@@ -178,11 +191,35 @@ describe('the mail of a refund', () => {
     expect(text).toContain('your right to the files of Curlew ends. It is no longer on your shelf.');
     expect(text).toContain('Reed Bunting stays on your shelf.');
     expect(text).toContain('Credit note: 2026-C00012');
+    expect(text).toContain('The coupon FIRSTWIND that lowered the price stays used.');
   });
 
   it('says neither where staff keep everything as it was', () => {
     const message = sampleOf('order-refunded', { endedKits: [], keptKits: [] });
     expect(renderEmail(message, sampleWorkshop).text).not.toContain('shelf');
+  });
+
+  it('names the bank where it took the money back in a dispute', () => {
+    const { subject, text } = renderEmail(sampleOf('order-refunded', { cause: 'dispute' }), sampleWorkshop);
+    expect(subject).toBe('Credit note over €21.00 for order W-2026-0417');
+    expect(unwrapped(text)).toContain('Your bank has given you back €21.00 that you had disputed.');
+  });
+});
+
+describe('the mail of a dispute', () => {
+  const text = (message: object = {}): string =>
+    unwrapped(renderEmail(sampleOf('payment-disputed', message), sampleWorkshop).text);
+
+  it('says what the bank has done, what rests and until when to answer', () => {
+    expect(text()).toContain('has taken €24.00 back until it has decided. Downloads of this order rest');
+    expect(text()).toContain('Reason given: product not received');
+    expect(text()).toContain('Answer by: 10 December 2026');
+  });
+
+  it('asks for no answer once it is decided', () => {
+    expect(text({ stand: 'won' })).toContain('€24.00 stays with the workshop.');
+    expect(text({ stand: 'won' })).not.toContain('Answer by');
+    expect(text({ stand: 'lost' })).toContain('A credit note is written');
   });
 });
 
@@ -211,6 +248,8 @@ describe('the mail of a new revision', () => {
 });
 
 describe('hostile input', () => {
+  /** Told apart by the code, never shown. */
+  const WORDS_OF_OURS = ['template', 'currency', 'stand', 'cause', 'keeps'];
   const attack = `<img src=x onerror="alert('1')">&amp;`;
 
   it('is escaped wherever a message or the workshop carries it', () => {
@@ -227,7 +266,7 @@ describe('hostile input', () => {
       return Object.fromEntries(
         Object.entries(value).map(([key, item]: [string, unknown]) => [
           key,
-          key === 'template' || key === 'currency' ? item : poisoned(item),
+          WORDS_OF_OURS.includes(key) ? item : poisoned(item),
         ]),
       );
     };
@@ -281,6 +320,41 @@ describe('hostile input', () => {
     const long = text.split('\n').filter((line) => line.length > 78 && !line.startsWith('https://'));
     expect(long).toEqual([]);
     expect(text.replace(/[^o]/g, '').length).toBeGreaterThanOrEqual(500);
+  });
+});
+
+describe('a gift', () => {
+  const gift = sampleMessages.find(({ title }) => title.includes('gift'))?.message;
+  if (gift?.template !== 'order-paid') throw new Error('There is no sample of a gift.');
+
+  it('tells its buyer who has the files, and hands them no link', () => {
+    const { subject, html, text } = renderEmail(gift, sampleWorkshop);
+    expect(subject).toBe('Your gift is on its way: Curlew');
+    for (const form of [html, text]) {
+      expect(form).toContain('wren@mail.example');
+      expect(form).not.toContain('/get/');
+      expect(form).not.toContain('download page');
+      expect(form).toContain(gift.orderLink);
+    }
+    expect(unwrapped(text)).toContain('Reverse charge: your business owes the VAT in its own country.');
+  });
+
+  it('names all its kits to the one who gets it', () => {
+    const kits = ['Curlew', 'Knot', 'Teal'].map((kit) => ({
+      kit,
+      licence: 'personal prints',
+      revision: 'Mk 1.0',
+    }));
+    const { subject, text } = renderEmail(sampleOf('gift-received', { kits }), sampleWorkshop);
+    expect(subject).toBe('Marlow gives you Curlew and 2 more kits');
+    expect(unwrapped(text)).toContain('Marlow gives you Curlew, Knot and Teal, musical instruments');
+    expect(unwrapped(text)).toContain('Knot Mk 1.0, with the licence “personal prints”.');
+  });
+
+  it('says whose rights end when it is refunded', () => {
+    const { text } = renderEmail(sampleOf('order-refunded', { giftTo: 'wren@mail.example' }), sampleWorkshop);
+    expect(unwrapped(text)).toContain('the right of wren@mail.example to the files of');
+    expect(text).not.toContain('your shelf');
   });
 });
 

@@ -4,9 +4,12 @@ import { plainStrings } from './plain-text.js';
 import { renderHtml } from './render-html.js';
 import { renderText } from './render-text.js';
 import * as accountMails from './templates/account-mails.js';
+import * as disputeMails from './templates/dispute-mails.js';
 import * as deliveryMails from './templates/delivery-mails.js';
 import * as fitMails from './templates/fit-mails.js';
 import * as orderMails from './templates/order-mails.js';
+import * as pledgeMails from './templates/pledge-mails.js';
+import * as pledgeRestMails from './templates/pledge-rest-mails.js';
 
 function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent {
   switch (message.template) {
@@ -26,6 +29,8 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return deliveryMails.newDownloadLink(message);
     case 'order-refunded':
       return orderMails.orderRefunded(message, workshop);
+    case 'payment-disputed':
+      return disputeMails.paymentDisputed(message, workshop);
     case 'staff-invite':
       return accountMails.staffInvite(message, workshop);
     case 'revision-released':
@@ -38,6 +43,24 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return fitMails.fitAnswered(message);
     case 'fit-fixed':
       return fitMails.fitFixed(message);
+    case 'pledge-began':
+      return pledgeMails.pledgeBegan(message, workshop);
+    case 'pledge-receipt':
+      return pledgeMails.pledgeReceipt(message, workshop);
+    case 'pledge-payment-failed':
+    case 'pledge-grace-ends-soon':
+      return pledgeMails.pledgeUnpaid(message, workshop);
+    case 'pledge-plan-changes':
+      return pledgeMails.pledgePlanChanges(message, workshop);
+    case 'pledge-lapsed':
+    case 'pledge-ended':
+      return pledgeRestMails.pledgeOver(message);
+    case 'pledge-will-end':
+      return pledgeRestMails.pledgeWillEnd(message, workshop);
+    case 'pledge-paused':
+      return pledgeRestMails.pledgePaused(message, workshop);
+    case 'pledge-resumes-soon':
+      return pledgeRestMails.pledgeResumesSoon(message, workshop);
   }
 }
 

@@ -89,6 +89,12 @@ export const texts = {
     paid: (total: string): string => `Thank you. Your payment of ${total} has arrived.`,
     free: 'Thank you. There was nothing to pay.',
     button: 'Open the download page',
+    giftSubject: (kits: readonly string[]): string => `Your gift is on its way: ${kitsInShort(kits)}`,
+    giftPreheader: (order: string, total: string): string => `Order ${order}, ${total}.`,
+    giftHeading: 'Your gift is on its way',
+    giftSent: (to: string, kits: readonly string[]): string =>
+      `We have written to ${to}, with your line and a link to the files of ${listOf(kits)}. The files are theirs alone.`,
+    openOrder: 'Open your order',
     limits: (linkDays: number, linkUses: number): string =>
       `${linkLimits(linkDays, linkUses)} After that, get a new one on the page of your order.`,
     lineDetail: (revision: string, licence: string, discount: string | undefined): string =>
@@ -119,10 +125,23 @@ export const texts = {
     heading: (amount: string): string => `${amount} is on its way back`,
     body: (amount: string): string =>
       `${amount} goes back to the card or account you paid with. The bank may take some days to show it.`,
+    disputeSubject: (amount: string, order: string): string =>
+      `Credit note over ${amount} for order ${order}`,
+    disputeHeading: 'Your bank has decided',
+    disputeBody: (amount: string): string =>
+      `Your bank has given you back ${amount} that you had disputed. Here is the credit note for it.`,
+    lineDetail: (licence: string, endsRight: boolean): string =>
+      endsRight ? `${licence}, right to the files ends` : licence,
+    total: 'Goes back',
+    couponIsSpent: (code: string): string => `The coupon ${code} that lowered the price stays used.`,
     ended: (kits: readonly string[]): string =>
       kits.length === 1
         ? `With this refund your right to the files of ${listOf(kits)} ends. It is no longer on your shelf.`
         : `With this refund your right to the files of ${listOf(kits)} ends. They are no longer on your shelf.`,
+    giftEnded: (to: string, kits: readonly string[]): string =>
+      `With this refund the right of ${to} to the files of ${listOf(kits)} ends.`,
+    giftKept: (to: string, kits: readonly string[]): string =>
+      `${listOf(kits)} ${kits.length === 1 ? 'stays' : 'stay'} with ${to}.`,
     kept: (kits: readonly string[]): string =>
       `${listOf(kits)} ${kits.length === 1 ? 'stays' : 'stay'} on your shelf.`,
     button: 'Open your order',
@@ -132,6 +151,41 @@ export const texts = {
     creditNoteLabel: 'Credit note',
     amountLabel: 'Refunded',
     reason: 'You get this because money for an order of yours was refunded.',
+  },
+
+  paymentDisputed: {
+    subjects: {
+      inquiry: (order: string): string => `The bank asks about the payment of order ${order}`,
+      open: (order: string): string => `Dispute over order ${order}: answer it in time`,
+      won: (order: string): string => `Dispute over order ${order}: decided for the workshop`,
+      lost: (order: string): string => `Dispute over order ${order}: lost`,
+      closed: (order: string): string => `The bank’s question about order ${order} is closed`,
+    },
+    headings: {
+      inquiry: 'The bank asks about a payment',
+      open: 'A payment is in dispute',
+      won: 'The dispute is won',
+      lost: 'The dispute is lost',
+      closed: 'The question is closed',
+    },
+    bodies: {
+      inquiry: (amount: string): string =>
+        `The buyer’s bank asks about ${amount}. No money is taken yet, and the buyer’s files stay open. Answer at the payment service, or give the money back.`,
+      open: (amount: string): string =>
+        `The buyer’s bank has taken ${amount} back until it has decided. Downloads of this order rest meanwhile. Hand in at the payment service what shows that the files were asked for and fetched; the order’s page has the consent and the downloads.`,
+      won: (amount: string): string => `${amount} stays with the workshop. The buyer’s files are open again.`,
+      lost: (amount: string): string =>
+        `${amount} stays with the buyer. A credit note is written and the right to the files has ended.`,
+      closed: (): string => 'No money was taken. Nothing is left to do.',
+    },
+    preheader: (buyer: string): string => `Bought by ${buyer}.`,
+    button: 'Open the order',
+    orderLabel: 'Order',
+    buyerLabel: 'Buyer',
+    amountLabel: 'Amount',
+    reasonLabel: 'Reason given',
+    answerByLabel: 'Answer by',
+    reason: 'You get this because you look after the workshop’s money. These mails cannot be turned off.',
   },
 
   staffInvite: {
@@ -182,14 +236,18 @@ export const texts = {
   },
 
   giftReceived: {
-    subject: (from: string, kit: string): string => `${from} gives you ${kit}`,
+    subject: (from: string, kits: readonly string[]): string => `${from} gives you ${kitsInShort(kits)}`,
     preheader: 'Files to print and build an instrument.',
-    heading: (kit: string): string => `${kit} is yours`,
-    body: (from: string, kit: string, revision: string, licence: string): string =>
-      `${from} gives you ${kit}, a musical instrument as files to print and build. You get ${revision}, with the licence “${licence}”.`,
+    heading: (kits: readonly string[]): string => `${listOf(kits)} ${kits.length === 1 ? 'is' : 'are'} yours`,
+    body: (from: string, kits: readonly string[]): string =>
+      kits.length === 1
+        ? `${from} gives you ${listOf(kits)}, a musical instrument as files to print and build.`
+        : `${from} gives you ${listOf(kits)}, musical instruments as files to print and build.`,
+    kit: (kit: string, revision: string, licence: string): string =>
+      `${kit} ${revision}, with the licence “${licence}”.`,
     button: 'Open the download page',
     limits: (linkDays: number, linkUses: number): string =>
-      `${linkLimits(linkDays, linkUses)} To keep the kit and get later revisions, make an account with this address.`,
+      `${linkLimits(linkDays, linkUses)} Make an account with this address, and what you were given stands on your shelf, with all later revisions.`,
     cautions: 'Before you print and play',
     reason: (from: string): string => `You get this because ${from} entered this address for a gift.`,
   },

@@ -65,6 +65,38 @@ describe('drawing a part', () => {
     });
   });
 
+  it('draws a small round recess whole, once, though its facets are hardly a cell long', () => {
+    const [radius, sides] = [1.3, 32];
+    const at = (i: number, r: number, z: number): number[] => {
+      const turn = (2 * Math.PI * i) / sides;
+      return [r * Math.cos(turn), r * Math.sin(turn), z];
+    };
+    const band = (r0: number, z0: number, r1: number, z1: number): number[] =>
+      Array.from({ length: sides }, (_, i) => [
+        ...[at(i, r0, z0), at(i, r1, z1), at(i + 1, r1, z1)].flat(),
+        ...(r0 > 0 ? [at(i, r0, z0), at(i + 1, r1, z1), at(i + 1, r0, z0)].flat() : []),
+      ]).flat();
+    // A disc with a well in its middle: floor, wall, top, rim, bottom.
+    const disc = [
+      ...band(0, 8, radius, 8),
+      ...band(radius, 8, radius, 10),
+      ...band(radius, 10, 100, 10),
+      ...band(100, 10, 100, 0),
+      ...band(0, 0, 100, 0),
+    ];
+    const loops = loopsOf(outline(meshOf(disc), 'top').edges);
+    const round = loops.filter((loop) => loop.every((value) => Math.abs(value - 100) < 2));
+    const lengths = round.map((loop) => {
+      let length = 0;
+      for (let i = 2; i < loop.length; i += 2)
+        length += Math.hypot(loop[i]! - loop[i - 2]!, loop[i + 1]! - loop[i - 1]!);
+      return length;
+    });
+    const drawnMm = lengths.reduce((sum, one) => sum + one, 0);
+    expect(drawnMm).toBeGreaterThan(0.9 * 2 * Math.PI * radius);
+    expect(drawnMm).toBeLessThan(1.3 * 2 * Math.PI * radius);
+  });
+
   it('hides what lies behind', () => {
     const behind = meshOf([...boxCorners([40, 5, 20]), ...boxCorners([10, 5, 10], [15, 20, 5])]);
     expect(outline(behind, 'front').edges).toBe('');

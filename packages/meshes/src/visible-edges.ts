@@ -8,6 +8,7 @@ export type Segment = readonly [x0: number, y0: number, x1: number, y1: number];
 /** Edges seen this obliquely, as a share of the triangle's size, count as seen from the edge. */
 const EDGE_ON = 1e-7;
 const DIRECTIONS = 4;
+const SHORTEST_CELLS = 0.01;
 
 /** End points of edges that may lie on the outline from this side: creases, borders, turns of the surface. */
 export function* edgesToDraw(mesh: DrawableMesh, projection: Projection): Generator<number> {
@@ -87,6 +88,8 @@ export function visiblePieces(buffer: DepthBuffer, projection: Projection, halfE
   const dx = points[b]! - x0,
     dy = points[b + 1]! - y0,
     dz = points[b + 2]! - z0;
+  // An edge along the line of sight is a point, and would only break the lines that pass it.
+  if (Math.hypot(dx, dy) < SHORTEST_CELLS * buffer.cellMm) return [];
   const samples = sampleCount(buffer, dx, dy);
   const pieces: Segment[] = [];
   let open = -1;

@@ -6,5 +6,6 @@ export { spread } from './spread.js';
 export { applyCoupon, type CouponLine, type CouponWorth } from './coupon.js';
 export { taxFromGross, taxFromNet, type TaxSplit } from './tax.js';
 export { refundOf, type RefundableLine } from './refund.js';
+export { taxOfRefund } from './refund-tax.js';
 export { decimalText, formatMoney, formatPercent } from './format-money.js';
 export { parseMoney } from './parse-money.js';

@@ -29,7 +29,7 @@ export { predict, uncertaintyOf, type Prediction } from './predict.js';
 export { SPEED_FORMULAS, type SpeedFormula, type SpeedFormulaId } from './speed-formulas.js';
 export { speedOfSound, type AirInput } from './speed-of-sound.js';
 export { stringHz, stringTensionN } from './strings.js';
-export { trimAdvice, type TrimAdvice, type TrimOptions } from './trim.js';
+export { targetInRoomHz, trimAdvice, type TrimAdvice, type TrimOptions } from './trim.js';
 export type { UncertaintyTerm } from './uncertainty.js';
 export { helmholtzHz, neckSoundingMm } from './vessel.js';
 export {

@@ -69,7 +69,14 @@ export function trimAdvice(
   return { action: cents < 0 ? 'trim' : 'reprint-longer', mm: Math.abs(mm), cents, dimension };
 }
 
-function targetInRoomHz(voice: Voice, note: string, room: Room, tunedAtC: number | undefined): number {
+/**
+ * The pitch a voice should have in a room. A pipe or vessel made for another temperature (`tunedAtC`) should there
+ * sound its note moved with the speed of sound; bars, tines and strings, and all voices without `tunedAtC`, the
+ * note itself.
+ * @returns Hz
+ * @throws VoicingError `bad-note`, `bad-number`, `out-of-range`
+ */
+export function targetInRoomHz(voice: Voice, note: string, room: Room, tunedAtC?: number): number {
   const noteHz = noteToHz(note, room);
   const isAirVoice = voice.kind === 'stopped-pipe' || voice.kind === 'open-pipe' || voice.kind === 'vessel';
   if (tunedAtC === undefined || !isAirVoice) return noteHz;

@@ -1,4 +1,5 @@
 import type { DemoPerson, DemoPurchase } from '../demo-types.js';
+import { pay } from './pay.js';
 import { waitFor, type ShopBrowser } from './shop-browser.js';
 
 interface KitAnswer {
@@ -8,13 +9,13 @@ interface ShelfAnswer {
   newest: { id: string };
 }
 
-/** Buys as a person would: basket, checkout, payment page, shelf, bundle. */
+/** Buys as a person would: basket, checkout, payment page, shelf, bundle. @returns the order's id */
 export const buy = async (
   buyer: ShopBrowser,
   person: DemoPerson,
   purchase: DemoPurchase,
   stripeUrl: string,
-): Promise<void> => {
+): Promise<string> => {
   const items = await Promise.all(
     purchase.lines.map(async ({ kitSlug, licence }) => {
       const { licences } = await buyer.get<KitAnswer>(`/kits/${kitSlug}`);
@@ -32,35 +33,23 @@ export const buy = async (
     ...(purchase.couponCode ? { couponCode: purchase.couponCode } : {}),
     email: person.email,
     country: person.countryCode,
+    ...(purchase.business ? { business: purchase.business } : {}),
+    ...(purchase.gift ? { gift: purchase.gift } : {}),
     hasConsented: true,
     attempt: crypto.randomUUID(),
   });
-  if (paymentUrl) await pay(stripeUrl, paymentUrl, person);
+  if (paymentUrl) await pay(stripeUrl, paymentUrl, person, purchase.paidFrom);
   await waitFor(
     'The payment',
     () => buyer.get<{ state: string }>(`/orders/${orderId}?key=${orderKey}`),
     (order) => order.state === 'paid',
   );
 
+  if (purchase.gift) return orderId;
   for (const { kitSlug } of purchase.lines) {
     const { newest } = await buyer.get<ShelfAnswer>(`/shelf/${kitSlug}`);
     const grant = await buyer.post<{ url: string }>('/shelf/grants', { kitSlug, revisionId: newest.id });
     await buyer.download(grant.url);
   }
-};
-
-const pay = async (stripeUrl: string, paymentUrl: string, person: DemoPerson): Promise<void> => {
-  const session = /\/(cs_[A-Za-z0-9_]+)/.exec(paymentUrl)?.[1];
-  const response = await fetch(`${stripeUrl}/control/sessions/${session}/pay`, {
-    method: 'POST',
-    headers: { 'Content-Type': 'application/json' },
-    body: JSON.stringify({
-      country: person.countryCode,
-      cardCountry: person.countryCode,
-      email: person.email,
-      outcome: 'succeed',
-    }),
-  });
-  if (!response.ok)
-    throw new Error(`The payment stand-in answered ${response.status}: ${await response.text()}`);
+  return orderId;
 };

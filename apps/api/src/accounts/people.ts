@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Role } from '@windchest/contracts';
+import { permissionTable, type Permission, type Role } from '@windchest/contracts';
 import { Op, type WhereOptions } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { newId } from '../database/columns.js';
@@ -89,6 +89,15 @@ export class People {
       ],
       limit: query.size,
       offset: (query.page - 1) * query.size,
+    });
+  }
+
+  /** Everybody whose role carries a permission and whose address is proved, oldest account first. */
+  allowedTo(permission: Permission, tx?: Tx): Promise<Person[]> {
+    return this.people.findAll({
+      where: { role: [...permissionTable[permission]], verifiedAt: { [Op.ne]: null } },
+      order: [['createdAt', 'ASC']],
+      transaction: tx ?? null,
     });
   }
 

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Answer, Clearance, FilamentColour } from '@windchest/contracts';
+import type { Answer, Clearance, FilamentColour, KitCard, RankVoice } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
 import { ChangedBundles } from './changed-parts/changed-bundles.js';
@@ -8,14 +8,16 @@ import { Differences } from './comparison/differences.js';
 import type { NetRow } from './comparison/net-rows.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
+import { rankOf } from './kits/rank.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
 import { PrintSheets } from './print/print-sheets.js';
+import { ShopKits } from './kits/shop-kits.js';
 import { ReleasedBundles, type BundleFile, type ClearanceBundle } from './release/released-bundles.js';
 import { servable, type ServableFile } from './release/stored-file-of.js';
 import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
-import { Revision } from './revisions/revision.model.js';
+import { Revision, type Room } from './revisions/revision.model.js';
 
 export type { BundleFile, NetRow, OfferedLicence, ServableFile };
 
@@ -43,6 +45,13 @@ export interface ReleasedRevision {
   readonly withdrawnReason: string | null;
 }
 
+/** What a revision is meant to sound like. */
+export interface Voicing {
+  readonly rank: RankVoice[];
+  readonly room: Room;
+  readonly declaredCents: number;
+}
+
 /** What other rooms may know of the catalogue: plain facts, nothing of a draft. */
 @Injectable()
 export class CatalogueReader {
@@ -56,6 +65,7 @@ export class CatalogueReader {
     private readonly changes: Differences,
     private readonly sheets: PrintSheets,
     private readonly changedBundles: ChangedBundles,
+    private readonly shop: ShopKits,
   ) {}
 
   /** Those of the licences that can be bought now. */
@@ -72,6 +82,21 @@ export class CatalogueReader {
     return (await this.kits.findAll({ where: { id: [...new Set(ids)] }, order: [['name', 'ASC']] })).map(
       toKit,
     );
+  }
+
+  /** Kits that stand in the shop with a released revision, by name. */
+  async kitsInShop(tx?: Tx): Promise<KitFacts[]> {
+    const rows = await this.kits.findAll({
+      where: { isListed: true, newestRevisionId: { [Op.ne]: null } },
+      order: [['name', 'ASC']],
+      transaction: tx ?? null,
+    });
+    return rows.map(toKit);
+  }
+
+  /** The shop's cards of those kits that are on sale. */
+  shopCards(kitIds: readonly string[]): Promise<(KitCard & { id: string })[]> {
+    return this.shop.cardsByIds(kitIds);
   }
 
   async kitBySlug(slug: string): Promise<KitFacts | null> {
@@ -153,6 +178,13 @@ export class CatalogueReader {
 
   async cautionsOf(revisionId: string): Promise<string> {
     return (await this.finalById(revisionId))?.cautions ?? '';
+  }
+
+  async voicingOf(revisionId: string): Promise<Voicing | null> {
+    const revision = await this.finalById(revisionId);
+    if (!revision) return null;
+    const { room, declaredCents } = revision;
+    return { rank: rankOf(await this.contents.voicesOf(revisionId)), room, declaredCents };
   }
 
   /** Whether parts of a revision come in several clearances, and the part that tells which one to print. */

@@ -17,7 +17,9 @@ import { MeshPlaces } from './files/mesh-places.js';
 import { MeasurementRecords } from './files/measurement-records.js';
 import { MeasurementRecord } from './files/measurement.model.js';
 import { OfferFiles } from './files/offer-files.js';
+import { PartPreviews } from './files/part-previews.js';
 import { RemoveFile } from './files/remove-file.js';
+import { RenewMeasurements } from './files/renew-measurements.js';
 import { RevisionFile } from './files/revision-file.model.js';
 import { StoredFile } from './files/stored-file.model.js';
 import { UploadFile } from './files/upload-file.js';
@@ -25,6 +27,7 @@ import { GateWaiver } from './gates/gate-waiver.model.js';
 import { Gates } from './gates/gates.js';
 import { WaiveGate } from './gates/waive-gate.js';
 import { DraftKit } from './kits/draft-kit.js';
+import { KitInShopSteps } from './kits/kit-in-shop-steps.js';
 import { KitPageHead } from './kits/kit-page-head.js';
 import { Kit } from './kits/kit.model.js';
 import { KitsController } from './kits/kits.controller.js';
@@ -76,6 +79,7 @@ import { StartRevision } from './revisions/start-revision.js';
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
   providers: [
     ShopKits,
+    KitInShopSteps,
     KitPageHead,
     WorkshopKits,
     DraftKit,
@@ -94,6 +98,8 @@ import { StartRevision } from './revisions/start-revision.js';
     Gates,
     WaiveGate,
     MeasurementRecords,
+    RenewMeasurements,
+    PartPreviews,
     MeshPlaces,
     AttachFile,
     OfferFiles,
@@ -118,6 +124,7 @@ import { StartRevision } from './revisions/start-revision.js';
   // The measuring room writes what it finds through the records.
   exports: [
     CatalogueReader,
+    KitInShopSteps,
     CatalogueWaiting,
     MeasurementRecords,
     MeshComparisons,

@@ -66,11 +66,21 @@ export const environmentSchema = z.object({
     .regex(/^[A-Z]{2}$/)
     .default('IE'),
   WORKSHOP_ADDRESS: z.string().default(''),
+  /** Who sells, by the full name that receipts must carry; the workshop's name where it is the same. */
+  WORKSHOP_SELLER: z.string().max(160).default(''),
+  WORKSHOP_VAT_NUMBER: z
+    .string()
+    .regex(/^([A-Z]{2}[A-Z0-9+*]{2,13})?$/, 'begins with the country, IE1234567X, without spaces')
+    .default(''),
+  /** Above it a receipt carries the buyer's name and address; in whole units of the workshop's currency. */
+  SIMPLE_RECEIPT_UP_TO: z.coerce.number().int().min(0).max(1_000_000).default(100),
   WORKSHOP_LOCALE: z.string().default('en-IE'),
   SECURITY_CONTACT: z.string().optional(),
 
   LINK_DAYS: z.coerce.number().int().min(1).max(365).default(14),
   LINK_USES: z.coerce.number().int().min(1).max(1000).default(10),
+  /** How long a supporter's shelf stays as it is while a payment is open. */
+  PLEDGE_GRACE_DAYS: z.coerce.number().min(1).max(60).default(7),
   FILE_ADDRESS_MINUTES: z.coerce.number().min(1).max(1440).default(60),
 
   JOB_POLL_MS: z.coerce.number().int().min(10).max(60_000).default(500),

@@ -1,5 +1,5 @@
-import { discountsOf, faultOf, placesLeft } from './coupon-rules.js';
-import { isChargeable } from './smallest-charge.js';
+import { isChargeable } from '../payments/smallest-charge.js';
+import { discountsOf, faultOf, placesLeft, tooSmallBasket } from './coupon-rules.js';
 
 const now = new Date('2026-12-01T12:00:00Z');
 const terms = {
@@ -10,6 +10,7 @@ const terms = {
   held: 0,
   redeemed: 0,
   isActive: true,
+  minBasketMinor: null,
 };
 
 describe('the rules of a coupon', () => {
@@ -23,6 +24,17 @@ describe('the rules of a coupon', () => {
   it('start at their first moment and end before their last', () => {
     expect(faultOf({ ...terms, startsAt: now }, now)).toBeNull();
     expect(faultOf({ ...terms, endsAt: now }, now)?.code).toBe('coupon-has-ended');
+  });
+
+  it('say by how much a basket is too small', () => {
+    const euro = { currency: 'EUR', locale: 'en-IE' };
+    const from30 = { ...terms, minBasketMinor: 3000 };
+    expect(tooSmallBasket(terms, 0, euro)).toBeNull();
+    expect(tooSmallBasket(from30, 3000, euro)).toBeNull();
+    expect(tooSmallBasket(from30, 2400, euro)).toEqual({
+      code: 'coupon-basket-too-small',
+      detail: 'The coupon WINDFALL holds from €30.00 on. This basket is €6.00 short of that.',
+    });
   });
 
   // A third of 24.00 is 8.00 exactly; a third of 25.00 is 8.33 (half-up of 8.333…).

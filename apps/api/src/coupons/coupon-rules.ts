@@ -1,5 +1,5 @@
 import type { CouponOff, ProblemCode } from '@windchest/contracts';
-import { applyCoupon, fraction, money, type CouponWorth, type Money } from '@windchest/money';
+import { applyCoupon, formatMoney, fraction, money, type CouponWorth, type Money } from '@windchest/money';
 
 /** What the rules look at; a coupon's row has all of it. */
 export interface CouponTerms {
@@ -10,6 +10,8 @@ export interface CouponTerms {
   readonly held: number;
   readonly redeemed: number;
   readonly isActive: boolean;
+  /** From which sum of the basket on, before any discount, it holds. */
+  readonly minBasketMinor: number | null;
 }
 
 export interface CouponFault {
@@ -45,6 +47,20 @@ export const usedUp = ({ code, cap, held }: CouponTerms): CouponFault => ({
       ? `All ${cap} places of the coupon ${code} are taken. ${held} of them ${held === 1 ? 'is' : 'are'} held for people who are paying right now; one may come back.`
       : `All ${cap} places of the coupon ${code} are taken.`,
 });
+
+/** A basket below the smallest one the coupon holds for, and by how much; null where it is enough. */
+export const tooSmallBasket = (
+  { code, minBasketMinor }: Pick<CouponTerms, 'code' | 'minBasketMinor'>,
+  subtotalMinor: number,
+  { currency, locale }: { currency: string; locale: string },
+): CouponFault | null => {
+  if (minBasketMinor === null || subtotalMinor >= minBasketMinor) return null;
+  const show = (minor: number): string => formatMoney(money(minor, currency), locale);
+  return {
+    code: 'coupon-basket-too-small',
+    detail: `The coupon ${code} holds from ${show(minBasketMinor)} on. This basket is ${show(minBasketMinor - subtotalMinor)} short of that.`,
+  };
+};
 
 const worthOf = (off: CouponOff, currency: string): CouponWorth =>
   off.kind === 'fraction'

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer, Coupon as CouponAnswer, Handled } from '@windchest/contracts';
+import type { Answer, Coupon as CouponAnswer, CouponDay, Handled } from '@windchest/contracts';
 import { Op, type Sequelize, type WhereOptions } from 'sequelize';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { InjectConfig, type Config } from '../config/config.js';
@@ -9,6 +9,14 @@ import { notFound } from '../http/refusal.js';
 import { CouponKit } from './coupon-kit.model.js';
 import { placesLeft } from './coupon-rules.js';
 import { Coupon } from './coupon.model.js';
+
+interface DayRow {
+  day: string;
+  redeemed: number | string;
+  held: number | string;
+  givenBack: number | string;
+  minor: number | string;
+}
 
 /** Coupons as the workshop sees them: with what is held, redeemed and taken off. */
 @Injectable()
@@ -45,6 +53,25 @@ export class CouponView {
     return shown;
   }
 
+  /** Places by the day they were taken, in UTC, and by what became of them. */
+  async uses(couponId: string): Promise<CouponDay[]> {
+    await this.one(couponId);
+    const rows = await selectRows<DayRow>(
+      this.database,
+      `SELECT DATE_FORMAT(created_at, '%Y-%m-%d') AS day, SUM(state = 'redeemed') AS redeemed, SUM(state = 'held') AS held,
+              SUM(state = 'given-back') AS givenBack, SUM(IF(state = 'redeemed', discount_minor, 0)) AS minor
+       FROM coupon_places WHERE coupon_id = :couponId GROUP BY day ORDER BY day`,
+      { couponId },
+    );
+    return rows.map(({ day, redeemed, held, givenBack, minor }) => ({
+      day,
+      redeemed: Number(redeemed),
+      held: Number(held),
+      givenBack: Number(givenBack),
+      takenOff: { minor: Number(minor), currency: this.config.WORKSHOP_CURRENCY },
+    }));
+  }
+
   private async show(coupons: Coupon[]): Promise<CouponAnswer[]> {
     if (coupons.length === 0) return [];
     const ids = coupons.map((coupon) => coupon.id);
@@ -58,6 +85,7 @@ export class CouponView {
     );
     const takenOff = new Map(sums.map((sum) => [sum.couponId, Number(sum.minor)]));
     const nameOf = new Map(kits.map((kit) => [kit.id, kit.name]));
+    const money = (minor: number) => ({ minor, currency: this.config.WORKSHOP_CURRENCY });
     return coupons.map((coupon) => ({
       id: coupon.id,
       code: coupon.code,
@@ -70,12 +98,14 @@ export class CouponView {
       endsAt: coupon.endsAt?.toISOString() ?? null,
       cap: coupon.cap,
       perBuyer: coupon.perBuyer,
+      isForSupporters: coupon.isForSupporters,
+      minBasket: coupon.minBasketMinor === null ? null : money(coupon.minBasketMinor),
       isAnnounced: coupon.isAnnounced,
       isActive: coupon.isActive,
       held: coupon.held,
       redeemed: coupon.redeemed,
       left: placesLeft(coupon),
-      takenOff: { minor: takenOff.get(coupon.id) ?? 0, currency: this.config.WORKSHOP_CURRENCY },
+      takenOff: money(takenOff.get(coupon.id) ?? 0),
       createdAt: coupon.createdAt.toISOString(),
     }));
   }

@@ -13,6 +13,8 @@ export class Coupon extends Model {
   @MomentColumn({ isNullable: true }) declare endsAt: Date | null;
   @Column(DataType.INTEGER.UNSIGNED) declare cap: number | null;
   @Column(DataType.INTEGER.UNSIGNED) declare perBuyer: number | null;
+  @Column(DataType.BOOLEAN) declare isForSupporters: boolean;
+  @Column(DataType.INTEGER.UNSIGNED) declare minBasketMinor: number | null;
   @Column(DataType.BOOLEAN) declare isAnnounced: boolean;
   @Column(DataType.BOOLEAN) declare isActive: boolean;
   @Column(DataType.INTEGER.UNSIGNED) declare held: number;

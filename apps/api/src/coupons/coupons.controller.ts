@@ -31,6 +31,13 @@ export class CouponsController {
     return this.view.one(params.couponId);
   }
 
+  @Endpoint('GET /workshop/coupons/:couponId/uses')
+  uses(
+    @Input() { params }: Handled<'GET /workshop/coupons/:couponId/uses'>,
+  ): Promise<Answer<'GET /workshop/coupons/:couponId/uses'>> {
+    return this.view.uses(params.couponId);
+  }
+
   @Endpoint('POST /workshop/coupons')
   create(
     @ThisPerson() person: SignedIn,

@@ -2,10 +2,11 @@ import { newId } from '../database/columns.js';
 import { Transactions, type Tx } from '../database/transactions.js';
 import { couponBody, makeCoupon } from '../testing/coupons.js';
 import { putKitOnSale, type KitOnSale } from '../testing/kit-on-sale.js';
-import { signInAs } from '../testing/sign-in.js';
+import { makePerson, signInAs, TEST_PASSPHRASE } from '../testing/sign-in.js';
 import { startTestApp, type Browser, type TestApp } from '../testing/test-app.js';
 import { CouponsReader } from './coupons-reader.js';
 import { Coupons } from './coupons.js';
+import { SupporterCheck } from './supporter-check.js';
 
 describe('coupons', () => {
   let shop: TestApp;
@@ -88,15 +89,21 @@ describe('coupons', () => {
     const now = shop.clock.now().getTime();
     const at = (hours: number) => new Date(now + hours * 3_600_000).toISOString();
     await makeCoupon(shop, { code: 'EARLY', startsAt: at(1), endsAt: at(2) });
-    await makeCoupon(shop, { code: 'LATE', startsAt: at(-2), endsAt: at(-1) });
+    await makeCoupon(shop, { code: 'LATE', startsAt: at(-2), endsAt: at(0.5) });
     await makeCoupon(shop, { code: 'ASLEEP', isActive: false });
     expect((await quote('EARLY')).couponFault.code).toBe('coupon-not-started');
-    expect((await quote('LATE')).couponFault.code).toBe('coupon-has-ended');
+    expect((await quote('LATE')).couponFault).toBeNull();
+    const past = await maker
+      .post('/api/workshop/coupons')
+      .send(couponBody({ code: 'PAST', endsAt: at(-1) }))
+      .expect(422);
+    expect(past.body.fields.endsAt).toMatch(/passed already/);
     expect((await quote('ASLEEP')).couponFault.code).toBe('coupon-unknown');
     expect((await quote('NOWHERE')).couponFault.code).toBe('coupon-unknown');
     const priced = await quote('NOWHERE');
     expect(priced).toMatchObject({ coupon: null, discount: { minor: 0 }, total: { minor: 2400 } });
     shop.clock.advance(3600);
+    expect((await quote('LATE')).couponFault.code).toBe('coupon-has-ended');
     expect((await quote('EARLY')).couponFault).toBeNull();
     shop.clock.advance(3600);
     expect((await quote('EARLY')).couponFault.code).toBe('coupon-has-ended');
@@ -163,6 +170,95 @@ describe('coupons', () => {
     expect(await scarce()).toEqual([]);
     await set(3, 6);
     expect(await scarce()).toEqual([{ id, code: 'SCARCE', left: 1 }]);
+  });
+
+  it('hold from their smallest basket on and say what is missing', async () => {
+    await makeCoupon(shop, { code: 'BIGGER', minBasketMinor: 3000, kitIds: [curlew.kitId] });
+    expect((await quote('BIGGER')).couponFault).toEqual({
+      code: 'coupon-basket-too-small',
+      detail: 'The coupon BIGGER holds from €30.00 on. This basket is €6.00 short of that.',
+    });
+    // The whole basket counts, also kits the coupon takes nothing off.
+    expect(await quote('BIGGER', [curlew.licenceId, knot.licenceId])).toMatchObject({
+      couponFault: null,
+      discount: { minor: 800 },
+    });
+    const offers = (await shop.browser().get('/api/offers').expect(200)).body as { code: string }[];
+    expect(offers.map((offer) => offer.code)).not.toContain('BIGGER');
+  });
+
+  it('are for supporters alone where they say so', async () => {
+    await makeCoupon(shop, { code: 'PLEDGED', isForSupporters: true, isAnnounced: false });
+    const person = await makePerson(shop, 'buyer');
+    const browser = shop.browser();
+    await browser.post('/api/session').send({ email: person.email, passphrase: TEST_PASSPHRASE }).expect(200);
+    const faultFor = async (who: Browser) => (await quote('PLEDGED', [curlew.licenceId], who)).couponFault;
+    expect(await faultFor(shop.browser())).toMatchObject({
+      code: 'coupon-for-supporters',
+      detail: expect.stringContaining('Sign in') as string,
+    });
+    expect((await faultFor(browser)).detail).toContain('no current pledge');
+    const check = shop.app.get(SupporterCheck, { strict: false });
+    check.register((personId) => Promise.resolve(personId === person.id));
+    expect(await faultFor(browser)).toBeNull();
+    expect((await faultFor(await signInAs(shop, 'buyer'))).code).toBe('coupon-for-supporters');
+    check.register(() => Promise.resolve(false));
+    const announced = await maker
+      .post('/api/workshop/coupons')
+      .send(couponBody({ code: 'LOUD', isForSupporters: true }))
+      .expect(422);
+    expect(announced.body.fields).toHaveProperty('isAnnounced');
+  });
+
+  it('know one buyer as guest and signed in, whatever the capitals of the address', async () => {
+    const { id } = await makeCoupon(shop, { code: 'ONCE', perBuyer: 1 });
+    const coupons = shop.app.get(Coupons, { strict: false });
+    const tern = await makePerson(shop, 'buyer', 'tern@mail.example');
+    const unproved = await makePerson(shop, 'buyer', 'stint@mail.example', false);
+    const hold = async (email: string, personId: string | null): Promise<string> => {
+      const orderId = newId();
+      const hit = shop.app
+        .get(Transactions, { strict: false })
+        .run(
+          (tx) => coupons.hold(tx, { couponId: id, orderId, email, personId, discountMinor: 800 }),
+          'read-committed',
+        );
+      return hit.then(
+        () => 'held',
+        (fault: { code: string }) => fault.code,
+      );
+    };
+    expect(await hold('Tern@Mail.example', null)).toBe('held');
+    for (const [email, personId] of [
+      ['tern@mail.example', null],
+      // The account of the guest's address, buying with another one.
+      ['elsewhere@mail.example', tern.id],
+    ] as const)
+      expect(await hold(email, personId)).toBe('coupon-buyer-limit');
+    // An address somebody only claims is theirs takes nothing from the one who used it as a guest.
+    expect(await hold('stint@mail.example', null)).toBe('held');
+    expect(await hold('other@mail.example', unproved.id)).toBe('held');
+    expect(await hold('again@mail.example', unproved.id)).toBe('coupon-buyer-limit');
+  });
+
+  it('show how they were used, by day', async () => {
+    const { id } = await makeCoupon(shop, { code: 'DAILY' });
+    const coupons = shop.app.get(Coupons, { strict: false });
+    const transactions = shop.app.get(Transactions, { strict: false });
+    const today = shop.clock.now().toISOString().slice(0, 10);
+    for (const end of ['redeem', 'redeem', 'giveBack', null] as const) {
+      const orderId = newId();
+      await transactions.run(async (tx) => {
+        const email = `${orderId}@mail.example`;
+        await coupons.hold(tx, { couponId: id, orderId, email, personId: null, discountMinor: 300 });
+        if (end) await coupons[end](tx, orderId);
+      }, 'read-committed');
+    }
+    const { body } = await maker.get(`/api/workshop/coupons/${id}/uses`).expect(200);
+    expect(body).toEqual([
+      { day: today, redeemed: 2, held: 1, givenBack: 1, takenOff: { minor: 600, currency: 'EUR' } },
+    ]);
+    await maker.get(`/api/workshop/coupons/${newId()}/uses`).expect(404);
   });
 
   it('move each place once: redeemed or given back, whatever is asked for again', async () => {

@@ -1,20 +1,27 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
+import type { CouponOff } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { newId } from '../database/columns.js';
-import { selectRows, touchRows } from '../database/rows.js';
+import { touchRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
 import { Refusal } from '../http/refusal.js';
+import { CouponBuyers, type CouponBuyer } from './coupon-buyers.js';
 import { CouponKit } from './coupon-kit.model.js';
-import { discountsOf, faultOf, placesLeft, unknownCoupon, usedUp, type CouponFault } from './coupon-rules.js';
+import {
+  discountsOf,
+  faultOf,
+  placesLeft,
+  tooSmallBasket,
+  unknownCoupon,
+  usedUp,
+  type CouponFault,
+} from './coupon-rules.js';
 import { Coupon } from './coupon.model.js';
 
-export interface CouponBuyer {
-  readonly email: string | null;
-  readonly personId: string | null;
-}
+export type { CouponBuyer } from './coupon-buyers.js';
 
 export interface PricedCoupon {
   readonly id: string;
@@ -45,15 +52,20 @@ export class Coupons {
     @InjectModel(Coupon) private readonly coupons: typeof Coupon,
     @InjectModel(CouponKit) private readonly couponKits: typeof CouponKit,
     @InjectConfig() private readonly config: Config,
+    private readonly buyers: CouponBuyers,
     private readonly clock: Clock,
   ) {}
 
-  /** @throws Refusal with a `coupon-…` code where the coupon cannot be used for these lines by this buyer */
+  /**
+   * @param lines at the shop's own prices
+   * @param options `chargedOf`: what a price of the shop comes to for this buyer, less a tax that is not charged
+   * @throws Refusal with a `coupon-…` code where the coupon cannot be used for these lines by this buyer
+   */
   async priceFor(
     code: string,
     lines: readonly { readonly kitId: string; readonly priceMinor: number }[],
     buyer: CouponBuyer,
-    tx?: Tx,
+    { chargedOf, tx }: { chargedOf: (priceMinor: number) => number; tx: Tx | undefined },
   ): Promise<PricedCoupon> {
     const coupon = await this.coupons.findOne({ where: { code }, transaction: tx ?? null });
     if (!coupon) throw refusalOf(unknownCoupon(code));
@@ -64,14 +76,24 @@ export class Coupons {
     const isForKit = (kitId: string): boolean => kitIds.size === 0 || kitIds.has(kitId);
     if (!lines.some((line) => isForKit(line.kitId)))
       throw new Refusal('coupon-does-not-apply', `The coupon ${coupon.code} is for other kits.`);
-    await this.checkBuyer(coupon, buyer, tx);
+    await this.buyers.check(coupon, buyer, tx);
+    const short = tooSmallBasket(coupon, sumOf(lines), {
+      currency: this.config.WORKSHOP_CURRENCY,
+      locale: this.config.WORKSHOP_LOCALE,
+    });
+    if (short) throw refusalOf(short);
     return {
       id: coupon.id,
       code: coupon.code,
       label: coupon.label,
       cap: coupon.cap,
       left: placesLeft(coupon),
-      discounts: discountsOf(coupon.off, lines, isForKit, this.config.WORKSHOP_CURRENCY),
+      discounts: discountsOf(
+        chargedOff(coupon.off, chargedOf),
+        lines.map(({ kitId, priceMinor }) => ({ kitId, priceMinor: chargedOf(priceMinor) })),
+        isForKit,
+        this.config.WORKSHOP_CURRENCY,
+      ),
     };
   }
 
@@ -94,12 +116,13 @@ export class Coupons {
     const coupon = await this.coupons.findByPk(couponId, { transaction: tx });
     if (!coupon) throw new Error('An order was priced with a coupon that does not exist.');
     if (taken !== 1) throw refusalOf(faultOf(coupon, now) ?? usedUp(coupon));
-    await this.checkBuyer(coupon, { email, personId }, tx);
+    await this.buyers.check(coupon, { email, personId }, tx);
+    const accountId = await this.buyers.accountOf({ email, personId }, tx);
     await touchRows(
       this.database,
       `INSERT INTO coupon_places (id, coupon_id, order_id, email, person_id, discount_minor, created_at, updated_at)
-       VALUES (:id, :couponId, :orderId, :email, :personId, :discountMinor, :now, :now)`,
-      { id: newId(), couponId, orderId, email, personId, discountMinor, now },
+       VALUES (:id, :couponId, :orderId, :email, :accountId, :discountMinor, :now, :now)`,
+      { id: newId(), couponId, orderId, email, accountId, discountMinor, now },
       tx,
     );
   }
@@ -130,25 +153,12 @@ export class Coupons {
       tx,
     );
   }
-
-  private async checkBuyer(coupon: Coupon, { email, personId }: CouponBuyer, tx?: Tx): Promise<void> {
-    if (coupon.perBuyer === null || (!email && !personId)) return;
-    const [own] = await selectRows<{ held: number | string | null; redeemed: number | string | null }>(
-      this.database,
-      `SELECT SUM(state = 'held') AS held, SUM(state = 'redeemed') AS redeemed FROM coupon_places
-       WHERE coupon_id = :couponId AND (email = :email OR person_id = :personId)`,
-      { couponId: coupon.id, email, personId },
-      tx,
-    );
-    const held = Number(own?.held ?? 0);
-    if (held + Number(own?.redeemed ?? 0) < coupon.perBuyer) return;
-    const times = coupon.perBuyer === 1 ? 'once' : `${coupon.perBuyer} times`;
-    const mend = held > 0 ? ' An open order holds it: pay that order or give it up.' : '';
-    throw new Refusal(
-      'coupon-buyer-limit',
-      `The coupon ${coupon.code} can be used ${times} by each buyer.${mend}`,
-    );
-  }
 }
 
+/** An amount contains the same tax as the prices it is taken off. */
+const chargedOff = (off: CouponOff, chargedOf: (minor: number) => number): CouponOff =>
+  off.kind === 'amount' ? { kind: 'amount', minor: chargedOf(off.minor) } : off;
+
 const refusalOf = ({ code, detail }: CouponFault): Refusal => new Refusal(code, detail);
+const sumOf = (lines: readonly { readonly priceMinor: number }[]): number =>
+  lines.reduce((sum, line) => sum + line.priceMinor, 0);

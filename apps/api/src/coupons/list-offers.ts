@@ -40,21 +40,25 @@ export class ListOffers {
     const currency = this.config.WORKSHOP_CURRENCY;
     return running.flatMap((coupon) => {
       const kitIds = new Set(pairs.filter((pair) => pair.couponId === coupon.id).map((pair) => pair.kitId));
-      return licences
-        .filter((licence) => licence.priceMinor > 0 && (kitIds.size === 0 || kitIds.has(licence.kitId)))
-        .map((licence) => {
-          const [discount = 0] = discountsOf(coupon.off, [licence], () => true, currency);
-          return {
-            kitSlug: licence.kitSlug,
-            licenceId: licence.licenceId,
-            code: coupon.code,
-            label: coupon.label,
-            price: { minor: licence.priceMinor - discount, currency },
-            cap: coupon.cap,
-            left: placesLeft(coupon),
-            endsAt: coupon.endsAt?.toISOString() ?? null,
-          };
-        });
+      return (
+        licences
+          .filter(({ priceMinor, kitId }) => priceMinor > 0 && (kitIds.size === 0 || kitIds.has(kitId)))
+          // The price is told of the licence alone, and one that is cheaper than the smallest basket has none.
+          .filter(({ priceMinor }) => priceMinor >= (coupon.minBasketMinor ?? 0))
+          .map((licence) => {
+            const [discount = 0] = discountsOf(coupon.off, [licence], () => true, currency);
+            return {
+              kitSlug: licence.kitSlug,
+              licenceId: licence.licenceId,
+              code: coupon.code,
+              label: coupon.label,
+              price: { minor: licence.priceMinor - discount, currency },
+              cap: coupon.cap,
+              left: placesLeft(coupon),
+              endsAt: coupon.endsAt?.toISOString() ?? null,
+            };
+          })
+      );
     });
   }
 }

@@ -1,7 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Coupon as CouponAnswer, Handled } from '@windchest/contracts';
-import { formatMoney } from '@windchest/money';
 import { StaffLog } from '../accounts/staff-log.js';
 import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
@@ -12,14 +11,13 @@ import { Transactions, type Tx } from '../database/transactions.js';
 import type { SignedIn } from '../http/person.js';
 import { notFound, Refusal } from '../http/refusal.js';
 import { CouponKit } from './coupon-kit.model.js';
-import { discountsOf } from './coupon-rules.js';
+import { whyRefused } from './coupon-refusals.js';
 import { CouponView } from './coupon-view.js';
 import { Coupon } from './coupon.model.js';
-import { isChargeable, smallestChargeOf } from './smallest-charge.js';
 
 type Body = Handled<'POST /workshop/coupons'>['body'];
 
-/** Making and changing coupons; what could not be paid is refused here, not at a buyer's checkout. */
+/** Making and changing coupons. */
 @Injectable()
 export class SaveCoupon {
   constructor(
@@ -35,7 +33,7 @@ export class SaveCoupon {
 
   async create(by: SignedIn, body: Body): Promise<CouponAnswer> {
     await this.checkKits(body);
-    await this.checkPrices(body);
+    await this.checkTerms(body, null);
     const id = newId();
     const now = this.clock.now();
     await this.unlessTaken(body.code, () =>
@@ -53,7 +51,7 @@ export class SaveCoupon {
 
   async change(by: SignedIn, couponId: string, body: Body): Promise<CouponAnswer> {
     await this.checkKits(body);
-    await this.checkPrices(body);
+    await this.checkTerms(body, (await this.view.one(couponId)).endsAt);
     await this.unlessTaken(body.code, () =>
       this.transactions.run(async (tx) => {
         // Locked first: nobody takes a place between the look at the cap and the change of it.
@@ -87,17 +85,19 @@ export class SaveCoupon {
       });
   }
 
-  private async checkPrices({ off, kitIds }: Body): Promise<void> {
-    const currency = this.config.WORKSHOP_CURRENCY;
-    const show = (minor: number): string => formatMoney({ minor, currency }, this.config.WORKSHOP_LOCALE);
-    for (const licence of await this.catalogue.allOfferedLicences()) {
-      if (kitIds.length > 0 && !kitIds.includes(licence.kitId)) continue;
-      const [discount = 0] = discountsOf(off, [licence], () => true, currency);
-      const price = licence.priceMinor - discount;
-      if (isChargeable(price, currency)) continue;
-      const sentence = `${licence.kitName} (${licence.licenceName}) would cost ${show(price)}. The payment service charges nothing below ${show(smallestChargeOf(currency))}: take off less, or the whole price.`;
-      throw new Refusal('coupon-refused', sentence, { fields: { off: sentence } });
-    }
+  private async checkTerms(body: Body, endsAtBefore: string | null): Promise<void> {
+    const licences = await this.catalogue.allOfferedLicences();
+    const refusal = whyRefused(body, {
+      now: this.clock.now(),
+      currency: this.config.WORKSHOP_CURRENCY,
+      locale: this.config.WORKSHOP_LOCALE,
+      licences: licences.filter(({ kitId }) => body.kitIds.length === 0 || body.kitIds.includes(kitId)),
+      endsAtBefore,
+    });
+    if (refusal)
+      throw new Refusal('coupon-refused', refusal.sentence, {
+        fields: { [refusal.field]: refusal.sentence },
+      });
   }
 
   private async setKits(tx: Tx, couponId: string, kitIds: readonly string[]): Promise<void> {
@@ -128,6 +128,8 @@ const columnsOf = (body: Body) => ({
   endsAt: body.endsAt === null ? null : new Date(body.endsAt),
   cap: body.cap,
   perBuyer: body.perBuyer,
+  isForSupporters: body.isForSupporters,
+  minBasketMinor: body.minBasketMinor,
   isAnnounced: body.isAnnounced,
   isActive: body.isActive,
 });
@@ -140,6 +142,8 @@ const bodyOf = (coupon: Coupon) => ({
   endsAt: coupon.endsAt?.toISOString() ?? null,
   cap: coupon.cap,
   perBuyer: coupon.perBuyer,
+  isForSupporters: coupon.isForSupporters,
+  minBasketMinor: coupon.minBasketMinor,
   isAnnounced: coupon.isAnnounced,
   isActive: coupon.isActive,
 });

@@ -1,6 +1,5 @@
 import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
-import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as journal from './migrations/0016-journal.js';
 import * as fitReports from './migrations/0017-fit-reports.js';
 import * as people from './migrations/0001-people.js';
@@ -9,10 +8,16 @@ import * as catalogue from './migrations/0003-catalogue.js';
 import * as sales from './migrations/0004-sales.js';
 import * as releasedIsFinal from './migrations/0005-released-is-final.js';
 import * as taxRates from './migrations/0006-tax-rates.js';
+import * as printProfiles from './migrations/0007-print-profiles.js';
 import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
-import * as printRecord from './migrations/0019-print-record.js';
 import * as partVariants from './migrations/0010-part-variants.js';
+import * as refunds from './migrations/0011-refunds.js';
+import * as couponRules from './migrations/0013-coupon-rules.js';
+import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
+import * as gifts from './migrations/0015-gifts.js';
+import * as supporters from './migrations/0012-supporters.js';
+import * as printRecord from './migrations/0019-print-record.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -27,6 +32,11 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0008-mesh-comparisons': meshComparisons,
   '0009-printer-cards': printerCards,
   '0010-part-variants': partVariants,
+  '0011-refunds': refunds,
+  '0013-coupon-rules': couponRules,
+  '0014-tax-and-business': taxAndBusiness,
+  '0015-gifts': gifts,
+  '0012-supporters': supporters,
   '0019-print-record': printRecord,
 };
 
@@ -60,6 +70,7 @@ export const migrate = async (database: Sequelize): Promise<string[]> => {
     return done.map((one) => one.name);
   } finally {
     // The connection goes back to the pool alive: without this a failed migration would block every other process.
+    // Also after a fault: the pooled connection would keep the lock, and with it every other process waiting.
     await database.query("DO RELEASE_LOCK('windchest-migrations')", { transaction: lock });
     await lock.rollback();
   }

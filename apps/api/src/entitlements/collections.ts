@@ -28,20 +28,21 @@ export class Collections {
     const link = await this.links.byToken(token);
     const order = await this.orders.byId(link.orderId);
     if (!order) throw notFound('order');
-    const active = await this.entitlements.findAll({
-      where: { orderId: link.orderId, state: 'active' },
+    const left = await this.entitlements.findAll({
+      where: { orderId: link.orderId, state: ['active', 'suspended'] },
       order: [
         ['createdAt', 'ASC'],
         ['id', 'ASC'],
       ],
     });
+    const active = left.filter((one) => one.state === 'active');
     const state = this.links.stateOf(link);
     const kits = await this.kitsOf(active);
     return {
       orderNumber: order.number,
       expiresAt: link.expiresAt.toISOString(),
       usesLeft: link.usesLeft,
-      state: active.length === 0 ? 'ended' : state,
+      state: active.length > 0 ? state : left.length > 0 ? 'suspended' : 'ended',
       kits: state === 'replaced' ? [] : kits,
     };
   }
@@ -59,7 +60,7 @@ export class Collections {
     await this.limits.take('mailed-link-network', network);
     const active = await this.entitlements.findAll({
       attributes: ['orderId'],
-      where: { email, state: 'active', source: 'purchase' },
+      where: { email, state: 'active', source: ['purchase', 'gift'] },
       group: ['orderId'],
       limit: 20,
     });
@@ -71,7 +72,8 @@ export class Collections {
   async resend(orderId: string): Promise<void> {
     const order = await this.orders.byId(orderId);
     if (!order) throw notFound('order');
-    await this.transactions.run((tx) => this.links.replace(tx, order.id, order.email));
+    const holder = order.gift?.email ?? order.email;
+    await this.transactions.run((tx) => this.links.replace(tx, order.id, holder));
   }
 
   private async kitsOf(active: readonly Entitlement[]): Promise<Answer<'GET /collect/:token'>['kits']> {

@@ -82,6 +82,8 @@ describe('delivery', () => {
         items: [{ slug: kit.slug, source: 'purchase', held: null, newest: { label: 'Mk 1.5' } }],
       });
       expect((await buyer.browser.get('/api/shelf/owned').expect(200)).body).toEqual([kit.slug]);
+      const { body: one } = await buyer.browser.get(`/api/shelf/${kit.slug}`).expect(200);
+      expect(one).toMatchObject({ rank: [], room: { temperatureC: 20 }, declaredCents: 12 });
     });
 
     it('hands the file out whole, named, with its hash as a strong ETag, and notes the revision held', async () => {
@@ -198,6 +200,8 @@ describe('delivery', () => {
       const { body } = await buyer.browser.get(`/api/shelf/${kit.slug}`).expect(200);
       expect(body.held.label).toBe('Mk 1.4');
       expect(body.newest.label).toBe('Mk 1.5');
+      // What the tuner listens for is what was printed, not what came after.
+      expect(body.declaredCents).toBe(10);
     });
   });
 

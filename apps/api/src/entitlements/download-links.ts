@@ -47,7 +47,7 @@ export class DownloadLinks {
     return id;
   }
 
-  /** Ends an order's earlier links and mails a new one to the order's own address, never to another. */
+  /** Ends an order's earlier links and mails a new one to the address that holds the rights, never to another. */
   async replace(tx: Tx, orderId: string, email: string): Promise<void> {
     const active = await this.entitlements.findAll({ where: { orderId, state: 'active' }, transaction: tx });
     if (active.length === 0) return;

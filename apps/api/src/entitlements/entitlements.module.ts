@@ -3,13 +3,16 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { OrdersModule } from '../orders/orders.module.js';
+import { SupportersModule } from '../supporters/supporters.module.js';
 import { Collections } from './collections.js';
 import { DeliveryController } from './delivery.controller.js';
 import { DownloadLink } from './download-link.model.js';
 import { DownloadLinks } from './download-links.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { FollowOrderRights } from './follow-order-rights.js';
 import { FileGrants } from './file-grants.js';
+import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
@@ -20,6 +23,8 @@ import { PrintRecord } from './reprint/print-record.model.js';
 import { PrintRecords } from './reprint/print-records.js';
 import { ReprintPlans } from './reprint/reprint-plans.js';
 import { ReprintLists } from './reprint/reprint-lists.js';
+import { OwnRevisions } from './own-revisions.js';
+import { PledgeEntitlements } from './pledge-entitlements.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -32,6 +37,7 @@ import { SignedAddress } from './signed-address.js';
     AccountsModule,
     CatalogueModule,
     OrdersModule,
+    SupportersModule,
     SequelizeModule.forFeature([Entitlement, DownloadLink, Download, PrintRecord]),
   ],
   controllers: [ShelfController, PrintRecordController, WithdrawalsController, DeliveryController],
@@ -40,7 +46,10 @@ import { SignedAddress } from './signed-address.js';
     SignedAddress,
     FileGrants,
     ServeFile,
+    GiftMail,
     GiveEntitlements,
+    FollowOrderRights,
+    PledgeEntitlements,
     Collections,
     Shelf,
     Holders,
@@ -48,6 +57,7 @@ import { SignedAddress } from './signed-address.js';
     PrintRecords,
     ReprintLists,
     KeepPrintRecord,
+    OwnRevisions,
     ReprintPlans,
     ChangedParts,
     Withdrawals,

@@ -78,7 +78,12 @@ export class FileGrants {
     if (!kit || !revision) throw notFound('kit or revision');
     const decision = mayDownload({
       kitId: kit.id,
-      revision: { kitId: kit.id, isReleased: true, isWithdrawn: revision.isWithdrawn },
+      revision: {
+        kitId: kit.id,
+        releasedAt: revision.releasedAt,
+        isReleased: true,
+        isWithdrawn: revision.isWithdrawn,
+      },
       entitlements,
     });
     if (!decision.isAllowed)
@@ -144,6 +149,10 @@ const sentences: Record<Why, string> = {
   'not-entitled': 'This kit is not on your shelf.',
   suspended: 'Downloads of this kit rest while its payment is in dispute.',
   ended: 'The right to this kit’s files has ended, for it was refunded.',
+  'pledge-rests': 'This kit is on your shelf by your pledge, and the pledge rests now.',
+  'pledge-ended': 'This kit was on your shelf by your pledge, and the pledge has ended.',
+  'outside-pledge':
+    'Your pledge has ended. What stays of it are the revisions on your shelf; this one is not among them.',
   'not-released': 'This revision is not released.',
 };
 const refusalFor = (why: keyof typeof sentences): Refusal =>

@@ -2,7 +2,7 @@ import { Injectable, type OnModuleInit } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
-import { AddressVerifiedSteps } from '../accounts/people.js';
+import { AddressVerifiedSteps, People } from '../accounts/people.js';
 import { newId } from '../database/columns.js';
 import { selectRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
@@ -10,6 +10,7 @@ import { OrderFacts } from '../orders/order-facts.js';
 import { OrderPaidSteps, type PaidOrder } from '../orders/order-paid-steps.js';
 import { DownloadLinks } from './download-links.js';
 import { Entitlement } from './entitlement.model.js';
+import { GiftMail } from './gift-mail.js';
 
 /** Gives what was paid for, inside the transaction that marks the order paid; joins it to the account of its address. */
 @Injectable()
@@ -18,6 +19,8 @@ export class GiveEntitlements implements OnModuleInit {
     @InjectConnection() private readonly database: Sequelize,
     @InjectModel(Entitlement) private readonly entitlements: typeof Entitlement,
     private readonly links: DownloadLinks,
+    private readonly people: People,
+    private readonly giftMail: GiftMail,
     private readonly orderPaid: OrderPaidSteps,
     private readonly orderFacts: OrderFacts,
     private readonly addressVerified: AddressVerifiedSteps,
@@ -36,14 +39,17 @@ export class GiveEntitlements implements OnModuleInit {
 
   private async give(tx: Tx, order: PaidOrder): Promise<void> {
     const now = this.clock.now();
+    // What is given away is the other's from the first moment; the buyer has no right to the files.
+    const holder = order.gift
+      ? { personId: await this.people.verifiedIdByEmail(order.gift.email, tx), email: order.gift.email }
+      : { personId: order.personId, email: order.email };
     await this.entitlements.bulkCreate(
       order.lines.map((line) => ({
         id: newId(),
-        personId: order.personId,
-        email: order.email,
+        ...holder,
         kitId: line.kitId,
         licenceId: line.licenceId,
-        source: 'purchase',
+        source: order.gift ? 'gift' : 'purchase',
         orderId: order.id,
         orderLineId: line.id,
         state: 'active',
@@ -52,7 +58,8 @@ export class GiveEntitlements implements OnModuleInit {
       })),
       { transaction: tx },
     );
-    order.facts.linkId = await this.links.issue(tx, order.id, order.email);
+    order.facts.linkId = await this.links.issue(tx, order.id, holder.email);
+    if (order.gift) await this.giftMail.queue(tx, order, order.gift, order.facts.linkId);
   }
 
   private async countDownloads(orderId: string): Promise<number> {

@@ -12,6 +12,7 @@ import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
 import { browserMark, withdrawnRefusal } from './file-grants.js';
+import { covers } from './may-download.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
 
@@ -49,7 +50,9 @@ export class ServeFile {
       );
     const download = await this.downloads.findByPk(downloadId);
     const entitlement = download && (await this.entitlements.findByPk(download.entitlementId));
-    if (!download || entitlement?.state !== 'active')
+    if (entitlement?.state === 'suspended')
+      throw new Refusal('forbidden', 'Downloads of this kit rest while its payment is in dispute.');
+    if (!download || !entitlement || !(await this.isStillTheirs(entitlement, download.revisionId)))
       throw new Refusal('forbidden', 'The right to this file has ended.');
     const revision = await this.catalogue.revisionById(download.revisionId);
     if (revision?.isWithdrawn) throw withdrawnRefusal(revision);
@@ -66,6 +69,13 @@ export class ServeFile {
     if (isHead) return;
     await this.countSent(download, sent.bytes, sent.reachedEnd);
     if (sent.reachedEnd && download.isBundle) await this.noteHeld(download, file.clearance ?? null);
+  }
+
+  private async isStillTheirs(entitlement: Entitlement, revisionId: string): Promise<boolean> {
+    if (entitlement.state !== 'active') return false;
+    const isBounded = entitlement.releasedFrom !== null || entitlement.releasedBefore !== null;
+    const revision = isBounded ? await this.catalogue.revisionById(revisionId) : null;
+    return covers(entitlement, revision?.releasedAt ?? null);
   }
 
   private async countRequest(id: string): Promise<void> {

@@ -8,10 +8,11 @@ import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
 import { Transactions } from '../database/transactions.js';
 import type { SignedIn } from '../http/person.js';
-import { notFound } from '../http/refusal.js';
+import { notFound, Refusal } from '../http/refusal.js';
 import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
+import { OwnRevisions } from './own-revisions.js';
 import { KeepPrintRecord } from './reprint/keep-print-record.js';
 import { ReprintLists } from './reprint/reprint-lists.js';
 import { toShelfRevision } from './shelf-revision.js';
@@ -27,6 +28,7 @@ export class Shelf {
     @InjectModel(Download) private readonly downloads: typeof Download,
     private readonly catalogue: CatalogueReader,
     private readonly printers: PrinterCards,
+    private readonly own: OwnRevisions,
     private readonly lists: ReprintLists,
     private readonly record: KeepPrintRecord,
     private readonly transactions: Transactions,
@@ -55,40 +57,59 @@ export class Shelf {
       page,
       size: PAGE_SIZE,
       total: Number(rows[0]?.total ?? 0),
+      resting: await this.restingOf(person),
     };
+  }
+
+  /** Names of kits of which all that is left rests while a payment is in dispute. */
+  private async restingOf(person: SignedIn, kitId?: string): Promise<string[]> {
+    const rows = await selectRows<{ kitId: string }>(
+      this.database,
+      `SELECT kit_id AS kitId FROM entitlements
+       WHERE person_id = :personId AND state <> 'ended' AND (:kitId IS NULL OR kit_id = :kitId)
+       GROUP BY kit_id HAVING SUM(state = 'active') = 0`,
+      { personId: person.id, kitId: kitId ?? null },
+    );
+    return (await this.catalogue.kitsByIds(rows.map((row) => row.kitId))).map((kit) => kit.name);
   }
 
   async read(person: SignedIn, slug: string): Promise<Answer<'GET /shelf/:slug'>> {
     const kit = await this.catalogue.kitBySlug(slug);
     const item = kit && (await this.itemOf(person, kit.id));
+    if (kit && !item && (await this.restingOf(person, kit.id)).length > 0)
+      throw new Refusal('forbidden', `Downloads of ${kit.name} rest while its payment is in dispute.`);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
     const card = await this.printers.mainOf(person.id);
     const chosen = clearanceFor(best, card);
-    const [revisions, reprint, clearances, documents, cautions, downloads, [licence]] = await Promise.all([
-      this.catalogue.revisionsOf(kit.id),
+    const mine = await this.own.of(person.id, kit.id);
+    const [reprint, clearances, documents, cautions, voicing, downloads, [licence]] = await Promise.all([
       this.lists.listFor(person, kit.id, item.newest.id),
       this.catalogue.clearancesOf(item.newest.id),
       this.catalogue.documentsOf(item.newest.id),
       this.catalogue.cautionsOf(item.newest.id),
+      this.catalogue.voicingOf((item.held ?? item.newest).id),
       this.downloadsOf(person, kit.id),
       this.catalogue.licencesByIds(best?.licenceId ? [best.licenceId] : []),
     ]);
-    const labels = new Map(revisions.map((revision) => [revision.id, revision.label]));
+    if (!voicing) throw notFound('kit on your shelf');
+    const labels = new Map(mine.all.map((revision) => [revision.id, revision.label]));
     return {
       ...item,
-      orderId: best?.orderId ?? null,
+      // The order behind a gift is the giver's own affair.
+      orderId: best && best.source !== 'gift' ? best.orderId : null,
       clearance: {
         ...clearances,
         chosen,
         said: best?.clearance ?? null,
         habit: card?.clearance ? { clearance: card.clearance, printer: card.name } : null,
       },
-      revisions: revisions.map(toShelfRevision),
+      revisions: mine.covered.map(toShelfRevision),
       reprint,
       documents,
       licenceTerms: licence?.terms ?? '',
       cautions,
+      ...voicing,
       downloads: downloads.map((one) => ({
         at: one.grantedAt.toISOString(),
         revision: labels.get(one.revisionId) ?? '',
@@ -139,11 +160,10 @@ export class Shelf {
   ): Promise<Answer<'GET /shelf'>['items'][number] | null> {
     const best = await this.bestOf(person, kitId);
     const [kit] = await this.catalogue.kitsByIds([kitId]);
-    const revisions = await this.catalogue.revisionsOf(kitId);
-    // A kit of which nothing stands stays on the shelf, and says why there is nothing to fetch.
-    const newest = revisions.find((one) => !one.isWithdrawn) ?? revisions[0];
+    const { all, active, newest, heldRevisionId } = await this.own.of(person.id, kitId);
     if (!best || !kit || !newest) return null;
-    const held = revisions.find((one) => one.id === best.heldRevisionId);
+    const held = all.find((one) => one.id === heldRevisionId);
+    const beyond = all.find((one) => !one.isWithdrawn);
     const [licence] = await this.catalogue.licencesByIds(best.licenceId ? [best.licenceId] : []);
     return {
       slug: kit.slug,
@@ -152,9 +172,16 @@ export class Shelf {
       colour: kit.colour,
       source: best.source,
       since: best.createdAt.toISOString(),
+      sources: active.map((one) => ({
+        source: one.source,
+        since: one.createdAt.toISOString(),
+        until: one.untilAt?.toISOString() ?? null,
+        releasedBefore: one.releasedBefore?.toISOString() ?? null,
+      })),
       licenceName: licence?.name ?? '',
       held: held ? toShelfRevision(held) : null,
       newest: toShelfRevision(newest),
+      newerNotIncluded: beyond && beyond.id !== newest.id ? beyond.label : null,
     };
   }
 

@@ -1,4 +1,4 @@
-import { csvCell, csvRecord } from './csv.js';
+import { csvCell, csvNumber, csvRecord } from './csv.js';
 
 describe('CSV', () => {
   // RFC 4180, section 2, rules 5 to 7.
@@ -18,5 +18,6 @@ describe('CSV', () => {
 
   it('leaves numbers of our own as they are', () => {
     expect(csvCell(-5)).toBe('-5');
+    expect(csvRecord([csvNumber('-12.00'), csvNumber('0.10')])).toBe('-12.00,0.10\r\n');
   });
 });

@@ -1,8 +1,19 @@
 import type { RequestHandler } from 'express';
 import helmet from 'helmet';
 
+/** The tuner listens by the shop's own pages; nothing else of a visitor's machine is ever asked for. */
+const PERMISSIONS = 'microphone=(self), camera=(), geolocation=(), payment=(), usb=()';
+
 /** Everything from ourselves, nothing inline: no third party is ever asked for anything. */
-export const securityHeaders = (baseUrl: string): RequestHandler =>
+export const securityHeaders = (baseUrl: string): RequestHandler => {
+  const headers = contentHeaders(baseUrl);
+  return (request, response, next) => {
+    response.setHeader('Permissions-Policy', PERMISSIONS);
+    headers(request, response, next);
+  };
+};
+
+const contentHeaders = (baseUrl: string): RequestHandler =>
   helmet({
     contentSecurityPolicy: {
       useDefaults: false,

@@ -15,6 +15,9 @@ import { JobBell } from './job-bell.js';
 import { JobRegistry } from './job-registry.js';
 import { TryLater, type Finish } from './job.js';
 
+/** While an upgrade goes round, a process of the old version meets jobs that only the new one knows. */
+const UNKNOWN_ATTEMPTS = 10;
+
 interface ClaimedJob {
   id: string;
   name: string;
@@ -131,7 +134,7 @@ export class JobWorker implements OnApplicationBootstrap, BeforeApplicationShutd
       await this.fail(
         job,
         fault,
-        known?.definition.attempts ?? 1,
+        known?.definition.attempts ?? UNKNOWN_ATTEMPTS,
         known?.definition.retryAfterSeconds ?? (() => 60),
       );
     } finally {

@@ -1,11 +1,10 @@
 import { Injectable, type OnApplicationShutdown } from '@nestjs/common';
 import type { z } from 'zod';
-import { Storage } from '../adapters/storage/storage.js';
 import { measureFile } from '../catalogue/files/measure-file.job.js';
 import { MeasurementRecords } from '../catalogue/files/measurement-records.js';
 import { HandlesJob, type JobHandler } from '../jobs/job.js';
-import { withLocalPaths } from './local-copy.js';
 import { MeshRunner } from './mesh-runner.js';
+import { StoredMeshes } from './stored-meshes.js';
 
 /** After so many runs that ended without an answer a file counts as one that ends the process. */
 const MOST_TRIES = 4;
@@ -16,7 +15,7 @@ const MOST_TRIES = 4;
 export class MeasureFile implements JobHandler<typeof measureFile.payload>, OnApplicationShutdown {
   constructor(
     private readonly records: MeasurementRecords,
-    private readonly storage: Storage,
+    private readonly meshes: StoredMeshes,
     private readonly runner: MeshRunner,
   ) {}
 
@@ -29,12 +28,9 @@ export class MeasureFile implements JobHandler<typeof measureFile.payload>, OnAp
         'worker-ended',
         `could not be measured in ${MOST_TRIES} tries. Export it with fewer triangles.`,
       );
-    const outcome = await withLocalPaths(this.storage, [work.storageKey], ([path = '']) =>
-      this.runner.run({ path, fileName }),
-    );
-    if (!outcome.isMeasured) return this.records.keepRefused(sha256, outcome.code, outcome.fault);
-    const { isMeasured: _, ...findings } = outcome;
-    await this.records.keepMeasured(sha256, findings);
+    const measured = await this.meshes.measure(work.storageKey, fileName);
+    if (!measured.isMeasured) return this.records.keepRefused(sha256, measured.code, measured.fault);
+    await this.records.keepMeasured(sha256, measured.findings);
   }
 
   onApplicationShutdown(): Promise<void> {

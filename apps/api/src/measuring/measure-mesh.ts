@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises';
-import { geometryHash, measure, MeshError, outlines, readMesh, type Mesh } from '@windchest/meshes';
+import { geometryHash, measure, MeshError, outlines, preview, readMesh, type Mesh } from '@windchest/meshes';
 import { footprintOf, profileOf } from '@windchest/plates';
 import type { Drawing, Drawings } from '../catalogue/files/measured-mesh.js';
 import type { MeshOutcome, MeshTask } from './mesh-runner.js';
@@ -15,6 +15,7 @@ export const measureMesh = async ({ path, fileName }: MeshTask): Promise<MeshOut
       drawings: drawingsOf(mesh),
       printProfile: profileOf(mesh),
       footprint: footprintOf(mesh),
+      previewGlb: preview(mesh),
     };
   } catch (fault) {
     if (fault instanceof MeshError)

@@ -7,6 +7,8 @@ import { InlineMeshRunner } from './inline-mesh-runner.js';
 import { EstimatePrint } from './estimate-print.js';
 import { MeasureFile } from './measure-file.js';
 import { MeshRunner } from './mesh-runner.js';
+import { RenewMeasurement } from './renew-measurement.js';
+import { StoredMeshes } from './stored-meshes.js';
 import { ThreadMeshRunner } from './thread-mesh-runner.js';
 
 const TIMEOUT_MS = 10 * 60_000;
@@ -15,7 +17,9 @@ const MAX_HEAP_MB = 2048;
 @Module({
   imports: [CatalogueModule],
   providers: [
+    StoredMeshes,
     MeasureFile,
+    RenewMeasurement,
     CompareMeshes,
     EstimatePrint,
     {

@@ -1,6 +1,9 @@
 import type { Comparison as MeshComparison } from '@windchest/meshes';
 import type { MeshFindings } from '../catalogue/files/measured-mesh.js';
 
+/** What a mesh gives, with its coarse likeness still in hand. */
+export type MeshWork = Omit<MeshFindings, 'preview'> & { readonly previewGlb: Uint8Array };
+
 export interface MeshTask {
   /** Where the bytes lie on this machine. */
   readonly path: string;
@@ -18,7 +21,7 @@ export interface MeshFault {
   readonly fault: string;
 }
 export type MeshOutcome =
-  ({ readonly isMeasured: true } & MeshFindings) | ({ readonly isMeasured: false } & MeshFault);
+  ({ readonly isMeasured: true } & MeshWork) | ({ readonly isMeasured: false } & MeshFault);
 export type MeshPairOutcome =
   | { readonly isCompared: true; readonly result: MeshComparison }
   | ({ readonly isCompared: false } & MeshFault);

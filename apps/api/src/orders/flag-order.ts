@@ -15,4 +15,12 @@ export class FlagOrder {
     await order.update({ flags: [...order.flags, flag] }, { transaction: tx });
     await this.history.add(tx, order.id, `flagged ${flag}`, detail);
   }
+
+  /** What it stood for is over, or somebody has looked. */
+  async drop(tx: Tx, order: Order, flag: OrderFlag, detail = ''): Promise<boolean> {
+    if (!order.flags.includes(flag)) return false;
+    await order.update({ flags: order.flags.filter((one) => one !== flag) }, { transaction: tx });
+    await this.history.add(tx, order.id, `no longer flagged ${flag}`, detail);
+    return true;
+  }
 }

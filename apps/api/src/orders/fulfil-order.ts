@@ -6,7 +6,7 @@ import type { PaymentSession } from '../adapters/payments/payments.js';
 import { Coupons } from '../coupons/coupons.js';
 import { Transactions, type Tx } from '../database/transactions.js';
 import { FlagOrder } from './flag-order.js';
-import { locate } from './location-evidence.js';
+import { placeOf } from './order-country.js';
 import { OrderHistory } from './order-history.js';
 import { OrderLine } from './order-line.model.js';
 import { OrderPaidMail } from './order-paid-mail.js';
@@ -48,7 +48,7 @@ export class FulfilOrder {
       if (fault) return this.flags.set(tx, order, 'amount-differs', fault);
       await this.markPaid(tx, order, payment);
       await this.coupons.redeem(tx, order.id);
-      await this.handOver(tx, order);
+      await this.handOver(tx, order, payment);
     }, 'read-committed');
   }
 
@@ -82,7 +82,7 @@ export class FulfilOrder {
       { transaction: tx },
     );
     await this.history.add(tx, order.id, 'paid', paidText(payment));
-    const { isClear } = locate(order.declaredCountry, order.paymentCountry, order.cardCountry);
+    const { isClear } = placeOf(order);
     // Where nothing was paid there is no tax, and nothing to prove.
     if (payment && !isClear)
       await this.flags.set(
@@ -93,17 +93,18 @@ export class FulfilOrder {
       );
   }
 
-  private async handOver(tx: Tx, order: Order): Promise<void> {
+  private async handOver(tx: Tx, order: Order, payment: Payment | null): Promise<void> {
     const lines = await this.lines.findAll({
       where: { orderId: order.id },
       order: [['position', 'ASC']],
       transaction: tx,
     });
-    const { country } = locate(order.declaredCountry, order.paymentCountry, order.cardCountry);
+    const { country } = placeOf(order);
     const paid: PaidOrder = {
-      ...(order.get({ plain: true }) as Omit<PaidOrder, 'lines' | 'country' | 'facts'>),
+      ...(order.get({ plain: true }) as Omit<PaidOrder, 'lines' | 'country' | 'billing' | 'facts'>),
       lines: lines.map((line) => line.get({ plain: true })),
       country,
+      billing: payment && { name: payment.session.billingName, lines: payment.session.billingLines },
       facts: {},
     };
     await this.steps.run(tx, paid);

@@ -2,16 +2,17 @@ import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Handled } from '@windchest/contracts';
 import { literal, Op, type Order as Sorting, type WhereOptions } from 'sequelize';
-import { locate } from './location-evidence.js';
+import { placeOf } from './order-country.js';
 import { OrderLine } from './order-line.model.js';
 import type { OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
 
 export type OrderQuery = Handled<'GET /workshop/orders'>['query'];
-export type OrderFilter = Pick<OrderQuery, 'state' | 'flagged' | 'search'>;
+export type OrderFilter = Pick<OrderQuery, 'state' | 'moneyBack' | 'flagged' | 'couponId' | 'search'>;
 type Row = Answer<'GET /workshop/orders'>['items'][number];
 
 const PORTION = 500;
+const WAS_DISPUTED = 'EXISTS (SELECT 1 FROM disputes d WHERE d.order_id = `Order`.id)';
 
 /** The workshop's list of orders: a page of it for the screen, all of it for an export. */
 @Injectable()
@@ -81,11 +82,16 @@ const below = (last: Order): WhereOptions => ({
   ],
 });
 
-const whereOf = ({ state, flagged, search }: OrderFilter): WhereOptions => {
+const whereOf = ({ state, moneyBack, flagged, couponId, search }: OrderFilter): WhereOptions => {
   const like = `%${search ?? ''}%`;
   return {
     ...(state ? { state } : {}),
-    ...(flagged ? { [Op.and]: literal('JSON_LENGTH(flags) > 0') } : {}),
+    ...(couponId ? { couponId } : {}),
+    ...(moneyBack === 'refunded' ? { refundedMinor: { [Op.gt]: 0 } } : {}),
+    [Op.and]: [
+      ...(flagged ? [literal('JSON_LENGTH(flags) > 0')] : []),
+      ...(moneyBack === 'disputed' ? [literal(WAS_DISPUTED)] : []),
+    ],
     ...(search
       ? {
           [Op.or]: [
@@ -103,9 +109,11 @@ const toRow = (order: Order, kits: string[]): Row => ({
   number: order.number,
   state: order.state,
   email: order.email,
-  country: locate(order.declaredCountry, order.paymentCountry, order.cardCountry).country,
+  country: placeOf(order).country,
   kits,
+  discount: { minor: order.discountMinor, currency: order.currency },
   total: { minor: order.totalMinor, currency: order.currency },
+  refunded: { minor: order.refundedMinor, currency: order.currency },
   couponCode: order.couponCode,
   receiptNumber: order.receiptNumber,
   flags: order.flags,

@@ -17,7 +17,7 @@ import { CloseOrder } from './close-order.js';
 import { OrderHistory } from './order-history.js';
 import { OrderLine } from './order-line.model.js';
 import { Order } from './order.model.js';
-import { isStillWorthOpening, payUntil } from './pay-until.js';
+import { isStillWorthOpening, payUntil } from '../payments/pay-until.js';
 import { paymentUnreachable } from './payment-unreachable.js';
 
 /**

@@ -16,4 +16,5 @@ export class OrderLine extends Model {
   @Column(DataType.INTEGER.UNSIGNED) declare priceMinor: number;
   @Column(DataType.INTEGER.UNSIGNED) declare discountMinor: number;
   @Column(DataType.INTEGER.UNSIGNED) declare totalMinor: number;
+  @Column(DataType.INTEGER.UNSIGNED) declare refundedMinor: number;
 }

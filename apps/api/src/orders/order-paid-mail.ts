@@ -6,8 +6,13 @@ import { MailOutbox } from '../mails/mail-outbox.js';
 import type { PaidOrder } from './order-paid-steps.js';
 
 /** The whole list of cautions is each kit's own and stands in its build book. */
-const CAUTIONS =
+export const CAUTIONS =
   'Air the room while you print. Wear eye protection when you stretch bands or strings. Small parts: not for children under three. Each build book has the whole list.';
+
+const taxNotes: Partial<Record<PaidOrder['taxTreatment'], string>> = {
+  'reverse-charge': 'Reverse charge: your business owes the VAT in its own country.',
+  'business-abroad': 'No VAT is charged: your business is established outside the European Union.',
+};
 
 /** Queues the e-mail that hands over what was bought. */
 @Injectable()
@@ -44,7 +49,13 @@ export class OrderPaidMail {
         tax: tax
           .filter((line) => line.taxMinor > 0)
           .map((line) => ({ rateLabel: `VAT ${line.ratePercent} %`, amount: money(line.taxMinor) })),
-        link: linkId ? `${this.config.BASE_URL}/collect/${tokenPlaceholder('collect', linkId)}` : orderLink,
+        ...(taxNotes[order.taxTreatment] ? { taxNote: taxNotes[order.taxTreatment] } : {}),
+        ...(order.gift ? { giftTo: order.gift.email } : {}),
+        // The link of a gift is in the mail of the one who gets it.
+        link:
+          linkId && !order.gift
+            ? `${this.config.BASE_URL}/collect/${tokenPlaceholder('collect', linkId)}`
+            : orderLink,
         linkDays: this.config.LINK_DAYS,
         linkUses: this.config.LINK_USES,
         orderLink,

@@ -8,6 +8,8 @@ export interface PaidOrder extends OrderRecord {
   readonly lines: readonly OrderLineRecord[];
   /** Where the buyer is, for tax: the country two pieces of evidence agree on, else the declared one. */
   readonly country: string;
+  /** Name and address typed on the payment page; null where nothing was to pay. */
+  readonly billing: { readonly name: string | null; readonly lines: readonly string[] } | null;
   /** What the steps find out, for the e-mail and the order's page. */
   readonly facts: { receiptNumber?: string; tax?: readonly TaxLine[]; linkId?: string };
 }

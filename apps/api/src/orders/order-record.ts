@@ -1,14 +1,17 @@
+import type { BusinessBuyer, GiftWish, orderFlag, TaxTreatment } from '@windchest/contracts';
+import type { z } from 'zod';
+
 /** An order as other rooms see it. */
 export type OrderState = 'open' | 'paid' | 'cancelled' | 'expired' | 'refunded';
 
 /**
  * What staff should look at. `location-unclear`: no two pieces of evidence agree on the buyer's country.
  * `amount-differs`: what was paid is not what the order asks, so nothing was handed over.
- * `paid-after-end`: money arrived for an order that had ended. `disputed`, `refunded-outside`: the payment
- * service says so.
+ * `paid-after-end`: money arrived for an order that had ended. `disputed`, `dispute-lost`: the payment service
+ * says so. `refunded-outside`: money went back that nobody asked for here, so somebody decides on the rights.
+ * `refund-failed`: money that was to go back did not.
  */
-export type OrderFlag =
-  'location-unclear' | 'amount-differs' | 'paid-after-end' | 'disputed' | 'refunded-outside';
+export type OrderFlag = z.output<typeof orderFlag>;
 
 /** Tax within the total, at one rate. `ratePercent` is decimal text such as `25.5`. */
 export interface TaxLine {
@@ -27,10 +30,16 @@ export interface OrderRecord {
   readonly subtotalMinor: number;
   readonly discountMinor: number;
   readonly totalMinor: number;
+  readonly refundedMinor: number;
   readonly couponCode: string | null;
   readonly declaredCountry: string;
   readonly paymentCountry: string | null;
   readonly cardCountry: string | null;
+  readonly settledCountry: string | null;
+  readonly taxTreatment: TaxTreatment;
+  readonly business: BusinessBuyer | null;
+  /** Whose the files are, where they are not the buyer's. */
+  readonly gift: GiftWish | null;
   readonly flags: readonly OrderFlag[];
   readonly receiptNumber: string | null;
   readonly createdAt: Date;
@@ -49,4 +58,5 @@ export interface OrderLineRecord {
   readonly priceMinor: number;
   readonly discountMinor: number;
   readonly totalMinor: number;
+  readonly refundedMinor: number;
 }

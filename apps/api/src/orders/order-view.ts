@@ -4,8 +4,10 @@ import type { BuyerOrder } from '@windchest/contracts';
 import { Clock } from '../adapters/clock/clock.js';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import type { SignedIn } from '../http/person.js';
+import { OrderFacts } from './order-facts.js';
 import { OrderLine } from './order-line.model.js';
 import { Order } from './order.model.js';
+import { RefundView } from './refunds/refund-view.js';
 
 /** Orders as their buyers see them. */
 @Injectable()
@@ -13,6 +15,8 @@ export class OrderView {
   constructor(
     @InjectModel(OrderLine) private readonly lines: typeof OrderLine,
     private readonly catalogue: CatalogueReader,
+    private readonly refunds: RefundView,
+    private readonly facts: OrderFacts,
     private readonly clock: Clock,
   ) {}
 
@@ -29,6 +33,11 @@ export class OrderView {
       order: [['position', 'ASC']],
     });
     const kits = await this.catalogue.kitsByIds([...new Set(lines.map((line) => line.kitId))]);
+    const orderIds = orders.map((order) => order.id);
+    const [refunds, rights] = await Promise.all([
+      this.refunds.forBuyers(orderIds),
+      this.facts.rightsOf(orderIds),
+    ]);
     const kitOf = new Map(kits.map((kit) => [kit.id, kit]));
     return orders.map((order) => {
       const money = (minor: number) => ({ minor, currency: order.currency });
@@ -56,15 +65,22 @@ export class OrderView {
             price: money(line.priceMinor),
             discount: money(line.discountMinor),
             total: money(line.totalMinor),
+            refunded: money(line.refundedMinor),
+            right: rights.get(line.id) ?? null,
           })),
         subtotal: money(order.subtotalMinor),
         discount: money(order.discountMinor),
         total: money(order.totalMinor),
+        refunded: money(order.refundedMinor),
+        refunds: refunds.get(order.id) ?? [],
         tax: (order.tax ?? []).map((line) => ({
           ratePercent: line.ratePercent,
           net: money(line.netMinor),
           tax: money(line.taxMinor),
         })),
+        taxTreatment: order.taxTreatment,
+        business: order.business,
+        gift: order.gift,
         couponCode: order.couponCode,
         isMine: person !== null && order.personId === person.id,
       };

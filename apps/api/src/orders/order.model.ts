@@ -1,3 +1,4 @@
+import type { BusinessBuyer, GiftWish, TaxTreatment } from '@windchest/contracts';
 import { Column, DataType, Model, Table } from 'sequelize-typescript';
 import { IdColumn, MomentColumn } from '../database/columns.js';
 import type { OrderFlag, OrderState, TaxLine } from './order-record.js';
@@ -15,11 +16,14 @@ export class Order extends Model {
   @Column(DataType.INTEGER.UNSIGNED) declare subtotalMinor: number;
   @Column(DataType.INTEGER.UNSIGNED) declare discountMinor: number;
   @Column(DataType.INTEGER.UNSIGNED) declare totalMinor: number;
+  @Column(DataType.INTEGER.UNSIGNED) declare refundedMinor: number;
   @Column(DataType.CHAR(36)) declare couponId: string | null;
   @Column(DataType.STRING(40)) declare couponCode: string | null;
   @Column(DataType.CHAR(2)) declare declaredCountry: string;
   @Column(DataType.CHAR(2)) declare paymentCountry: string | null;
   @Column(DataType.CHAR(2)) declare cardCountry: string | null;
+  /** Where staff settled by hand what the evidence left open. */
+  @Column(DataType.CHAR(2)) declare settledCountry: string | null;
   @Column(DataType.JSON) declare flags: OrderFlag[];
   @Column(DataType.TEXT) declare consentText: string;
   @MomentColumn() declare consentAt: Date;
@@ -29,6 +33,9 @@ export class Order extends Model {
   @MomentColumn({ isNullable: true }) declare payUntil: Date | null;
   @Column(DataType.STRING(30)) declare receiptNumber: string | null;
   @Column(DataType.JSON) declare tax: TaxLine[] | null;
+  @Column(DataType.STRING(20)) declare taxTreatment: TaxTreatment;
+  @Column(DataType.JSON) declare business: BusinessBuyer | null;
+  @Column(DataType.JSON) declare gift: GiftWish | null;
   @MomentColumn({ isNullable: true }) declare paidAt: Date | null;
   @MomentColumn({ isNullable: true }) declare closedAt: Date | null;
   @MomentColumn() declare createdAt: Date;

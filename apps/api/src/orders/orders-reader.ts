@@ -3,15 +3,25 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Sequelize } from 'sequelize';
 import { selectRows } from '../database/rows.js';
 import type { Tx } from '../database/transactions.js';
+import type { SignedIn } from '../http/person.js';
 import { ListOrders, type OrderFilter } from './list-orders.js';
 import { OrderLine } from './order-line.model.js';
 import type { OrderLineRecord, OrderRecord } from './order-record.js';
 import { Order } from './order.model.js';
+import { OwnOrders } from './own-orders.js';
 
 export interface DaySales {
   /** ISO date, in UTC. */
   readonly day: string;
   readonly orders: number;
+  readonly grossMinor: number;
+}
+
+export interface KitSales {
+  readonly kitId: string;
+  /** As it was called when it was last sold. */
+  readonly name: string;
+  readonly sold: number;
   readonly grossMinor: number;
 }
 
@@ -23,10 +33,16 @@ export class OrdersReader {
     @InjectModel(Order) private readonly orders: typeof Order,
     @InjectModel(OrderLine) private readonly lines: typeof OrderLine,
     private readonly listing: ListOrders,
+    private readonly own: OwnOrders,
   ) {}
 
   byId(id: string, tx?: Tx): Promise<OrderRecord | null> {
     return this.orders.findByPk(id, { transaction: tx ?? null });
+  }
+
+  /** @throws Refusal `not-found`, alike where there is no such order and where it is not theirs */
+  ofBuyer(id: string, person: SignedIn | null, key: string | undefined): Promise<OrderRecord> {
+    return this.own.find(id, person, key);
   }
 
   linesOf(orderId: string, tx?: Tx): Promise<OrderLineRecord[]> {
@@ -60,6 +76,24 @@ export class OrdersReader {
       orders: Number(row.orders),
       grossMinor: Number(row.grossMinor),
     }));
+  }
+
+  /** What each kit brought in since then, what went back not taken off; the best first. */
+  async salesByKit(from: Date, currency: string): Promise<KitSales[]> {
+    const rows = await selectRows<{
+      kitId: string;
+      name: string;
+      sold: number | string;
+      grossMinor: number | string;
+    }>(
+      this.database,
+      `SELECT l.kit_id AS kitId, MAX(l.kit_name) AS name, COUNT(*) AS sold, SUM(l.total_minor) AS grossMinor
+       FROM order_lines l JOIN orders o ON o.id = l.order_id
+       WHERE o.paid_at >= :from AND o.currency = :currency
+       GROUP BY l.kit_id ORDER BY grossMinor DESC, sold DESC, kitId`,
+      { from, currency },
+    );
+    return rows.map((row) => ({ ...row, sold: Number(row.sold), grossMinor: Number(row.grossMinor) }));
   }
 
   async countFlagged(): Promise<number> {

@@ -28,7 +28,6 @@ describe('events of the payment service', () => {
     await shop.control('/webhooks/flush');
     await shop.drain();
   };
-  const intentOf = async (placed: CheckoutAnswer) => (await show(placed.orderId)).paymentIntentId as string;
 
   describe('that are forged, stale or altered', () => {
     const body = JSON.stringify({
@@ -103,33 +102,6 @@ describe('events of the payment service', () => {
     await shop.control(`/sessions/${session}/pay`, { country: 'DE' });
     await delivered();
     expect((await show(placed.orderId)).state).toBe('paid');
-  });
-
-  it('of a refund or a dispute are noted on the order and flagged, once', async () => {
-    const stripe = new Stripe(shop.stripe.apiKey, {
-      host: '127.0.0.1',
-      port: shop.stripe.port,
-      protocol: 'http',
-    });
-    const refunded = await shop.checkout([knot.licenceId]);
-    const disputed = await shop.checkout([knot.licenceId]);
-    for (const placed of [refunded, disputed]) await shop.pay(placed.paymentUrl);
-    await delivered();
-    await shop.control('/webhooks', { duplicates: 2 });
-    await stripe.refunds.create({ payment_intent: await intentOf(refunded), amount: 400 });
-    await shop.control('/disputes', { payment_intent: await intentOf(disputed), reason: 'fraudulent' });
-    await delivered();
-    await shop.control('/webhooks', { reset: true });
-    const first = await show(refunded.orderId);
-    expect(first).toMatchObject({ state: 'paid', flags: ['refunded-outside'] });
-    const noted = (order: { history: { what: string; detail: string }[] }, what: string) =>
-      order.history.filter((entry) => entry.what === what);
-    expect(noted(first, 'charge.refunded')).toMatchObject([
-      { detail: expect.stringContaining('400') as string },
-    ]);
-    const second = await show(disputed.orderId);
-    expect(second.flags).toEqual(['disputed']);
-    expect(noted(second, 'charge.dispute.created')).toHaveLength(1);
   });
 
   it('of another amount hand nothing over and show the order to the workshop', async () => {

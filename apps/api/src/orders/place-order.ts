@@ -1,24 +1,27 @@
+import { isDeepStrictEqual } from 'node:util';
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import { consentText, type Handled } from '@windchest/contracts';
+import { consentText, type BusinessBuyer, type Handled } from '@windchest/contracts';
 import { Clock } from '../adapters/clock/clock.js';
 import { LinkTokens } from '../adapters/secrets/link-tokens.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { Coupons } from '../coupons/coupons.js';
-import { isChargeable } from '../coupons/smallest-charge.js';
+import { isChargeable } from '../payments/smallest-charge.js';
 import { newId } from '../database/columns.js';
 import { isDuplicate } from '../database/errors.js';
 import { Transactions, type Tx } from '../database/transactions.js';
 import type { SignedIn } from '../http/person.js';
 import { Refusal } from '../http/refusal.js';
 import { JobQueue } from '../jobs/job-queue.js';
+import { businessOf, checkGift } from './check-wishes.js';
 import { OrderHistory } from './order-history.js';
 import { OrderLine } from './order-line.model.js';
 import { newOrderNumber } from './order-number.js';
 import { Order } from './order.model.js';
-import { payUntil } from './pay-until.js';
+import { payUntil } from '../payments/pay-until.js';
 import { PriceBasket, type PricedBasket } from './price-basket.js';
 import { FIRST_LOOK_SECONDS, reconcileOrder } from './reconcile-order.job.js';
+import { SalesTax, type TaxTerms } from './sales-tax.js';
 import { tooLittleToCharge } from './too-little-to-charge.js';
 
 type Body = Handled<'POST /checkout'>['body'];
@@ -37,6 +40,7 @@ export class PlaceOrder {
     private readonly transactions: Transactions,
     private readonly basket: PriceBasket,
     private readonly coupons: Coupons,
+    private readonly taxes: SalesTax,
     private readonly history: OrderHistory,
     private readonly jobs: JobQueue,
     private readonly tokens: LinkTokens,
@@ -65,6 +69,8 @@ export class PlaceOrder {
       order.email === body.email &&
       order.declaredCountry === body.country &&
       (order.couponCode ?? '') === (body.couponCode ?? '') &&
+      isDeepStrictEqual(order.business, businessOf(body.business, body.country)) &&
+      isDeepStrictEqual(order.gift, body.gift ?? null) &&
       before.join() === now.join();
     if (!isSame)
       throw new Refusal(
@@ -77,7 +83,9 @@ export class PlaceOrder {
   private async write(tx: Tx, body: Body, person: SignedIn | null): Promise<Order> {
     const buyer = { email: body.email, personId: person?.id ?? null };
     const licenceIds = body.items.map((item) => item.licenceId);
-    const priced = await this.basket.price(licenceIds, body.couponCode, buyer, tx);
+    const business = businessOf(body.business, body.country);
+    const terms = await this.taxes.termsFor(body.country, business, tx);
+    const priced = await this.basket.price(licenceIds, body.couponCode, buyer, terms, tx);
     if (priced.gone.length > 0)
       throw new Refusal(
         'basket-has-gone',
@@ -85,7 +93,12 @@ export class PlaceOrder {
       );
     if (!isChargeable(priced.totalMinor, this.config.WORKSHOP_CURRENCY))
       throw tooLittleToCharge(priced.totalMinor, this.config);
-    const order = await this.writeOrder(tx, body, person, priced);
+    checkGift(body.gift, body.email, priced.totalMinor);
+    const order = await this.writeOrder(tx, body, person, priced, {
+      business,
+      // Where nothing is paid there is nothing to tax.
+      taxTreatment: priced.totalMinor === 0 ? 'consumer' : terms.treatment,
+    });
     await this.history.add(tx, order.id, 'placed', `${priced.lines.length} in the basket`);
     await this.jobs.add(
       tx,
@@ -109,6 +122,7 @@ export class PlaceOrder {
     body: Body,
     person: SignedIn | null,
     priced: PricedBasket,
+    taxed: { business: BusinessBuyer | null; taxTreatment: TaxTerms['treatment'] },
   ): Promise<Order> {
     const id = newId();
     const now = this.clock.now();
@@ -128,6 +142,8 @@ export class PlaceOrder {
         couponId: priced.coupon?.id ?? null,
         couponCode: priced.coupon?.code ?? null,
         declaredCountry: body.country,
+        ...taxed,
+        gift: body.gift ?? null,
         flags: [],
         consentText,
         consentAt: now,

@@ -2,6 +2,7 @@ import { Injectable } from '@nestjs/common';
 import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { Coupons, type CouponBuyer, type PricedCoupon } from '../coupons/coupons.js';
 import type { Tx } from '../database/transactions.js';
+import type { TaxTerms } from './sales-tax.js';
 
 type OfferedLicence = Awaited<ReturnType<CatalogueReader['offeredLicences']>>[number];
 
@@ -30,11 +31,15 @@ export class PriceBasket {
     private readonly coupons: Coupons,
   ) {}
 
-  /** @throws Refusal with a `coupon-…` code where the coupon cannot be used */
+  /**
+   * @param terms what the buyer's country and business make of the prices; without them they stand as shown
+   * @throws Refusal with a `coupon-…` code where the coupon cannot be used
+   */
   async price(
     licenceIds: readonly string[],
     couponCode: string | undefined,
     buyer: CouponBuyer,
+    terms: Pick<TaxTerms, 'chargedOf'> | null,
     tx?: Tx,
   ): Promise<PricedBasket> {
     // Files are bought once: a licence that stands in the basket twice is one line.
@@ -42,16 +47,15 @@ export class PriceBasket {
     const offered = wanted.length === 0 ? [] : await this.catalogue.offeredLicences(wanted, tx);
     const found = new Map(offered.map((licence) => [licence.licenceId, licence]));
     const licences = wanted.flatMap((id) => found.get(id) ?? []);
+    const chargedOf = terms?.chargedOf ?? ((priceMinor: number) => priceMinor);
     const coupon =
-      couponCode && licences.length > 0 ? await this.coupons.priceFor(couponCode, licences, buyer, tx) : null;
+      couponCode && licences.length > 0
+        ? await this.coupons.priceFor(couponCode, licences, buyer, { chargedOf, tx })
+        : null;
     const lines = licences.map((licence, index) => {
+      const priceMinor = chargedOf(licence.priceMinor);
       const discountMinor = coupon?.discounts[index] ?? 0;
-      return {
-        licence,
-        priceMinor: licence.priceMinor,
-        discountMinor,
-        totalMinor: licence.priceMinor - discountMinor,
-      };
+      return { licence, priceMinor, discountMinor, totalMinor: priceMinor - discountMinor };
     });
     return {
       lines,

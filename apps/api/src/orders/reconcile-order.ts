@@ -5,7 +5,9 @@ import { Clock } from '../adapters/clock/clock.js';
 import { PaymentsUnreachable } from '../adapters/payments/payments.js';
 import { HandlesJob, TryLater, type JobHandler } from '../jobs/job.js';
 import { CloseOrder } from './close-order.js';
+import { FollowMoneyBack } from './follow-money-back.js';
 import { FulfilOrder } from './fulfil-order.js';
+import { nextMoneyLook } from './next-money-look.js';
 import { Order } from './order.model.js';
 import { FIRST_LOOK_SECONDS, reconcileOrder } from './reconcile-order.job.js';
 import { SettleOrder } from './settle-order.js';
@@ -23,12 +25,16 @@ export class ReconcileOrder implements JobHandler<typeof reconcileOrder.payload>
     private readonly settling: SettleOrder,
     private readonly fulfilling: FulfilOrder,
     private readonly closing: CloseOrder,
+    private readonly moneyBack: FollowMoneyBack,
     private readonly clock: Clock,
   ) {}
 
   async handle({ orderId }: z.output<typeof reconcileOrder.payload>): Promise<void> {
     const order = await this.orders.findByPk(orderId);
-    if (!order || order.state !== 'open' || order.flags.includes('amount-differs')) return;
+    if (!order) return;
+    if (order.paidAt && order.paymentIntentId)
+      return this.lookAtMoney({ id: orderId, paymentIntentId: order.paymentIntentId, paidAt: order.paidAt });
+    if (order.state !== 'open' || order.flags.includes('amount-differs')) return;
     if (order.totalMinor === 0) return this.fulfilling.fulfil(orderId, null);
     if (!order.sessionId) return this.endIfForgotten(order);
     try {
@@ -37,9 +43,20 @@ export class ReconcileOrder implements JobHandler<typeof reconcileOrder.payload>
       if (fault instanceof PaymentsUnreachable) throw new TryLater(this.nextLook(order));
       throw fault;
     }
-    // Whatever that led to, the next look finds out; a final order ends the job there.
+    // Whatever that led to, the next look finds out; an order that ended unpaid ends the job there.
     const after = await this.orders.findByPk(orderId);
-    if (after?.state === 'open') throw new TryLater(this.nextLook(after));
+    if (after && (after.state === 'open' || after.paymentIntentId)) throw new TryLater(this.nextLook(after));
+  }
+
+  /** Events of refunds and disputes may be lost for good, too. */
+  private async lookAtMoney(order: { id: string; paymentIntentId: string; paidAt: Date }): Promise<void> {
+    const seconds = nextMoneyLook(order.paidAt, this.clock.now());
+    try {
+      await this.moneyBack.follow(order);
+    } catch (fault) {
+      if (!(fault instanceof PaymentsUnreachable)) throw fault;
+    }
+    if (seconds !== null) throw new TryLater(seconds);
   }
 
   /** The checkout broke off before there was a page to pay on, and the time to go on with it is over. */

@@ -31,7 +31,7 @@ export class SettleOrder {
   async follow(session: PaymentSession): Promise<PaymentSession['state'] | null> {
     const order = session.orderId ? await this.orders.findByPk(session.orderId) : null;
     if (!order) return null;
-    const isDone = order.state === 'paid' && order.sessionId === session.id;
+    const isDone = order.paidAt !== null && order.sessionId === session.id;
     if (session.state === 'paid' && !isDone)
       await this.fulfilling.fulfil(order.id, { session, cardCountry: await this.cardCountry(session) });
     // A page that the order does not know ends without any effect on the order.

@@ -1,6 +1,6 @@
 import { formatMoney } from '@windchest/money';
 import type { Config } from '../config/config.js';
-import { smallestChargeOf } from '../coupons/smallest-charge.js';
+import { smallestChargeOf } from '../payments/smallest-charge.js';
 import { Refusal } from '../http/refusal.js';
 
 /** A total between nothing and what the payment service charges at least. */

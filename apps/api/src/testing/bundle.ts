@@ -27,7 +27,7 @@ export const releaseWithBundle = async (
     shop.database,
     `INSERT INTO revisions (id, kit_id, mark, issue, state, assembly_notes, change_notes, cautions, print_spec, hardware,
        build_volume, declared_cents, room, bundle_sha256, bundle_bytes, released_at, created_at, updated_at)
-     VALUES (:revisionId, :kitId, 1, :issue, 'released', '', '', '', '{}', '[]', '{"xMm":220,"yMm":220,"zMm":250}', 10,
+     VALUES (:revisionId, :kitId, 1, :issue, 'released', '', '', '', '{}', '[]', '{"xMm":220,"yMm":220,"zMm":250}', 12,
        '{"temperatureC":20}', :sha256, :length, :now, :now, :now)`,
     values,
   );

@@ -13,6 +13,8 @@ export const couponBody = (changes: Partial<CouponBody> = {}): CouponBody => ({
   endsAt: null,
   cap: null,
   perBuyer: null,
+  isForSupporters: false,
+  minBasketMinor: null,
   isAnnounced: true,
   isActive: true,
   ...changes,

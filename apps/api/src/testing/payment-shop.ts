@@ -25,6 +25,8 @@ export interface CheckoutOptions {
   readonly country?: string;
   readonly couponCode?: string;
   readonly attempt?: string;
+  readonly business?: { name: string; address: string; vatNumber?: string };
+  readonly gift?: { email: string; giver: string; greeting: string };
 }
 
 export const checkoutBody = (licenceIds: readonly string[], options: CheckoutOptions = {}) => ({
@@ -32,6 +34,8 @@ export const checkoutBody = (licenceIds: readonly string[], options: CheckoutOpt
   ...(options.couponCode ? { couponCode: options.couponCode } : {}),
   email: options.email ?? `guest-${randomUUID().slice(0, 8)}@mail.example`,
   country: options.country ?? 'DE',
+  ...(options.business ? { business: options.business } : {}),
+  ...(options.gift ? { gift: options.gift } : {}),
   hasConsented: true,
   attempt: options.attempt ?? randomUUID(),
 });

@@ -1,5 +1,5 @@
 import { paths } from '../config/paths.js';
-import { faultTexts } from '../config/texts/shared.js';
+import { noPageTexts } from '../config/texts/no-page.js';
 import { LinkButton } from '../ui/button.js';
 import { PageTitle } from '../ui/page-title.js';
 import { Band } from '../ui/sheet.js';
@@ -7,13 +7,13 @@ import { Heading, Text } from '../ui/text.js';
 
 export const NotFoundPage = () => (
   <Band>
-    <PageTitle title={faultTexts.notFound} />
+    <PageTitle title={noPageTexts.notFound} />
     <Heading level={1} look="title">
-      {faultTexts.notFound}
+      {noPageTexts.notFound}
     </Heading>
     <Text look="lead" marginTop="3" marginBottom="6">
-      {faultTexts.notFoundDetail}
+      {noPageTexts.notFoundDetail}
     </Text>
-    <LinkButton to={paths.home.to()}>{faultTexts.toKits}</LinkButton>
+    <LinkButton to={paths.home.to()}>{noPageTexts.toKits}</LinkButton>
   </Band>
 );

@@ -3,6 +3,8 @@ import { formatMoney, type Money } from '@windchest/money';
 /** The workshop's language; it is one for the whole page, so a variable serves better than an argument everywhere. */
 let locale = 'en-GB';
 
+export const spokenLocale = (): string => locale;
+
 export function speakLocale(tag: string): void {
   if (tag === locale) return;
   locale = tag;
@@ -94,3 +96,9 @@ export const dateTime = (moment: string): string =>
     hour: '2-digit',
     minute: '2-digit',
   }).format(new Date(moment));
+
+/** `Nov 2026`, of a month such as `2026-11`. */
+export const monthName = (month: string): string =>
+  new Intl.DateTimeFormat(locale, { month: 'short', year: 'numeric', timeZone: 'UTC' }).format(
+    new Date(`${month}-15T00:00:00Z`),
+  );

@@ -1,5 +1,5 @@
 import { type ReactNode, useState } from 'react';
-import { dialogTexts } from '../config/texts/shared.js';
+import { dialogTexts } from '../config/texts/furniture.js';
 import { Button } from './button.js';
 import { Dialog } from './dialog.js';
 import { Text } from './text.js';

@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react';
-import { copyTexts } from '../config/texts/shared.js';
+import { copyTexts } from '../config/texts/furniture.js';
 import { Button, type ButtonProps } from './button.js';
 
 export interface CopyButtonProps extends Omit<ButtonProps, 'onClick' | 'children'> {

@@ -3,7 +3,7 @@ import { type ComponentProps, useMemo } from 'react';
 import ReactMarkdown from 'react-markdown';
 import rehypeSanitize from 'rehype-sanitize';
 import remarkGfm from 'remark-gfm';
-import { markdownTexts } from '../config/texts/shared.js';
+import { markdownTexts } from '../config/texts/furniture.js';
 import { linkParts, type MarkdownNode } from './part-links.js';
 import { placePictures } from './placed-pictures.js';
 

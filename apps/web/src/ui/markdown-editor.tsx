@@ -1,6 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import { createContext, type ReactNode, useContext, useDeferredValue, useRef } from 'react';
-import { editorTexts } from '../config/texts/shared.js';
+import { editorTexts } from '../config/texts/furniture.js';
 import { TextArea } from './field/text-field.js';
 import type { FieldCommon } from './field/field.js';
 import { Markdown } from './markdown.js';

@@ -1,6 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import { type ReactNode, useId } from 'react';
-import { progressTexts } from '../config/texts/shared.js';
+import { progressTexts } from '../config/texts/furniture.js';
 
 export interface ProgressProps {
   /** What is going on: "tongue-5.3mf, measuring". */

@@ -37,7 +37,18 @@ export const laterOutcomes = {
 
 export const laterNames = Object.keys(laterOutcomes) as (keyof typeof laterOutcomes)[];
 
-const parameters = ['card', 'cardCountry', 'email', 'name', 'country', 'outcome', 'later'] as const;
+const parameters = [
+  'card',
+  'cardCountry',
+  'email',
+  'name',
+  'country',
+  'line1',
+  'postalCode',
+  'city',
+  'outcome',
+  'later',
+] as const;
 
 /**
  * Does what a buyer does on a page. `outcome` bends the card to an end: `second-step` stops where the bank's
@@ -98,6 +109,11 @@ function readBuyer(
       email: fields.string('email') ?? knownEmail ?? 'buyer@example.test',
       name: fields.string('name'),
       country: (fields.string('country') ?? 'DE').toUpperCase(),
+      street: {
+        line1: fields.string('line1'),
+        postalCode: fields.string('postalCode'),
+        city: fields.string('city'),
+      },
     },
     outcome,
   };

@@ -78,7 +78,7 @@ function finish(visit: Visit, isAuthenticated: boolean): PayResult {
 function complete(standIn: StandIn, session: Stripe.Checkout.Session, buyer: Buyer): void {
   session.status = 'complete';
   session.url = null;
-  session.customer_details = customerDetails(buyer.email, buyer.name, addressIn(buyer.country));
+  session.customer_details = customerDetails(buyer.email, buyer.name, addressIn(buyer.country, buyer.street));
   emit(standIn, 'checkout.session.completed', session, null);
 }
 

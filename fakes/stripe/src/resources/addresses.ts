@@ -1,9 +1,17 @@
 import type Stripe from 'stripe';
 import type { Fields } from '../api/fields.js';
+import type { Street } from '../state/records.js';
 
 /** An address of which the stand-in's payment page asks the country alone. */
-export function addressIn(country: string | null): Stripe.Address {
-  return { city: null, country, line1: null, line2: null, postal_code: null, state: null };
+export function addressIn(country: string | null, street?: Street): Stripe.Address {
+  return {
+    city: street?.city ?? null,
+    country,
+    line1: street?.line1 ?? null,
+    line2: null,
+    postal_code: street?.postalCode ?? null,
+    state: null,
+  };
 }
 
 export function readAddress(fields: Fields | null): Stripe.Address | null {

@@ -16,7 +16,7 @@ export function createPaymentMethod(standIn: StandIn, card: Card, buyer: Buyer):
     id: standIn.newId('pm'),
     object: 'payment_method',
     billing_details: {
-      address: addressIn(buyer.country),
+      address: addressIn(buyer.country, buyer.street),
       email: buyer.email,
       name: buyer.name,
       phone: null,

@@ -59,7 +59,14 @@ export function calmWeather(): WebhookSwitches {
 /** What the buyer typed, kept while a second step waits for an answer. */
 export type Waiting = { cardNumber: string; cardCountry: string | null; buyer: Buyer };
 
-export type Buyer = { email: string; name: string | null; country: string };
+export type Buyer = {
+  email: string;
+  name: string | null;
+  country: string;
+  /** The rest of the billing address, which the stand-in's page does not ask for. */
+  street?: Street;
+};
+export type Street = { line1: string | null; postalCode: string | null; city: string | null };
 
 /** The card behind a payment method: what the API does not show of it. */
 export type SavedCard = {

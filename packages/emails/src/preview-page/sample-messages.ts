@@ -1,5 +1,6 @@
 import { money } from '@windchest/money';
 import type { EmailMessage, EmailWorkshop } from '../email-message.js';
+import { samplePledges } from './sample-pledges.js';
 
 export const sampleWorkshop: EmailWorkshop = {
   name: 'Saltmarsh Sound Works',
@@ -82,6 +83,26 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
     },
   },
   {
+    title: 'Order paid, a business’s gift',
+    message: {
+      template: 'order-paid',
+      name: 'Marlow',
+      orderNumber: 'W-2026-0419',
+      receiptNumber: '2026-000393',
+      lines: [{ kit: 'Curlew', licence: 'personal prints', revision: 'Mk 1.4', total: eur(2017) }],
+      subtotal: eur(2017),
+      total: eur(2017),
+      tax: [],
+      taxNote: 'Reverse charge: your business owes the VAT in its own country.',
+      giftTo: 'wren@mail.example',
+      link: 'https://saltmarsh.example/orders/W-2026-0419',
+      linkDays: 30,
+      linkUses: 5,
+      orderLink: 'https://saltmarsh.example/orders/W-2026-0419',
+      cautionsLine,
+    },
+  },
+  {
     title: 'Order of a free kit',
     message: {
       template: 'order-paid',
@@ -116,13 +137,48 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       orderNumber: 'W-2026-0417',
       receiptNumber: '2026-000391',
       creditNoteNumber: '2026-C00012',
-      amount: eur(1600),
-      tax: [{ rateLabel: 'VAT 19 %', amount: eur(255) }],
+      amount: eur(2100),
+      cause: 'refund',
+      tax: [{ rateLabel: 'VAT 19 %', amount: eur(335) }],
+      lines: [
+        { kit: 'Curlew', licence: 'personal prints', amount: eur(1600), endsRight: true },
+        { kit: 'Reed Bunting', licence: 'classroom', amount: eur(500), endsRight: false },
+      ],
       endedKits: ['Curlew'],
       keptKits: ['Reed Bunting'],
+      couponCode: 'FIRSTWIND',
       orderLink: 'https://saltmarsh.example/orders/W-2026-0417',
     },
   },
+  {
+    title: 'Refund by a dispute',
+    message: {
+      template: 'order-refunded',
+      orderNumber: 'W-2026-0420',
+      receiptNumber: '2026-000394',
+      creditNoteNumber: '2026-C00013',
+      cause: 'dispute',
+      amount: eur(2400),
+      tax: [{ rateLabel: 'VAT 22 %', amount: eur(433) }],
+      lines: [{ kit: 'Curlew', licence: 'personal prints', amount: eur(2400), endsRight: true }],
+      endedKits: ['Curlew'],
+      orderLink: 'https://saltmarsh.example/orders/W-2026-0420',
+    },
+  },
+  ...(['open', 'lost', 'won', 'inquiry', 'closed'] as const).map((stand) => ({
+    title: `Dispute, ${stand}`,
+    message: {
+      template: 'payment-disputed' as const,
+      name: 'Ines',
+      orderNumber: 'W-2026-0420',
+      buyer: 'whimbrel@mail.example',
+      stand,
+      amount: eur(2400),
+      reason: 'product_not_received',
+      answerBy: '2026-12-10T14:40:00Z',
+      orderLink: 'https://saltmarsh.example/workshop/orders/W-2026-0420',
+    },
+  })),
   {
     title: 'Staff invitation',
     message: {
@@ -184,9 +240,7 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       template: 'gift-received',
       name: 'Wren',
       from: 'Marlow',
-      kit: 'Curlew',
-      licence: 'personal prints',
-      revision: 'Mk 1.4',
+      kits: [{ kit: 'Curlew', licence: 'personal prints', revision: 'Mk 1.4' }],
       note: 'For the long evenings. I shall want to hear it in spring.',
       link: page,
       linkDays: 90,
@@ -219,4 +273,5 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       link: 'https://saltmarsh.example/shelf/curlew',
     },
   },
+  ...samplePledges,
 ];

@@ -81,13 +81,17 @@ export function giftReceived(message: GiftReceivedMessage, workshop: EmailWorksh
   const words = texts.giftReceived;
   const from = greetedName(message.from) ?? workshop.name;
   const note: EmailBlock[] = message.note ? [{ kind: 'quote', text: message.note, by: from }] : [];
+  const kits = message.kits.map(({ kit }) => kit);
   return {
-    subject: words.subject(from, message.kit),
+    subject: words.subject(from, kits),
     preheader: words.preheader,
-    heading: words.heading(message.kit),
+    heading: words.heading(kits),
     blocks: [
       say(texts.hello(greetedName(message.name))),
-      say(words.body(from, message.kit, texts.unbroken(message.revision), message.licence)),
+      say(words.body(from, kits)),
+      ...message.kits.map(({ kit, revision, licence }) =>
+        say(words.kit(kit, texts.unbroken(revision), licence)),
+      ),
       ...note,
       { kind: 'button', label: words.button, link: message.link },
       { kind: 'paragraph', text: words.limits(message.linkDays, message.linkUses), isSoft: true },

@@ -30,15 +30,32 @@ export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): E
           { label: words.discount(message.couponCode), amount: minus(show(discount)) },
         ];
 
+  const kits = message.lines.map(({ kit }) => kit);
+  const { giftTo, taxNote } = message;
+  const handedOver: EmailBlock[] =
+    giftTo === undefined
+      ? [
+          { kind: 'button', label: words.button, link: message.link },
+          { kind: 'paragraph', text: words.limits(message.linkDays, message.linkUses), isSoft: true },
+        ]
+      : [
+          say(words.giftSent(giftTo, kits)),
+          { kind: 'button', label: words.openOrder, link: message.orderLink },
+        ];
+  const cautions: EmailBlock[] =
+    giftTo === undefined ? [{ kind: 'note', label: words.cautions, text: message.cautionsLine }] : [];
+
   return {
-    subject: words.subject(message.lines.map(({ kit }) => kit)),
-    preheader: words.preheader(message.orderNumber, show(message.total)),
-    heading: words.heading,
+    subject: giftTo === undefined ? words.subject(kits) : words.giftSubject(kits),
+    preheader:
+      giftTo === undefined
+        ? words.preheader(message.orderNumber, show(message.total))
+        : words.giftPreheader(message.orderNumber, show(message.total)),
+    heading: giftTo === undefined ? words.heading : words.giftHeading,
     blocks: [
       say(texts.hello(greetedName(message.name))),
       say(isFree ? words.free : words.paid(show(message.total))),
-      { kind: 'button', label: words.button, link: message.link },
-      { kind: 'paragraph', text: words.limits(message.linkDays, message.linkUses), isSoft: true },
+      ...handedOver,
       {
         kind: 'price-table',
         rows: message.lines.map(lineRow),
@@ -52,7 +69,8 @@ export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): E
           })),
         ],
       },
-      { kind: 'note', label: words.cautions, text: message.cautionsLine },
+      ...(taxNote === undefined ? [] : [{ ...say(taxNote), isSoft: true }]),
+      ...cautions,
       {
         kind: 'title-block',
         cells: [
@@ -67,24 +85,43 @@ export function orderPaid(message: OrderPaidMessage, workshop: EmailWorkshop): E
 
 export function orderRefunded(message: OrderRefundedMessage, workshop: EmailWorkshop): EmailContent {
   const words = texts.orderRefunded;
-  const amount = formatMoney(message.amount, workshop.locale);
+  const show = (amount: Money): string => formatMoney(amount, workshop.locale);
+  const amount = show(message.amount);
+  const isDispute = message.cause === 'dispute';
+  const { lines = [], keptKits = [], endedKits, tax = [] } = message;
   const kits: EmailBlock[] = [];
-  if (message.endedKits.length > 0) kits.push(say(words.ended(message.endedKits)));
-  if (message.keptKits && message.keptKits.length > 0) kits.push(say(words.kept(message.keptKits)));
-  const taxCells = (message.tax ?? []).map((line) => ({
-    label: words.taxWithin(texts.unbroken(line.rateLabel)),
-    value: formatMoney(line.amount, workshop.locale),
-  }));
+  const { giftTo } = message;
+  if (endedKits.length > 0)
+    kits.push(say(giftTo === undefined ? words.ended(endedKits) : words.giftEnded(giftTo, endedKits)));
+  if (keptKits.length > 0)
+    kits.push(say(giftTo === undefined ? words.kept(keptKits) : words.giftKept(giftTo, keptKits)));
+  if (message.couponCode) kits.push({ ...say(words.couponIsSpent(message.couponCode)), isSoft: true });
 
   return {
-    subject: words.subject(amount, message.orderNumber),
+    subject: (isDispute ? words.disputeSubject : words.subject)(amount, message.orderNumber),
     preheader: words.preheader(message.creditNoteNumber),
-    heading: words.heading(amount),
+    heading: isDispute ? words.disputeHeading : words.heading(amount),
     blocks: [
       say(texts.hello(greetedName(message.name))),
-      say(words.body(amount)),
+      say(isDispute ? words.disputeBody(amount) : words.body(amount)),
       ...kits,
       { kind: 'button', label: words.button, link: message.orderLink },
+      {
+        kind: 'price-table',
+        rows: lines.map((line) => ({
+          title: line.kit,
+          detail: words.lineDetail(line.licence, line.endsRight),
+          amount: show(line.amount),
+        })),
+        sums: [
+          { label: words.total, amount, isTotal: true },
+          ...tax.map((line) => ({
+            label: words.taxWithin(texts.unbroken(line.rateLabel)),
+            amount: show(line.amount),
+            isSoft: true,
+          })),
+        ],
+      },
       {
         kind: 'title-block',
         cells: [
@@ -92,7 +129,6 @@ export function orderRefunded(message: OrderRefundedMessage, workshop: EmailWork
           { label: words.receiptLabel, value: message.receiptNumber },
           { label: words.creditNoteLabel, value: message.creditNoteNumber },
           { label: words.amountLabel, value: amount },
-          ...taxCells,
         ],
       },
     ],

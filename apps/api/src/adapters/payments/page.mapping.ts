@@ -19,8 +19,18 @@ export const toSession = (session: Stripe.Checkout.Session): PaymentSession => (
   currency: (session.currency ?? '').toUpperCase(),
   email: session.customer_details?.email ?? session.customer_email,
   billingCountry: session.customer_details?.address?.country ?? null,
+  billingName: session.customer_details?.name ?? null,
+  billingLines: addressLines(session.customer_details?.address ?? null),
   expiresAt: dateOf(session.expires_at),
 });
+
+const addressLines = (address: Stripe.Address | null): string[] =>
+  [
+    address?.line1,
+    address?.line2,
+    [address?.postal_code, address?.city].filter(Boolean).join(' '),
+    address?.state,
+  ].filter((line): line is string => Boolean(line));
 
 export const toPledgePage = (session: Stripe.Checkout.Session): PledgePage => ({
   id: session.id,

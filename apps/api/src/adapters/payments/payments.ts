@@ -10,6 +10,9 @@ export interface PaymentSession {
   readonly email: string | null;
   /** Country of the billing address typed on the payment page: one piece of location evidence. */
   readonly billingCountry: string | null;
+  /** Name and address typed there, line by line without the country. */
+  readonly billingName: string | null;
+  readonly billingLines: readonly string[];
   readonly expiresAt: Date;
 }
 

@@ -65,7 +65,7 @@ export const assertSafeKey = (key: string): string => {
   return key;
 };
 
-export type Shelf = 'files' | 'bundles' | 'previews' | 'pictures';
+export type Shelf = 'files' | 'bundles' | 'previews' | 'pictures' | 'exports';
 /** The key of contents with this SHA-256. */
 export const keyOf = (shelf: Shelf, sha256: string): string =>
   assertSafeKey(`${shelf}/${sha256.slice(0, 2)}/${sha256}`);

@@ -1,7 +1,7 @@
 import type { PrintSpecification, RankVoice } from '@windchest/contracts';
 import { bookVoices } from './book-voices.js';
 import { filamentHex, hexToOklch, kitShades, oklchToHex } from './kit-shades.js';
-import { dayText, fixedText, numberText, signedText } from './number-text.js';
+import { dayText, fixedText, numberText, signedText } from '../../typesetting/number-text.js';
 import { specDifference, specDifferences } from './print-spec-words.js';
 
 const spec: PrintSpecification = {

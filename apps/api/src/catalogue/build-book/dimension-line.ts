@@ -1,6 +1,6 @@
-import { inks } from './page-geometry.js';
-import type { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
+import { inks } from '../../typesetting/page-geometry.js';
+import type { Sheet } from '../../typesetting/sheet.js';
+import { bookStyles } from './book-styles.js';
 
 const tick = 3;
 
@@ -20,9 +20,9 @@ export const drawUprightDimension = (
   doc.rotate(-90, { origin: [x, middle] });
   sheet.put(
     text,
-    styles.dimension,
+    bookStyles.dimension,
     { x: x - width / 2, width, align: 'centre' },
-    middle - styles.dimension.leading - 2,
+    middle - bookStyles.dimension.leading - 2,
   );
   doc.restore();
 };
@@ -41,5 +41,5 @@ export const drawScaleBar = (
     doc.moveTo(x, y - (at % 5 === 0 ? 4 : 2)).lineTo(x, y);
   }
   doc.stroke();
-  sheet.put(`${lengthMm} mm`, styles.dimension, { x: right - 80, width: 80, align: 'right' }, y + 1);
+  sheet.put(`${lengthMm} mm`, bookStyles.dimension, { x: right - 80, width: 80, align: 'right' }, y + 1);
 };

@@ -1,5 +1,5 @@
 import type { PartDrawing } from './build-book.js';
-import { pointsPerMm } from './page-geometry.js';
+import { pointsPerMm } from '../../typesetting/page-geometry.js';
 import type { KitShades } from './kit-shades.js';
 
 /** Draws a part with its upper left corner where told, at a scale (1 is life size). */

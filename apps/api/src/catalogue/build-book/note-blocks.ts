@@ -1,4 +1,4 @@
-import type { Span } from './text-lines.js';
+import type { Span } from '../../typesetting/text-lines.js';
 
 /** Notes as they are set: Markdown with its part codes found, pictures on their own, HTML left out. */
 export type NoteBlock =

@@ -1,5 +1,5 @@
 import { largestScale, scaleText } from './drawing-scale.js';
-import { mm } from './page-geometry.js';
+import { mm } from '../../typesetting/page-geometry.js';
 import { labelHeight, layOutPartsSheet, type DrawnPart } from './parts-sheet-layout.js';
 
 const drawn = (code: string, widthMm: number, heightMm: number): DrawnPart => ({

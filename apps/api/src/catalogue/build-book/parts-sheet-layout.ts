@@ -1,6 +1,6 @@
 import type { BookPart, PartDrawing } from './build-book.js';
 import { largestScale, smallestRatio } from './drawing-scale.js';
-import { mm } from './page-geometry.js';
+import { mm } from '../../typesetting/page-geometry.js';
 
 export type DrawnPart = BookPart & { readonly drawing: PartDrawing };
 

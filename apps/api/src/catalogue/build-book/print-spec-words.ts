@@ -1,6 +1,6 @@
 import type { PrintSpecification } from '@windchest/contracts';
 import type { BookPart } from './build-book.js';
-import { numberText } from './number-text.js';
+import { numberText } from '../../typesetting/number-text.js';
 
 const supportWords: Record<PrintSpecification['supports'], string> = {
   none: 'None',

@@ -3,7 +3,7 @@ import { fromMarkdown } from 'mdast-util-from-markdown';
 import { gfmFromMarkdown } from 'mdast-util-gfm';
 import { gfm } from 'micromark-extension-gfm';
 import type { NoteBlock, NoteSpan } from './note-blocks.js';
-import type { Face } from './typeface-files.js';
+import type { Face } from '../../typesetting/typeface-files.js';
 
 /** Reads notes as the shop's pages do: CommonMark with GitHub's tables and task lists. */
 export const readNotes = (markdown: string): NoteBlock[] => {

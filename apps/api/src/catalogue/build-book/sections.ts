@@ -1,6 +1,6 @@
-import { contentWidth, inks, page } from './page-geometry.js';
-import type { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
+import { contentWidth, inks, page } from '../../typesetting/page-geometry.js';
+import type { Sheet } from '../../typesetting/sheet.js';
+import { styles } from '../../typesetting/text-styles.js';
 
 export interface WrittenSection {
   readonly title: string;

@@ -1,8 +1,8 @@
 import { drawPart } from './draw-part.js';
-import { mm } from './page-geometry.js';
+import { mm } from '../../typesetting/page-geometry.js';
 import type { DrawnPart } from './parts-sheet-layout.js';
-import type { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
+import type { BookSheet } from './book-sheet.js';
+import { bookStyles } from './book-styles.js';
 import { partPlace } from './write-notes.js';
 
 const mostWidth = mm(20);
@@ -57,7 +57,7 @@ export const sideHeight = (rows: readonly SideRow[]): number =>
   rows.reduce((sum, { height }) => sum + height + labelHeight + rowGap, 0);
 
 /** Draws rows downward from `top`; returns their height. */
-export const drawSideParts = (sheet: Sheet, rows: readonly SideRow[], x: number, top: number): number => {
+export const drawSideParts = (sheet: BookSheet, rows: readonly SideRow[], x: number, top: number): number => {
   let y = top;
   for (const row of rows) {
     for (const { part, ratio, width, height, cellX, cellWidth } of row.parts) {
@@ -69,7 +69,7 @@ export const drawSideParts = (sheet: Sheet, rows: readonly SideRow[], x: number,
           drawPart(sheet.doc, part.drawing, { ...corner, ratio }, sheet.shades);
           sheet.put(
             [{ text: part.code, goTo: partPlace(part.code) }],
-            styles.partCode,
+            bookStyles.partCode,
             { x: left, width: cellWidth, align: 'centre' },
             y + row.height + 3,
           );

@@ -2,7 +2,7 @@ import { execFileSync } from 'node:child_process';
 import { deflateSync, crc32 } from 'node:zlib';
 import type { PrintSpecification } from '@windchest/contracts';
 import type { BookPart, BookVoice, BuildBook } from './build-book.js';
-import { page } from './page-geometry.js';
+import { page } from '../../typesetting/page-geometry.js';
 import { typesetBuildBook } from './typeset-build-book.js';
 
 const printSpec: PrintSpecification = {

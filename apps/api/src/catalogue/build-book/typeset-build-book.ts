@@ -1,13 +1,13 @@
-import PDFDocument from 'pdfkit';
+import { collectBytes, openDocument } from '../../typesetting/open-document.js';
 import type { BuildBook } from './build-book.js';
 import { kitShades } from './kit-shades.js';
 import { readNotes } from './read-notes.js';
-import { contentWidth, mm, page, textWidth } from './page-geometry.js';
+import { contentWidth, mm, page, textWidth } from '../../typesetting/page-geometry.js';
 import { Sections } from './sections.js';
-import { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
-import { Typeface } from './typeface.js';
-import { readFontFiles } from './typeface-files.js';
+import { BookSheet } from './book-sheet.js';
+import { styles } from '../../typesetting/text-styles.js';
+import { Typeface } from '../../typesetting/typeface.js';
+import { readFontFiles } from '../../typesetting/typeface-files.js';
 import { writeAssembly } from './write-assembly.js';
 import { hasClearances, writeClearances } from './write-clearances.js';
 import { writeContents } from './write-contents.js';
@@ -15,16 +15,16 @@ import { contentsTop, writeCover } from './write-cover.js';
 import { writeHardware, writePartsList, writePrintSpecification, writeVoicing } from './write-lists.js';
 import { writeNotes, type NotesContext } from './write-notes.js';
 import { drawnParts, writePartsSheet } from './write-parts-sheet.js';
-import { drawTitleBlock } from './write-title-block.js';
+import { drawBookBlock } from './write-title-block.js';
 
 /**
  * Typesets a kit's build book: a tagged PDF, A4. The same book gives the same bytes. Reads no files but those of
  * its typeface.
  */
 export const typesetBuildBook = async (book: BuildBook): Promise<Buffer> => {
-  const doc = openDocument(book);
-  const bytes = collect(doc);
-  const sheet = new Sheet(doc, new Typeface(doc, await readFontFiles()), kitShades(book.kit.colourHex));
+  const doc = openBook(book);
+  const bytes = collectBytes(doc);
+  const sheet = new BookSheet(doc, new Typeface(doc, await readFontFiles()), kitShades(book.kit.colourHex));
   const writeFirstPageRest = writeBook(sheet, book);
   doc.switchToPage(0);
   writeFirstPageRest();
@@ -33,39 +33,16 @@ export const typesetBuildBook = async (book: BuildBook): Promise<Buffer> => {
   return bytes;
 };
 
-const openDocument = ({ kit, revision, workshop }: BuildBook): PDFKit.PDFDocument =>
-  new PDFDocument({
-    size: [page.width, page.height],
-    // The book keeps its own margins: pdfkit is never to break a page by itself.
-    margin: 0,
-    bufferPages: true,
-    // Kept from reaching for a font of its own, which is read from a file and never set.
-    font: null as unknown as string,
-    pdfVersion: '1.7',
-    tagged: true,
-    displayTitle: true,
-    lang: 'en-GB',
-    info: {
-      Title: `${kit.name} ${revision.label}: build book`,
-      Author: workshop.name,
-      Subject: kit.tagline,
-      Creator: 'Windchest',
-      // Also what the file's identity is made from.
-      CreationDate: revision.releasedAt,
-      ModDate: revision.releasedAt,
-    },
-  });
-
-const collect = (doc: PDFKit.PDFDocument): Promise<Buffer> =>
-  new Promise((resolve, reject) => {
-    const chunks: Buffer[] = [];
-    doc.on('data', (chunk: Buffer) => chunks.push(chunk));
-    doc.on('end', () => resolve(Buffer.concat(chunks)));
-    doc.on('error', reject);
+const openBook = ({ kit, revision, workshop }: BuildBook): PDFKit.PDFDocument =>
+  openDocument({
+    title: `${kit.name} ${revision.label}: build book`,
+    author: workshop.name,
+    subject: kit.tagline,
+    date: revision.releasedAt,
   });
 
 /** Writes all but what must know the number of pages; returns how to write that on the first page. */
-const writeBook = (sheet: Sheet, book: BuildBook): (() => void) => {
+const writeBook = (sheet: BookSheet, book: BuildBook): (() => void) => {
   const sections = new Sections(sheet);
   const notesPlace = { x: page.left, width: textWidth };
   const context: NotesContext = {
@@ -108,7 +85,7 @@ const writeBook = (sheet: Sheet, book: BuildBook): (() => void) => {
   return () =>
     fillFirstPage(() => {
       writeContents(sheet, sections.written, contentsTop);
-      drawTitleBlock(sheet, book, { scale, pageCount });
+      drawBookBlock(sheet, book, { scale, pageCount });
     });
 
   function writeProse(title: string, markdown: string): void {
@@ -120,7 +97,7 @@ const writeBook = (sheet: Sheet, book: BuildBook): (() => void) => {
 };
 
 /** The running foot; the first page has its title block instead. */
-const writeFeet = (sheet: Sheet, { kit, revision, workshop }: BuildBook): void => {
+const writeFeet = (sheet: BookSheet, { kit, revision, workshop }: BuildBook): void => {
   const { doc, pageCount } = sheet;
   const place = { x: page.left, width: contentWidth };
   for (let at = 1; at < pageCount; at += 1) {

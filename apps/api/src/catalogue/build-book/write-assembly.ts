@@ -1,12 +1,13 @@
 import { assemblySteps, type AssemblyStep } from './assembly-steps.js';
 import type { BookPart } from './build-book.js';
 import { codesIn, plainText, type NoteBlock } from './note-blocks.js';
-import { mm, page, sideLeft, sideWidth, textWidth } from './page-geometry.js';
+import { mm, page, sideLeft, sideWidth, textWidth } from '../../typesetting/page-geometry.js';
 import { drawnParts } from './write-parts-sheet.js';
 import type { Sections } from './sections.js';
-import type { Sheet } from './sheet.js';
+import type { BookSheet } from './book-sheet.js';
 import { layOutSideParts, sideHeight, drawSideParts } from './side-parts.js';
-import { styles } from './text-styles.js';
+import { styles } from '../../typesetting/text-styles.js';
+import { bookStyles } from './book-styles.js';
 import { withPlaces, writeNotes, type NotesContext } from './write-notes.js';
 
 const stepGap = 20;
@@ -14,7 +15,7 @@ const place = { x: page.left, width: textWidth };
 
 /** The notes in steps: the number hangs in the left edge, the parts of a step are drawn at its right. */
 export const writeAssembly = (
-  sheet: Sheet,
+  sheet: BookSheet,
   sections: Sections,
   notes: readonly NoteBlock[],
   parts: readonly BookPart[],
@@ -38,7 +39,7 @@ export const writeAssembly = (
 };
 
 const writeStep = (
-  sheet: Sheet,
+  sheet: BookSheet,
   sections: Sections,
   step: AssemblyStep,
   context: NotesContext & { readonly side: ReturnType<typeof drawnParts> },
@@ -46,7 +47,9 @@ const writeStep = (
   const rows = layOutSideParts(context.side, sideWidth);
   const drawingsHeight = sideHeight(rows);
   const isBeside = drawingsHeight <= mostSideHeight;
-  sheet.ensure(Math.max(styles.stepTitle.leading + 4 * styles.body.leading, isBeside ? drawingsHeight : 0));
+  sheet.ensure(
+    Math.max(bookStyles.stepTitle.leading + 4 * styles.body.leading, isBeside ? drawingsHeight : 0),
+  );
   const title = plainText(step.title);
   sections.addPlace([step.number, title].filter((words) => words !== '').join('  ') || 'Step');
   sheet.group('Sect', () => {
@@ -74,10 +77,10 @@ const writeStep = (
 /** A step of more drawings than that has them below it, across the page. */
 const mostSideHeight = mm(120);
 
-const writeHeading = (sheet: Sheet, step: AssemblyStep, context: NotesContext): void => {
-  const style = styles.stepTitle;
+const writeHeading = (sheet: BookSheet, step: AssemblyStep, context: NotesContext): void => {
+  const style = bookStyles.stepTitle;
   const hasTitle = plainText(step.title) !== '';
-  const numberStyle = styles.stepNumber;
+  const numberStyle = bookStyles.stepNumber;
   const drawNumber = () => {
     // On one baseline with the first line of what follows it.
     const first = hasTitle ? style : styles.body;

@@ -1,9 +1,9 @@
 import { clearanceSigns, type Clearance } from '@windchest/contracts';
 import type { BookPart } from './build-book.js';
-import { contentWidth, mm, page, textWidth } from './page-geometry.js';
-import type { Sheet } from './sheet.js';
-import { writeTable } from './table.js';
-import { styles } from './text-styles.js';
+import { contentWidth, mm, page, textWidth } from '../../typesetting/page-geometry.js';
+import type { Sheet } from '../../typesetting/sheet.js';
+import { writeTable } from '../../typesetting/table.js';
+import { styles } from '../../typesetting/text-styles.js';
 
 /** Clearance is a gap: with more of it a part fits looser. */
 const clearanceWords: Record<Clearance, string> = {

@@ -1,7 +1,7 @@
-import { page, mm } from './page-geometry.js';
+import { page, mm } from '../../typesetting/page-geometry.js';
 import type { WrittenSection } from './sections.js';
-import type { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
+import type { Sheet } from '../../typesetting/sheet.js';
+import { styles } from '../../typesetting/text-styles.js';
 
 const columnWidth = mm(68);
 const linesAColumn = 5;

@@ -3,12 +3,13 @@ import { drawUprightDimension } from './dimension-line.js';
 import { drawPart } from './draw-part.js';
 import { drawVoice } from './draw-voice.js';
 import { largestScale, scaleText } from './drawing-scale.js';
-import { fixedText } from './number-text.js';
-import { contentWidth, inks, mm, page } from './page-geometry.js';
+import { fixedText } from '../../typesetting/number-text.js';
+import { contentWidth, inks, mm, page } from '../../typesetting/page-geometry.js';
 import { layOutRank } from './rank-layout.js';
-import type { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
-import { titleBlockTop } from './write-title-block.js';
+import type { BookSheet } from './book-sheet.js';
+import { styles } from '../../typesetting/text-styles.js';
+import { bookStyles } from './book-styles.js';
+import { bookBlockTop } from './write-title-block.js';
 
 const workshopTop = mm(20);
 const nameTop = mm(31);
@@ -16,10 +17,10 @@ const emblemGap = mm(13);
 /** The contents stand between the emblem and the title block: a line each, and a heading. */
 const contentsHeight = mm(48);
 
-export const contentsTop = titleBlockTop - contentsHeight;
+export const contentsTop = bookBlockTop - contentsHeight;
 
 /** The first page but for its contents and title block; returns the scale of its drawing, if it has one. */
-export const writeCover = (sheet: Sheet, book: BuildBook): string | null => {
+export const writeCover = (sheet: BookSheet, book: BuildBook): string | null => {
   const place = { x: page.left, width: contentWidth };
   sheet.block('P', () => sheet.putOneLine(book.workshop.name, styles.fact, place, workshopTop));
   sheet.y = nameTop;
@@ -27,10 +28,10 @@ export const writeCover = (sheet: Sheet, book: BuildBook): string | null => {
     // A long name is set smaller before it is broken.
     const size = Math.min(1, Math.max(0.5, contentWidth / widthAtFullSize(sheet, book.kit.name)));
     const style = {
-      ...styles.kitName,
-      size: styles.kitName.size * size,
-      leading: Math.max(22, styles.kitName.leading * size),
-      spacing: styles.kitName.spacing === undefined ? 0 : styles.kitName.spacing * size,
+      ...bookStyles.kitName,
+      size: bookStyles.kitName.size * size,
+      leading: Math.max(22, bookStyles.kitName.leading * size),
+      spacing: bookStyles.kitName.spacing === undefined ? 0 : bookStyles.kitName.spacing * size,
     };
     sheet.y += sheet.put(
       book.kit.name,
@@ -42,16 +43,16 @@ export const writeCover = (sheet: Sheet, book: BuildBook): string | null => {
   sheet.y += 6;
   if (book.kit.tagline !== '')
     sheet.block('P', () => {
-      sheet.y += sheet.put(book.kit.tagline, styles.tagline, place, sheet.y);
+      sheet.y += sheet.put(book.kit.tagline, bookStyles.tagline, place, sheet.y);
     });
   sheet.y += emblemGap;
   return book.voices.length > 0 ? drawRank(sheet, book) : drawLargestPart(sheet, book);
 };
 
-const widthAtFullSize = (sheet: Sheet, name: string): number =>
-  sheet.lines(name.replaceAll(' ', '\u00a0'), styles.kitName, Number.POSITIVE_INFINITY)[0]?.width ?? 1;
+const widthAtFullSize = (sheet: BookSheet, name: string): number =>
+  sheet.lines(name.replaceAll(' ', '\u00a0'), bookStyles.kitName, Number.POSITIVE_INFINITY)[0]?.width ?? 1;
 
-const drawRank = (sheet: Sheet, { voices, kit }: BuildBook): string => {
+const drawRank = (sheet: BookSheet, { voices, kit }: BuildBook): string => {
   const rank = layOutRank(voices);
   const roomHeight = contentsTop - mm(16) - sheet.y;
   const ratio = largestScale(
@@ -94,7 +95,7 @@ const drawRank = (sheet: Sheet, { voices, kit }: BuildBook): string => {
 
 /** The letters of the notes under the voices; every second or third where they stand too close. */
 const labelVoices = (
-  sheet: Sheet,
+  sheet: BookSheet,
   voices: ReturnType<typeof layOutRank>['voices'],
   ratio: number,
   top: number,
@@ -108,12 +109,12 @@ const labelVoices = (
       .replace(/-?\d+$/, '')
       .replace('#', '♯')
       .replace(/b$/, '♭');
-    sheet.put(letter, styles.partCode, { x: middle - 12, width: 24, align: 'centre' }, top);
+    sheet.put(letter, bookStyles.partCode, { x: middle - 12, width: 24, align: 'centre' }, top);
   });
 };
 
 /** A kit without voices shows its largest part instead. */
-const drawLargestPart = (sheet: Sheet, { parts }: BuildBook): string | null => {
+const drawLargestPart = (sheet: BookSheet, { parts }: BuildBook): string | null => {
   const drawn = parts.flatMap((part) => (part.drawing ? [{ ...part, drawing: part.drawing }] : []));
   if (drawn.length === 0) return null;
   const largest = drawn.reduce((most, one) =>

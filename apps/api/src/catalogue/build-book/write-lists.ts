@@ -1,10 +1,10 @@
 import type { BookVoice, BuildBook } from './build-book.js';
-import { boxText, fixedText, numberText, signedText } from './number-text.js';
-import { contentWidth, mm, page, textWidth } from './page-geometry.js';
+import { boxText, fixedText, numberText, signedText } from '../../typesetting/number-text.js';
+import { contentWidth, mm, page, textWidth } from '../../typesetting/page-geometry.js';
 import { orientationWords, specDifferences, specRows, type SpecDifferences } from './print-spec-words.js';
-import type { Sheet } from './sheet.js';
-import { writeTable } from './table.js';
-import { styles } from './text-styles.js';
+import type { Sheet } from '../../typesetting/sheet.js';
+import { writeTable } from '../../typesetting/table.js';
+import { styles } from '../../typesetting/text-styles.js';
 
 const lead = (sheet: Sheet, words: string): void => {
   const place = { x: page.left, width: textWidth };

@@ -1,9 +1,9 @@
 import type { NoteBlock, NoteSpan } from './note-blocks.js';
-import { inks, mm } from './page-geometry.js';
-import type { Sheet } from './sheet.js';
-import { writeTable } from './table.js';
-import type { TextLine, TextStyle } from './text-lines.js';
-import { styles } from './text-styles.js';
+import { inks, mm } from '../../typesetting/page-geometry.js';
+import type { Sheet } from '../../typesetting/sheet.js';
+import { writeTable } from '../../typesetting/table.js';
+import type { TextLine, TextStyle } from '../../typesetting/text-lines.js';
+import { styles } from '../../typesetting/text-styles.js';
 
 export interface NotesPlace {
   readonly x: number;

@@ -2,12 +2,13 @@ import type { BookPart } from './build-book.js';
 import { drawPart } from './draw-part.js';
 import { drawScaleBar } from './dimension-line.js';
 import { scaleText } from './drawing-scale.js';
-import { contentWidth, page } from './page-geometry.js';
+import { contentWidth, page } from '../../typesetting/page-geometry.js';
 import { layOutPartsSheet, type DrawnPart, type PlacedPart } from './parts-sheet-layout.js';
-import type { Sheet } from './sheet.js';
-import type { Span } from './text-lines.js';
-import { inks } from './page-geometry.js';
-import { styles } from './text-styles.js';
+import type { BookSheet } from './book-sheet.js';
+import type { Span } from '../../typesetting/text-lines.js';
+import { inks } from '../../typesetting/page-geometry.js';
+import { styles } from '../../typesetting/text-styles.js';
+import { bookStyles } from './book-styles.js';
 import { partPlace } from './write-notes.js';
 
 const introHeight = 30;
@@ -21,10 +22,10 @@ const labelOf = ({ code, quantity }: BookPart): Span[] => [
 ];
 
 /** Every part as an outline with its code, all to one scale; on as many pages as they need. */
-export const writePartsSheet = (sheet: Sheet, parts: readonly BookPart[]): void => {
+export const writePartsSheet = (sheet: BookSheet, parts: readonly BookPart[]): void => {
   const drawn = drawnParts(parts);
   const widthOf = (part: BookPart): number =>
-    sheet.lines(labelOf(part), styles.partCode, contentWidth)[0]?.width ?? 0;
+    sheet.lines(labelOf(part), bookStyles.partCode, contentWidth)[0]?.width ?? 0;
   // All pages are as high as the first, which has the heading.
   const room = { width: contentWidth, height: sheet.roomLeft - introHeight };
   const { ratio, pages, lastHeight } = layOutPartsSheet(drawn, room, widthOf);
@@ -38,7 +39,7 @@ export const writePartsSheet = (sheet: Sheet, parts: readonly BookPart[]): void 
   });
 };
 
-const writeIntro = (sheet: Sheet, parts: readonly BookPart[], ratio: number): void => {
+const writeIntro = (sheet: BookSheet, parts: readonly BookPart[], ratio: number): void => {
   const undrawn = parts.filter(({ drawing }) => !drawing).map(({ code }) => code);
   const isAllDrawn = undrawn.length === 0;
   const words = [
@@ -58,7 +59,7 @@ const writeIntro = (sheet: Sheet, parts: readonly BookPart[], ratio: number): vo
   sheet.y = Math.max(sheet.y, top + introHeight - 14) + 14;
 };
 
-const drawOne = (sheet: Sheet, { part, ...at }: PlacedPart, top: number, ratio: number): void => {
+const drawOne = (sheet: BookSheet, { part, ...at }: PlacedPart, top: number, ratio: number): void => {
   const y = top + at.y;
   sheet.doc.addNamedDestination(partPlace(part.code), 'XYZ', page.edge, Math.max(0, y - 20), 0);
   sheet.block(
@@ -67,7 +68,7 @@ const drawOne = (sheet: Sheet, { part, ...at }: PlacedPart, top: number, ratio: 
       drawPart(sheet.doc, part.drawing, { x: page.left + at.x, y, ratio }, sheet.shades);
       sheet.put(
         labelOf(part),
-        styles.partCode,
+        bookStyles.partCode,
         { x: page.left + at.cellX - 20, width: at.cellWidth + 40, align: 'centre' },
         y + at.height + 3,
       );

@@ -1,54 +1,18 @@
+import { drawTitleBlock, titleBlockTop, type TitleCell } from '../../typesetting/title-block.js';
+import { boxText, dayText, numberText } from '../../typesetting/number-text.js';
 import type { BuildBook } from './build-book.js';
-import { boxText, dayText, numberText } from './number-text.js';
-import { inks, mm, page } from './page-geometry.js';
-import type { Sheet } from './sheet.js';
-import { styles } from './text-styles.js';
+import type { BookSheet } from './book-sheet.js';
 
-const rowHeight = mm(12.5);
-const blockBottom = mm(297 - 16);
-const padding = 6;
+export const bookBlockTop = titleBlockTop(3);
 
-export const titleBlockTop = blockBottom - 3 * rowHeight;
-
-interface Cell {
-  readonly label: string;
-  readonly value: string;
-  readonly share: number;
-}
-
-/** The ruled fields at the foot of the first page, after ISO 7200: owner, title, number, date, sheet, and the kit's facts. */
-export const drawTitleBlock = (
-  sheet: Sheet,
+/** Owner, title, number, date, sheet, and the kit's facts. */
+export const drawBookBlock = (
+  sheet: BookSheet,
   book: BuildBook,
   { scale, pageCount }: { scale: string | null; pageCount: number },
-): void => {
-  const width = page.right - page.edge;
-  titleRows(book, scale, pageCount).forEach((cells, row) => {
-    const top = titleBlockTop + row * rowHeight;
-    const whole = cells.reduce((sum, { share }) => sum + share, 0);
-    let x = page.edge;
-    cells.forEach(({ label, value, share }, at) => {
-      const cellWidth = (width * share) / whole;
-      const place = { x: x + padding, width: cellWidth - 2 * padding };
-      sheet.block('P', () => {
-        sheet.put(label, styles.label, place, top + 5);
-        sheet.putOneLine(value, styles.fact, place, top + 15);
-      });
-      if (at > 0) drawUpright(sheet, x, top);
-      x += cellWidth;
-    });
-    if (row > 0) sheet.rule(page.edge, top, width, inks.ink, 0.6);
-  });
-  sheet.decoration(() => {
-    sheet.doc
-      .rect(page.edge, titleBlockTop, width, 3 * rowHeight)
-      .lineWidth(0.9)
-      .strokeColor(inks.ink)
-      .stroke();
-  });
-};
+): void => drawTitleBlock(sheet, titleRows(book, scale, pageCount));
 
-const titleRows = (book: BuildBook, scale: string | null, pageCount: number): Cell[][] => {
+const titleRows = (book: BuildBook, scale: string | null, pageCount: number): TitleCell[][] => {
   const { kit, revision, workshop, room, buildVolume, parts } = book;
   const pieces = parts.reduce((sum, { quantity }) => sum + quantity, 0);
   return [
@@ -83,15 +47,4 @@ const titleRows = (book: BuildBook, scale: string | null, pageCount: number): Ce
       },
     ],
   ];
-};
-
-const drawUpright = (sheet: Sheet, x: number, top: number): void => {
-  sheet.decoration(() => {
-    sheet.doc
-      .moveTo(x, top)
-      .lineTo(x, top + rowHeight)
-      .lineWidth(0.6)
-      .strokeColor(inks.ink)
-      .stroke();
-  });
 };

@@ -37,6 +37,7 @@ const part = (
     } as MeasuredMesh,
     geometryHash,
     drawings: null,
+    previewSha256: null,
     fault: null,
   },
 });

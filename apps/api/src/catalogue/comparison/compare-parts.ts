@@ -1,4 +1,4 @@
-import { clearances, type Comparison } from '@windchest/contracts';
+import { clearances, type Clearance, type Comparison } from '@windchest/contracts';
 import { fileAt } from '../revisions/part-files.js';
 import type { FileOfRevision, PartOfRevision } from '../revisions/revision-contents.js';
 import { deviationOf } from './deviation.js';
@@ -14,18 +14,28 @@ export type PartDifference = Pick<
 const TOLD_MM = 0.005;
 const TOLD_PERCENT = 0.05;
 
+/** As much of a part's files as tells whether their meshes are to be compared. */
+type MeshOfPart = Pick<FileOfRevision, 'sha256' | 'geometryHash'> & { readonly measured: unknown };
+export interface PartMeshes {
+  readonly file: MeshOfPart | null;
+  readonly variants: readonly { readonly clearance: Clearance; readonly file: MeshOfPart }[];
+}
+
 /** The meshes to be compared surface against surface: measured both, of unequal geometry hash. */
-export const meshPairOf = (before: PartOfRevision | null, after: PartOfRevision | null): MeshPair | null => {
+export const meshPairOf = (
+  before: Pick<PartMeshes, 'file'> | null,
+  after: Pick<PartMeshes, 'file'> | null,
+): MeshPair | null => {
   const [old, now] = [before?.file, after?.file];
   if (!old?.measured || !now?.measured || old.sha256 === now.sha256 || isSameHash(old, now)) return null;
   return { beforeSha: old.sha256, afterSha: now.sha256 };
 };
 
 /** All pairs of a part, clearance by clearance. */
-export const meshPairsOf = (before: PartOfRevision | null, after: PartOfRevision | null): MeshPair[] => {
+export const meshPairsOf = (before: PartMeshes | null, after: PartMeshes | null): MeshPair[] => {
   if (!before || !after) return [];
   const pairs = clearances.map((clearance) =>
-    meshPairOf({ ...before, file: fileAt(before, clearance) }, { ...after, file: fileAt(after, clearance) }),
+    meshPairOf({ file: fileAt(before, clearance) }, { file: fileAt(after, clearance) }),
   );
   const byName = new Map(
     pairs.flatMap((pair) => (pair ? [[`${pair.beforeSha} ${pair.afterSha}`, pair]] : [])),
@@ -55,7 +65,7 @@ export const comparePart = (
   return changed(before.file, after.file, quantity, known);
 };
 
-const isSameHash = (before: FileOfRevision, after: FileOfRevision): boolean =>
+const isSameHash = (before: MeshOfPart, after: MeshOfPart): boolean =>
   before.geometryHash !== null && before.geometryHash === after.geometryHash;
 
 const plain = (difference: Row['difference'], whatDiffers: string): PartDifference => ({

@@ -13,9 +13,16 @@ const file = (widthMm: number): FileOfRevision => ({
   kind: 'stl',
   addedAt: new Date(0),
   measuring: 'measured',
-  measured: { sizeMm: [widthMm, 20, 30], volumeMm3: 6000, areaMm2: 2200 } as unknown as MeasuredMesh,
+  measured: {
+    sizeMm: [widthMm, 20, 30],
+    minMm: [0, 0, 0],
+    maxMm: [widthMm, 20, 30],
+    volumeMm3: 6000,
+    areaMm2: 2200,
+  } as unknown as MeasuredMesh,
   geometryHash: String(widthMm),
   drawings: null,
+  previewSha256: null,
   fault: null,
 });
 const part = (
@@ -55,6 +62,7 @@ describe('a part that comes in several clearances, between two revisions', () =>
       sizeChangeMm: { x: expect.closeTo(-0.2, 10), y: 0, z: 0 },
       volumeChangePercent: 0,
       areaChangePercent: 0,
+      deviation: expect.objectContaining({ state: 'waiting', clearance: 'plus' }),
       variants: [
         { clearance: 'minus', difference: 'same', whatDiffers: '' },
         { clearance: 'zero', difference: 'same', whatDiffers: '' },
@@ -108,5 +116,35 @@ describe('a part that comes in several clearances, between two revisions', () =>
     // Of a revision without clearances they hold what there was.
     expect(as('minus', part(10))).toMatchObject({ difference: 'changed', whatDiffers: '+0.20 mm width' });
     expect(asPrinted(before, null)).toBe(before);
+  });
+
+  it('tells where it differs in the clearance that its figures are of, once none is waiting', () => {
+    const after = part(10.1, { minus: 10.2, plus: 9.9 });
+    const result = {
+      kind: 'changed' as const,
+      movedMm: [0, 0, 0] as const,
+      largestDeviationMm: 0.1,
+      placeMm: [10.1, 10, 15] as const,
+      placeIsOn: 'after' as const,
+      sizeChangeMm: [0, 0, 0] as const,
+      volumeChangeMm3: 0,
+      areaChangeMm2: 0,
+      changedTriangles: { before: 1, after: 1 },
+    };
+    const compared = { state: 'compared' as const, result };
+    expect(compareVariants(before, after, () => compared).deviation).toMatchObject({
+      clearance: 'zero',
+      where: 'in 0: up to 0.10 mm, at the right (10.1, 10.0, 15.0 mm)',
+    });
+    const half = compareVariants(before, after, ({ afterSha }) =>
+      afterSha === '9.9' ? { state: 'waiting' } : compared,
+    );
+    expect(half.deviation).toMatchObject({ state: 'waiting', clearance: 'plus' });
+    const same = compareVariants(before, part(10.1, { minus: 10.2, plus: 9.8 }), () => ({
+      state: 'compared',
+      result: { ...result, kind: 'same-geometry', placeMm: null },
+    }));
+    expect(same).toMatchObject({ difference: 're-exported', deviation: { clearance: 'zero' } });
+    expect(compareVariants(before, before).deviation).toBeNull();
   });
 });

@@ -37,11 +37,12 @@ export const compareVariants = (
   if (!before || !after) return { ...whole, variants };
   const strongest = strength.find((kind) => each.some((one) => one.difference === kind)) ?? 'same';
   // Figures are those of the zero where it is among the strongest: the drawn size of the part.
-  const told = whole.difference === strongest ? whole : each.find((one) => one.difference === strongest);
+  const strong = each.filter((one) => one.difference === strongest);
+  const told = strong.find((one) => one.clearance === 'zero') ?? strong[0];
   const { sizeChangeMm, volumeChangePercent, areaChangePercent } = told ?? whole;
   // Nothing is certain while one of them is still being compared.
   const waiting = each.find(({ deviation }) => deviation?.state === 'waiting');
-  const { deviation } = waiting ?? told ?? whole;
+  const deviation = deviationIn(waiting ?? told);
   const pieces = before.quantity === after.quantity ? '' : `${before.quantity} → ${after.quantity} pieces`;
   return {
     difference: strongest,
@@ -53,6 +54,18 @@ export const compareVariants = (
     variants,
   };
 };
+
+/** Says in which clearance it is. */
+const deviationIn = (
+  one: (PartDifference & { readonly clearance: Clearance }) | undefined,
+): PartDifference['deviation'] =>
+  one?.deviation
+    ? {
+        ...one.deviation,
+        clearance: one.clearance,
+        where: `in ${clearanceSigns[one.clearance]}: ${one.deviation.where}`,
+      }
+    : null;
 
 /** Those that weigh; a clearance that is new or dropped does not. */
 const strength: readonly Row['difference'][] = ['changed', 're-exported'];

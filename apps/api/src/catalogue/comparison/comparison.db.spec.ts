@@ -1,7 +1,7 @@
 import { createReadStream } from 'node:fs';
 import type { Comparison } from '@windchest/contracts';
 import { Storage } from '../../adapters/storage/storage.js';
-import { selectRows } from '../../database/rows.js';
+import { selectRows, touchRows } from '../../database/rows.js';
 import { MeshRunner, type MeshPairOutcome } from '../../measuring/mesh-runner.js';
 import {
   boxStl,
@@ -158,6 +158,45 @@ describe('the comparison of two revisions', () => {
     const firstTongue = revision.parts.find((part) => part.code === 'J-01')!.file!.sha256;
     const mine = (await pairs()).filter((pair) => pair.before_sha === firstTongue);
     expect(mine.slice(-2).map((pair) => pair.state)).toEqual(['compared', 'compared']);
+  });
+
+  it('goes clearance by clearance, before anybody looks, and is made up for where it is missing', async () => {
+    const { kit } = await releasedKit(shop, maker, 'Loose');
+    const loose = 'J-01 Locking tongue (plus).stl';
+    const first = await startRevision(maker, kit.id);
+    await upload(maker, first.id, loose, boxStl(19.8, 30, 40));
+    await writeNotes(maker, first.id, { changeNotes: '### Added\n\n- A looser tongue.' });
+    await shop.drain();
+    expect((await release(shop, maker, first.id)).state).toBe('released');
+
+    const second = await startRevision(maker, kit.id);
+    const { sha256 } = await upload(maker, second.id, loose, boxStl(19.6, 30, 40));
+    await writeNotes(maker, second.id, { changeNotes: '### Changed\n\n- Looser still.' });
+    await shop.drain();
+    const mine = () =>
+      selectRows<{ state: string }>(
+        shop.database,
+        'SELECT state FROM mesh_comparisons WHERE after_sha = :sha256',
+        { sha256 },
+      );
+    expect(await mine()).toEqual([{ state: 'compared' }]);
+    expect(await rowOf(second.id, 'J-01')).toMatchObject({
+      difference: 'changed',
+      deviation: {
+        clearance: 'plus',
+        where: expect.stringMatching(/^in \+: up to 0\.20 mm, .*at the right/),
+      },
+    });
+    await mark(second.id, 'J-01', 'Still too tight.');
+
+    // As in a shop that knew no comparing before: asking for the release asks for it.
+    await touchRows(shop.database, 'DELETE FROM mesh_comparisons WHERE after_sha = :sha256', { sha256 });
+    const { body } = await maker.post(`/api/workshop/revisions/${second.id}/release`).expect(409);
+    expect(body.detail).toContain('J-01 is being compared');
+    await shop.drain();
+    await maker.post(`/api/workshop/revisions/${second.id}/release`).expect(202);
+    await shop.drain();
+    expect((await readRevision(maker, second.id)).state).toBe('released');
   });
 
   it('says in a sentence why two shapes could not be compared, and tries again when the file is sent again', async () => {

@@ -13,6 +13,7 @@ export const deviationOf = (known: KnownComparison, before: MeasuredMesh, after:
     placeMm: null,
     placeIsOn: null,
     movedMm: null,
+    clearance: null,
     boxMm: boxOf(after),
     earlierBoxMm: boxOf(before),
   };

@@ -1,28 +1,40 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection } from '@nestjs/sequelize';
+import type { Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
 import type { Tx } from '../../database/transactions.js';
+import { meshPairsOf, type PartMeshes } from './compare-parts.js';
 import { MeshComparisons, type MeshPair } from './mesh-comparisons.js';
 
-/** Parts of a revision beside those of the same code in earlier ones, where both are measured and differ. */
-const PAIRS = `SELECT DISTINCT old_file.sha256 AS beforeSha, new_file.sha256 AS afterSha
-  FROM revisions later
-  JOIN parts new_part ON new_part.revision_id = later.id
-  JOIN revision_files new_file ON new_file.id = new_part.file_id
-  JOIN measurements new_mesh ON new_mesh.sha256 = new_file.sha256 AND new_mesh.state = 'measured'
-  JOIN revisions earlier ON earlier.kit_id = later.kit_id AND earlier.state IN ('released', 'withdrawn')
-    AND (earlier.mark < later.mark OR (earlier.mark = later.mark AND earlier.issue < later.issue))
-  JOIN parts old_part ON old_part.revision_id = earlier.id AND old_part.code = new_part.code
-  JOIN revision_files old_file ON old_file.id = old_part.file_id
-  JOIN measurements old_mesh ON old_mesh.sha256 = old_file.sha256 AND old_mesh.state = 'measured'
-  WHERE old_file.sha256 <> new_file.sha256 AND NOT (old_mesh.geometry_hash <=> new_mesh.geometry_hash)`;
+interface EarlierRow {
+  laterId: string;
+  earlierId: string;
+}
+interface MeshRow {
+  revisionId: string;
+  code: string;
+  clearance: Clearance;
+  sha256: string;
+  geometryHash: string | null;
+  state: string | null;
+}
 
-/** What buyers hold when a draft goes out: marks are given against that revision. */
-const WITH_THE_LAST = `AND NOT EXISTS (SELECT 1 FROM revisions between_them
-  WHERE between_them.kit_id = later.kit_id AND between_them.state IN ('released', 'withdrawn')
-    AND (between_them.mark > earlier.mark OR (between_them.mark = earlier.mark AND between_them.issue > earlier.issue))
-    AND (between_them.mark < later.mark OR (between_them.mark = later.mark AND between_them.issue < later.issue)))`;
+/** Released revisions before some others of their kits, newest first. */
+const EARLIER = `SELECT later.id AS laterId, earlier.id AS earlierId
+  FROM revisions later JOIN revisions earlier ON earlier.kit_id = later.kit_id AND earlier.state IN ('released', 'withdrawn')
+    AND (earlier.mark < later.mark OR (earlier.mark = later.mark AND earlier.issue < later.issue))
+  WHERE later.id IN (:ids) ORDER BY earlier.mark DESC, earlier.issue DESC`;
+
+/** The meshes of parts, without what they measure and how they are drawn. */
+const MESHES = `SELECT p.revision_id AS revisionId, p.code, 'zero' AS clearance, f.sha256, m.geometry_hash AS geometryHash, m.state
+    FROM parts p JOIN revision_files f ON f.id = p.file_id LEFT JOIN measurements m ON m.sha256 = f.sha256
+    WHERE p.revision_id IN (:ids)
+  UNION ALL
+  SELECT v.revision_id, p.code, v.clearance, f.sha256, m.geometry_hash, m.state
+    FROM part_variants v JOIN parts p ON p.id = v.part_id
+    JOIN revision_files f ON f.id = v.file_id LEFT JOIN measurements m ON m.sha256 = f.sha256
+    WHERE v.revision_id IN (:ids)`;
 
 /** Has the meshes compared that somebody is going to ask about. */
 @Injectable()
@@ -32,31 +44,74 @@ export class QueueComparisons {
     private readonly comparisons: MeshComparisons,
   ) {}
 
-  /** A draft has other parts now. */
+  /** A draft has other parts now. Marks are given against what buyers hold: the last released revision. */
   async ofDraft(tx: Tx, revisionId: string): Promise<void> {
-    const sql = `${PAIRS} ${WITH_THE_LAST} AND later.id = :revisionId`;
-    await this.comparisons.want(tx, await this.pairs(tx, sql, { revisionId }));
+    await this.comparisons.want(tx, await this.pairs(tx, [revisionId], 'last'));
   }
 
   /** A file was sent to a draft; what failed with it through no fault of the files is tried again. */
   async ofSentFile(tx: Tx, revisionId: string, sha256: string): Promise<void> {
-    const sql = `${PAIRS} ${WITH_THE_LAST} AND later.id = :revisionId AND new_file.sha256 = :sha256`;
-    await this.comparisons.want(tx, await this.pairs(tx, sql, { revisionId, sha256 }), { isAnew: true });
+    const pairs = await this.pairs(tx, [revisionId], 'last');
+    await this.comparisons.want(
+      tx,
+      pairs.filter((pair) => pair.afterSha === sha256),
+      { isAnew: true },
+    );
   }
 
   /** A file that drafts hold is measured now. */
   async ofMeasuredFile(tx: Tx, sha256: string): Promise<void> {
-    const sql = `${PAIRS} ${WITH_THE_LAST} AND later.state IN ('draft', 'proving') AND new_file.sha256 = :sha256`;
-    await this.comparisons.want(tx, await this.pairs(tx, sql, { sha256 }));
+    const drafts = await selectRows<{ id: string }>(
+      this.database,
+      `SELECT DISTINCT r.id FROM revision_files f JOIN revisions r ON r.id = f.revision_id
+       WHERE f.sha256 = :sha256 AND r.state IN ('draft', 'proving')`,
+      { sha256 },
+      tx,
+    );
+    const ids = drafts.map((draft) => draft.id);
+    const pairs = await this.pairs(tx, ids, 'last');
+    await this.comparisons.want(
+      tx,
+      pairs.filter((pair) => pair.afterSha === sha256),
+    );
   }
 
   /** A revision goes out: whoever holds an older one reads on the shelf what differs from that one. */
   async ofRelease(tx: Tx, revisionId: string): Promise<void> {
-    const sql = `${PAIRS} AND later.id = :revisionId`;
-    await this.comparisons.want(tx, await this.pairs(tx, sql, { revisionId }));
+    await this.comparisons.want(tx, await this.pairs(tx, [revisionId], 'all'));
   }
 
-  private pairs(tx: Tx, sql: string, values: Record<string, unknown>): Promise<MeshPair[]> {
-    return selectRows<MeshPair>(this.database, sql, values, tx);
+  private async pairs(tx: Tx, ids: readonly string[], which: 'last' | 'all'): Promise<MeshPair[]> {
+    if (ids.length === 0) return [];
+    const rows = await selectRows<EarlierRow>(this.database, EARLIER, { ids }, tx);
+    const steps =
+      which === 'all' ? rows : rows.filter((row) => rows.find((one) => one.laterId === row.laterId) === row);
+    if (steps.length === 0) return [];
+    const parts = await this.partsOf(tx, [...ids, ...steps.map((step) => step.earlierId)]);
+    const pairs = steps.flatMap(({ laterId, earlierId }) =>
+      [...(parts.get(laterId) ?? [])].flatMap(([code, part]) =>
+        meshPairsOf(parts.get(earlierId)?.get(code) ?? null, part),
+      ),
+    );
+    return [...new Map(pairs.map((pair) => [`${pair.beforeSha} ${pair.afterSha}`, pair])).values()];
+  }
+
+  /** By revision, then by code. */
+  private async partsOf(tx: Tx, ids: readonly string[]): Promise<Map<string, Map<string, PartMeshes>>> {
+    const revisions = new Map<string, Map<string, PartMeshes>>();
+    for (const row of await selectRows<MeshRow>(this.database, MESHES, { ids: [...new Set(ids)] }, tx)) {
+      const { revisionId, code, clearance, sha256, geometryHash } = row;
+      const parts = revisions.get(revisionId) ?? new Map<string, PartMeshes>();
+      const { file, variants } = parts.get(code) ?? { file: null, variants: [] };
+      const mesh = { sha256, geometryHash, measured: row.state === 'measured' || null };
+      parts.set(
+        code,
+        clearance === 'zero'
+          ? { file: mesh, variants }
+          : { file, variants: [...variants, { clearance, file: mesh }] },
+      );
+      revisions.set(revisionId, parts);
+    }
+    return revisions;
   }
 }

@@ -8,3 +8,16 @@ export const measureFile = defineJob({
   payload: z.object({ sha256, fileName: z.string() }),
   attempts: 6,
 });
+
+/** Measures a mesh anew that an older measurer measured; what was found before stands until then. */
+export const renewMeasurement = defineJob({
+  name: 'catalogue.renew-measurement',
+  payload: z.object({ sha256, fileName: z.string() }),
+  attempts: 6,
+});
+
+/** Has everything measured anew that an older measurer measured: once for each version of the measurer. */
+export const renewMeasurements = defineJob({
+  name: 'catalogue.renew-measurements',
+  payload: z.object({ version: z.int() }),
+});

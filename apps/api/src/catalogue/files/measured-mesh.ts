@@ -2,7 +2,10 @@ import type { Measurement as MeshMeasurement } from '@windchest/meshes';
 import type { PrintProfile } from '@windchest/plates';
 
 /** What the measuring room finds out about a mesh, as it is kept. */
-export type MeasuredMesh = MeshMeasurement;
+export interface MeasuredMesh extends MeshMeasurement {
+  /** Size of the coarse likeness in the storage, where one was made. */
+  previewBytes?: number;
+}
 
 export interface Drawing {
   path: string;
@@ -19,12 +22,14 @@ export interface Drawings {
 
 /** All that is kept of one mesh. */
 export interface MeshFindings {
-  readonly measurement: MeasuredMesh;
+  readonly measurement: MeshMeasurement;
   readonly geometryHash: string;
   readonly drawings: Drawings;
   /** What estimates of filament and time need, and the convex outline from above. */
   readonly printProfile: PrintProfile;
   readonly footprint: readonly (readonly [number, number])[];
+  /** The coarse likeness, under its hash in the storage. */
+  readonly preview: { readonly sha256: string; readonly bytes: number };
 }
 
 /** The side that tells most about a part: the one that shows most of it. */

@@ -38,6 +38,7 @@ const file = (over: Partial<FileOfRevision> = {}): FileOfRevision => ({
   measured: measured([10, 10, 10]),
   geometryHash: 'g',
   drawings: null,
+  previewSha256: null,
   fault: null,
   ...over,
 });
@@ -97,6 +98,7 @@ const deviation = {
   placeMm: null,
   placeIsOn: null,
   movedMm: null,
+  clearance: null,
   boxMm: box,
   earlierBoxMm: box,
   where: '',

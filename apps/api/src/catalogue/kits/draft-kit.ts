@@ -8,6 +8,7 @@ import { isDuplicate } from '../../database/errors.js';
 import { Transactions } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
 import { notFound, Refusal } from '../../http/refusal.js';
+import { KitInShopSteps } from './kit-in-shop-steps.js';
 import { Kit } from './kit.model.js';
 
 /** Drafting a kit, and changing its words, its colour and whether it stands in the shop. */
@@ -17,6 +18,7 @@ export class DraftKit {
     @InjectModel(Kit) private readonly kits: typeof Kit,
     private readonly transactions: Transactions,
     private readonly staffLog: StaffLog,
+    private readonly inShop: KitInShopSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -48,6 +50,7 @@ export class DraftKit {
           before,
           after: body,
         });
+        if (body.isListed) await this.inShop.run(tx, { kitId: kit.id });
       }),
     );
   }

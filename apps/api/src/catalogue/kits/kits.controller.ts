@@ -1,6 +1,8 @@
-import { Controller } from '@nestjs/common';
+import { Controller, Res } from '@nestjs/common';
 import type { Answer, Handled } from '@windchest/contracts';
+import type { Response } from 'express';
 import { Endpoint, Input } from '../../http/endpoint.js';
+import { PartPreviews } from '../files/part-previews.js';
 import { PrintSheets } from '../print/print-sheets.js';
 import { ShopKits } from './shop-kits.js';
 
@@ -8,6 +10,7 @@ import { ShopKits } from './shop-kits.js';
 export class KitsController {
   constructor(
     private readonly kits: ShopKits,
+    private readonly previews: PartPreviews,
     private readonly printSheets: PrintSheets,
   ) {}
 
@@ -24,6 +27,18 @@ export class KitsController {
   @Endpoint('GET /kits/:slug/parts')
   parts(@Input() { params }: Handled<'GET /kits/:slug/parts'>): Promise<Answer<'GET /kits/:slug/parts'>> {
     return this.kits.parts(params.slug);
+  }
+
+  @Endpoint('GET /kits/:slug/parts/:code/preview')
+  async preview(
+    @Input() { params, query }: Handled<'GET /kits/:slug/parts/:code/preview'>,
+    @Res() response: Response,
+  ): Promise<void> {
+    const revisionId = await this.kits.newestRevisionId(params.slug);
+    await this.previews.send(
+      { revisionId, part: { code: params.code }, named: query.v, isPublic: true },
+      response,
+    );
   }
 
   @Endpoint('GET /kits/:slug/print')

@@ -29,6 +29,7 @@ describe('kits', () => {
       revision: 'Mk 1.0',
       partCount: 2,
       tallestPartMm: 40,
+      longestPartMm: 60,
       price: { minor: 2400, currency: 'EUR' },
       compass: '',
     });
@@ -103,6 +104,8 @@ describe('kits', () => {
     const page = (await visitor.get(`/api/kits/${kit[0]!.slug}`).expect(200)).body as KitPage;
     expect(page.compass).toBe('C5–E5');
     expect(page.rank.map(({ voice }) => voice.note)).toEqual(['C5', 'E5']);
+    const voicing = await shop.app.get(CatalogueReader).voicingOf(draft.id);
+    expect(voicing).toEqual({ rank: page.rank, room: page.room, declaredCents: 100 });
     const { body: parts } = await visitor.get(`/api/kits/${kit[0]!.slug}/parts`).expect(200);
     expect(parts[0]).toMatchObject({ sizeMm: { x: 16, y: 16 }, areaMm2: expect.any(Number) });
     expect(parts[0].drawing.path).toMatch(/^M/);

@@ -32,6 +32,7 @@ interface Row {
   print_estimate: unknown;
   price_minor: number;
   tallest_mm: number | null;
+  longest_mm: number | null;
   part_count: number;
   total: number;
 }
@@ -40,8 +41,13 @@ const orders: Record<ListQuery['sort'], string> = {
   newest: 'released_at DESC, name',
   name: 'name',
   price: 'price_minor, name',
-  size: 'tallest_mm, name',
+  size: 'longest_mm, name',
 };
+
+const side = (axis: 0 | 1 | 2): string => `CAST(JSON_VALUE(m.measurement, '$.sizeMm[${axis}]') AS DOUBLE)`;
+const largest = (length: string): string =>
+  `(SELECT MAX(${length}) FROM parts p JOIN revision_files f ON f.id = p.file_id
+    JOIN measurements m ON m.sha256 = f.sha256 WHERE p.revision_id = r.id)`;
 
 /** Kits as everybody sees them: listed, with a released newest revision and something to buy. */
 @Injectable()
@@ -70,6 +76,13 @@ export class ShopKits {
       size: query.size,
       total: Number(rows[0]?.total ?? 0),
     };
+  }
+
+  async cardsByIds(kitIds: readonly string[]): Promise<(KitCard & { id: string })[]> {
+    if (kitIds.length === 0) return [];
+    const rows = await this.rows('AND k.id IN (:kitIds)', { kitIds }, 'ORDER BY name, id');
+    const voices = await this.voicesOf(rows.map((row) => row.revision_id));
+    return rows.map((row) => ({ ...this.cardOf(row, voices.get(row.revision_id) ?? []), id: row.id }));
   }
 
   async read(slug: string): Promise<Answer<'GET /kits/:slug'>> {
@@ -139,6 +152,8 @@ export class ShopKits {
         isGauge: part.isGauge,
         clearances: hasVariants(part) ? filesOfPart(part).map((one) => one.clearance) : [],
         drawing: tellingDrawing(part.file?.drawings ?? null),
+        previewBytes: part.file?.measured?.previewBytes ?? null,
+        previewSha256: part.file?.previewSha256 ?? null,
       };
     });
   }
@@ -165,9 +180,8 @@ export class ShopKits {
       `SELECT found.*, COUNT(*) OVER () AS total FROM (
          SELECT k.id, k.slug, k.name, k.tagline, k.colour, r.id AS revision_id, r.mark, r.issue, r.released_at, r.room,
                 r.print_estimate, ${PRICE} AS price_minor,
-                (SELECT MAX(CAST(JSON_VALUE(m.measurement, '$.sizeMm[2]') AS DOUBLE)) FROM parts p
-                 JOIN revision_files f ON f.id = p.file_id JOIN measurements m ON m.sha256 = f.sha256
-                 WHERE p.revision_id = r.id) AS tallest_mm,
+                ${largest(side(2))} AS tallest_mm,
+                ${largest(`GREATEST(${side(0)}, ${side(1)}, ${side(2)})`)} AS longest_mm,
                 (SELECT COUNT(*) FROM parts p WHERE p.revision_id = r.id) AS part_count
          FROM kits k JOIN revisions r ON r.id = k.newest_revision_id
          WHERE k.is_listed AND r.state = 'released' ${condition}
@@ -204,6 +218,7 @@ export class ShopKits {
       compass: compassOfRank(rank, room),
       rank,
       tallestPartMm: Number(row.tallest_mm ?? 0),
+      longestPartMm: Number(row.longest_mm ?? 0),
       partCount: Number(row.part_count),
       printEstimate: fromJson<KitCard['printEstimate']>(row.print_estimate),
       price: this.money(row.price_minor),

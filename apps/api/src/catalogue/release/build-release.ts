@@ -13,6 +13,7 @@ import type { Tx } from '../../database/transactions.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { HandlesJob, type Finish, type JobHandler } from '../../jobs/job.js';
 import { QueueComparisons } from '../comparison/queue-comparisons.js';
+import { KitInShopSteps } from '../kits/kit-in-shop-steps.js';
 import { Kit } from '../kits/kit.model.js';
 import { Licence } from '../kits/licence.model.js';
 import { estimatePrint } from '../print/estimate-print.job.js';
@@ -59,6 +60,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly staffLog: StaffLog,
     private readonly jobs: JobQueue,
     private readonly released: RevisionReleasedSteps,
+    private readonly inShop: KitInShopSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -152,6 +154,7 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
       label: revision.label,
       kit: { id: kit.id, slug: kit.slug, name: kit.name },
     });
+    if (kit.isListed) await this.inShop.run(tx, { kitId: kit.id });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
       what: 'released a revision',

@@ -8,7 +8,7 @@ import { notFound, Refusal } from '../../http/refusal.js';
 import { JobQueue } from '../../jobs/job-queue.js';
 import { Gates } from '../gates/gates.js';
 import { Drafts } from '../revisions/drafts.js';
-import { Revision } from '../revisions/revision.model.js';
+import { isFinal, Revision } from '../revisions/revision.model.js';
 import { buildRelease } from './build-release.job.js';
 import { TidyDraft } from './tidy-draft.js';
 
@@ -27,6 +27,7 @@ export class RequestRelease {
   ) {}
 
   async request(person: SignedIn, revisionId: string): Promise<void> {
+    await this.askForComparisons(revisionId);
     await this.transactions.run(async (tx) => {
       const standing = await this.revisions.findByPk(revisionId, { transaction: tx, lock: tx.LOCK.UPDATE });
       if (!standing) throw notFound('revision');
@@ -60,5 +61,11 @@ export class RequestRelease {
         after: { waived: waived.map(({ name, waiver }) => ({ gate: name, reason: waiver?.reason })) },
       });
     });
+  }
+
+  /** Looking at the gates has shapes compared that nobody asked about; a refusal would take that back. */
+  private async askForComparisons(revisionId: string): Promise<void> {
+    const revision = await this.revisions.findByPk(revisionId);
+    if (revision && !isFinal(revision)) await this.gates.of(revision);
   }
 }

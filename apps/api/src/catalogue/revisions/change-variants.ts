@@ -5,6 +5,7 @@ import { StaffLog } from '../../accounts/staff-log.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
 import type { SignedIn } from '../../http/person.js';
 import { notFound, Refusal } from '../../http/refusal.js';
+import { QueueComparisons } from '../comparison/queue-comparisons.js';
 import { isMeshKind } from '../files/file-kind.js';
 import { MeshPlaces, type Places } from '../files/mesh-places.js';
 import { RevisionFile } from '../files/revision-file.model.js';
@@ -24,6 +25,7 @@ export class ChangeVariants {
     private readonly transactions: Transactions,
     private readonly drafts: Drafts,
     private readonly places: MeshPlaces,
+    private readonly comparisons: QueueComparisons,
     private readonly staffLog: StaffLog,
   ) {}
 
@@ -41,6 +43,7 @@ export class ChangeVariants {
       const left = await this.takeFromItsPlace(tx, file, part, places);
       await this.places.keepVariant(tx, part, params.clearance, file.id);
       if (old) await this.files.destroy({ where: { id: old.fileId }, transaction: tx });
+      await this.comparisons.ofDraft(tx, revision.id);
       await this.staffLog.record(tx, person, {
         what: `gave ${part.code} the clearance ${clearanceSigns[params.clearance]}`,
         subject,

@@ -14,8 +14,10 @@ export const filesOfPart = ({ file, variants }: Pick<PartOfRevision, 'file' | 'v
 ];
 
 /** The file somebody prints who prints in a clearance; a part that does not come in it has its own file only. */
-export const fileAt = (part: PartOfRevision, clearance: Clearance): FileOfRevision | null =>
-  part.variants.find((one) => one.clearance === clearance)?.file ?? part.file;
+export const fileAt = <File>(
+  part: { readonly file: File | null; readonly variants: readonly { clearance: Clearance; file: File }[] },
+  clearance: Clearance,
+): File | null => part.variants.find((one) => one.clearance === clearance)?.file ?? part.file;
 
 export const hasVariants = ({ variants }: Pick<PartOfRevision, 'variants'>): boolean => variants.length > 0;
 

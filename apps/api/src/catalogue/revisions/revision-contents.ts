@@ -20,6 +20,7 @@ export interface FileOfRevision {
   readonly measured: MeasuredMesh | null;
   readonly geometryHash: string | null;
   readonly drawings: Drawings | null;
+  readonly previewSha256: string | null;
   /** A whole sentence that names the file and the fault. */
   readonly fault: string | null;
 }
@@ -52,6 +53,7 @@ interface FileRow {
   measurement: unknown;
   geometry_hash: string | null;
   drawings: unknown;
+  preview_sha256: string | null;
   fault: string | null;
 }
 interface PartRow {
@@ -82,7 +84,7 @@ export class RevisionContents {
   async filesOf(revisionId: string, tx?: Tx): Promise<FileOfRevision[]> {
     const rows = await selectRows<FileRow>(
       this.database,
-      `SELECT f.id, f.sha256, f.file_name, s.bytes, s.kind, f.created_at, m.state, m.measurement, m.geometry_hash, m.drawings, m.fault
+      `SELECT f.id, f.sha256, f.file_name, s.bytes, s.kind, f.created_at, m.state, m.measurement, m.geometry_hash, m.drawings, m.preview_sha256, m.fault
        FROM revision_files f JOIN stored_files s ON s.sha256 = f.sha256 LEFT JOIN measurements m ON m.sha256 = f.sha256
        WHERE f.revision_id = :revisionId ORDER BY f.file_name`,
       { revisionId },
@@ -128,6 +130,16 @@ export class RevisionContents {
     }));
   }
 
+  /** The parts that sound, without what their files measure. */
+  async voicesOf(revisionId: string): Promise<{ code: string; voice: VoiceWithNote | null }[]> {
+    const rows = await selectRows<Pick<PartRow, 'code' | 'voice'>>(
+      this.database,
+      'SELECT code, voice FROM parts WHERE revision_id = :revisionId AND voice IS NOT NULL',
+      { revisionId },
+    );
+    return rows.map(({ code, voice }) => ({ code, voice: fromJson<VoiceWithNote>(voice) }));
+  }
+
   /** Files that belong to no part: documents, pictures, sounds. */
   async documentsOf(revisionId: string, tx?: Tx): Promise<FileOfRevision[]> {
     return (await this.filesOf(revisionId, tx)).filter((file) => !isMeshKind(file.kind));
@@ -145,5 +157,6 @@ const toFile = (row: FileRow): FileOfRevision => ({
   measured: fromJson<MeasuredMesh>(row.measurement),
   geometryHash: row.geometry_hash,
   drawings: fromJson<Drawings>(row.drawings),
+  previewSha256: row.preview_sha256,
   fault: row.fault === null ? null : `“${row.file_name}” ${row.fault}`,
 });

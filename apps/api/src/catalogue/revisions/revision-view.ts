@@ -114,7 +114,13 @@ const toPart = (part: PartOfRevision, placeOf: Places): PartShape => ({
   isGauge: part.isGauge,
   file: part.file && toFile(part.file, placeOf),
   drawings: part.file?.drawings ?? null,
-  variants: part.variants.map(({ clearance, file }) => ({ clearance, file: toFile(file, placeOf) })),
+  previewBytes: part.file?.measured?.previewBytes ?? null,
+  previewSha256: part.file?.previewSha256 ?? null,
+  variants: part.variants.map(({ clearance, file }) => ({
+    clearance,
+    file: toFile(file, placeOf),
+    drawings: file.drawings,
+  })),
 });
 
 const toFile = (file: FileOfRevision, placeOf: Places): FileShape => ({

@@ -5,6 +5,7 @@ import { Endpoint, Input } from '../../http/endpoint.js';
 import { ThisPerson, type SignedIn } from '../../http/person.js';
 import { Comparison } from '../comparison/comparison.js';
 import { OfferFiles } from '../files/offer-files.js';
+import { PartPreviews } from '../files/part-previews.js';
 import { RemoveFile } from '../files/remove-file.js';
 import { UploadFile } from '../files/upload-file.js';
 import { WaiveGate } from '../gates/waive-gate.js';
@@ -29,6 +30,7 @@ export class RevisionsController {
     private readonly waiveGate: WaiveGate,
     private readonly requestRelease: RequestRelease,
     private readonly withdrawRevision: WithdrawRevision,
+    private readonly previews: PartPreviews,
   ) {}
 
   @Endpoint('POST /workshop/kits/:kitId/revisions')
@@ -103,6 +105,18 @@ export class RevisionsController {
     @Input() { params }: Handled<'DELETE /workshop/revisions/:revisionId/parts/:partId'>,
   ): Promise<void> {
     return this.changeRevision.dropPart(person, params.revisionId, params.partId);
+  }
+
+  @Endpoint('GET /workshop/revisions/:revisionId/parts/:partId/preview')
+  preview(
+    @Input() { params, query }: Handled<'GET /workshop/revisions/:revisionId/parts/:partId/preview'>,
+    @Res() response: Response,
+  ): Promise<void> {
+    const { revisionId, partId } = params;
+    return this.previews.send(
+      { revisionId, part: { id: partId }, named: query.v, isPublic: false },
+      response,
+    );
   }
 
   @Endpoint('PUT /workshop/revisions/:revisionId/parts/:partId/variants/:clearance')

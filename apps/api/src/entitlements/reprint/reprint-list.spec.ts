@@ -50,6 +50,7 @@ const partOf = (code: string, { shape, exported, quantity }: Made): PartOfRevisi
     } as never,
     geometryHash: `shape ${shape}`,
     drawings: null,
+    previewSha256: null,
     fault: null,
   },
 });

@@ -90,19 +90,21 @@ export class ReprintLists {
   private async statesOf(kitId: string, readers: readonly Reader[]): Promise<PrintedState[]> {
     const personIds = readers.flatMap(({ personId }) => personId ?? []);
     const emails = readers.flatMap(({ personId, email }) => (personId ? [] : email));
-    // Of several rights to one kit the one whose files were fetched last counts: it comes first.
+    // Of several rights to one kit the one whose files were fetched last comes first: prints stay, whatever ends.
     const held = await selectRows<HeldRow>(
       this.database,
       `SELECT person_id, email, held_revision_id, clearance FROM entitlements
-       WHERE kit_id = :kitId AND state = 'active'
+       WHERE kit_id = :kitId
          AND (person_id IN (:personIds) OR (person_id IS NULL AND email IN (:emails)))
-       ORDER BY held_since IS NULL, held_since DESC, created_at`,
+       ORDER BY held_since IS NULL, held_since DESC, state <> 'active', created_at`,
       { kitId, personIds: [...personIds, ''], emails: [...emails, ''] },
     );
     const first = new Map<string, HeldRow>();
     for (const row of held) {
       const name = nameOf({ personId: row.person_id, email: row.email });
-      if (!first.has(name)) first.set(name, row);
+      const known = first.get(name);
+      if (!known) first.set(name, row);
+      else if (known.clearance === null) first.set(name, { ...known, clearance: row.clearance });
     }
     const habits = await this.printers.habitsOf(personIds);
     const records = await this.records.ofMany(kitId, personIds);

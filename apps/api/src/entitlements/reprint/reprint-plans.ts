@@ -3,7 +3,7 @@ import type { Answer, Clearance, Handled } from '@windchest/contracts';
 import { CatalogueReader, type ReleasedRevision } from '../../catalogue/catalogue-reader.js';
 import type { SignedIn } from '../../http/person.js';
 import { notFound } from '../../http/refusal.js';
-import { Holdings } from '../holdings.js';
+import { OwnRevisions } from '../own-revisions.js';
 import { KeepPrintRecord } from './keep-print-record.js';
 import { ReprintLists } from './reprint-lists.js';
 
@@ -12,7 +12,7 @@ import { ReprintLists } from './reprint-lists.js';
 export class ReprintPlans {
   constructor(
     private readonly catalogue: CatalogueReader,
-    private readonly holdings: Holdings,
+    private readonly own: OwnRevisions,
     private readonly lists: ReprintLists,
     private readonly record: KeepPrintRecord,
   ) {}
@@ -75,12 +75,13 @@ export class ReprintPlans {
     otherwise: 'newest' | 'held',
   ): Promise<{ kitId: string; kitName: string; revision: ReleasedRevision }> {
     const kit = await this.catalogue.kitBySlug(slug);
-    const holding = kit && (await this.holdings.of(person.id, kit.id));
-    if (!kit || !holding) throw notFound('kit on your shelf');
-    const revisions = await this.catalogue.revisionsOf(kit.id);
-    const newest = revisions.find(({ isWithdrawn }) => !isWithdrawn) ?? revisions[0];
-    const named = revisionId ?? (otherwise === 'held' ? holding.heldRevisionId : null);
-    const revision = named ? revisions.find(({ id }) => id === named) : newest;
+    const { covered, all, newest, heldRevisionId } = kit
+      ? await this.own.of(person.id, kit.id)
+      : { covered: [], all: [], newest: null, heldRevisionId: null };
+    if (!kit || !newest) throw notFound('kit on your shelf');
+    const held = all.find(({ id }) => id === heldRevisionId) ?? newest;
+    const named = revisionId && [...covered, held].find(({ id }) => id === revisionId);
+    const revision = revisionId ? named : otherwise === 'held' ? held : newest;
     if (!revision) throw notFound('revision');
     return { kitId: kit.id, kitName: kit.name, revision };
   }

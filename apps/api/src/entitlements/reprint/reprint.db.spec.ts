@@ -22,16 +22,6 @@ import { ReprintLists } from './reprint-lists.js';
 type Plan = OutputOf<'GET /shelf/:slug/reprint'>;
 type Record = OutputOf<'GET /shelf/:slug/printed'>;
 
-/** A zip as it came, for supertest reads what it takes for text. */
-const rawBody = (
-  response: NodeJS.ReadableStream,
-  done: (fault: Error | null, body: Buffer) => void,
-): void => {
-  const chunks: Buffer[] = [];
-  response.on('data', (chunk: Buffer) => chunks.push(chunk));
-  response.on('end', () => done(null, Buffer.concat(chunks)));
-};
-
 /** Names of a zip's entries, from its central directory (APPNOTE 4.3.12: signature PK 01 02, name after 46 bytes). */
 const namesOf = (zip: Buffer): string[] => {
   const names: string[] = [];
@@ -203,7 +193,15 @@ describe('prints, and what to print again', () => {
       .send({ kitSlug: slug, revisionId: made[2]!.id, file: ready.file.sha256 })
       .expect(201);
     expect(given.body.fileName).toBe(`${slug}-mk-1.2-changed-parts.zip`);
-    const got = await pia.get(given.body.url).buffer(true).parse(rawBody).expect(200);
+    const got = await pia
+      .get(given.body.url)
+      .buffer(true)
+      .parse((response, done) => {
+        const chunks: Buffer[] = [];
+        response.on('data', (chunk: Buffer) => chunks.push(chunk));
+        response.on('end', () => done(null, Buffer.concat(chunks)));
+      })
+      .expect(200);
     expect(
       createHash('sha256')
         .update(got.body as Buffer)
@@ -228,8 +226,8 @@ describe('prints, and what to print again', () => {
     // Nobody has asked for a month: it goes; asked for again, it comes out the same.
     const collector = shop.app.get(CollectChangedBundles);
     expect(await collector.collect()).toBe(0);
-    await touchRows(shop.database, 'UPDATE changed_bundles SET used_at = :then', {
-      then: shop.clock.in(-31 * 86_400),
+    await touchRows(shop.database, 'UPDATE changed_bundles SET used_at = :longAgo', {
+      longAgo: shop.clock.in(-31 * 86_400),
     });
     expect(await collector.collect()).toBe(1);
     expect(await shop.app.get(Storage).head(keyOf('bundles', ready.file.sha256))).toBeNull();

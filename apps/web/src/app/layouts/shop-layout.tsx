@@ -52,6 +52,7 @@ export function ShopLayout() {
             entries={[
               { to: paths.home.to(), label: shopTexts.kits, isExact: true },
               { to: paths.shelf.to(), label: shopTexts.shelf },
+              { to: paths.support.to(), label: shopTexts.pledge },
               ...(may('workshop:enter')
                 ? [{ to: paths.workshop.overview.to(), label: shopTexts.workshop }]
                 : []),

@@ -1,7 +1,7 @@
 import type { Permission } from '@windchest/contracts';
 import { Navigate, useLocation } from 'react-router-dom';
 import { paths, signInThenBack } from '../../config/paths.js';
-import { faultTexts } from '../../config/texts/shared.js';
+import { noPageTexts } from '../../config/texts/no-page.js';
 import { workshopTexts } from '../../config/texts/workshop.js';
 import { useSession } from '../../lib/session.js';
 import { LinkButton } from '../../ui/button.js';
@@ -14,11 +14,20 @@ import { Footer } from './footer.js';
 import { Header, type HeaderEntry, HeaderLink } from './header.js';
 import { PageFrame } from './page-frame.js';
 
-const entries: readonly (HeaderEntry & { needs: Permission })[] = [
+/** `unless`: who may do that finds the entry within another one. */
+const entries: readonly (HeaderEntry & { needs: Permission; unless?: Permission })[] = [
   { to: paths.workshop.overview.to(), label: workshopTexts.overview, isExact: true, needs: 'workshop:enter' },
   { to: paths.workshop.kits.to(), label: workshopTexts.kits, needs: 'kits:read' },
   { to: paths.workshop.orders.to(), label: workshopTexts.orders, needs: 'orders:read' },
+  {
+    to: paths.workshop.receipts.to(),
+    label: workshopTexts.receipts,
+    needs: 'orders:read',
+    unless: 'ledger:read',
+  },
+  { to: paths.workshop.sales.to(), label: workshopTexts.ledger, needs: 'ledger:read' },
   { to: paths.workshop.coupons.to(), label: workshopTexts.coupons, needs: 'coupons:read' },
+  { to: paths.workshop.supporters.to(), label: workshopTexts.supporters, needs: 'supporters:read' },
   { to: paths.workshop.holders.to(), label: workshopTexts.holders, needs: 'buyers:read' },
   { to: paths.workshop.fit.to(), label: workshopTexts.fit, needs: 'fit:read' },
   { to: paths.workshop.journal.to(), label: workshopTexts.journal, needs: 'journal:write' },
@@ -34,9 +43,9 @@ export function WorkshopLayout() {
   const refusal = may('workshop:enter') ? undefined : (
     <Band>
       {session ? (
-        <Fault level={1} fault={{ title: faultTexts.forbidden, detail: faultTexts.forbiddenDetail }}>
+        <Fault level={1} fault={{ title: noPageTexts.forbidden, detail: noPageTexts.forbiddenDetail }}>
           <LinkButton look="outline" size="sm" to={paths.home.to()}>
-            {faultTexts.toKits}
+            {noPageTexts.toKits}
           </LinkButton>
         </Fault>
       ) : fault ? (
@@ -56,7 +65,9 @@ export function WorkshopLayout() {
             name={workshopTexts.name}
             navigationLabel={workshopTexts.navigation}
             menuLabels={{ open: workshopTexts.menu, close: workshopTexts.closeMenu }}
-            entries={entries.filter((entry) => may(entry.needs))}
+            entries={entries.filter(
+              ({ needs, unless }) => may(needs) && (unless === undefined || !may(unless)),
+            )}
             extras={
               person && <HeaderLink to={paths.account.to()}>{workshopTexts.roles[person.role]}</HeaderLink>
             }

@@ -34,6 +34,16 @@ export const accountRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/accounts/account.page.js')).AccountPage),
   },
   {
+    path: paths.pledge.path,
+    element: lazyPage(
+      async () => (await import('../../features/supporters/own-pledge.page.js')).OwnPledgePage,
+    ),
+  },
+  {
+    path: paths.support.path,
+    element: lazyPage(async () => (await import('../../features/supporters/support.page.js')).SupportPage),
+  },
+  {
     path: paths.shelf.path,
     element: lazyPage(async () => (await import('../../features/entitlements/shelf.page.js')).ShelfPage),
   },
@@ -50,5 +60,9 @@ export const accountRoutes: RouteObject[] = [
   {
     path: paths.shelfFit.path,
     element: lazyPage(async () => (await import('../../features/fit/report-fit.page.js')).ReportFitPage),
+  },
+  {
+    path: paths.tuner.path,
+    element: lazyPage(async () => (await import('../../features/entitlements/tuner.page.js')).TunerPage),
   },
 ];

@@ -78,6 +78,54 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/ledger/order.page.js')).WorkshopOrderPage),
   },
   {
+    path: paths.workshop.receipts.path,
+    element: lazyPage(async () => (await import('../../features/ledger/receipts.page.js')).ReceiptsPage),
+  },
+  {
+    path: paths.workshop.sales.path,
+    element: lazyPage(async () => (await import('../../features/ledger/sales.page.js')).SalesPage),
+  },
+  {
+    path: paths.workshop.payments.path,
+    element: lazyPage(async () => (await import('../../features/ledger/payments.page.js')).PaymentsPage),
+  },
+  {
+    path: paths.workshop.rates.path,
+    element: lazyPage(async () => (await import('../../features/ledger/rates.page.js')).RatesPage),
+  },
+  {
+    path: paths.workshop.quarters.path,
+    element: lazyPage(async () => (await import('../../features/ledger/quarters.page.js')).QuartersPage),
+  },
+  {
+    path: paths.workshop.quarter.path,
+    element: lazyPage(async () => (await import('../../features/ledger/quarter.page.js')).QuarterPage),
+  },
+  {
+    path: paths.workshop.locations.path,
+    element: lazyPage(async () => (await import('../../features/ledger/locations.page.js')).LocationsPage),
+  },
+  {
+    path: paths.workshop.location.path,
+    element: lazyPage(async () => (await import('../../features/ledger/location.page.js')).LocationPage),
+  },
+  {
+    path: paths.workshop.reconciliations.path,
+    element: lazyPage(
+      async () => (await import('../../features/ledger/reconciliations.page.js')).ReconciliationsPage,
+    ),
+  },
+  {
+    path: paths.workshop.reconciliation.path,
+    element: lazyPage(
+      async () => (await import('../../features/ledger/reconciliation.page.js')).ReconciliationPage,
+    ),
+  },
+  {
+    path: paths.workshop.exports.path,
+    element: lazyPage(async () => (await import('../../features/ledger/exports.page.js')).ExportsPage),
+  },
+  {
     path: paths.workshop.holders.path,
     element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
   },
@@ -100,6 +148,30 @@ export const workshopRoutes: RouteObject[] = [
   {
     path: paths.workshop.post.path,
     element: lazyPage(async () => (await import('../../features/journal/edit-post.page.js')).EditPostPage),
+  },
+  {
+    path: paths.workshop.supporters.path,
+    element: lazyPage(
+      async () => (await import('../../features/supporters/supporters.page.js')).SupportersPage,
+    ),
+  },
+  {
+    path: paths.workshop.supporter.path,
+    element: lazyPage(
+      async () => (await import('../../features/supporters/supporter.page.js')).SupporterPage,
+    ),
+  },
+  {
+    path: paths.workshop.plans.path,
+    element: lazyPage(async () => (await import('../../features/supporters/plans.page.js')).PlansPage),
+  },
+  {
+    path: paths.workshop.newPlan.path,
+    element: lazyPage(async () => (await import('../../features/supporters/new-plan.page.js')).NewPlanPage),
+  },
+  {
+    path: paths.workshop.plan.path,
+    element: lazyPage(async () => (await import('../../features/supporters/plan.page.js')).PlanPage),
   },
   {
     path: paths.workshop.people.path,

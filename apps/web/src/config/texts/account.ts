@@ -151,6 +151,8 @@ export const accountTexts = {
   kits: 'Kits',
   state: 'State',
   total: 'Total',
+  papers: 'Papers',
+  wentBack: (amount: string) => `${amount} went back`,
 };
 
 /** What a browser calls itself, in words a person knows. */

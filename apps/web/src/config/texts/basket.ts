@@ -25,14 +25,37 @@ export const basketTexts = {
   discount: (code: string) => `Code ${code}`,
   total: 'Total',
   taxNote: 'Prices include tax.',
+  taxWithin: (rate: string, tax: string, country: string) => `including ${tax} VAT (${rate} %, ${country})`,
+  noTax: (country: string) => `No VAT is charged: the shop has no rate for ${country}.`,
+  reverseCharge: (country: string) =>
+    `Prices without VAT: your business owes it in ${country} (reverse charge).`,
+  businessAbroad: 'No VAT is charged: your business is outside the European Union.',
 
   checkout: 'Check out',
   email: 'E-mail',
   emailHint: 'The receipt and the link to your files go there.',
+  emailHintOfGift: 'The receipt goes there, and nothing of it to the one you give to.',
   country: 'Country',
   countryHint: 'Where you live: the tax in the price goes there.',
+  countryHintOfBusiness: 'Where the business is.',
   countryEmpty: 'Choose a country',
   countryMissing: 'Choose the country you live in.',
+
+  isBusiness: 'I buy for a business',
+  businessLabel: 'The business',
+  businessName: 'Company name',
+  businessAddress: 'Address',
+  vatNumber: 'VAT number',
+  vatNumberHint:
+    'With a number of another EU country the prices are without VAT, and the business owes it there. Only the form of the number is checked here.',
+  isGift: 'This is a gift for another address',
+  giftLabel: 'The gift',
+  giftWhat:
+    'Once it is paid we write to them, with a link of their own. The files are theirs alone; the receipt comes to you.',
+  giftEmail: 'Their e-mail',
+  giver: 'From',
+  giverHint: 'Your name as they know it.',
+  greeting: 'A line to go with it',
 
   kits: 'Kits',
   blockCode: 'Code',

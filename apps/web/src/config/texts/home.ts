@@ -8,7 +8,7 @@ export const homeTexts = {
   sortBy: 'Sort by',
   sorts: { newest: 'newest', name: 'name', price: 'price', size: 'size' },
   fits: 'Only what fits my printer',
-  tallest: 'tallest part',
+  longest: 'longest part',
   parts: (count: number) => (count === 1 ? 'part' : 'parts'),
   plates: (count: number) => (count === 1 ? 'plate' : 'plates'),
   filament: 'filament',

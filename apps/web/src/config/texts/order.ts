@@ -30,6 +30,8 @@ export const orderTexts = {
   paidLead: (email: string) => `We have written to ${email}.`,
   nothingCharged: 'Nothing was charged.',
   refundedLead: 'What you paid goes back the way it came. Your bank may take some days.',
+  lostLead: 'Your bank gave you back what you paid. The right to the files has ended.',
+  restingLead: 'The payment is in dispute. Downloads of this order rest until the bank has decided.',
 
   payUntil: (when: string) => `The payment page stays open until ${when}.`,
   notHeard: 'The payment service cannot be reached just now. This page goes on asking.',
@@ -43,6 +45,12 @@ export const orderTexts = {
   keep: 'Keep the order',
   giveUpFailed: 'The order was not given up',
   toBasket: 'Back to the basket',
+
+  gift: 'The gift',
+  giftLead: (email: string) => `We have written to you, and to ${email}.`,
+  giftNext: (email: string) => `The link to the files is in a mail to ${email}, with your line:`,
+  giftLost:
+    'Should the mail be lost, they can ask for a fresh link on the page it leads to. The files are theirs alone.',
 
   next: 'What now',
   toShelf: 'Go to my shelf',
@@ -58,6 +66,19 @@ export const orderTexts = {
   join: 'Join',
   seeKits: 'See the kits',
 
+  papers: 'Papers',
+  receiptPdf: (number: string) => `Receipt ${number}`,
+  creditNotePdf: (number: string) => `Credit note ${number}`,
+  pdf: 'PDF',
+  refunds: 'What went back',
+  wentBack: (when: string) => `on ${when}`,
+  byDispute: (when: string) => `by your bank’s decision, on ${when}`,
+  rightEnded: 'The right to the files has ended.',
+  rightSuspended: 'Downloads rest.',
+  refunded: 'Went back',
+  keptNext: 'What you keep stands on your shelf.',
+  keptByMail: 'The link in your mail opens what you keep.',
+
   lines: 'What was ordered',
   kit: 'Kit',
   price: 'Price',
@@ -65,6 +86,12 @@ export const orderTexts = {
   total: 'Total',
   subtotal: 'Subtotal',
   discountOf: (code: string) => `Discount, code ${code}`,
+  untaxed: {
+    consumer: 'No VAT is charged.',
+    'domestic-business': 'No VAT is charged.',
+    'reverse-charge': 'Without VAT: your business owes it in its own country (reverse charge).',
+    'business-abroad': 'No VAT is charged: your business is outside the European Union.',
+  } satisfies Record<BuyerOrder['taxTreatment'], string>,
   taxOf: (ratePercent: string, net: string) => `VAT ${ratePercent} % on ${net} net, included`,
 
   blockOrder: 'Order',

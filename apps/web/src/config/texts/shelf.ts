@@ -15,6 +15,8 @@ export const shelfTexts = {
   empty: 'No kits on your shelf yet',
   emptyDetail: 'What you buy stands here, with every later revision and what to reprint for it.',
   seeKits: 'See the kits',
+  resting: (kits: string) =>
+    `Downloads of ${kits} rest while the payment is in dispute. When the bank has decided for the workshop, they go on.`,
 
   hold: 'You hold',
   nothingYet: 'Nothing yet',
@@ -113,6 +115,7 @@ export const shelfKitTexts = {
     `Every part of ${label} is then written down as printed, in place of what you said before. The shelf says from there what to reprint.`,
   printedConfirm: (label: string) => `Yes, I hold ${label}`,
   printedFailed: 'What you hold was not changed',
+  tune: 'Tune what you printed',
   changeNotes: 'Change notes',
   licence: 'Licence',
   cautions: 'Cautions',
@@ -167,10 +170,13 @@ export const collectTexts = {
       title: 'A newer link has replaced this one',
       detail: 'Look for it in your mail, or have another mailed to the address of the order.',
     },
+    suspended: {
+      title: 'Downloads of this order rest',
+      detail: 'Its payment is in dispute. When the bank has decided for the workshop, they go on.',
+    },
     ended: {
       title: 'This order gives no files any more',
-      detail:
-        'It was refunded, or its payment is in dispute. Answer the mail of your order if you think this is wrong.',
+      detail: 'What was paid for it went back. Answer the mail of your order if you think this is wrong.',
     },
   } satisfies Record<Collection['state'], { title: string; detail: string }>,
 
@@ -192,6 +198,7 @@ export const collectTexts = {
     expired: 'expired',
     'used-up': 'used up',
     replaced: 'replaced',
+    suspended: 'resting',
     ended: 'ended',
   } satisfies Record<Collection['state'], string>,
   usesLeft: 'Downloads left',

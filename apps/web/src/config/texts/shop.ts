@@ -2,6 +2,7 @@ export const shopTexts = {
   skip: 'Skip to the page',
   kits: 'Kits',
   shelf: 'My shelf',
+  pledge: 'Pledge',
   workshop: 'Workshop',
   signIn: 'Sign in',
   account: 'Account',

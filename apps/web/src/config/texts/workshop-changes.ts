@@ -13,6 +13,7 @@ export const changesTexts = {
   drawing: (code: string, name: string) => `${code} ${name} from above, from the front and from the right`,
   drawingMarked: (code: string, name: string, where: string) =>
     `${code} ${name} from above, from the front and from the right. Marked is where it differs most: ${where}.`,
+  drawnIn: (sign: string) => `Drawn in the clearance ${sign}.`,
   dashed: (label: string) => `Dashed: ${label}.`,
   notMeasured: 'Drawn when it is measured.',
   others: {

@@ -67,6 +67,10 @@ export const couponFormTexts = {
   capHint: 'The first so many orders. Empty: nobody counts.',
   perBuyer: 'Per buyer',
   perBuyerHint: 'Empty: as often as one likes.',
+  minBasket: (currency: string) => `Smallest basket in ${currency}`,
+  minBasketHint: 'Before the discount. Empty: any basket.',
+  isForSupporters: 'For supporters only',
+  isForSupportersHint: 'Whoever is signed in must have a current pledge. It is not announced in the shop.',
   isAnnounced: 'Announce it on the kit’s page',
   isAnnouncedHint: 'The page then shows the code, the lowered price and how many places are left.',
   isActive: 'Active',
@@ -78,4 +82,54 @@ export const couponFormTexts = {
   facts: { held: 'Held', redeemed: 'Redeemed', left: 'Left', takenOff: 'Took off' },
   noCap: 'no limit',
   live: 'A place is held while somebody pays, and given back if they do not.',
+};
+
+const counts = (redeemed: number, held: number, givenBack: number) =>
+  [`${redeemed} redeemed`, held > 0 && `${held} held`, givenBack > 0 && `${givenBack} given back`]
+    .filter(Boolean)
+    .join(', ');
+
+export const couponUsesTexts = {
+  title: 'Uses',
+  none: 'Nobody has used this code yet. Each place taken will stand here by its day.',
+  redeemed: 'Redeemed',
+  held: 'Held',
+  givenBack: 'Given back',
+  takenOff: 'Took off',
+  steps: { day: 'Day', week: 'Week from', month: 'Month from' },
+  chart: {
+    day: 'Places taken, a bar for each day',
+    week: 'Places taken, a bar for each week',
+    month: 'Places taken, a bar for each month',
+  },
+  summary: (redeemed: number, held: number, givenBack: number) =>
+    `${counts(redeemed, held, givenBack)}, by the day the place was taken.`,
+  bar: {
+    day: (day: string, ...of: [number, number, number]) => `${day}: ${counts(...of)}`,
+    week: (day: string, ...of: [number, number, number]) => `Week from ${day}: ${counts(...of)}`,
+    month: (day: string, ...of: [number, number, number]) => `Month from ${day}: ${counts(...of)}`,
+  },
+  taken: (count: number) => `${count} taken`,
+  caption: 'Places by when they were taken',
+  orders: 'Orders with this code',
+  ordersCaption: 'Orders with this code',
+  search: 'Number, e-mail or receipt',
+  columns: {
+    number: 'Order',
+    placed: 'Placed',
+    buyer: 'Buyer',
+    kits: 'Kits',
+    place: 'Place',
+    discount: 'Took off',
+    total: 'Total',
+  },
+  places: {
+    open: 'held',
+    paid: 'redeemed',
+    refunded: 'redeemed, refunded since',
+    cancelled: 'given back',
+    expired: 'given back',
+  },
+  noOrders: 'No orders with this code',
+  noOrdersDetail: 'Every order that takes a place of it will stand here.',
 };

@@ -1,9 +1,15 @@
+import type { TaxTreatment } from '@windchest/contracts';
+
 export const ordersTexts = {
   title: 'Orders',
   caption: 'Orders',
   search: 'Number or e-mail',
   state: 'State',
   flaggedOnly: 'Only with a flag',
+  moneyBack: 'Money back',
+  anyMoney: 'with or without',
+  moneyBacks: { refunded: 'something went back', disputed: 'was in dispute' },
+  refunded: (amount: string) => `${amount} went back`,
   allStates: 'all states',
   columns: {
     number: 'Order',
@@ -22,16 +28,23 @@ export const ordersTexts = {
     'amount-differs': 'amount differs',
     'paid-after-end': 'paid after its end',
     disputed: 'disputed',
+    'dispute-lost': 'dispute lost',
     'refunded-outside': 'refunded outside',
+    'refund-failed': 'refund failed',
   } as Record<string, string>,
   flagDetails: {
     'location-unclear':
-      'No two pieces of evidence of where the buyer is agree. The declared country was taken for the tax; look at the order and decide.',
+      'No two pieces of evidence of where the buyer is agree. The declared country was taken for the tax. Settle it with a reason before the quarter is closed.',
     'amount-differs':
       'What was paid is not what was asked. Compare the order with the payment before handing anything over by hand.',
     'paid-after-end': 'It was paid after it had expired or was given up. It was fulfilled all the same.',
-    disputed: 'The buyer’s bank disputes the payment. Answer it at the payment service in time.',
-    'refunded-outside': 'Money was given back at the payment service, not here. The books need a look.',
+    disputed: 'The buyer’s bank questions or disputes the payment. Answer it at the payment service in time.',
+    'dispute-lost':
+      'The bank gave the money to the buyer. A credit note is written and the rights have ended.',
+    'refunded-outside':
+      'Money was given back at the payment service, not here. It was spread over the lines and a credit note is written. Decide which rights end.',
+    'refund-failed':
+      'Money that was to go back did not arrive. Give it back again; where a credit note is written already, pay the buyer another way.',
   } as Record<string, string>,
 };
 
@@ -56,6 +69,20 @@ export const workshopOrderTexts = {
   evidence: 'Buyer and evidence',
   email: 'E-mail',
   country: 'Country',
+  business: 'Business',
+  vatNumber: 'VAT number',
+  formOnly: (number: string) =>
+    `${number} (only its form was checked; ask the tax office’s own service before you rely on it)`,
+  treatment: 'Tax',
+  treatments: {
+    consumer: 'as a consumer, within the price',
+    'domestic-business': 'a business of our own country, within the price',
+    'reverse-charge': 'reverse charge: the buyer owes it',
+    'business-abroad': 'none: a business outside the European Union',
+  } satisfies Record<TaxTreatment, string>,
+  gift: 'Gift',
+  giftTo: (email: string, giver: string, greeting: string) => `for ${email}, from ${giver}: “${greeting}”`,
+  settleLocation: 'Settle the country',
   paymentSession: 'Payment page',
   paymentIntent: 'Payment',
   consent: 'Consent',
@@ -79,8 +106,19 @@ export const workshopOrderTexts = {
   resend: 'Mail a fresh link',
   resendAsk: (email: string) => `Mail ${email} a fresh link?`,
   resendWhat: 'The buyer gets a new download link by e-mail. Links mailed earlier stop working.',
+  resendGift: 'Whom the gift is for gets a new download link by e-mail. Links mailed earlier stop working.',
   resendConfirm: 'Mail the link',
   resendDone: 'The mail is on its way.',
   resendFailed: 'No link was mailed',
   onlyPaid: 'A link can be mailed once the order is paid.',
+  refunded: 'Went back',
+  receiptPdf: 'Open the receipt',
+  lookedAt: 'Take the flag off',
+  lookedAtOf: (flag: string) => `${flag}: take the flag off`,
+  lookedAtFailed: 'The flag is still there',
+  rights: {
+    active: 'may download',
+    suspended: 'downloads rest',
+    ended: 'right ended',
+  },
 };

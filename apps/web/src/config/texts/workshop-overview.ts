@@ -27,7 +27,6 @@ export const overviewTexts = {
   noSales: 'No sales in the last 30 days.',
   day: (day: string, orders: string, gross: string) => `${day}: ${orders}, ${gross}`,
   chart: 'Sales by day, as a bar for each day',
-  table: 'The same as a table',
   columns: { day: 'Day', orders: 'Orders', gross: 'Sales' },
   caption: 'Sales by day',
 };

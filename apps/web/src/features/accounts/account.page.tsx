@@ -14,6 +14,7 @@ import { PageTitle } from '../../ui/page-title.js';
 import { Band } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading } from '../../ui/text.js';
+import { PledgeSection } from '../supporters/pledge-section.js';
 import { AddressSection } from './address-section.js';
 import { useEnter } from './enter.js';
 import { NameSection } from './name-section.js';
@@ -66,6 +67,7 @@ export function AccountPage() {
         <>
           <OrdersSection />
           <PrintersSection />
+          <PledgeSection />
           <NameSection person={person} />
           <AddressSection person={person} />
           <PassphraseSection />

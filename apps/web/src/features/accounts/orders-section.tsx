@@ -1,3 +1,4 @@
+import { Box } from '@chakra-ui/react/box';
 import type { BuyerOrder } from '@windchest/contracts';
 import { useSearchParams } from 'react-router-dom';
 import { paths } from '../../config/paths.js';
@@ -9,13 +10,14 @@ import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
-import { TextLink } from '../../ui/link.js';
+import { TextAnchor, TextLink } from '../../ui/link.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import type { SignName } from '../../ui/sign.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Pager } from '../../ui/table/pager.js';
 import { Unbroken } from '../../ui/unbroken.js';
+import { papersOf } from '../orders/order-papers.js';
 import { AccountSection } from './account-section.js';
 
 const signs: Record<BuyerOrder['state'], SignName> = {
@@ -51,10 +53,35 @@ const columns: readonly Column<BuyerOrder>[] = [
     key: 'state',
     header: accountTexts.state,
     cell: (order) => (
-      <StatusMark state={signs[order.state]} whiteSpace={{ md: 'nowrap' }}>
-        {orderStateTexts[order.state]}
-      </StatusMark>
+      <Box>
+        <StatusMark state={signs[order.state]} whiteSpace={{ md: 'nowrap' }}>
+          {orderStateTexts[order.state]}
+        </StatusMark>
+        {order.refunded.minor > 0 && order.state === 'paid' && (
+          <Box fontSize="sm" color="ink.soft">
+            {accountTexts.wentBack(price(order.refunded))}
+          </Box>
+        )}
+      </Box>
     ),
+  },
+  {
+    key: 'papers',
+    header: accountTexts.papers,
+    cell: (order) => {
+      const papers = papersOf({ order, orderKey: undefined });
+      return (
+        papers.length > 0 && (
+          <Box display="grid" justifyItems="start">
+            {papers.map((paper) => (
+              <TextAnchor key={paper.key} href={paper.href}>
+                {paper.label}
+              </TextAnchor>
+            ))}
+          </Box>
+        )
+      );
+    },
   },
   {
     key: 'total',

@@ -3,6 +3,7 @@ import type { Quote } from '@windchest/contracts';
 import { basketTexts } from '../../config/texts/basket.js';
 import { priceTexts } from '../../config/texts/shared.js';
 import { price } from '../../lib/format.js';
+import { countryName } from '../../lib/workshop-format.js';
 import { Text } from '../../ui/text.js';
 
 interface SumProps {
@@ -30,6 +31,17 @@ const Sum = ({ name, value, isMain }: SumProps) => (
   </Box>
 );
 
+/** What of the total is tax, and why there is none where there is none. */
+function taxWords({ tax }: Quote): string {
+  if (!tax) return basketTexts.taxNote;
+  const country = countryName(tax.country);
+  if (tax.treatment === 'reverse-charge') return basketTexts.reverseCharge(country);
+  if (tax.treatment === 'business-abroad') return basketTexts.businessAbroad;
+  return tax.ratePercent === null || tax.tax.minor === 0
+    ? basketTexts.noTax(country)
+    : basketTexts.taxWithin(tax.ratePercent, price(tax.tax), country);
+}
+
 /** What the basket comes to; faint while a new price is on its way. */
 export function BasketSums({ quote, isCurrent }: { quote: Quote; isCurrent: boolean }) {
   const { subtotal, discount, total, coupon } = quote;
@@ -55,7 +67,7 @@ export function BasketSums({ quote, isCurrent }: { quote: Quote; isCurrent: bool
         <Sum name={basketTexts.total} value={total.minor === 0 ? priceTexts.free : price(total)} isMain />
       </dl>
       <Text look="small" isSoft textAlign="end">
-        {basketTexts.taxNote}
+        {taxWords(quote)}
       </Text>
     </Box>
   );

@@ -17,6 +17,7 @@ import { BasketBlock } from './basket-block.js';
 import { BasketLines } from './basket-lines.js';
 import { BasketSums } from './basket-sums.js';
 import { CouponField } from './coupon-field.js';
+import type { BasketWishes } from './checkout-form.js';
 import { type QuotedBasket, useQuote } from './use-quote.js';
 
 const formId = 'checkout';
@@ -60,7 +61,13 @@ function UnpricedBasket({ fault, requote }: Pick<QuotedBasket, 'fault' | 'requot
   );
 }
 
-function FilledBasket({ basket }: { basket: QuotedBasket & { quote: Quote } }) {
+interface FilledBasketProps {
+  basket: QuotedBasket & { quote: Quote };
+  wishes: BasketWishes;
+  onWishes: (wishes: BasketWishes) => void;
+}
+
+function FilledBasket({ basket, wishes, onWishes }: FilledBasketProps) {
   const { items, quote, code, fault, isCurrent, requote } = basket;
   const { isSignedIn, isLoading } = useSession();
   const owned = useEndpoint('GET /shelf/owned', isSignedIn ? {} : null);
@@ -81,7 +88,12 @@ function FilledBasket({ basket }: { basket: QuotedBasket & { quote: Quote } }) {
               <Fault level={2} what={basketTexts.failed} fault={fault} onAgain={requote} />
             </Box>
           )}
-          <BasketLines items={items} quote={quote} ownedSlugs={owned.data ?? []} />
+          <BasketLines
+            items={items}
+            quote={quote}
+            // Of somebody else's shelf nothing is told, and one's own says nothing about a gift.
+            ownedSlugs={wishes.isGift ? [] : (owned.data ?? [])}
+          />
           <Box
             display="grid"
             gridTemplateColumns={{ base: 'minmax(0, 1fr)', xl: 'minmax(0, 1fr) 20rem' }}
@@ -109,6 +121,7 @@ function FilledBasket({ basket }: { basket: QuotedBasket & { quote: Quote } }) {
                   quote={quote}
                   isCurrent={isCurrent}
                   requote={requote}
+                  onWishes={onWishes}
                   onState={onState}
                 />
               </Suspense>
@@ -132,7 +145,8 @@ function FilledBasket({ basket }: { basket: QuotedBasket & { quote: Quote } }) {
 
 /** The basket and the way to pay for it. */
 export function BasketPage() {
-  const basket = useQuote();
+  const [wishes, setWishes] = useState<BasketWishes>({ country: '', vatNumber: null, isGift: false });
+  const basket = useQuote(wishes);
   const { quote } = basket;
   return (
     <>
@@ -140,7 +154,7 @@ export function BasketPage() {
       {basket.items.length === 0 ? (
         <EmptyBasket />
       ) : quote ? (
-        <FilledBasket basket={{ ...basket, quote }} />
+        <FilledBasket basket={{ ...basket, quote }} wishes={wishes} onWishes={setWishes} />
       ) : (
         <UnpricedBasket fault={basket.fault} requote={basket.requote} />
       )}

@@ -41,6 +41,8 @@ describe('the attempt an order is sent with', () => {
       { couponCode: undefined },
       { email: 'bo@saltmarsh.example' },
       { country: 'FR' },
+      { business: { name: 'Reed Works', address: 'Deichweg 3', vatNumber: '' } },
+      { gift: { email: 'wren@mail.example', giver: 'Ada', greeting: 'For you.' } },
     ]) {
       const storage = memory();
       const first = attemptFor(ordered, storage);

@@ -4,14 +4,23 @@ export interface WhatIsOrdered {
   couponCode: string | undefined;
   email: string;
   country: string;
+  business?: { name: string; address: string; vatNumber: string } | undefined;
+  gift?: { email: string; giver: string; greeting: string } | undefined;
 }
 
 type Keeping = Pick<Storage, 'getItem' | 'setItem' | 'removeItem'>;
 
 const key = 'windchest.checkout-attempt';
 
-const signatureOf = ({ licenceIds, couponCode, email, country }: WhatIsOrdered): string =>
-  JSON.stringify([[...licenceIds].sort(), couponCode ?? '', email.trim().toLowerCase(), country]);
+const signatureOf = ({ licenceIds, couponCode, email, country, business, gift }: WhatIsOrdered): string =>
+  JSON.stringify([
+    [...licenceIds].sort(),
+    couponCode ?? '',
+    email.trim().toLowerCase(),
+    country,
+    business ? [business.name, business.address, business.vatNumber] : null,
+    gift ? [gift.email, gift.giver, gift.greeting] : null,
+  ]);
 
 /** A version 4 UUID (RFC 9562, 5.4). `crypto.randomUUID` is missing where the shop is served without TLS. */
 export function newAttempt(): string {

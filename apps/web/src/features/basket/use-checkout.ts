@@ -15,6 +15,8 @@ const send = (ordered: WhatIsOrdered): Promise<Opened> =>
       couponCode: ordered.couponCode,
       email: ordered.email,
       country: ordered.country,
+      business: ordered.business,
+      gift: ordered.gift,
       hasConsented: true,
       attempt: attemptFor(ordered),
     },

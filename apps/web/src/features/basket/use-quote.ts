@@ -30,13 +30,26 @@ export interface QuotedBasket {
   requote: () => void;
 }
 
+/** As much of the buyer as the price depends on. */
+export interface TaxedBuyer {
+  /** Empty until it is chosen. */
+  country: string;
+  /** Null for who does not buy for a business. */
+  vatNumber: string | null;
+}
+
 /** The basket with its prices. While a new price is on its way the last one stays in sight. */
-export function useQuote(): QuotedBasket {
+export function useQuote({ country, vatNumber }: TaxedBuyer): QuotedBasket {
   const { items } = useBasket();
   const code = useStoredValue(couponCode);
   const now = useMemo(
-    () => ({ items: items.map(({ licenceId }) => ({ licenceId })), couponCode: code || undefined }),
-    [items, code],
+    () => ({
+      items: items.map(({ licenceId }) => ({ licenceId })),
+      couponCode: code || undefined,
+      country: country || undefined,
+      business: vatNumber === null ? undefined : { vatNumber },
+    }),
+    [items, code, country, vatNumber],
   );
   const settled = useSettled(now);
   const body = items.length > 0 ? settled : null;

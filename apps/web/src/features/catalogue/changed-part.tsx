@@ -2,6 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import type { Part } from '@windchest/contracts';
 import { useEffect, useRef } from 'react';
 import { useLocation } from 'react-router-dom';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { changesTexts as texts } from '../../config/texts/workshop-changes.js';
 import { partsTexts } from '../../config/texts/workshop-parts.js';
 import { number } from '../../lib/format.js';
@@ -11,6 +12,7 @@ import { StatusMark } from '../../ui/status-mark.js';
 import { Heading, Text } from '../../ui/text.js';
 import { ChangedSizes } from './changed-sizes.js';
 import { MarkField } from './mark-field.js';
+import { partIn } from './part-meshes.js';
 import type { ComparisonRow, PartRow } from './part-rows.js';
 
 const sizeText = (mm: number) => number(mm, 2);
@@ -40,20 +42,26 @@ interface DrawingProps {
 
 function Drawing({ row: { part, code, name, comparison }, earlier, earlierLabel }: DrawingProps) {
   const deviation = comparison?.deviation;
-  if (!part?.drawings || !deviation) return <Text isSoft>{texts.notMeasured}</Text>;
-  const { placeMm, largestMm, where, boxMm, earlierBoxMm } = deviation;
+  const now = partIn(part, deviation?.clearance)?.drawings;
+  const before = partIn(earlier, deviation?.clearance)?.drawings;
+  if (!now || !deviation) return <Text isSoft>{texts.notMeasured}</Text>;
+  const { placeMm, largestMm, where, boxMm, earlierBoxMm, clearance } = deviation;
+  const caption = [
+    clearance && texts.drawnIn(clearanceTexts.signs[clearance]),
+    before && earlierLabel && texts.dashed(earlierLabel),
+  ].filter(Boolean);
   return (
     <>
       <ThreeViews
-        shape={{ drawings: part.drawings, boxMm }}
-        earlier={earlier?.drawings ? { drawings: earlier.drawings, boxMm: earlierBoxMm } : undefined}
+        shape={{ drawings: now, boxMm }}
+        earlier={before ? { drawings: before, boxMm: earlierBoxMm } : undefined}
         place={placeMm && largestMm !== null ? { atMm: placeMm, label: number(largestMm, 2) } : undefined}
         label={placeMm ? texts.drawingMarked(code, name, where) : texts.drawing(code, name)}
         sizeText={sizeText}
       />
-      {earlier?.drawings && earlierLabel && (
+      {caption.length > 0 && (
         <Text look="small" isSoft marginTop="1.5">
-          {texts.dashed(earlierLabel)}
+          {caption.join(' ')}
         </Text>
       )}
     </>
@@ -76,6 +84,7 @@ export function ChangedPart({ row, earlier, earlierLabel, revisionId, isWritable
   }, [hash, id]);
   const { comparison, part } = row;
   if (!comparison) return null;
+  const clearance = comparison.deviation?.clearance;
   return (
     <Box ref={ref} id={id} paddingBlock="5" borderTopWidth="1px" borderColor="hairline" scrollMarginTop="4">
       <Heading level={3} look="body" fontWeight="bold">
@@ -95,16 +104,13 @@ export function ChangedPart({ row, earlier, earlierLabel, revisionId, isWritable
           <Drawing row={row} earlier={earlier} earlierLabel={earlierLabel} />
         </Box>
         <Box minWidth="0">
-          {comparison.deviation ? (
-            <Where deviation={comparison.deviation} />
-          ) : (
-            <Text>{comparison.whatDiffers}</Text>
-          )}
+          {comparison.deviation && <Where deviation={comparison.deviation} />}
+          {(!comparison.deviation || comparison.variants.length > 0) && <Text>{comparison.whatDiffers}</Text>}
           <ChangedSizes
             code={row.code}
             row={comparison}
-            now={part?.file?.measurement ?? null}
-            before={earlier?.file?.measurement ?? null}
+            now={partIn(part, clearance)?.file?.measurement ?? null}
+            before={partIn(earlier, clearance)?.file?.measurement ?? null}
             beforeLabel={earlierLabel}
           />
           <Box marginTop="4">

@@ -23,6 +23,8 @@ const part = (changes: Partial<Part> = {}): Part => ({
   isGauge: false,
   file: null,
   drawings: null,
+  previewBytes: null,
+  previewSha256: null,
   variants: [],
   ...changes,
 });

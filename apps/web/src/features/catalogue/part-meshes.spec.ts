@@ -1,5 +1,5 @@
 import type { Part, RevisionFile } from '@windchest/contracts';
-import { filesOfParts, meshesOf, meshesToTake, variantFileName } from './part-meshes.js';
+import { filesOfParts, meshesOf, meshesToTake, partIn, variantFileName } from './part-meshes.js';
 
 const file = (id: string) => ({ id, fileName: `${id}.stl` }) as RevisionFile;
 const part = (code: string, changes: Partial<Part> = {}) =>
@@ -8,8 +8,8 @@ const part = (code: string, changes: Partial<Part> = {}) =>
 describe('the meshes of a part', () => {
   const tongue = part('J-01', {
     variants: [
-      { clearance: 'plus', file: file('loose') },
-      { clearance: 'minus', file: file('tight') },
+      { clearance: 'plus', file: file('loose'), drawings: null },
+      { clearance: 'minus', file: file('tight'), drawings: null },
     ],
   });
 
@@ -20,6 +20,13 @@ describe('the meshes of a part', () => {
       ['plus', 'loose'],
     ]);
     expect(filesOfParts([tongue, part('P-01', { file: null })])).toHaveLength(3);
+  });
+
+  it('are that of the clearance asked for, or its own', () => {
+    expect(partIn(tongue, 'plus')?.file?.id).toBe('loose');
+    expect(partIn(tongue, 'zero')?.file?.id).toBe('J-01');
+    expect(partIn(part('P-01'), 'plus')?.file?.id).toBe('P-01');
+    expect(partIn(null, 'plus')).toBeUndefined();
   });
 
   it('can be taken from other parts that have one mesh', () => {

@@ -12,6 +12,13 @@ export const meshesOf = ({ file, variants }: Part): PartMesh[] => [
   ...variants.filter((one) => one.clearance === 'plus'),
 ];
 
+/** File and drawings of a part in one clearance; its own where it has no such, or none is told. */
+export const partIn = (
+  part: Part | null | undefined,
+  clearance: Clearance | null | undefined,
+): Pick<Part, 'file' | 'drawings'> | undefined =>
+  part?.variants.find((one) => one.clearance === clearance) ?? part ?? undefined;
+
 export const filesOfParts = (parts: readonly Part[]): RevisionFile[] =>
   parts.flatMap((part) => meshesOf(part).map((mesh) => mesh.file));
 

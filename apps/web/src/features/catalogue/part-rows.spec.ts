@@ -12,6 +12,8 @@ const part = (code: string): Part => ({
   isGauge: false,
   file: null,
   drawings: null,
+  previewBytes: null,
+  previewSha256: null,
   variants: [],
 });
 const row = (code: string, difference: Comparison['rows'][number]['difference']) => ({

@@ -8,6 +8,10 @@ import { TextLink } from '../../ui/link.js';
 import { StatusMark } from '../../ui/status-mark.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import type { SignName } from '../../ui/sign.js';
+import type { PreviewedPart } from '../bench/part-preview/part-turner.js';
+import { previewOfPart } from '../bench/part-preview/previewed-part.js';
+import { TurnButton } from '../bench/part-preview/turn-button.js';
+import { useTurning } from '../bench/part-preview/use-turning.js';
 import { MarkField } from './mark-field.js';
 import { MeasuredMeshes } from './measured-meshes.js';
 import type { Difference, PartRow } from './part-rows.js';
@@ -28,9 +32,16 @@ const drawingOf = ({ part }: PartRow) => {
   return front.widthMm * front.heightMm >= top.widthMm * top.heightMm ? front : top;
 };
 
-const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => void) | undefined }) => {
+interface PartCellProps extends Pick<PartsTableProps, 'onEdit'> {
+  revisionId: string;
+  row: PartRow;
+  onTurn: (part: PreviewedPart) => void;
+}
+
+const PartCell = ({ row, revisionId, onEdit, onTurn }: PartCellProps) => {
   const drawing = drawingOf(row);
   const { part } = row;
+  const preview = part && previewOfPart(revisionId, part, drawing);
   return (
     <Box id={`part-${row.code}`} display="flex" gap="3.5" alignItems="center" scrollMarginTop="4">
       <Box width="2.75rem" flex="none" display="grid" placeItems="center">
@@ -46,18 +57,21 @@ const PartCell = ({ row, onEdit }: { row: PartRow; onEdit: ((partId: string) => 
             {partsTexts.gauge}
           </Box>
         )}
-        {onEdit && part && (
-          <Button
-            look="plain"
-            size="sm"
-            minHeight="1.5rem"
-            paddingBlock="0"
-            onClick={() => onEdit(part.id)}
-            aria-label={partsTexts.editOf(row.code)}
-          >
-            {partsTexts.edit}
-          </Button>
-        )}
+        <Box display="flex" flexWrap="wrap" columnGap="4">
+          {onEdit && part && (
+            <Button
+              look="plain"
+              size="sm"
+              minHeight="1.5rem"
+              paddingBlock="0"
+              onClick={() => onEdit(part.id)}
+              aria-label={partsTexts.editOf(row.code)}
+            >
+              {partsTexts.edit}
+            </Button>
+          )}
+          {preview && <TurnButton code={row.code} onTurn={() => onTurn(preview)} />}
+        </Box>
       </Box>
     </Box>
   );
@@ -115,6 +129,7 @@ export interface PartsTableProps {
 
 /** Every part with its drawing, what it measures, what changed, and what buyers should do about it. */
 export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }: PartsTableProps) {
+  const [turning, turn] = useTurning();
   const { withId } = useComparedWith();
   const changes = paths.workshop.changes.to(
     { kitId: revision.kit.id, revisionId: revision.id },
@@ -126,7 +141,7 @@ export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }:
       header: partsTexts.columns.part,
       width: '21%',
       isHeading: true,
-      cell: (row) => <PartCell row={row} onEdit={onEdit} />,
+      cell: (row) => <PartCell row={row} revisionId={revision.id} onEdit={onEdit} onTurn={turn} />,
     },
     {
       key: 'quantity',
@@ -161,6 +176,9 @@ export function PartsTable({ rows, comparedWith, revision, onEdit, isMarkable }:
     },
   ];
   return (
-    <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+    <>
+      <HairlineTable caption={partsTexts.caption} columns={columns} rows={rows} rowKey={(row) => row.code} />
+      {turning}
+    </>
   );
 }

@@ -5,6 +5,7 @@ import { type ReactNode, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import { savingTexts } from '../../config/texts/workshop-forms.js';
 import { couponFormTexts as texts } from '../../config/texts/workshop-coupons.js';
+import { readAmount } from '../../lib/amount-text.js';
 import type { ApiFault } from '../../lib/api-fault.js';
 import { formResolver } from '../../lib/form-resolver.js';
 import { showFieldFaults } from '../../lib/form-faults.js';
@@ -44,6 +45,18 @@ const Pair = ({ children }: { children: ReactNode }) => (
   </Box>
 );
 
+/** `off` is several fields; its sentence stands above the button. */
+const fieldNames = [
+  'code',
+  'label',
+  'cap',
+  'perBuyer',
+  'minBasketMinor',
+  'endsAt',
+  'startsAt',
+  'isAnnounced',
+] as const;
+
 export interface CouponFieldsProps {
   /** Null makes a new one. */
   coupon: Coupon | null;
@@ -65,14 +78,15 @@ export function CouponFields({ coupon, currency, isWritable, save, fault }: Coup
   const { register, handleSubmit, setError, formState } = form;
   const { errors, isSubmitting, isDirty } = formState;
   const [isSaved, setIsSaved] = useState(false);
+  const minBasketFault = (sentence: string | undefined) => {
+    const read = readAmount(form.getValues('minBasketMinor'), currency);
+    return 'fault' in read ? read.fault : sentence;
+  };
   const submit = handleSubmit(async (body) => {
     const outcome = await save(body);
     setIsSaved(outcome.isDone);
     if (outcome.isDone) form.reset(couponForm(outcome.data, currency));
-    else
-      setIsFaultBesideField(
-        showFieldFaults(outcome.fault, ['code', 'label', 'cap', 'perBuyer', 'endsAt', 'startsAt'], setError),
-      );
+    else setIsFaultBesideField(showFieldFaults(outcome.fault, fieldNames, setError));
   });
   return (
     <Form onSubmit={submit} gap="6">
@@ -123,7 +137,26 @@ export function CouponFields({ coupon, currency, isWritable, save, fault }: Coup
             {...register('perBuyer', { valueAsNumber: true })}
           />
         </Pair>
-        <Checkbox label={texts.isAnnounced} hint={texts.isAnnouncedHint} {...register('isAnnounced')} />
+        <Pair>
+          <TextField
+            label={texts.minBasket(currency)}
+            hint={texts.minBasketHint}
+            inputMode="decimal"
+            error={errors.minBasketMinor && minBasketFault(errors.minBasketMinor.message)}
+            {...register('minBasketMinor')}
+          />
+        </Pair>
+        <Checkbox
+          label={texts.isForSupporters}
+          hint={texts.isForSupportersHint}
+          {...register('isForSupporters')}
+        />
+        <Checkbox
+          label={texts.isAnnounced}
+          hint={texts.isAnnouncedHint}
+          error={errors.isAnnounced}
+          {...register('isAnnounced')}
+        />
         <Checkbox label={texts.isActive} hint={texts.isActiveHint} {...register('isActive')} />
       </Group>
       {fault && !isFaultBesideField && <Fault what={texts.failed} fault={fault} />}

@@ -13,6 +13,8 @@ const coupon: Coupon = {
   endsAt: null,
   cap: 150,
   perBuyer: 1,
+  isForSupporters: false,
+  minBasket: { minor: 3000, currency: 'EUR' },
   isAnnounced: true,
   isActive: true,
   held: 2,
@@ -33,9 +35,19 @@ describe('the form of a coupon', () => {
       endsAt: null,
       cap: 150,
       perBuyer: 1,
+      isForSupporters: false,
+      minBasketMinor: 3000,
       isAnnounced: true,
       isActive: true,
     });
+  });
+
+  it('takes an empty smallest basket as none and refuses what is no amount', () => {
+    const bodyWith = (minBasketMinor: string) =>
+      couponBody.safeParse(couponBodyOf('EUR')({ ...couponForm(coupon, 'EUR'), minBasketMinor }));
+    expect(bodyWith(' ').data?.minBasketMinor).toBeNull();
+    expect(bodyWith('12.5').data?.minBasketMinor).toBe(1250);
+    expect(bodyWith('12,50').error?.issues[0]?.path).toEqual(['minBasketMinor']);
   });
 
   it('keeps a third a third, which no percentage is', () => {

@@ -1,4 +1,5 @@
 import type { Coupon } from '@windchest/contracts';
+import { amountText, readAmount } from '../../lib/amount-text.js';
 import { fromLocalField, toLocalField } from './local-moment.js';
 import { offBody, type OffForm, offForm } from './off-form.js';
 
@@ -11,6 +12,9 @@ export interface CouponForm {
   endsAt: string;
   cap: number;
   perBuyer: number;
+  /** As it is typed: `30.00`; empty for any basket. */
+  minBasketMinor: string;
+  isForSupporters: boolean;
   isAnnounced: boolean;
   isActive: boolean;
 }
@@ -24,9 +28,17 @@ export const couponForm = (coupon: Coupon | null, currency: string): CouponForm 
   endsAt: toLocalField(coupon?.endsAt ?? null),
   cap: coupon?.cap ?? NaN,
   perBuyer: coupon?.perBuyer ?? NaN,
+  minBasketMinor: coupon?.minBasket ? amountText(coupon.minBasket) : '',
+  isForSupporters: coupon?.isForSupporters ?? false,
   isAnnounced: coupon?.isAnnounced ?? false,
   isActive: coupon?.isActive ?? true,
 });
+
+const amountOrNull = (text: string, currency: string): number | null => {
+  if (text.trim() === '') return null;
+  const read = readAmount(text, currency);
+  return 'minor' in read ? read.minor : NaN;
+};
 
 const orNull = (value: number) => (Number.isNaN(value) ? null : value);
 
@@ -39,4 +51,5 @@ export const couponBodyOf =
     endsAt: fromLocalField(form.endsAt),
     cap: orNull(form.cap),
     perBuyer: orNull(form.perBuyer),
+    minBasketMinor: amountOrNull(form.minBasketMinor, currency),
   });

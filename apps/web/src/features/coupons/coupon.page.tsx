@@ -17,6 +17,8 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { TitleBlock } from '../../ui/title-block.js';
 import { CouponFields } from './coupon-fields.js';
+import { CouponOrders } from './coupon-orders.js';
+import { CouponUses } from './coupon-uses.js';
 import { offWords, standingOf } from './coupon-words.js';
 
 const Numbers = ({ coupon }: { coupon: Coupon }) => (
@@ -103,6 +105,12 @@ export function CouponPage() {
         }
         block={<Numbers coupon={coupon} />}
       />
+      <Band>
+        <Box display="grid" gap="12">
+          <CouponUses coupon={coupon} />
+          <CouponOrders couponId={coupon.id} />
+        </Box>
+      </Band>
     </>
   );
 }

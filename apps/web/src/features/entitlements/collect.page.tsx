@@ -31,7 +31,7 @@ function Files({ token, collection }: { token: string; collection: Collection })
           <Text look="lead" marginTop="2" marginBottom="5">
             {isOpen ? collectTexts.lead(kits.length) : words.detail}
           </Text>
-          {!isOpen && state !== 'ended' && (
+          {!isOpen && state !== 'ended' && state !== 'suspended' && (
             <Box marginBottom="7">
               <FreshLink token={token} isMain />
             </Box>

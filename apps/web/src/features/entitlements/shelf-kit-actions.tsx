@@ -79,6 +79,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
         );
       })}
       <RowAnchor href={`#${sectionIds.build}`}>{reprintTexts.build}</RowAnchor>
+      {kit.rank.length > 0 && <RowLink to={paths.tuner.to({ slug: kit.slug })}>{shelfKitTexts.tune}</RowLink>}
       <RowAnchor href={`#${sectionIds.changeNotes}`}>{shelfKitTexts.changeNotes}</RowAnchor>
       <RowAnchor href={`#${sectionIds.licence}`}>{shelfKitTexts.licence}</RowAnchor>
       {kit.cautions && <RowAnchor href={`#${sectionIds.cautions}`}>{shelfKitTexts.cautions}</RowAnchor>}

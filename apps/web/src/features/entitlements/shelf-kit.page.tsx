@@ -1,24 +1,19 @@
 import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
 import { useState } from 'react';
-import { Navigate, useParams } from 'react-router-dom';
-import { paths, signInThenBack } from '../../config/paths.js';
+import { paths } from '../../config/paths.js';
 import { shelfKitTexts, sourceTexts } from '../../config/texts/shelf.js';
 import { date } from '../../lib/format.js';
-import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
-import { useEndpoint } from '../../lib/use-endpoint.js';
-import { LinkButton } from '../../ui/button.js';
-import { Fault } from '../../ui/fault.js';
 import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
-import { Band, SplitSheet } from '../../ui/sheet.js';
-import { SkeletonLines } from '../../ui/skeleton-lines.js';
+import { SplitSheet } from '../../ui/sheet.js';
 import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { TitleBlock } from '../../ui/title-block.js';
 import { PrintedDialog } from './printed-dialog.js';
 import { ReprintSection } from './reprint-section.js';
 import { ShelfKitActions } from './shelf-kit-actions.js';
+import { ShelfKitAnswer } from './shelf-kit-answer.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
 import { useShelfDownload } from './use-download.js';
@@ -91,47 +86,16 @@ function Kit({ kit }: { kit: ShelfKit }) {
 }
 
 /** One kit on the shelf: the revision held, the newest one, and what to reprint between them. */
-export function ShelfKitPage() {
-  const { slug = '' } = useParams();
-  const state = useSignInState();
-  const { data, fault, mutate } = useEndpoint(
-    'GET /shelf/:slug',
-    state === 'signed-in' ? { params: { slug } } : null,
-    { refreshInterval: (kit) => (hasRunningDownload(kit) ? 4000 : 0) },
-  );
-  useEndedSession(fault);
-  if (state === 'signed-out') return <Navigate to={signInThenBack(paths.shelfKit.to({ slug }))} replace />;
-  if (data)
-    return (
+export const ShelfKitPage = () => (
+  <ShelfKitAnswer
+    address={(slug) => paths.shelfKit.to({ slug })}
+    asking={{ refreshInterval: (kit) => (hasRunningDownload(kit) ? 4000 : 0) }}
+  >
+    {(kit) => (
       <>
-        <PageTitle title={data.name} />
-        <Kit kit={data} />
+        <PageTitle title={kit.name} />
+        <Kit kit={kit} />
       </>
-    );
-  if (fault?.code === 'not-found')
-    return (
-      <Band>
-        <PageTitle title={shelfKitTexts.notYours} />
-        <Heading level={1}>{shelfKitTexts.notYours}</Heading>
-        <Text look="lead" marginTop="2" marginBottom="6">
-          {shelfKitTexts.notYoursDetail}
-        </Text>
-        <LinkButton to={paths.shelf.to()}>{shelfKitTexts.toShelf}</LinkButton>
-      </Band>
-    );
-  if (!fault)
-    return (
-      <Band>
-        <SkeletonLines lines={5} />
-      </Band>
-    );
-  return (
-    <Band>
-      <PageTitle title={shelfKitTexts.failed} />
-      <Heading level={1} marginBottom="6">
-        {shelfKitTexts.failed}
-      </Heading>
-      <Fault level={2} fault={fault} onAgain={() => void mutate()} />
-    </Band>
-  );
-}
+    )}
+  </ShelfKitAnswer>
+);

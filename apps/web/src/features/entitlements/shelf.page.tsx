@@ -7,6 +7,7 @@ import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
 import { EmptyState } from '../../ui/empty-state.js';
 import { Fault } from '../../ui/fault.js';
+import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { Band, SplitSheet } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
@@ -43,6 +44,12 @@ function Kits() {
   if (fault && !data)
     return <Fault level={2} what={shelfTexts.failed} fault={fault} onAgain={() => void mutate()} />;
   if (!data) return <SkeletonLines lines={5} />;
+  const resting = data.resting.length > 0 && (
+    <Box marginBottom="6">
+      <Notice tone="warn">{shelfTexts.resting(data.resting.join(', '))}</Notice>
+    </Box>
+  );
+  if (data.items.length === 0 && resting) return resting;
   if (data.items.length === 0)
     return (
       <EmptyState
@@ -54,6 +61,7 @@ function Kits() {
     );
   return (
     <>
+      {resting}
       <Box as="ul" listStyle="none" aria-label={shelfTexts.title} borderTopWidth="1px" borderColor="hairline">
         {data.items.map((item) => (
           <ShelfRow key={item.slug} item={item} />

@@ -8,7 +8,21 @@ import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 type Line = WorkshopOrder['lines'][number];
 
 const columns: Column<Line>[] = [
-  { key: 'kit', header: texts.lineColumns.kit, isHeading: true, cell: (line) => line.kitName },
+  {
+    key: 'kit',
+    header: texts.lineColumns.kit,
+    isHeading: true,
+    cell: (line) => (
+      <Box>
+        {line.kitName}
+        {line.right && line.right !== 'active' && (
+          <Box fontSize="sm" color="ink.soft">
+            {texts.rights[line.right]}
+          </Box>
+        )}
+      </Box>
+    ),
+  },
   { key: 'licence', header: texts.lineColumns.licence, cell: (line) => line.licenceName },
   { key: 'revision', header: texts.lineColumns.revision, cell: (line) => line.revision },
   { key: 'price', header: texts.lineColumns.price, isNumeric: true, cell: (line) => price(line.price) },
@@ -60,6 +74,9 @@ export const OrderLines = ({ order }: { order: WorkshopOrder }) => (
       {order.tax.map((one) => (
         <Sum key={one.ratePercent} name={texts.tax(one.ratePercent)} value={price(one.tax)} />
       ))}
+      {order.refunded.minor > 0 && (
+        <Sum name={texts.refunded} value={price({ ...order.refunded, minor: -order.refunded.minor })} />
+      )}
     </Box>
   </>
 );

@@ -5,8 +5,11 @@ import { useParams } from 'react-router-dom';
 import { paths } from '../../config/paths.js';
 import { orderStateTexts, orderTexts } from '../../config/texts/order.js';
 import { ordersTexts, workshopOrderTexts as texts } from '../../config/texts/workshop-orders.js';
-import { dateTime, number, price } from '../../lib/format.js';
+import { refundTexts } from '../../config/texts/workshop-refunds.js';
+import { apiAddress } from '../../lib/api-address.js';
+import { dateTime, price } from '../../lib/format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
+import { AnchorButton } from '../../ui/button.js';
 import { Fault } from '../../ui/fault.js';
 import { TextLink } from '../../ui/link.js';
 import { PageTitle } from '../../ui/page-title.js';
@@ -15,11 +18,19 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Heading, Text } from '../../ui/text.js';
 import { TitleBlock } from '../../ui/title-block.js';
-import { OrderFlagLines } from './order-flags.js';
+import { DisputesSection } from './disputes-section.js';
+import { GiveMoneyBack } from './give-money-back.js';
+import { OrderEvidence } from './order-evidence.js';
+import { OrderFlagLines } from './order-flag-lines.js';
+import { OrderHistory } from './order-history.js';
 import { OrderLines } from './order-lines.js';
+import { RefundsSection } from './refunds-section.js';
 import { ResendLink } from './resend-link.js';
 
 type Mail = WorkshopOrder['mails'][number];
+
+/** While a refund waits for the payment service. */
+const askedEveryMs = 1500;
 
 const mailColumns: Column<Mail>[] = [
   { key: 'subject', header: texts.mailColumns.subject, isHeading: true, cell: (mail) => mail.subject },
@@ -44,71 +55,6 @@ const Section = ({ title, children }: { title: string; children: ReactNode }) =>
   </Box>
 );
 
-const Evidence = ({ order }: { order: WorkshopOrder }) => {
-  const facts: [string, ReactNode][] = [
-    [texts.email, order.email],
-    [texts.country, order.country],
-    [texts.paymentSession, order.paymentSessionId ?? texts.none],
-    [texts.paymentIntent, order.paymentIntentId ?? texts.none],
-    [texts.consent, `${dateTime(order.consentAt)}: “${order.consentText}”`],
-    [texts.downloads, number(order.downloads)],
-  ];
-  return (
-    <Box as="dl">
-      {facts.map(([name, value]) => (
-        <Box
-          key={name}
-          display="grid"
-          gridTemplateColumns={{ base: 'minmax(0, 1fr)', sm: '9rem minmax(0, 1fr)' }}
-          columnGap="4"
-          paddingBlock="2"
-          borderBottomWidth="1px"
-          borderColor="hairline"
-        >
-          <Box as="dt" color="ink.soft">
-            {name}
-          </Box>
-          <Box as="dd" overflowWrap="anywhere">
-            {value}
-          </Box>
-        </Box>
-      ))}
-    </Box>
-  );
-};
-
-const History = ({ order }: { order: WorkshopOrder }) =>
-  order.history.length === 0 ? (
-    <Text isSoft>{texts.noHistory}</Text>
-  ) : (
-    <Box as="ol" listStyle="none">
-      {order.history.map((entry, at) => (
-        <Box
-          as="li"
-          key={`${entry.at} ${at}`}
-          display="grid"
-          gridTemplateColumns={{ base: 'minmax(0, 1fr)', sm: '11rem minmax(0, 1fr)' }}
-          columnGap="4"
-          paddingBlock="2"
-          borderBottomWidth="1px"
-          borderColor="hairline"
-        >
-          <Box as="time" color="ink.soft">
-            {dateTime(entry.at)}
-          </Box>
-          <Box overflowWrap="anywhere">
-            {entry.what}
-            {entry.detail && (
-              <Box fontSize="sm" lineHeight="snug" color="ink.soft">
-                {entry.detail}
-              </Box>
-            )}
-          </Box>
-        </Box>
-      ))}
-    </Box>
-  );
-
 /** One order with its whole history. */
 export function WorkshopOrderPage() {
   const { orderId = '' } = useParams();
@@ -116,7 +62,13 @@ export function WorkshopOrderPage() {
     data: order,
     fault,
     mutate,
-  } = useEndpoint('GET /workshop/orders/:orderId', { params: { orderId } });
+  } = useEndpoint(
+    'GET /workshop/orders/:orderId',
+    { params: { orderId } },
+    {
+      refreshInterval: (one) => (one?.refunds.some((refund) => refund.state === 'asked') ? askedEveryMs : 0),
+    },
+  );
   if (!order)
     return (
       <Band>
@@ -144,8 +96,18 @@ export function WorkshopOrderPage() {
               </Box>
             </Heading>
             <OrderLines order={order} />
+            {order.refunds.length > 0 && (
+              <Section title={refundTexts.section}>
+                <RefundsSection order={order} />
+              </Section>
+            )}
+            {order.disputes.length > 0 && (
+              <Section title={refundTexts.disputes}>
+                <DisputesSection disputes={order.disputes} />
+              </Section>
+            )}
             <Section title={texts.evidence}>
-              <Evidence order={order} />
+              <OrderEvidence order={order} />
             </Section>
             <Section title={texts.mails}>
               {order.mails.length === 0 ? (
@@ -160,7 +122,7 @@ export function WorkshopOrderPage() {
               )}
             </Section>
             <Section title={texts.history}>
-              <History order={order} />
+              <OrderHistory order={order} />
             </Section>
           </>
         }
@@ -171,10 +133,23 @@ export function WorkshopOrderPage() {
                 <Heading level={2} look="subsection" marginBottom="2">
                   {texts.flags}
                 </Heading>
-                <OrderFlagLines flags={order.flags} />
+                <OrderFlagLines order={order} />
               </Box>
             )}
-            <ResendLink order={order} />
+            <Box display="grid" gap="4" justifyItems="start">
+              <ResendLink order={order} />
+              <GiveMoneyBack order={order} />
+              {order.receiptNumber && (
+                <AnchorButton
+                  look="outline"
+                  href={apiAddress('GET /workshop/orders/:orderId/receipt.pdf', {
+                    params: { orderId: order.id },
+                  })}
+                >
+                  {texts.receiptPdf}
+                </AnchorButton>
+              )}
+            </Box>
           </>
         }
         block={

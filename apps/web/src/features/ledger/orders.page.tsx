@@ -93,8 +93,13 @@ const columns: Column<OrderRow>[] = [
     isNumeric: true,
     isSortable: true,
     cell: (order) => (
-      <Box as="span" whiteSpace="nowrap">
-        {price(order.total)}
+      <Box>
+        <Box whiteSpace="nowrap">{price(order.total)}</Box>
+        {order.refunded.minor > 0 && (
+          <Box fontSize="sm" color="ink.soft">
+            {texts.refunded(price(order.refunded))}
+          </Box>
+        )}
       </Box>
     ),
   },
@@ -102,6 +107,9 @@ const columns: Column<OrderRow>[] = [
 
 const isOrderState = (text: string | undefined): text is BuyerOrder['state'] =>
   text !== undefined && text in orderStateTexts;
+
+const isMoneyBack = (text: string | undefined): text is NonNullable<OrderQuery['moneyBack']> =>
+  text !== undefined && text in texts.moneyBacks;
 
 const defaults = { sort: 'placedAt', order: 'desc' } as const;
 const isSorting = (text: string | undefined): text is NonNullable<OrderQuery['sort']> =>
@@ -113,7 +121,8 @@ export function WorkshopOrdersPage() {
   const { page, size, search, sort, order } = table.state;
   const state = isOrderState(table.filters['state']) ? table.filters['state'] : undefined;
   const flagged = table.filters['flagged'] === '1' ? ('1' as const) : undefined;
-  const narrowing = { state, flagged, search: search || undefined };
+  const moneyBack = isMoneyBack(table.filters['moneyBack']) ? table.filters['moneyBack'] : undefined;
+  const narrowing = { state, moneyBack, flagged, search: search || undefined };
   const { data, fault, mutate } = useEndpoint(
     'GET /workshop/orders',
     { query: { ...narrowing, page, size, order, sort: isSorting(sort) ? sort : 'placedAt' } },
@@ -144,6 +153,15 @@ export function WorkshopOrdersPage() {
                   value={state ?? ''}
                   onChange={(event) => table.change({ state: event.target.value || undefined })}
                   options={Object.entries(orderStateTexts).map(([value, label]) => ({ value, label }))}
+                />
+              </Box>
+              <Box flex="0 1 13rem">
+                <SelectField
+                  label={texts.moneyBack}
+                  emptyLabel={texts.anyMoney}
+                  value={moneyBack ?? ''}
+                  onChange={(event) => table.change({ moneyBack: event.target.value || undefined })}
+                  options={Object.entries(texts.moneyBacks).map(([value, label]) => ({ value, label }))}
                 />
               </Box>
               <Box paddingBottom="2.5">

@@ -16,7 +16,8 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
   const [isSent, setIsSent] = useState(false);
   const { run, fault } = useAction('POST /workshop/orders/:orderId/link', ['GET /workshop/orders/:orderId']);
   if (!may('links:resend')) return null;
-  if (order.state !== 'paid')
+  if (order.paidAt && order.lines.every((line) => line.right === 'ended')) return null;
+  if (!order.paidAt)
     return (
       <Text look="small" isSoft>
         {texts.onlyPaid}
@@ -27,14 +28,14 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
       <Button look="outline" onClick={() => setIsAsking(true)}>
         {texts.resend}
       </Button>
-      <Box role="status" marginTop="2" fontSize="sm" color="ink.soft">
+      <Box role="status" marginTop={isSent ? '2' : undefined} fontSize="sm" color="ink.soft">
         {isSent && texts.resendDone}
       </Box>
       <ConfirmDialog
         isOpen={isAsking}
         onClose={() => setIsAsking(false)}
         look="ink"
-        title={texts.resendAsk(order.email)}
+        title={texts.resendAsk(order.gift?.email ?? order.email)}
         confirmLabel={texts.resendConfirm}
         onConfirm={async () => {
           const { isDone } = await run({ params: { orderId: order.id } });
@@ -42,7 +43,7 @@ export function ResendLink({ order }: { order: WorkshopOrder }) {
           return isDone;
         }}
       >
-        <Text>{texts.resendWhat}</Text>
+        <Text>{order.gift ? texts.resendGift : texts.resendWhat}</Text>
         {fault && <Fault what={texts.resendFailed} fault={fault} />}
       </ConfirmDialog>
     </Box>

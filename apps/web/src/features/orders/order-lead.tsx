@@ -11,9 +11,10 @@ export interface OrderLeadProps {
 function words(order: BuyerOrder, isTired: boolean): string {
   switch (order.state) {
     case 'paid':
-      return orderTexts.paidLead(order.email);
+      if (order.lines.some((line) => line.right === 'suspended')) return orderTexts.restingLead;
+      return order.gift ? orderTexts.giftLead(order.gift.email) : orderTexts.paidLead(order.email);
     case 'refunded':
-      return orderTexts.refundedLead;
+      return order.refunds.at(-1)?.cause === 'dispute' ? orderTexts.lostLead : orderTexts.refundedLead;
     case 'cancelled':
     case 'expired':
       return orderTexts.nothingCharged;

@@ -32,6 +32,11 @@ const kitColumn: Column<Line> = {
         <Box fontSize="sm" fontWeight="normal" color="ink.soft">
           {line.licenceName}
         </Box>
+        {(line.right === 'ended' || line.right === 'suspended') && (
+          <Box fontSize="sm" fontWeight="normal" color="ink.soft">
+            {line.right === 'ended' ? orderTexts.rightEnded : orderTexts.rightSuspended}
+          </Box>
+        )}
       </Box>
     </KitColour>
   ),
@@ -101,7 +106,20 @@ export function OrderLines({ order }: { order: BuyerOrder }) {
             {price(line.tax)}
           </Sum>
         ))}
+        {order.refunded.minor > 0 && <Sum name={orderTexts.refunded}>{less(order.refunded)}</Sum>}
       </Box>
+      {taxes.length === 0 && order.total.minor > 0 && (
+        <Box
+          marginLeft="auto"
+          maxWidth={{ md: '26rem' }}
+          paddingInline={{ md: '2.5' }}
+          fontSize="sm"
+          color="ink.soft"
+          textAlign="end"
+        >
+          {orderTexts.untaxed[order.taxTreatment]}
+        </Box>
+      )}
     </>
   );
 }

@@ -14,9 +14,12 @@ import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { TitleBlock, type TitleBlockField } from '../../ui/title-block.js';
 import { useEmptiedBasket } from './bought-basket.js';
+import { GiftOrder } from './gift-order.js';
 import { OpenOrder } from './open-order.js';
 import { OrderLead } from './order-lead.js';
 import { OrderLines } from './order-lines.js';
+import { OrderPapers } from './order-papers.js';
+import { OrderRefunds } from './order-refunds.js';
 import { PaidOrder } from './paid-order.js';
 import { type FollowedOrder, useOrder } from './use-order.js';
 
@@ -32,7 +35,10 @@ function fieldsOf(order: BuyerOrder): TitleBlockField[] {
 
 function Next({ order, followed }: { order: BuyerOrder; followed: FollowedOrder }) {
   if (order.state === 'open') return <OpenOrder order={order} followed={followed} />;
-  if (order.state === 'paid') return <PaidOrder order={order} />;
+  if (order.gift && order.lines.some((line) => line.right === 'active'))
+    return <GiftOrder gift={order.gift} />;
+  // After a refund, also of all that was paid, some files may have been left with the buyer.
+  if (order.lines.some((line) => line.right === 'active')) return <PaidOrder order={order} />;
   const isUnpaid = order.state === 'cancelled' || order.state === 'expired';
   return (
     <Box display="grid" gap="4">
@@ -58,6 +64,8 @@ const Order = ({ order, followed }: { order: BuyerOrder; followed: FollowedOrder
         <Heading level={1}>{orderTexts.titles[order.state]}</Heading>
         <OrderLead order={order} isTired={followed.isTired} />
         <OrderLines order={order} />
+        <OrderRefunds order={order} />
+        <OrderPapers order={order} orderKey={followed.input.query.key} />
       </>
     }
     aside={<Next order={order} followed={followed} />}

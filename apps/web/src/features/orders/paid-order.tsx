@@ -10,17 +10,17 @@ import { Fault } from '../../ui/fault.js';
 import { Notice } from '../../ui/notice.js';
 import { Heading, Text } from '../../ui/text.js';
 
-const Mine = () => (
+const Mine = ({ isPart }: { isPart: boolean }) => (
   <Box display="grid" gap="4">
     <Heading level={2} look="subsection">
       {orderTexts.next}
     </Heading>
-    <Text>{orderTexts.mineNext}</Text>
+    <Text>{isPart ? orderTexts.keptNext : orderTexts.mineNext}</Text>
     <LinkButton to={paths.shelf.to()}>{orderTexts.toShelf}</LinkButton>
   </Box>
 );
 
-function ByMail({ email }: { email: string }) {
+function ByMail({ email, isPart }: { email: string; isPart: boolean }) {
   const { isSignedIn } = useSession();
   const [isSent, setIsSent] = useState(false);
   const { run, fault, isRunning } = useAction('POST /collect/lost');
@@ -30,7 +30,7 @@ function ByMail({ email }: { email: string }) {
       <Heading level={2} look="subsection">
         {orderTexts.next}
       </Heading>
-      <Text fontWeight="semibold">{orderTexts.mailNext}</Text>
+      <Text fontWeight="semibold">{isPart ? orderTexts.keptByMail : orderTexts.mailNext}</Text>
       <Text isSoft>{orderTexts.freshWhy}</Text>
       {fault && <Fault what={orderTexts.freshFailed} fault={fault} />}
       <Box role="status" overflowWrap="anywhere">
@@ -59,5 +59,7 @@ function ByMail({ email }: { email: string }) {
 }
 
 /** Where the files are: on the shelf, or behind the link in the mail. */
-export const PaidOrder = ({ order }: { order: BuyerOrder }) =>
-  order.isMine ? <Mine /> : <ByMail email={order.email} />;
+export function PaidOrder({ order }: { order: BuyerOrder }) {
+  const isPart = order.refunded.minor > 0;
+  return order.isMine ? <Mine isPart={isPart} /> : <ByMail email={order.email} isPart={isPart} />;
+}

@@ -8,6 +8,7 @@ import { Band } from '../../ui/sheet.js';
 import { HomeHero } from './home-hero.js';
 import { fitsOf, kitListQuery, newestKits } from './kit-list-query.js';
 import { KitList } from './kit-list.js';
+import { liveOffers } from './offers.js';
 import { KitRowsSkeleton } from './kit-rows-skeleton.js';
 
 // Seldom seen, so not part of a first visit.
@@ -21,7 +22,7 @@ export function HomePage() {
   // With the usual sorting both are one question.
   const newest = useEndpoint('GET /kits', { query: newestKits });
   const list = useEndpoint('GET /kits', { query }, { keepPreviousData: true });
-  const offers = useEndpoint('GET /offers');
+  const offers = useEndpoint('GET /offers', {}, liveOffers);
 
   return (
     <>

@@ -6,13 +6,13 @@ import { voiceNoun } from '../bench/voice-noun.js';
 
 /** What a kit comes to, in figures; plates and filament only where they have been worked out. */
 export function KitFacts({ kit }: { kit: KitCard }) {
-  const { rank, compass, tallestPartMm, partCount, printEstimate } = kit;
+  const { rank, compass, longestPartMm, partCount, printEstimate } = kit;
   const noun = voiceNoun(rank);
   return (
     <Facts
       facts={[
         ...(rank.length > 0 ? [{ value: compass, name: counted(rank.length, noun.one, noun.many) }] : []),
-        ...(tallestPartMm > 0 ? [{ value: millimetres(tallestPartMm, 0), name: homeTexts.tallest }] : []),
+        ...(longestPartMm > 0 ? [{ value: millimetres(longestPartMm, 0), name: homeTexts.longest }] : []),
         { value: number(partCount), name: homeTexts.parts(partCount) },
         ...(printEstimate
           ? [

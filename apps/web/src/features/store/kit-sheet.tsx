@@ -15,7 +15,7 @@ import type { RankInRoom } from '../bench/use-predicted-rank.js';
 import { BasketCell } from './basket-cell.js';
 import { KitTitleBlock } from './kit-title-block.js';
 import { LicenceChoice } from './licence-choice.js';
-import { offerForLicence } from './offers.js';
+import { liveOffers, offerForLicence } from './offers.js';
 import { OwnedNotice } from './owned-notice.js';
 
 const rankHeightPx = 316;
@@ -23,7 +23,7 @@ const rankHeightPx = 316;
 /** The kit's drawing, what can be bought, and the title block with the price. */
 export function KitSheet({ kit, inRoom }: { kit: KitPage; inRoom: RankInRoom }) {
   const { isSignedIn } = useSession();
-  const offers = useEndpoint('GET /offers');
+  const offers = useEndpoint('GET /offers', {}, liveOffers);
   const owned = useEndpoint('GET /shelf/owned', isSignedIn ? {} : null);
   const [licenceId, setLicenceId] = useState(kit.licences[0]?.id);
   const licence = kit.licences.find((one) => one.id === licenceId) ?? kit.licences[0];

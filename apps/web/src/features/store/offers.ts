@@ -2,6 +2,9 @@ import type { KitCard, OutputOf } from '@windchest/contracts';
 
 export type Offer = OutputOf<'GET /offers'>[number];
 
+/** How many places are left is asked again while somebody looks on. */
+export const liveOffers = { refreshInterval: 20_000 };
+
 const holds = (offer: Offer) => offer.left === null || offer.left > 0;
 
 /** The announced coupon that makes a kit's shown price lowest; none where its places are all taken. */

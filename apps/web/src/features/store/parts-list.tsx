@@ -5,12 +5,22 @@ import { kitTexts } from '../../config/texts/kit.js';
 import { number } from '../../lib/format.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Text } from '../../ui/text.js';
+import { partPreviewTexts } from '../../config/texts/part-preview.js';
+import type { PreviewedPart } from '../bench/part-preview/part-turner.js';
+import { previewOfKitPart } from '../bench/part-preview/previewed-part.js';
+import { TurnButton } from '../bench/part-preview/turn-button.js';
 import { ownSettings } from './own-settings.js';
 
 const sizeWords = ({ sizeMm: { x, y, z } }: KitPart) => [x, y, z].map((side) => number(side, 1)).join(' × ');
 
+export interface PartsListProps {
+  parts: readonly KitPart[];
+  kit: KitPage;
+  onTurn: (part: PreviewedPart) => void;
+}
+
 /** The parts of a kit by their codes; assembly and change notes link here. */
-export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitPage }) {
+export function PartsList({ parts, kit, onTurn }: PartsListProps) {
   const columns: Column<KitPart>[] = [
     {
       key: 'part',
@@ -45,6 +55,15 @@ export function PartsList({ parts, kit }: { parts: readonly KitPart[]; kit: KitP
     },
     { key: 'quantity', header: kitTexts.quantity, isNumeric: true, cell: (part) => number(part.quantity) },
     { key: 'size', header: kitTexts.size, isNumeric: true, cell: sizeWords },
+    {
+      key: 'turn',
+      header: partPreviewTexts.column,
+      isNumeric: true,
+      cell: (part) => {
+        const preview = previewOfKitPart(kit.slug, part);
+        return preview && <TurnButton code={part.code} onTurn={() => onTurn(preview)} />;
+      },
+    },
   ];
   return (
     <HairlineTable

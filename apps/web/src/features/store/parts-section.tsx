@@ -3,6 +3,7 @@ import { chakra } from '@chakra-ui/react/styled-system';
 import type { KitPage, KitPart } from '@windchest/contracts';
 import { clearanceTexts } from '../../config/texts/clearance.js';
 import { kitTexts } from '../../config/texts/kit.js';
+import { partPreviewTexts } from '../../config/texts/part-preview.js';
 import { counted } from '../../lib/format.js';
 import type { Answered } from '../../lib/use-endpoint.js';
 import { Details } from '../../ui/details.js';
@@ -10,11 +11,15 @@ import { type DrawnPart, PartsSheet } from '../../ui/drawing/parts-sheet.js';
 import { Fault } from '../../ui/fault.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Text } from '../../ui/text.js';
+import { previewOfKitPart } from '../bench/part-preview/previewed-part.js';
+import { useTurning } from '../bench/part-preview/use-turning.js';
 import { PartsList } from './parts-list.js';
 
-const PartLink = chakra('a', {
-  base: { display: 'block', borderRadius: 'sm', _hover: { '& path': { stroke: 'ink' } } },
-});
+const isPressable = {
+  base: { display: 'block', borderRadius: 'sm', cursor: 'pointer', _hover: { '& path': { stroke: 'ink' } } },
+} as const;
+const PartLink = chakra('a', isPressable);
+const PartButton = chakra('button', isPressable);
 
 const drawnParts = (parts: readonly KitPart[]): DrawnPart[] =>
   parts.flatMap(({ code, name, drawing }) => (drawing ? [{ code, name, ...drawing }] : []));
@@ -41,12 +46,15 @@ export interface PartsSectionProps {
 
 /** Every part drawn from its mesh, and the list of them. */
 export function PartsSection({ kit, parts: { data: parts, fault, mutate } }: PartsSectionProps) {
+  const [turning, turn] = useTurning();
   if (!parts)
     return fault ? (
       <Fault what={kitTexts.partsLoading} fault={fault} onAgain={() => void mutate()} />
     ) : (
       <SkeletonLines lines={4} />
     );
+  const previews = new Map(parts.map((part) => [part.code, previewOfKitPart(kit.slug, part)]));
+  const canTurn = [...previews.values()].some((preview) => preview !== null);
   const pieces = parts.reduce((sum, part) => sum + part.quantity, 0);
   return (
     <>
@@ -54,20 +62,30 @@ export function PartsSection({ kit, parts: { data: parts, fault, mutate } }: Par
         {kitTexts.partsLead(
           counted(parts.length, kitTexts.onePart, kitTexts.manyParts),
           counted(pieces, kitTexts.onePiece, kitTexts.manyPieces),
-        )}
+        )}{' '}
+        {canTurn && partPreviewTexts.press}
       </Text>
       <Clearances parts={parts} />
       <PartsSheet
         parts={drawnParts(parts)}
         label={kitTexts.partsLabel(kit.name)}
         maxHeightPx={150}
-        linkOf={({ code }, drawn) => <PartLink href={`#part-${code}`}>{drawn}</PartLink>}
+        linkOf={({ code }, drawn) => {
+          const preview = previews.get(code);
+          if (!preview) return <PartLink href={`#part-${code}`}>{drawn}</PartLink>;
+          return (
+            <PartButton type="button" aria-haspopup="dialog" onClick={() => turn(preview)}>
+              {drawn}
+            </PartButton>
+          );
+        }}
       />
       <Box marginTop="7">
         <Details summary={kitTexts.partsList(parts.length)}>
-          <PartsList parts={parts} kit={kit} />
+          <PartsList parts={parts} kit={kit} onTurn={turn} />
         </Details>
       </Box>
+      {turning}
     </>
   );
 }

@@ -12,6 +12,8 @@ export interface DrawnPart {
   name?: string;
   /** An SVG path in mm, the box it lies in, and its size. */
   path: string;
+  /** What is seen inside the outline, as another path; stroked finely. */
+  edges?: string;
   viewBox: string;
   widthMm: number;
   heightMm: number;
@@ -27,6 +29,26 @@ const Outline = chakra('path', {
     fillRule: 'evenodd',
   },
 });
+
+const Edges = chakra('path', {
+  base: { fill: 'none', strokeWidth: '0.5', vectorEffect: 'non-scaling-stroke', strokeLinejoin: 'round' },
+});
+/** Across less, inner lines would run into a grey patch. */
+const leastForEdgesPx = 20;
+
+/** The inner lines of a part, where it is drawn large enough to tell them apart. */
+const InnerEdges = ({
+  part,
+  pxPerMm,
+  stroke,
+}: {
+  part: Omit<DrawnPart, 'code'>;
+  pxPerMm: number;
+  stroke: string;
+}) =>
+  part.edges && Math.min(part.widthMm, part.heightMm) * pxPerMm >= leastForEdgesPx ? (
+    <Edges d={part.edges} stroke={stroke} />
+  ) : null;
 
 /** Room a lettered code takes under the smallest part, px. */
 const leastSlotPx = 26;
@@ -55,6 +77,7 @@ const PartDrawing = ({
     ) : (
       <Outline d={part.path} fill="none" stroke="ink.soft" />
     )}
+    <InnerEdges part={part} pxPerMm={pxPerMm} stroke={part.isToReprint ? 'kit.deep' : 'edge'} />
   </chakra.svg>
 );
 
@@ -140,6 +163,7 @@ export const PartThumb = ({ part, sizePx = 40 }: { part: Omit<DrawnPart, 'code'>
         fill={part.isToReprint ? 'kit.wash' : 'none'}
         stroke={part.isToReprint ? 'kit.deep' : 'ink'}
       />
+      <InnerEdges part={part} pxPerMm={pxPerMm} stroke={part.isToReprint ? 'kit.deep' : 'ink.soft'} />
     </chakra.svg>
   );
 };

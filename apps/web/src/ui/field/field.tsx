@@ -2,7 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import { chakra } from '@chakra-ui/react/styled-system';
 import { type ReactNode, useId } from 'react';
 import type { FieldError } from 'react-hook-form';
-import { fieldTexts } from '../../config/texts/shared.js';
+import { fieldTexts } from '../../config/texts/furniture.js';
 import { Sign } from '../sign.js';
 
 export const FieldLabel = chakra('label', {

@@ -1,7 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import { chakra } from '@chakra-ui/react/styled-system';
 import type { ReactNode } from 'react';
-import { tableTexts } from '../../config/texts/shared.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { AnchorButton, Button } from '../button.js';
 import { EmptyState } from '../empty-state.js';
 import { SelectField } from '../field/select-field.js';

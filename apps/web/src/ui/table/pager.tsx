@@ -1,5 +1,5 @@
 import { Box } from '@chakra-ui/react/box';
-import { tableTexts } from '../../config/texts/shared.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { LinkButton } from '../button.js';
 import { pageCount } from './table-state.js';
 

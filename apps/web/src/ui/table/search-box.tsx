@@ -1,6 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import { type FormEvent, useRef } from 'react';
-import { tableTexts } from '../../config/texts/shared.js';
+import { tableTexts } from '../../config/texts/furniture.js';
 import { Button } from '../button.js';
 import { TextField } from '../field/text-field.js';
 

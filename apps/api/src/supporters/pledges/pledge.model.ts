@@ -1,0 +1,52 @@
+import type { KeepsAfter, PledgeState } from '@windchest/contracts';
+import { Column, DataType, Model, Table } from 'sequelize-typescript';
+import { IdColumn, MomentColumn } from '../../database/columns.js';
+import type { PledgeFlag } from './pledge-record.js';
+
+@Table({ tableName: 'pledges', timestamps: false })
+export class Pledge extends Model {
+  @IdColumn() declare id: string;
+  @Column(DataType.CHAR(36)) declare personId: string;
+  @Column(DataType.CHAR(36)) declare planId: string;
+  @Column(DataType.INTEGER.UNSIGNED) declare amountMinor: number;
+  @Column(DataType.CHAR(3)) declare currency: string;
+  @Column(DataType.STRING(20)) declare keepsAfter: KeepsAfter;
+  @Column(DataType.CHAR(36)) declare nextPlanId: string | null;
+  @Column(DataType.INTEGER.UNSIGNED) declare nextAmountMinor: number | null;
+  @Column(DataType.STRING(20)) declare nextKeepsAfter: KeepsAfter | null;
+  @MomentColumn({ isNullable: true }) declare nextPlanFrom: Date | null;
+  @Column(DataType.STRING(10)) declare state: PledgeState;
+  @Column(DataType.CHAR(36)) declare attempt: string;
+  @Column(DataType.CHAR(2)) declare declaredCountry: string;
+  @Column(DataType.CHAR(2)) declare paymentCountry: string | null;
+  @Column(DataType.CHAR(2)) declare cardCountry: string | null;
+  @Column(DataType.CHAR(4)) declare cardLast4: string | null;
+  @Column(DataType.JSON) declare flags: PledgeFlag[];
+  @Column(DataType.TEXT) declare consentText: string;
+  @MomentColumn() declare consentAt: Date;
+  @Column(DataType.STRING(120)) declare sessionId: string | null;
+  @Column(DataType.TEXT) declare paymentUrl: string | null;
+  @MomentColumn({ isNullable: true }) declare payUntil: Date | null;
+  @Column(DataType.STRING(120)) declare customerId: string | null;
+  @Column(DataType.STRING(120)) declare subscriptionId: string | null;
+  @MomentColumn({ isNullable: true }) declare beganAt: Date | null;
+  @MomentColumn({ isNullable: true }) declare paidUntil: Date | null;
+  @MomentColumn({ isNullable: true }) declare periodEnd: Date | null;
+  @MomentColumn({ isNullable: true }) declare nextPaymentAt: Date | null;
+  @MomentColumn({ isNullable: true }) declare endsAt: Date | null;
+  @MomentColumn({ isNullable: true }) declare pausedUntil: Date | null;
+  @Column(DataType.STRING(120)) declare failedInvoiceId: string | null;
+  @MomentColumn({ isNullable: true }) declare failingSince: Date | null;
+  @MomentColumn({ isNullable: true }) declare graceUntil: Date | null;
+  @Column(DataType.TEXT) declare settleUrl: string | null;
+  @Column(DataType.STRING(10)) declare endWish: 'end' | 'keep' | null;
+  @Column(DataType.STRING(10)) declare pauseWish: 'pause' | 'resume' | null;
+  @Column(DataType.INTEGER.UNSIGNED) declare amountWish: number | null;
+  @Column(DataType.STRING(120)) declare cardPageId: string | null;
+  @MomentColumn({ isNullable: true }) declare rightsUntil: Date | null;
+  @MomentColumn({ isNullable: true }) declare endedAt: Date | null;
+  @Column(DataType.INTEGER.UNSIGNED) declare looks: number;
+  @Column(DataType.INTEGER.UNSIGNED) declare followedLook: number;
+  @MomentColumn() declare createdAt: Date;
+  @MomentColumn() declare updatedAt: Date;
+}
