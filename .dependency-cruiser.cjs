@@ -19,7 +19,7 @@ const mayUse = {
   orders: ['accounts', 'catalogue', 'coupons', 'supporters'],
   entitlements: ['accounts', 'catalogue', 'measuring', 'coupons', 'orders', 'supporters'],
   fit: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
-  letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements'],
+  letters: ['accounts', 'catalogue', 'measuring', 'orders', 'supporters', 'entitlements', 'fit'],
   journal: ['accounts', 'catalogue', 'supporters'],
   ledger: ['accounts', 'catalogue', 'orders', 'supporters'],
   workshop: 'accounts catalogue measuring coupons orders supporters entitlements fit letters journal ledger'.split(' '),

@@ -48,7 +48,7 @@ test('the bookkeeper gives part of an order back, and the buyer hears of it and 
   await page.getByRole('button', { name: 'Close' }).click();
   await expect(page.getByRole('heading', { name: 'Money back' })).toBeVisible();
   await expectAccessible(page, 'an order with a refund');
-  await page.goto('/workshop/receipts');
+  await page.goto('/workshop/ledger/receipts');
   await expect(page.getByRole('link', { name: /-C\d{5}$/ }).first()).toBeVisible();
   await expectAccessible(page, 'receipts');
 

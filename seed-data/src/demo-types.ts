@@ -150,6 +150,16 @@ export interface DemoPledge {
   isEnding: boolean;
 }
 
+/** What somebody has printed of the revision they hold: all of it, but for these. */
+export interface DemoPrints {
+  buyerEmail: string;
+  kitSlug: string;
+  /** Codes of parts of which there is no piece yet. */
+  notYet: string[];
+  /** Pieces that are there of parts that are begun, by code. */
+  begun: { [code: string]: number };
+}
+
 export interface DemoFitReport {
   buyerEmail: string;
   kitSlug: string;
@@ -190,10 +200,22 @@ export interface DemoWorkshop {
   kits: DemoKit[];
   coupons: DemoCoupon[];
   purchases: DemoPurchase[];
-  posts: DemoPost[];
-  fitReports: DemoFitReport[];
   plans: DemoPlan[];
   pledges: DemoPledge[];
+  posts: DemoPost[];
+  prints: DemoPrints[];
+  fitReports: DemoFitReport[];
+  newsReaders: string[];
+  letters: DemoLetter[];
+}
+
+/** A letter of the workshop; what is not sent stays a draft. */
+export interface DemoLetter {
+  kind: 'service' | 'news';
+  subject: string;
+  body: string;
+  kitSlug: string | null;
+  isSent: boolean;
 }
 
 /** A part together with what draws its mesh. */

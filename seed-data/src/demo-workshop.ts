@@ -5,9 +5,11 @@ import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { turnstone } from './kits/turnstone.js';
 import { fitReports } from './fit-reports.js';
+import { prints } from './prints.js';
 import { people, printers, purchases } from './people.js';
-import { posts } from './posts.js';
 import { plans, pledges } from './pledges.js';
+import { letters, newsReaders } from './letters.js';
+import { posts } from './posts.js';
 
 export const kitPlans: readonly KitPlan[] = [curlew, teal, dunlin, godwit, turnstone];
 
@@ -48,8 +50,11 @@ export const demoWorkshop: DemoWorkshop = {
     },
   ],
   purchases,
-  posts,
-  fitReports,
   plans,
   pledges,
+  posts,
+  prints,
+  fitReports,
+  newsReaders,
+  letters,
 };

@@ -3,8 +3,10 @@ import { buy } from './load/buy.js';
 import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { reportFit } from './load/report-fit.js';
+import { sayPrinted } from './load/say-printed.js';
 import { makePeople } from './load/make-people.js';
 import { beginPledge, makePlan } from './load/pledge.js';
+import { writeLetter } from './load/write-letter.js';
 import { ShopBrowser } from './load/shop-browser.js';
 import { demoSignIns } from './sign-ins.js';
 
@@ -84,11 +86,17 @@ const main = async (): Promise<void> => {
   for (const report of demoWorkshop.fitReports)
     await reportFit(await signIn(report.buyerEmail), maker, report);
 
+  for (const one of demoWorkshop.prints) await sayPrinted(await signIn(one.buyerEmail), one);
+
   for (const kit of demoWorkshop.kits)
     for (const revision of kit.revisions.slice(1)) {
       await releaseRevision(maker, kitIds.get(kit.slug) ?? '', kit, revision);
       say(`${kit.name} ${revision.label} is released`);
     }
+
+  for (const email of demoWorkshop.newsReaders)
+    await (await signIn(email)).put('/account/news', { isWanted: true });
+  for (const letter of demoWorkshop.letters) await writeLetter(maker, letter, kitIds);
 };
 
 main().catch((fault: unknown) => {

@@ -12,6 +12,7 @@ import { HttpModule } from './http/http.module.js';
 import { JobsModule } from './jobs/jobs.module.js';
 import { JournalModule } from './journal/journal.module.js';
 import { LedgerModule } from './ledger/ledger.module.js';
+import { LettersModule } from './letters/letters.module.js';
 import { MailsModule } from './mails/mails.module.js';
 import { MeasuringModule } from './measuring/measuring.module.js';
 import { PicturesModule } from './pictures/pictures.module.js';
@@ -28,8 +29,8 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     HttpModule,
     JobsModule,
     MailsModule,
-    PicturesModule,
     PaymentsModule,
+    PicturesModule,
     ScheduleModule.forRoot(),
     // The rooms, lower ones first.
     AccountsModule,
@@ -41,6 +42,7 @@ import { WorkshopModule } from './workshop/workshop.module.js';
     LedgerModule,
     EntitlementsModule,
     FitModule,
+    LettersModule,
     JournalModule,
     WorkshopModule,
   ],

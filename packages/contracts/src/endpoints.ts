@@ -5,6 +5,8 @@ import { fitEndpoints } from './fit.js';
 import { healthEndpoints } from './health.js';
 import { journalEndpoints } from './journal.js';
 import { kitEndpoints } from './kits.js';
+import { workshopLetterEndpoints } from './letters.js';
+import { newsEndpoints } from './news.js';
 import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
 import { printRecordEndpoints } from './print-record.js';
@@ -32,6 +34,11 @@ export const endpoints = {
   ...workshopSalesEndpoints,
   ...ledgerEndpoints,
   ...supporterEndpoints,
+  ...fitEndpoints,
+  ...journalEndpoints,
+  ...workshopLetterEndpoints,
+  ...newsEndpoints,
+  ...ledgerEndpoints,
   ...peopleEndpoints,
   ...healthEndpoints,
 };

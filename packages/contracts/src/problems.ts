@@ -36,6 +36,7 @@ export const problemStatus = {
   'gift-refused': 422,
   'quarter-is-closed': 409,
   'order-is-final': 409,
+  'letter-is-final': 409,
   'refund-refused': 422,
   'plan-refused': 422,
   'pledge-exists': 409,

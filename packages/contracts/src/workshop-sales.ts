@@ -123,7 +123,15 @@ export const overview = z.object({
   sales: z.array(z.object({ day: z.string(), orders: z.int(), gross: money })).nullable(),
   waiting: z.array(
     z.object({
-      kind: z.enum(['draft', 'flagged-order', 'dead-job', 'coupon-low', 'refused-file', 'fit-report']),
+      kind: z.enum([
+        'draft',
+        'flagged-order',
+        'dead-job',
+        'coupon-low',
+        'refused-file',
+        'fit-report',
+        'letter',
+      ]),
       label: z.string(),
       count: z.int(),
       link: z.string(),

@@ -41,6 +41,8 @@ export async function startStand({ folder, mode, supervisor, isDurable = mode !=
       logFile: join(places.logs, 'mariadb.log'),
       secrets,
       isDurable,
+      // Benches make databases of their own beside the shop's.
+      mayMakeDatabases: mode === 'throwaway',
     }),
   );
   /** @type {StandFacts} */

@@ -29,6 +29,6 @@ export type EmailContent = {
   blocks: EmailBlock[];
   /** Why this reader gets this mail. */
   reason: string;
-  /** Where the reader ends such mails, for those that may be ended. */
+  /** Where the reader ends such mails; for those that cannot be ended, where else to go. */
   stop?: { label: string; link: string };
 };

@@ -1,3 +1,4 @@
+import type { EmailBlock, EmailContent } from './email-content.js';
 import type { Money } from '@windchest/money';
 import type { PledgeMessage } from './pledge-message.js';
 
@@ -194,6 +195,25 @@ export type FitFixedMessage = {
   link: string;
 };
 
+/** Asks whoever asked for news whether it was them. */
+export type ConfirmNewsMessage = { template: 'confirm-news'; link: string; days: number };
+
+/** A letter from the workshop, filled in for one reader. `blocks` hold its words; its maker made them safe. */
+export type LetterContent = {
+  kind: 'service' | 'news';
+  subject: string;
+  preheader: string;
+  blocks: readonly EmailBlock[];
+  /** The kit a service letter is about; without one it is about the shop. */
+  kit?: string | undefined;
+  accountLink: string;
+  stopLink?: string | undefined;
+  isTest?: boolean;
+};
+
+/** A letter mailed to its writer, to be looked at. */
+export type LetterTestMessage = { template: 'letter-test'; content: EmailContent };
+
 /** Every mail the shop sends by itself, told apart by `template`. */
 export type EmailMessage =
   | VerifyAddressMessage
@@ -209,8 +229,10 @@ export type EmailMessage =
   | RevisionReleasedMessage
   | RevisionWithdrawnMessage
   | GiftReceivedMessage
+  | PledgeMessage
   | FitAnsweredMessage
   | FitFixedMessage
-  | PledgeMessage;
+  | ConfirmNewsMessage
+  | LetterTestMessage;
 
 export type EmailTemplate = EmailMessage['template'];

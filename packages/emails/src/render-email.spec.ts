@@ -29,13 +29,13 @@ const wordsOf = (html: string): string =>
     .replace(/&amp;/g, '&')
     .replace(/\s+/g, ' ');
 
-const unwrapped = (text: string): string => text.replace(/\s+/g, ' ');
+const unwrapped = (text: string): string => text.replace(/^> ?/gm, '').replace(/\s+/g, ' ');
 
 /** Every web address anywhere in a message. */
-const linksOf = (message: EmailMessage): string[] =>
-  Object.values(message).filter(
-    (value): value is string => typeof value === 'string' && value.startsWith('https://'),
-  );
+const linksOf = (value: unknown): string[] => {
+  if (typeof value === 'string') return value.startsWith('https://') ? [value] : [];
+  return typeof value === 'object' && value !== null ? Object.values(value).flatMap(linksOf) : [];
+};
 
 describe.each(sampleMessages)('the mail "$title"', ({ message }) => {
   const { subject, html, text } = renderEmail(message, sampleWorkshop);
@@ -111,6 +111,8 @@ it('has a sample of every template, so that the checks above miss none', () => {
     'pledge-paused': true,
     'pledge-resumes-soon': true,
     'pledge-plan-changes': true,
+    'confirm-news': true,
+    'letter-test': true,
   };
   expect(new Set(sampleMessages.map(({ message }) => message.template))).toEqual(
     new Set(Object.keys(templates)),

@@ -7,6 +7,7 @@ import * as accountMails from './templates/account-mails.js';
 import * as disputeMails from './templates/dispute-mails.js';
 import * as deliveryMails from './templates/delivery-mails.js';
 import * as fitMails from './templates/fit-mails.js';
+import * as letterMails from './templates/letter-mails.js';
 import * as orderMails from './templates/order-mails.js';
 import * as pledgeMails from './templates/pledge-mails.js';
 import * as pledgeRestMails from './templates/pledge-rest-mails.js';
@@ -39,10 +40,6 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return deliveryMails.revisionWithdrawn(message);
     case 'gift-received':
       return deliveryMails.giftReceived(message, workshop);
-    case 'fit-answered':
-      return fitMails.fitAnswered(message);
-    case 'fit-fixed':
-      return fitMails.fitFixed(message);
     case 'pledge-began':
       return pledgeMails.pledgeBegan(message, workshop);
     case 'pledge-receipt':
@@ -61,6 +58,14 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return pledgeRestMails.pledgePaused(message, workshop);
     case 'pledge-resumes-soon':
       return pledgeRestMails.pledgeResumesSoon(message, workshop);
+    case 'fit-answered':
+      return fitMails.fitAnswered(message);
+    case 'fit-fixed':
+      return fitMails.fitFixed(message);
+    case 'confirm-news':
+      return letterMails.confirmNews(message, workshop);
+    case 'letter-test':
+      return message.content;
   }
 }
 
@@ -83,5 +88,7 @@ export function renderContent(content: EmailContent, workshop: EmailWorkshop): R
  */
 export function renderEmail(message: EmailMessage, workshop: EmailWorkshop): RenderedEmail {
   const plainWorkshop = plainStrings(workshop);
-  return renderContent(contentOf(plainStrings(message), plainWorkshop), plainWorkshop);
+  // A letter's text has lines of its own, which its maker cleaned.
+  const plainMessage = message.template === 'letter-test' ? message : plainStrings(message);
+  return renderContent(contentOf(plainMessage, plainWorkshop), plainWorkshop);
 }

@@ -235,6 +235,31 @@ export const texts = {
     reason: (kit: string, revision: string): string => `You get this because you hold ${revision} of ${kit}.`,
   },
 
+  letter: {
+    times: (quantity: number): string => `×${nbsp}${quantity}`,
+    ifItTroubles: 'Reprint these only if the old ones trouble you:',
+    nothingToReprint: 'For your build there is nothing to reprint.',
+    testSubject: (subject: string): string => `Test: ${subject}`,
+    serviceReason: (kit: string): string =>
+      `You get this because you have the files of ${kit}, and it is about them.`,
+    serviceReasonOfShop: 'You get this because you have files from this workshop, and it is about them.',
+    newsReason: 'You get this because you asked this workshop for news.',
+    stopNews: 'Stop the news',
+    account: 'Your account, and what is kept about you',
+  },
+
+  confirmNews: {
+    subject: (workshop: string): string => `Do you want news from ${workshop}?`,
+    preheader: 'One press, and they come.',
+    heading: 'Confirm that you want the news',
+    body: (workshop: string): string =>
+      `Somebody, most likely you, asked ${workshop} to send news to this address: a letter now and then about new kits and the bench.`,
+    button: 'Send me the news',
+    limits: (days: number): string =>
+      `The link works for ${countOf(days, 'day')}. If it was not you, do nothing: no news will come.`,
+    reason: 'You get this because this address was entered for news.',
+  },
+
   giftReceived: {
     subject: (from: string, kits: readonly string[]): string => `${from} gives you ${kitsInShort(kits)}`,
     preheader: 'Files to print and build an instrument.',

@@ -11,6 +11,7 @@ import { OneTimeTokens } from './one-time-tokens.js';
 import { OwnSessions } from './own-sessions.js';
 import { Passphrases } from './passphrases.js';
 import { AddressVerifiedSteps, People } from './people.js';
+import { PeopleParts } from './people-parts.js';
 import { Person } from './person.model.js';
 import { ChangePrinterCards } from './printers/change-printer-cards.js';
 import { PrinterCardRecord } from './printers/printer-card.model.js';
@@ -35,6 +36,7 @@ import { SweepSessions } from './sweep-sessions.js';
   controllers: [SessionController, AccountController, PrintersController, StaffController],
   providers: [
     People,
+    PeopleParts,
     AddressVerifiedSteps,
     Passphrases,
     OneTimeTokens,
@@ -52,6 +54,6 @@ import { SweepSessions } from './sweep-sessions.js';
     PrinterCards,
     ChangePrinterCards,
   ],
-  exports: [People, AddressVerifiedSteps, StaffLog, PrinterCards],
+  exports: [PeopleParts, People, AddressVerifiedSteps, StaffLog, PrinterCards],
 })
 export class AccountsModule {}

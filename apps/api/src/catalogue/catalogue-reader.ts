@@ -19,6 +19,7 @@ import { hasVariants } from './revisions/part-files.js';
 import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision, type Room } from './revisions/revision.model.js';
 
+export { filamentHex } from './build-book/kit-shades.js';
 export type { BundleFile, NetRow, OfferedLicence, ServableFile };
 
 export interface KitFacts {
@@ -97,6 +98,15 @@ export class CatalogueReader {
   /** The shop's cards of those kits that are on sale. */
   shopCards(kitIds: readonly string[]): Promise<(KitCard & { id: string })[]> {
     return this.shop.cardsByIds(kitIds);
+  }
+
+  /** Kits of which a revision is out, by name. */
+  async releasedKits(): Promise<KitFacts[]> {
+    const kits = await this.kits.findAll({
+      where: { newestRevisionId: { [Op.ne]: null } },
+      order: [['name', 'ASC']],
+    });
+    return kits.map(toKit);
   }
 
   async kitBySlug(slug: string): Promise<KitFacts | null> {

@@ -48,6 +48,13 @@ export const environmentSchema = z.object({
   SMTP_URL: z.url(),
   MAIL_FROM: z.string().min(3),
 
+  /** Where mail servers send their reports; each letter's return path carries its recipient behind a plus. */
+  BOUNCE_ADDRESS: z.email().optional(),
+  /** Signs the reports that the mail server hands to `POST /api/mails/bounces`. */
+  BOUNCE_SECRET: secret.optional(),
+  /** Mails of a letter in a minute, unless the letter says otherwise. */
+  LETTERS_PER_MINUTE: z.coerce.number().int().min(1).max(100_000).default(300),
+
   STRIPE_KEY: z.string().min(8),
   STRIPE_WEBHOOK_SECRET: z.string().min(8),
   STRIPE_HOST: z.string().optional(),

@@ -1,7 +1,5 @@
 import { QueryTypes, type QueryInterface, type Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
-import * as journal from './migrations/0016-journal.js';
-import * as fitReports from './migrations/0017-fit-reports.js';
 import * as people from './migrations/0001-people.js';
 import * as outbox from './migrations/0002-outbox.js';
 import * as catalogue from './migrations/0003-catalogue.js';
@@ -13,10 +11,13 @@ import * as meshComparisons from './migrations/0008-mesh-comparisons.js';
 import * as printerCards from './migrations/0009-printer-cards.js';
 import * as partVariants from './migrations/0010-part-variants.js';
 import * as refunds from './migrations/0011-refunds.js';
+import * as supporters from './migrations/0012-supporters.js';
 import * as couponRules from './migrations/0013-coupon-rules.js';
 import * as taxAndBusiness from './migrations/0014-tax-and-business.js';
 import * as gifts from './migrations/0015-gifts.js';
-import * as supporters from './migrations/0012-supporters.js';
+import * as journal from './migrations/0016-journal.js';
+import * as fitReports from './migrations/0017-fit-reports.js';
+import * as letters from './migrations/0018-letters.js';
 import * as printRecord from './migrations/0019-print-record.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
@@ -27,16 +28,17 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0005-released-is-final': releasedIsFinal,
   '0006-tax-rates': taxRates,
   '0007-print-profiles': printProfiles,
-  '0016-journal': journal,
-  '0017-fit-reports': fitReports,
   '0008-mesh-comparisons': meshComparisons,
   '0009-printer-cards': printerCards,
   '0010-part-variants': partVariants,
   '0011-refunds': refunds,
+  '0012-supporters': supporters,
   '0013-coupon-rules': couponRules,
   '0014-tax-and-business': taxAndBusiness,
   '0015-gifts': gifts,
-  '0012-supporters': supporters,
+  '0016-journal': journal,
+  '0017-fit-reports': fitReports,
+  '0018-letters': letters,
   '0019-print-record': printRecord,
 };
 

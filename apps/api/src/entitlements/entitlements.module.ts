@@ -25,6 +25,7 @@ import { ReprintPlans } from './reprint/reprint-plans.js';
 import { ReprintLists } from './reprint/reprint-lists.js';
 import { OwnRevisions } from './own-revisions.js';
 import { PledgeEntitlements } from './pledge-entitlements.js';
+import { ReaderParts } from './reader-parts.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
@@ -61,7 +62,8 @@ import { SignedAddress } from './signed-address.js';
     ReprintPlans,
     ChangedParts,
     Withdrawals,
+    ReaderParts,
   ],
-  exports: [Holdings, ReprintLists],
+  exports: [Holdings, DownloadLinks, ReaderParts, ReprintLists],
 })
 export class EntitlementsModule {}

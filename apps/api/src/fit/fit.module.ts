@@ -11,6 +11,7 @@ import { FitPicture } from './fit-picture.js';
 import { FitReport } from './fit-report.model.js';
 import { FitController } from './fit.controller.js';
 import { ListFitReports } from './list-fit-reports.js';
+import { ReporterParts } from './reporter-parts.js';
 import { ReportFit } from './report-fit.js';
 import { ShowFitReport } from './show-fit-report.js';
 import { WorkshopFitController } from './workshop-fit.controller.js';
@@ -23,7 +24,7 @@ import { WorkshopFitController } from './workshop-fit.controller.js';
     SequelizeModule.forFeature([FitReport, FitAnswer]),
   ],
   controllers: [FitController, WorkshopFitController],
-  providers: [ReportFit, ShowFitReport, ListFitReports, FitMatrices, FitPicture, FitMails, AnswerFit],
-  exports: [ListFitReports],
+  providers: [ReportFit, ShowFitReport, ListFitReports, FitMatrices, FitPicture, FitMails, AnswerFit, ReporterParts],
+  exports: [ListFitReports, ReporterParts],
 })
 export class FitModule {}

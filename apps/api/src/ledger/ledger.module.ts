@@ -30,6 +30,7 @@ import { ExportSummary } from './tax/export-summary.js';
 import { ListLocations } from './tax/list-locations.js';
 import { ListQuarters } from './tax/list-quarters.js';
 import { ListRates } from './tax/list-rates.js';
+import { QuarterPortions } from './tax/quarter-portions.js';
 import { SettleLocation } from './tax/settle-location.js';
 import { SummariseQuarter } from './tax/summarise-quarter.js';
 import { TaxQuarters } from './tax/tax-quarters.js';
@@ -61,6 +62,7 @@ import { WriteReceipt } from './write-receipt.js';
     ListRates,
     ChangeRates,
     TaxQuarters,
+    QuarterPortions,
     SummariseQuarter,
     ListQuarters,
     CloseQuarter,

@@ -3,6 +3,7 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueModule } from '../catalogue/catalogue.module.js';
 import { CouponsModule } from '../coupons/coupons.module.js';
+import { BuyerParts } from './buyer-parts.js';
 import { CancelOrder } from './cancel-order.js';
 import { CheckoutController } from './checkout.controller.js';
 import { ClaimOrders } from './claim-orders.js';
@@ -88,6 +89,7 @@ import { YearRecords } from './year-records.js';
     ListOrders,
     ShowOrder,
     OrdersReader,
+    BuyerParts,
     RefundBook,
     RefundView,
     MoneyBackSteps,
@@ -109,6 +111,7 @@ import { YearRecords } from './year-records.js';
     FollowMoneyBack,
   ],
   exports: [
+    BuyerParts,
     OrderPaidSteps,
     MoneyBackSteps,
     DisputeSteps,

@@ -1,6 +1,7 @@
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import type { Type } from '@nestjs/common';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import { getConnectionToken } from '@nestjs/sequelize';
 import { Test } from '@nestjs/testing';
@@ -17,15 +18,23 @@ import { createTestDatabase } from './test-database.js';
 /** A clock that tests move. */
 export class TestClock extends Clock {
   private offsetMs = 0;
+  private stoppedAt: Date | null = null;
 
   override now(): Date {
-    return new Date(Date.now() + this.offsetMs);
+    return this.stoppedAt ?? new Date(Date.now() + this.offsetMs);
+  }
+
+  /** From now on it shows this moment, until it is stopped at another. */
+  stopAt(moment: Date): void {
+    this.stoppedAt = moment;
   }
 
   advance(seconds: number): void {
     this.offsetMs += seconds * 1000;
   }
 }
+
+type Abstract = abstract new (...args: never[]) => object;
 
 export interface TestApp {
   readonly app: NestExpressApplication;
@@ -45,7 +54,11 @@ export type Browser = ReturnType<typeof supertest.agent>;
 const BASE = 'http://127.0.0.1';
 
 /** The real application on a database of its own; jobs run only when a test drains them. */
-export const startTestApp = async (environment: Record<string, string> = {}): Promise<TestApp> => {
+export const startTestApp = async (
+  environment: Record<string, string> = {},
+  /** What stands in for a piece of the outside world, by the class it is asked for by. */
+  standIns: (clock: TestClock) => readonly (readonly [token: Type | Abstract, standIn: object])[] = () => [],
+): Promise<TestApp> => {
   const testDatabase = await createTestDatabase();
   const folder = await mkdtemp(join(tmpdir(), 'windchest-test-'));
   const before = { ...process.env };
@@ -70,12 +83,13 @@ export const startTestApp = async (environment: Record<string, string> = {}): Pr
   });
   const mailer = new RecordingMailer();
   const clock = new TestClock();
-  const module = await Test.createTestingModule({ imports: [AppModule] })
+  const building = Test.createTestingModule({ imports: [AppModule] })
     .overrideProvider(Mailer)
     .useValue(mailer)
     .overrideProvider(Clock)
-    .useValue(clock)
-    .compile();
+    .useValue(clock);
+  for (const [token, standIn] of standIns(clock)) building.overrideProvider(token).useValue(standIn);
+  const module = await building.compile();
   const app = module.createNestApplication<NestExpressApplication>({ rawBody: true, logger: false });
   await furnishApp(app);
   await app.listen(0, '127.0.0.1');

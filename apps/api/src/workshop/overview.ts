@@ -7,6 +7,7 @@ import { CouponsReader } from '../coupons/coupons-reader.js';
 import { ListFitReports } from '../fit/list-fit-reports.js';
 import type { SignedIn } from '../http/person.js';
 import { JobQueue } from '../jobs/job-queue.js';
+import { ShowLetters } from '../letters/show-letters.js';
 import { OrdersReader } from '../orders/orders-reader.js';
 
 type Overview = Answer<'GET /workshop/overview'>;
@@ -23,6 +24,7 @@ export class Overviews {
     private readonly coupons: CouponsReader,
     private readonly orders: OrdersReader,
     private readonly fit: ListFitReports,
+    private readonly letters: ShowLetters,
     private readonly jobs: JobQueue,
     private readonly clock: Clock,
   ) {}
@@ -34,6 +36,7 @@ export class Overviews {
       seesMoney ? this.flaggedOrders() : [],
       may(person.role, 'coupons:read') ? this.lowCoupons() : [],
       may(person.role, 'fit:read') ? this.fitReports() : [],
+      may(person.role, 'letters:read') ? this.lettersUnderWay() : [],
       person.role === 'owner' ? this.deadJobs() : [],
     ]);
     return { sales: seesMoney ? await this.sales() : null, waiting: waiting.flat() };
@@ -76,6 +79,16 @@ export class Overviews {
   private async fitReports(): Promise<Waiting> {
     const count = await this.fit.countNew();
     return count > 0 ? [{ kind: 'fit-report', label: '', count, link: '/workshop/fit?state=new' }] : [];
+  }
+
+  private async lettersUnderWay(): Promise<Waiting> {
+    const letters = await this.letters.underWay();
+    return letters.map(({ id, subject }) => ({
+      kind: 'letter',
+      label: subject,
+      count: 1,
+      link: `/workshop/letters/${id}`,
+    }));
   }
 
   private async deadJobs(): Promise<Waiting> {

@@ -1,4 +1,5 @@
 import { money } from '@windchest/money';
+import { letterContent, reprintBlocks } from '../templates/letter-mails.js';
 import type { EmailMessage, EmailWorkshop } from '../email-message.js';
 import { samplePledges } from './sample-pledges.js';
 
@@ -248,6 +249,7 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       cautionsLine,
     },
   },
+  ...samplePledges,
   {
     title: 'Fit report answered',
     message: {
@@ -273,5 +275,72 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
       link: 'https://saltmarsh.example/shelf/curlew',
     },
   },
-  ...samplePledges,
+  {
+    title: 'Confirm the news',
+    message: {
+      template: 'confirm-news',
+      link: `https://saltmarsh.example/news/confirm#token=${token}`,
+      days: 7,
+    },
+  },
+  {
+    title: 'Letter about a fix, with a reprint list',
+    message: {
+      template: 'letter-test',
+      content: letterContent({
+        kind: 'service',
+        subject: 'Curlew: the locking tongue, mended',
+        preheader: 'Two pieces to reprint on your build.',
+        kit: 'Curlew',
+        accountLink: 'https://saltmarsh.example/account',
+        blocks: [
+          { kind: 'paragraph', text: 'Hello Wren,' },
+          {
+            kind: 'paragraph',
+            text: 'You hold Mk 1.2. Some of you found the locking tongue too tight in PETG. Mk 1.4 mends it. On your build, these are to be printed again:',
+          },
+          ...reprintBlocks(
+            [
+              {
+                code: 'J-01',
+                name: 'Locking tongue',
+                quantity: 2,
+                why: 'Too tight in PETG on most printers.',
+                isOnlyIfItTroubles: false,
+              },
+              {
+                code: 'R-01',
+                name: 'Lip rail',
+                quantity: 1,
+                why: 'Whistles in the top octave.',
+                isOnlyIfItTroubles: true,
+              },
+            ],
+            '#e97c48',
+          ),
+          {
+            kind: 'button',
+            label: 'Get the files',
+            link: 'https://saltmarsh.example/shelf/curlew',
+          },
+        ],
+      }),
+    },
+  },
+  {
+    title: 'News letter',
+    message: {
+      template: 'letter-test',
+      content: letterContent({
+        kind: 'news',
+        subject: 'Turnstone is on the bench',
+        preheader: 'Ten strings, one evening of printing.',
+        accountLink: 'https://saltmarsh.example/account',
+        stopLink: `https://saltmarsh.example/unsubscribe/${token}`,
+        blocks: [
+          { kind: 'paragraph', text: 'Ten strings, one evening of printing. It goes out to testers in May.' },
+        ],
+      }),
+    },
+  },
 ];

@@ -5,6 +5,8 @@ export interface OutgoingMail {
   readonly text: string;
   /** Stays the same whenever the same mail is tried again. */
   readonly messageId: string;
+  /** Where the mail server reports to, if not to the sender. */
+  readonly returnPath?: string;
   readonly headers?: Readonly<Record<string, string>>;
 }
 
@@ -25,3 +27,6 @@ export abstract class Mailer {
 }
 
 export class MailRefused extends Error {}
+
+/** The server answered and does not take this mail now. Faults of another kind say nothing about the mail. */
+export class MailPutOff extends Error {}

@@ -1,7 +1,7 @@
 import { Readable } from 'node:stream';
 import MailComposer from 'nodemailer/lib/mail-composer';
 import type SMTPConnection from 'nodemailer/lib/smtp-connection';
-import { Mailer, MailRefused, type OutgoingMail, type SendingSteps } from './mailer.js';
+import { Mailer, MailPutOff, MailRefused, type OutgoingMail, type SendingSteps } from './mailer.js';
 import { SmtpConnections } from './smtp-connections.js';
 
 /**
@@ -27,6 +27,7 @@ export class SmtpMailer extends Mailer {
       html: mail.html,
       text: mail.text,
       messageId: mail.messageId,
+      ...(mail.returnPath ? { envelope: { from: mail.returnPath, to: mail.to } } : {}),
       headers: { 'Auto-Submitted': 'auto-generated', ...mail.headers },
     }).compile();
     const { from, to } = composed.getEnvelope();
@@ -61,8 +62,8 @@ const deliver = (
     connection.send(envelope, message, (fault) => {
       if (!fault) return resolve();
       const { responseCode } = fault as { responseCode?: number };
-      reject(
-        responseCode && responseCode >= 500 ? new MailRefused((fault as Error).message) : (fault as Error),
-      );
+      const { message } = fault as Error;
+      if (responseCode && responseCode >= 500) return reject(new MailRefused(message));
+      reject(responseCode && responseCode >= 400 ? new MailPutOff(message) : (fault as Error));
     });
   });

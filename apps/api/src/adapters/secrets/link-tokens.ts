@@ -2,7 +2,7 @@ import { createHash, createHmac, timingSafeEqual } from 'node:crypto';
 import { Injectable } from '@nestjs/common';
 import { InjectConfig, type Config } from '../../config/config.js';
 
-export type TokenPurpose = 'collect' | 'verify' | 'sign-in' | 'reset' | 'invite' | 'order-key';
+export type TokenPurpose = 'collect' | 'verify' | 'sign-in' | 'reset' | 'invite' | 'order-key' | 'confirm-news' | 'stop-news' | 'stop-revisions';
 
 /**
  * Secrets that are mailed or handed out: 256 bits, derived from the installation's link secret and

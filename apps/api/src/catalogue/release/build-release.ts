@@ -59,8 +59,8 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     private readonly people: People,
     private readonly staffLog: StaffLog,
     private readonly jobs: JobQueue,
-    private readonly released: RevisionReleasedSteps,
     private readonly inShop: KitInShopSteps,
+    private readonly released: RevisionReleasedSteps,
     private readonly clock: Clock,
   ) {}
 
@@ -149,12 +149,12 @@ export class BuildRelease implements JobHandler<typeof buildRelease.payload> {
     await this.comparisons.ofRelease(tx, revisionId);
     await this.jobs.add(tx, estimatePrint, { revisionId }, { key: `estimate-print:${revisionId}` });
     await kit.update({ newestRevisionId: revision.id, updatedAt: now }, { transaction: tx });
+    if (kit.isListed) await this.inShop.run(tx, { kitId: kit.id });
     await this.released.run(tx, {
       revisionId,
       label: revision.label,
       kit: { id: kit.id, slug: kit.slug, name: kit.name },
     });
-    if (kit.isListed) await this.inShop.run(tx, { kitId: kit.id });
     const person = revision.releasedBy ? await this.people.byId(revision.releasedBy, tx) : null;
     await this.staffLog.record(tx, person && toSignedIn(person), {
       what: 'released a revision',

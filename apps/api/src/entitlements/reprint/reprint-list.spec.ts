@@ -275,12 +275,19 @@ describe('a reprint list', () => {
 
   it('is told line by line in an e-mail: what to print, how often, and the reasons', () => {
     expect(reprintLines(listOf(chain(), 2, from0))).toEqual([
-      { code: 'A-01', name: 'Part A-01', quantity: 2, why: 'in Mk 1.2 · in Mk 1.1' },
-      { code: 'G-01', name: 'Part G-01', quantity: 2, why: 'in Mk 1.1' },
+      {
+        code: 'A-01',
+        name: 'Part A-01',
+        quantity: 2,
+        isOnlyIfItTroubles: false,
+        why: 'in Mk 1.2 · in Mk 1.1',
+      },
+      { code: 'G-01', name: 'Part G-01', quantity: 2, isOnlyIfItTroubles: false, why: 'in Mk 1.1' },
     ]);
     expect(reprintLines(listOf(chain(), 1, from0)).at(-1)).toMatchObject({
       code: 'B-01',
-      why: 'Reprint if it troubles you: in Mk 1.1',
+      isOnlyIfItTroubles: true,
+      why: 'in Mk 1.1',
     });
   });
 

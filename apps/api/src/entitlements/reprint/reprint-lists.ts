@@ -59,7 +59,7 @@ export class ReprintLists {
   }
 
   async listOf(kitId: string, toRevisionId: string, printed: PrintedState): Promise<ReprintList> {
-    return (await this.start(kitId, toRevisionId)).of(printed);
+    return (await this.open(kitId, toRevisionId)).of(printed);
   }
 
   /**
@@ -71,7 +71,7 @@ export class ReprintLists {
     toRevisionId: string,
     readers: readonly Reader[],
   ): AsyncGenerator<{ reader: Reader; list: ReprintList }> {
-    const lists = await this.start(kitId, toRevisionId);
+    const lists = await this.open(kitId, toRevisionId);
     for (let at = 0; at < readers.length; at += CHUNK) {
       const chunk = readers.slice(at, at + CHUNK);
       const states = await this.statesOf(kitId, chunk);
@@ -80,7 +80,8 @@ export class ReprintLists {
     }
   }
 
-  private async start(kitId: string, toRevisionId: string) {
+  /** Lists to one revision; what differs between two revisions is worked out once for all that are asked of it. */
+  async open(kitId: string, toRevisionId: string): Promise<ListsTo> {
     const revisions = await this.catalogue.revisionsOf(kitId);
     const to = revisions.find(({ id }) => id === toRevisionId);
     if (!to) throw notFound('revision');
@@ -122,7 +123,7 @@ export class ReprintLists {
 const nameOf = ({ personId, email }: Reader): string => personId ?? `mail:${email.toLowerCase()}`;
 
 /** Lists to one revision; what differs between two revisions is asked once. */
-class ListsTo {
+export class ListsTo {
   private readonly asked = new Map<string, Promise<ReadonlyMap<string, NetRow>>>();
 
   constructor(

@@ -6,6 +6,8 @@ export interface ReprintLine {
   readonly name: string;
   /** Pieces to print. */
   readonly quantity: number;
+  /** Then the old ones may stay where they do not trouble. */
+  readonly isOnlyIfItTroubles: boolean;
   readonly why: string;
 }
 
@@ -19,15 +21,13 @@ const lineOf = (part: ReprintPart): ReprintLine => ({
   code: part.code,
   name: part.clearance ? `${part.name}, in ${clearanceSigns[part.clearance]}` : part.name,
   quantity: part.advice === 'print' ? part.print : part.optional,
+  isOnlyIfItTroubles: part.advice === 'if-it-troubles',
   why: whyOf(part),
 });
 
-const whyOf = ({ advice, steps, whatDiffers }: ReprintPart): string => {
-  const reasons = [...new Set(steps.map(({ reason }) => reason).filter((reason) => reason !== ''))].join(
-    ' · ',
-  );
-  const why = reasons === '' ? sentence(whatDiffers) : reasons;
-  return advice === 'if-it-troubles' ? `Reprint if it troubles you${why && `: ${why}`}` : why;
+const whyOf = ({ steps, whatDiffers }: ReprintPart): string => {
+  const reasons = new Set(steps.map(({ reason }) => reason).filter((reason) => reason !== ''));
+  return reasons.size > 0 ? [...reasons].join(' · ') : sentence(whatDiffers);
 };
 
 const sentence = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);

@@ -88,6 +88,7 @@ export function ShopLayout() {
         footer={
           <Footer label={shopTexts.footer}>
             <TextLink to={paths.journal.to()}>{shopTexts.journal}</TextLink>
+            <TextLink to={paths.news.to()}>{shopTexts.news}</TextLink>
             <TextLink to={paths.cautions.to()}>{shopTexts.cautions}</TextLink>
           </Footer>
         }

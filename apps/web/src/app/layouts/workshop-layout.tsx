@@ -31,6 +31,7 @@ const entries: readonly (HeaderEntry & { needs: Permission; unless?: Permission 
   { to: paths.workshop.holders.to(), label: workshopTexts.holders, needs: 'buyers:read' },
   { to: paths.workshop.fit.to(), label: workshopTexts.fit, needs: 'fit:read' },
   { to: paths.workshop.journal.to(), label: workshopTexts.journal, needs: 'journal:write' },
+  { to: paths.workshop.letters.to(), label: workshopTexts.letters, needs: 'letters:read' },
   { to: paths.workshop.people.to(), label: workshopTexts.people, needs: 'people:read' },
 ];
 

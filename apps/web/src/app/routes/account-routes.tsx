@@ -58,11 +58,11 @@ export const accountRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/entitlements/reprint.page.js')).ReprintPage),
   },
   {
-    path: paths.shelfFit.path,
-    element: lazyPage(async () => (await import('../../features/fit/report-fit.page.js')).ReportFitPage),
-  },
-  {
     path: paths.tuner.path,
     element: lazyPage(async () => (await import('../../features/entitlements/tuner.page.js')).TunerPage),
+  },
+  {
+    path: paths.shelfFit.path,
+    element: lazyPage(async () => (await import('../../features/fit/report-fit.page.js')).ReportFitPage),
   },
 ];

@@ -130,26 +130,6 @@ export const workshopRoutes: RouteObject[] = [
     element: lazyPage(async () => (await import('../../features/workshop/holders.page.js')).HoldersPage),
   },
   {
-    path: paths.workshop.fit.path,
-    element: lazyPage(async () => (await import('../../features/fit/fit.page.js')).WorkshopFitPage),
-  },
-  {
-    path: paths.workshop.fitReport.path,
-    element: lazyPage(async () => (await import('../../features/fit/fit-report.page.js')).FitReportPage),
-  },
-  {
-    path: paths.workshop.journal.path,
-    element: lazyPage(async () => (await import('../../features/journal/posts.page.js')).PostsPage),
-  },
-  {
-    path: paths.workshop.newPost.path,
-    element: lazyPage(async () => (await import('../../features/journal/new-post.page.js')).NewPostPage),
-  },
-  {
-    path: paths.workshop.post.path,
-    element: lazyPage(async () => (await import('../../features/journal/edit-post.page.js')).EditPostPage),
-  },
-  {
     path: paths.workshop.supporters.path,
     element: lazyPage(
       async () => (await import('../../features/supporters/supporters.page.js')).SupportersPage,
@@ -172,6 +152,44 @@ export const workshopRoutes: RouteObject[] = [
   {
     path: paths.workshop.plan.path,
     element: lazyPage(async () => (await import('../../features/supporters/plan.page.js')).PlanPage),
+  },
+  {
+    path: paths.workshop.fit.path,
+    element: lazyPage(async () => (await import('../../features/fit/fit.page.js')).WorkshopFitPage),
+  },
+  {
+    path: paths.workshop.fitReport.path,
+    element: lazyPage(async () => (await import('../../features/fit/fit-report.page.js')).FitReportPage),
+  },
+  {
+    path: paths.workshop.journal.path,
+    element: lazyPage(async () => (await import('../../features/journal/posts.page.js')).PostsPage),
+  },
+  {
+    path: paths.workshop.newPost.path,
+    element: lazyPage(async () => (await import('../../features/journal/new-post.page.js')).NewPostPage),
+  },
+  {
+    path: paths.workshop.post.path,
+    element: lazyPage(async () => (await import('../../features/journal/edit-post.page.js')).EditPostPage),
+  },
+  {
+    path: paths.workshop.letters.path,
+    element: lazyPage(async () => (await import('../../features/letters/letters.page.js')).LettersPage),
+  },
+  {
+    path: paths.workshop.newLetter.path,
+    element: lazyPage(async () => (await import('../../features/letters/new-letter.page.js')).NewLetterPage),
+  },
+  {
+    path: paths.workshop.deadAddresses.path,
+    element: lazyPage(
+      async () => (await import('../../features/letters/dead-addresses.page.js')).DeadAddressesPage,
+    ),
+  },
+  {
+    path: paths.workshop.letter.path,
+    element: lazyPage(async () => (await import('../../features/letters/letter.page.js')).WorkshopLetterPage),
   },
   {
     path: paths.workshop.people.path,

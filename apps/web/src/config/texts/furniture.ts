@@ -32,6 +32,6 @@ export const copyTexts = {
 
 export const progressTexts = { percent: (value: number) => `${value} %` };
 
-export const markdownTexts = { done: 'done', toDo: 'to do' };
-
 export const editorTexts = { preview: 'Preview', nothing: 'Nothing is written here.' };
+
+export const markdownTexts = { done: 'done', toDo: 'to do' };

@@ -16,6 +16,7 @@ export const shopTexts = {
   footer: 'About this shop',
   cautions: 'Cautions',
   journal: 'Journal',
+  news: 'News',
   printer: 'My printer',
 };
 

@@ -18,6 +18,7 @@ export const overviewTexts = {
     'coupon-low': ({ label, count }) => `${label} has ${count} ${count === 1 ? 'place' : 'places'} left`,
     'fit-report': ({ count }) =>
       count === 1 ? '1 fit report waits for an answer' : `${count} fit reports wait for an answer`,
+    letter: ({ label }) => `“${label}” is on its way`,
     'refused-file': ({ label, count }) =>
       `${label}: ${count} ${count === 1 ? 'file was' : 'files were'} refused`,
   } satisfies Record<Waiting['kind'], (one: Waiting) => string>,

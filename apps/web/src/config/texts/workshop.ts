@@ -16,6 +16,7 @@ export const workshopTexts = {
   holders: 'Holders',
   fit: 'Fit',
   journal: 'Journal',
+  letters: 'Letters',
   people: 'People',
   toShop: 'To the shop',
   footer: 'About the workshop',

@@ -17,6 +17,7 @@ import { Heading } from '../../ui/text.js';
 import { PledgeSection } from '../supporters/pledge-section.js';
 import { AddressSection } from './address-section.js';
 import { useEnter } from './enter.js';
+import { LettersSection } from './letters-section.js';
 import { NameSection } from './name-section.js';
 import { OrdersSection } from './orders-section.js';
 import { PassphraseSection } from './passphrase-section.js';
@@ -66,6 +67,7 @@ export function AccountPage() {
       {person ? (
         <>
           <OrdersSection />
+          <LettersSection />
           <PrintersSection />
           <PledgeSection />
           <NameSection person={person} />

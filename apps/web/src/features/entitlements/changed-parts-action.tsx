@@ -1,5 +1,5 @@
 import { Box } from '@chakra-ui/react/box';
-import { useEffect, useState } from 'react';
+import { useEffect, useRef } from 'react';
 import { reprintTexts as texts } from '../../config/texts/reprint.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { bytes } from '../../lib/format.js';
@@ -28,19 +28,23 @@ export function ChangedPartsAction({ slug, revisionId, download }: ChangedPartsA
   const { run, fault, isRunning } = useAction('POST /shelf/:slug/changed-parts', [
     'GET /shelf/:slug/changed-parts',
   ]);
-  const [isWanted, setIsWanted] = useState(false);
+  // Pressed while it was not there yet: it is fetched as soon as it is.
+  const isWanted = useRef(false);
   const { start } = download;
   const sha256 = data?.file?.sha256;
   useEffect(() => {
-    if (!isWanted || sha256 === undefined) return;
-    setIsWanted(false);
+    if (!isWanted.current || sha256 === undefined) return;
+    isWanted.current = false;
     void start({ kitSlug: slug, revisionId, file: sha256 });
-  }, [isWanted, sha256, slug, revisionId, start]);
+  }, [sha256, slug, revisionId, start]);
 
   if (!data || data.parts === 0) return null;
   const ask = async () => {
     const outcome = await run({ params: { slug }, body: { revisionId } });
-    setIsWanted(outcome.isDone);
+    if (!outcome.isDone) return;
+    const { file } = outcome.data;
+    if (file) await start({ kitSlug: slug, revisionId, file: file.sha256 });
+    else isWanted.current = true;
   };
   const failed = data.state === 'failed' && data.fault ? { title: data.fault } : undefined;
   return (
@@ -57,7 +61,7 @@ export function ChangedPartsAction({ slug, revisionId, download }: ChangedPartsA
         <Box>
           <Button
             look="outline"
-            isBusy={isRunning || isWanted}
+            isBusy={isRunning}
             busyWords={shelfKitTexts.getting}
             onClick={() => void ask()}
           >

@@ -17,6 +17,7 @@ import { ShelfKitAnswer } from './shelf-kit-answer.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
 import { ShelfKitSections } from './shelf-kit-sections.js';
 import { useShelfDownload } from './use-download.js';
+import { WatchRevisions } from './watch-revisions.js';
 
 /** A download that has not ended yet is looked after for this long, so that the page learns what is held. */
 const watchedMs = 10 * 60_000;
@@ -63,7 +64,12 @@ function Kit({ kit }: { kit: ShelfKit }) {
             <ReprintSection kit={kit} download={download} />
           </>
         }
-        aside={<ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />}
+        aside={
+          <>
+            <ShelfKitActions kit={kit} download={download} onPrinted={setPrinted} />
+            <WatchRevisions slug={kit.slug} />
+          </>
+        }
         block={
           <TitleBlock
             columns={2}

@@ -11,6 +11,7 @@ import { Band } from '../../ui/sheet.js';
 import { SkeletonLines } from '../../ui/skeleton-lines.js';
 import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
+import { usePrinters } from '../bench/use-printers.js';
 import { OwnReports } from './own-reports.js';
 import { ReportForm } from './report-form.js';
 
@@ -18,6 +19,8 @@ import { ReportForm } from './report-form.js';
 export function ReportFitPage() {
   const { slug = '' } = useParams();
   const state = useSignInState();
+  // The form begins with the printer's nozzle and filament.
+  const { isLoading } = usePrinters();
   const {
     data: kit,
     fault,
@@ -48,7 +51,7 @@ export function ReportFitPage() {
             rowGap="12"
             alignItems="start"
           >
-            <ReportForm kit={kit} />
+            {isLoading ? <SkeletonLines lines={6} /> : <ReportForm kit={kit} />}
             <Box as="section">
               <OwnReports slug={slug} />
             </Box>

@@ -1,6 +1,6 @@
 import type { QuarterSummary } from '@windchest/contracts';
 import { useState } from 'react';
-import { quarterTexts as texts, quartersTexts } from '../../config/texts/workshop-ledger.js';
+import { quarterTexts as texts, quartersTexts } from '../../config/texts/workshop-tax.js';
 import { useAction } from '../../lib/use-action.js';
 import { Button } from '../../ui/button.js';
 import { ConfirmDialog } from '../../ui/confirm-dialog.js';

@@ -3,7 +3,7 @@ import { rateBody } from '@windchest/contracts';
 import { useMemo, useState } from 'react';
 import { useForm } from 'react-hook-form';
 import type { z } from 'zod';
-import { ratesTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { ratesTexts as texts } from '../../config/texts/workshop-tax.js';
 import { showFieldFaults } from '../../lib/form-faults.js';
 import { formResolver } from '../../lib/form-resolver.js';
 import { useSession } from '../../lib/session.js';

@@ -1,7 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import type { UnclearLocation } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
-import { locationsTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { locationsTexts as texts } from '../../config/texts/workshop-tax.js';
 import { date, price } from '../../lib/format.js';
 import { countryName } from '../../lib/workshop-format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';

@@ -1,7 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import type { QuarterSummary } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
-import { quarterTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { quarterTexts as texts } from '../../config/texts/workshop-tax.js';
 import { date } from '../../lib/format.js';
 import { countryName } from '../../lib/workshop-format.js';
 import { TextLink } from '../../ui/link.js';

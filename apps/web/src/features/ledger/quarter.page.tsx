@@ -1,7 +1,7 @@
 import { Box } from '@chakra-ui/react/box';
 import type { QuarterSummary, SummaryRow } from '@windchest/contracts';
 import { useParams } from 'react-router-dom';
-import { quarterTexts as texts, quartersTexts } from '../../config/texts/workshop-ledger.js';
+import { quarterTexts as texts, quartersTexts } from '../../config/texts/workshop-tax.js';
 import { apiAddress } from '../../lib/api-address.js';
 import { number, price } from '../../lib/format.js';
 import { countryName, day } from '../../lib/workshop-format.js';

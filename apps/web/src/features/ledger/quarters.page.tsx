@@ -1,6 +1,6 @@
 import type { OutputOf } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
-import { quartersTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { quartersTexts as texts } from '../../config/texts/workshop-tax.js';
 import { date, number } from '../../lib/format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';
 import { EmptyState } from '../../ui/empty-state.js';

@@ -1,7 +1,8 @@
 import { Box } from '@chakra-ui/react/box';
 import type { OutputOf } from '@windchest/contracts';
 import { useState } from 'react';
-import { ledgerTexts, ratesTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { ledgerTexts } from '../../config/texts/workshop-ledger.js';
+import { ratesTexts as texts } from '../../config/texts/workshop-tax.js';
 import { dateTime } from '../../lib/format.js';
 import { countryName, day } from '../../lib/workshop-format.js';
 import { useEndpoint } from '../../lib/use-endpoint.js';

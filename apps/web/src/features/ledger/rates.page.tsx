@@ -1,7 +1,8 @@
 import { Box } from '@chakra-ui/react/box';
 import type { CountryRates } from '@windchest/contracts';
 import { useMemo } from 'react';
-import { ledgerTexts, ratesTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { ledgerTexts } from '../../config/texts/workshop-ledger.js';
+import { ratesTexts as texts } from '../../config/texts/workshop-tax.js';
 import { number } from '../../lib/format.js';
 import { countryName, day } from '../../lib/workshop-format.js';
 import { useSession } from '../../lib/session.js';

@@ -1,6 +1,6 @@
 import { Box } from '@chakra-ui/react/box';
 import type { SummaryRow } from '@windchest/contracts';
-import { quarterTexts as texts, ratesTexts } from '../../config/texts/workshop-ledger.js';
+import { quarterTexts as texts, ratesTexts } from '../../config/texts/workshop-tax.js';
 import { number, price } from '../../lib/format.js';
 import { countryName } from '../../lib/workshop-format.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';

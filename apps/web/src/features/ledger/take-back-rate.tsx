@@ -1,6 +1,6 @@
 import type { CountryRates } from '@windchest/contracts';
 import { useState } from 'react';
-import { ratesTexts as texts } from '../../config/texts/workshop-ledger.js';
+import { ratesTexts as texts } from '../../config/texts/workshop-tax.js';
 import { countryName, day } from '../../lib/workshop-format.js';
 import { useAction } from '../../lib/use-action.js';
 import { Button } from '../../ui/button.js';

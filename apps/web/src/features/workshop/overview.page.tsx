@@ -22,6 +22,7 @@ const signs: Record<Waiting['kind'], SignName> = {
   'coupon-low': 'note',
   'refused-file': 'stop',
   'fit-report': 'wait',
+  letter: 'wait',
 };
 
 const WaitingList = ({ waiting }: { waiting: readonly Waiting[] }) =>

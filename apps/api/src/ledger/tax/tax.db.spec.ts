@@ -1,10 +1,7 @@
-import { randomUUID } from 'node:crypto';
-import { strFromU8, unzipSync } from 'fflate';
-import { selectRows } from '../database/rows.js';
-import { putKitOnSale, type KitOnSale } from '../testing/kit-on-sale.js';
-import { startPaymentShop, type CheckoutOptions, type PaymentShop } from '../testing/payment-shop.js';
-import { signInAs } from '../testing/sign-in.js';
-import type { Browser } from '../testing/test-app.js';
+import { selectRows } from '../../database/rows.js';
+import { signInAs } from '../../testing/sign-in.js';
+import { startSoldShop, unclearBuyer, type SoldShop } from '../../testing/sold-shop.js';
+import type { Browser } from '../../testing/test-app.js';
 
 type Amount = { minor: number; currency: string };
 type Row = {
@@ -16,65 +13,15 @@ type Row = {
   gross: Amount;
 };
 
-describe('the books of the ledger', () => {
-  let shop: PaymentShop;
-  let knot: KitOnSale;
-  let curlew: KitOnSale;
+describe('tax', () => {
+  let sold: SoldShop;
+  let shop: SoldShop['shop'];
   let bookkeeper: Browser;
-  const orders: Record<string, string> = {};
-
-  const buy = async (name: string, licenceId: string, options: CheckoutOptions, pay = options.country) => {
-    const placed = await shop.checkout([licenceId], { email: `${name}@mail.example`, ...options });
-    await shop.pay(placed.paymentUrl, pay);
-    await shop
-      .browser()
-      .post(`/api/orders/${placed.orderId}/refresh`)
-      .query({ key: placed.orderKey })
-      .expect(200);
-    orders[name] = placed.orderId;
-  };
-  const get = async (path: string, query: object = {}) =>
-    (await bookkeeper.get(`/api/workshop/ledger/${path}`).query(query).expect(200)).body;
-  const giveBack = async (name: string, amountMinor: number) => {
-    const [line] = await selectRows<{ id: string }>(
-      shop.database,
-      'SELECT id FROM order_lines WHERE order_id = :orderId',
-      { orderId: orders[name] },
-    );
-    await bookkeeper
-      .post(`/api/workshop/orders/${orders[name]}/refunds`)
-      .send({
-        lines: [{ orderLineId: line?.id, amountMinor, keepsEntitlement: true }],
-        reason: 'A present from the workshop.',
-        attempt: randomUUID(),
-      })
-      .expect(202);
-    await shop.drain();
-  };
-
+  let orders: SoldShop['orders'];
+  const get: SoldShop['get'] = (path, query) => sold.get(path, query);
   beforeAll(async () => {
-    shop = await startPaymentShop({}, { webhooks: false });
-    knot = await putKitOnSale(shop, { name: 'Knot', priceMinor: 1999 });
-    curlew = await putKitOnSale(shop, { name: 'Curlew', priceMinor: 2400 });
-    bookkeeper = await signInAs(shop, 'bookkeeper');
-    await buy('wren', knot.licenceId, { country: 'IT' });
-    await buy('tern', knot.licenceId, { country: 'FI' });
-    await buy('stint', curlew.licenceId, { country: 'DE' });
-    await buy('ruff', curlew.licenceId, { country: 'US' });
-    await buy('reedworks', curlew.licenceId, {
-      country: 'DE',
-      business: { name: 'Reed Works', address: 'Deichweg 3', vatNumber: 'DE123456789' },
-    });
-    // Declared in France, paid from Austria with a card of Spain.
-    const unclear = await shop.checkout([knot.licenceId], { email: 'dunlin@mail.example', country: 'FR' });
-    await shop.pay(unclear.paymentUrl, 'AT', 'ES');
-    await shop
-      .browser()
-      .post(`/api/orders/${unclear.orderId}/refresh`)
-      .query({ key: unclear.orderKey })
-      .expect(200);
-    orders['dunlin'] = unclear.orderId;
-    await giveBack('stint', 1000);
+    sold = await startSoldShop();
+    ({ shop, bookkeeper, orders } = sold);
   });
   afterAll(() => shop.stop());
 
@@ -227,7 +174,7 @@ describe('the books of the ledger', () => {
         unclear: 0,
         totals: [{ gross: { minor: (await independent()).gross } }],
       });
-      await giveBack('dunlin', 1999);
+      await sold.giveBack('dunlin', 1999);
       expect(line((await get(path())).rows, 'consumer', 'ES')).toEqual([['21', 0, 0, 0]]);
 
       const clear = await selectRows<{ id: string }>(
@@ -245,148 +192,12 @@ describe('the books of the ledger', () => {
     });
   });
 
-  it('list payments and what went back, filtered and as CSV', async () => {
-    const all = await get('payments');
-    expect(all.total).toBe(8);
-    expect(await get('payments', { kind: 'refund' })).toMatchObject({
-      total: 2,
-      items: [{ amount: { minor: -1999 }, state: 'succeeded' }, { amount: { minor: -1000 } }],
-    });
-    expect(await get('payments', { search: 'stint' })).toMatchObject({ total: 2 });
-    const yesterday = new Date(shop.clock.now().getTime() - 86_400_000).toISOString().slice(0, 10);
-    expect((await get('payments', { to: yesterday })).total).toBe(0);
-    const csv = (await bookkeeper.get('/api/workshop/ledger/payments.csv').expect(200)).text;
-    expect(csv.trim().split('\r\n')).toHaveLength(9);
-    expect(csv).toContain(',-19.99,EUR,succeeded,');
-  });
-
-  it('tell sales by month, by country and by kit', async () => {
-    const sales = await get('sales', { months: 3 });
-    expect(sales.months).toHaveLength(3);
-    expect(sales.months.at(-1)).toMatchObject({
-      orders: 6,
-      gross: { minor: 12814 },
-      refunded: { minor: 2999 },
-    });
-    expect(sales.countries[0]).toMatchObject({ country: 'DE', orders: 2, gross: { minor: 4417 } });
-    expect(sales.kits).toMatchObject([
-      { kitId: curlew.kitId, sold: 3, gross: { minor: 6817 } },
-      { kitId: knot.kitId, sold: 3, gross: { minor: 5997 } },
-    ]);
-  });
-
-  describe('held against the payment service', () => {
-    const compare = async () => {
-      const today = shop.clock.now().toISOString().slice(0, 10);
-      const asked = await bookkeeper
-        .post('/api/workshop/ledger/reconciliations')
-        .send({ from: today, to: today })
-        .expect(202);
-      expect(asked.body).toMatchObject({ state: 'waiting', percent: 0 });
-      await shop.drain();
-      const path = `reconciliations/${asked.body.id}`;
-      return { ...(await get(path)), path };
-    };
-
-    it('agree when all is well', async () => {
-      const done = await compare();
-      expect(done).toMatchObject({ state: 'done', percent: 100, differences: 0, fault: null });
-      const sum = (kind: string) => done.sums.find((one: { kind: string }) => one.kind === kind);
-      expect(sum('payment')).toMatchObject({ here: { minor: 12814 }, there: { minor: 12814 }, count: 6 });
-      expect(sum('refund')).toMatchObject({ here: { minor: -2999 }, there: { minor: -2999 }, count: 2 });
-      expect(sum('payment').fees.minor).toBeGreaterThan(0);
-      expect((await get(`${done.path}/rows`)).total).toBe(8);
-    });
-
-    it('name every difference, on either side', async () => {
-      await shop.database.query('UPDATE orders SET total_minor = total_minor + 1 WHERE id = ?', {
-        replacements: [orders['wren']],
-      });
-      await shop.database.query("UPDATE orders SET payment_intent_id = 'pi_elsewhere' WHERE id = ?", {
-        replacements: [orders['tern']],
-      });
-      const done = await compare();
-      const { items } = await get(`${done.path}/rows`);
-      const differing = items.filter((row: { verdict: string }) => row.verdict !== 'agrees');
-      expect(differing.map((row: { verdict: string }) => row.verdict).sort()).toEqual(
-        expect.arrayContaining(['amount-differs', 'missing-here', 'missing-there']),
-      );
-      expect(done.differences).toBe(differing.length);
-      expect(differing.find((row: { verdict: string }) => row.verdict === 'amount-differs')).toMatchObject({
-        orderId: orders['wren'],
-        here: { minor: 2000 },
-        there: { minor: 1999 },
-      });
-      const missing = await get(`${done.path}/rows`, { verdict: 'missing-there' });
-      expect(missing).toMatchObject({ total: 1, items: [{ orderId: orders['tern'], there: null }] });
-      await bookkeeper
-        .post('/api/workshop/ledger/reconciliations')
-        .send({ from: '2026-02-01', to: '2026-01-01' })
-        .expect(422);
-    });
-  });
-
-  it('leave as a zip of a year, with everything in it', async () => {
-    const year = shop.clock.now().getUTCFullYear();
-    const asked = await bookkeeper.post('/api/workshop/ledger/exports').send({ year }).expect(202);
-    await bookkeeper.get(`/api/workshop/ledger/exports/${asked.body.id}/file`).expect(404);
-    await shop.drain();
-    const done = await get(`exports/${asked.body.id}`);
-    expect(done).toMatchObject({ state: 'done', percent: 100, year });
-    const answer = await bookkeeper
-      .get(`/api/workshop/ledger/exports/${asked.body.id}/file`)
-      .buffer(true)
-      .parse((response, done) => {
-        const chunks: Buffer[] = [];
-        response.on('data', (chunk: Buffer) => chunks.push(chunk));
-        response.on('end', () => done(null, Buffer.concat(chunks)));
-      })
-      .expect(200);
-    expect(answer.headers['content-type']).toBe('application/zip');
-    const files = unzipSync(new Uint8Array(answer.body as Buffer));
-    const records = (name: string) =>
-      strFromU8(files[name] ?? new Uint8Array())
-        .trim()
-        .split('\r\n');
-    expect(Object.keys(files).sort()).toEqual([
-      'READ-ME.txt',
-      'credit-notes.csv',
-      'disputes.csv',
-      'order-lines.csv',
-      'orders.csv',
-      'receipts.csv',
-      'refunds.csv',
-      'settled-countries.csv',
-      'tax-rates.csv',
-    ]);
-    expect(records('orders.csv')).toHaveLength(7);
-    expect(records('order-lines.csv')).toHaveLength(7);
-    expect(records('receipts.csv')).toHaveLength(7);
-    expect(records('credit-notes.csv')).toHaveLength(3);
-    expect(records('refunds.csv').join()).toContain('A present from the workshop.');
-    expect(records('settled-countries.csv')[1]).toContain(',FR,ES,21,EUR,16.52,3.47,');
-    expect(records('orders.csv').join()).toContain(
-      ',reverse-charge,Reed Works,DE123456789,no,EUR,20.17,0.00,20.17,0.00,',
-    );
-    expect(records('READ-ME.txt').join()).toContain('licensed adviser');
-    await bookkeeper
-      .post('/api/workshop/ledger/exports')
-      .send({ year: year + 1 })
-      .expect(422);
-  });
-
-  it('are closed quarter by quarter, and stand from then on', async () => {
+  it('is closed quarter by quarter, and stands from then on', async () => {
     const { year, quarter: number } = quarter();
     const path = `quarters/${year}/${number}`;
     const close = (browser: Browser) => browser.post(`/api/workshop/ledger/${path}/close`);
     expect((await close(bookkeeper).expect(409)).body.detail).toContain('is not over');
-    const unclear = await shop.checkout([knot.licenceId], { email: 'brent@mail.example', country: 'FR' });
-    await shop.pay(unclear.paymentUrl, 'AT', 'ES');
-    await shop
-      .browser()
-      .post(`/api/orders/${unclear.orderId}/refresh`)
-      .query({ key: unclear.orderKey })
-      .expect(200);
+    await sold.buy('brent', sold.knot, unclearBuyer);
 
     shop.clock.advance(100 * 86_400);
     const later = await signInAs(shop, 'bookkeeper');
