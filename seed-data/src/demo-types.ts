@@ -150,6 +150,16 @@ export interface DemoPledge {
   isEnding: boolean;
 }
 
+/** What somebody has printed of the revision they hold: all of it, but for these. */
+export interface DemoPrints {
+  buyerEmail: string;
+  kitSlug: string;
+  /** Codes of parts of which there is no piece yet. */
+  notYet: string[];
+  /** Pieces that are there of parts that are begun, by code. */
+  begun: { [code: string]: number };
+}
+
 export interface DemoFitReport {
   buyerEmail: string;
   kitSlug: string;
@@ -193,6 +203,7 @@ export interface DemoWorkshop {
   plans: DemoPlan[];
   pledges: DemoPledge[];
   posts: DemoPost[];
+  prints: DemoPrints[];
   fitReports: DemoFitReport[];
   newsReaders: string[];
   letters: DemoLetter[];

@@ -5,6 +5,7 @@ import { godwit } from './kits/godwit.js';
 import { teal } from './kits/teal.js';
 import { turnstone } from './kits/turnstone.js';
 import { fitReports } from './fit-reports.js';
+import { prints } from './prints.js';
 import { people, printers, purchases } from './people.js';
 import { plans, pledges } from './pledges.js';
 import { letters, newsReaders } from './letters.js';
@@ -52,6 +53,7 @@ export const demoWorkshop: DemoWorkshop = {
   plans,
   pledges,
   posts,
+  prints,
   fitReports,
   newsReaders,
   letters,

@@ -3,6 +3,7 @@ import { buy } from './load/buy.js';
 import { giveBack } from './load/give-back.js';
 import { draftKit, releaseRevision } from './load/load-kit.js';
 import { reportFit } from './load/report-fit.js';
+import { sayPrinted } from './load/say-printed.js';
 import { makePeople } from './load/make-people.js';
 import { beginPledge, makePlan } from './load/pledge.js';
 import { writeLetter } from './load/write-letter.js';
@@ -84,6 +85,8 @@ const main = async (): Promise<void> => {
 
   for (const report of demoWorkshop.fitReports)
     await reportFit(await signIn(report.buyerEmail), maker, report);
+
+  for (const one of demoWorkshop.prints) await sayPrinted(await signIn(one.buyerEmail), one);
 
   for (const kit of demoWorkshop.kits)
     for (const revision of kit.revisions.slice(1)) {

@@ -1,8 +1,7 @@
 import { z } from 'zod';
 import { clearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
-import { drawing } from './kits.js';
-import { differenceKind } from './workshop-revisions.js';
+import { reprintList } from './print-record.js';
 import { email, filamentColour, id, moment, pageOf, secret, sha256, slug, slugParams } from './values.js';
 import { rankVoice, room } from './voices.js';
 
@@ -33,6 +32,8 @@ export const shelfRevision = z.object({
   bundles: z.array(z.object({ clearance, bytes: z.int(), sha256 })),
   changeNotes: z.string(),
   isWithdrawn: z.boolean(),
+  /** What the workshop says about it; null where it stands. */
+  withdrawnReason: z.string().nullable(),
 });
 export const entitlementSource = z.enum(['purchase', 'pledge', 'gift', 'staff']);
 
@@ -63,19 +64,6 @@ export const shelfItem = z.object({
 });
 export type ShelfItem = z.output<typeof shelfItem>;
 
-/** How a part stands between the revision held and the newest one. */
-export const shelfPart = z.object({
-  code: z.string(),
-  name: z.string(),
-  quantity: z.int(),
-  /** Which one is compared; null where the part comes in one, or nothing is known of the reader's choice. */
-  clearance: clearance.nullable(),
-  difference: differenceKind,
-  mark: z.enum(['reprint needed', 'reprint if it troubles you']).nullable(),
-  reason: z.string(),
-  whatDiffers: z.string(),
-  drawing: drawing.nullable(),
-});
 export const shelfKit = shelfItem.extend({
   orderId: id.nullable(),
   /** Of the newest revision. */
@@ -84,9 +72,14 @@ export const shelfKit = shelfItem.extend({
     gauge: z.object({ code: z.string(), name: z.string() }).nullable(),
     /** What this person prints: said for this kit, else the habit of their printer. */
     chosen: clearance.nullable(),
+    /** What was said for this kit alone. */
+    said: clearance.nullable(),
+    /** The habit of their main printer, and what they call it. */
+    habit: z.object({ clearance, printer: z.string() }).nullable(),
   }),
   revisions: z.array(shelfRevision),
-  parts: z.array(shelfPart),
+  /** From what is printed, as far as it is known, to the newest revision. */
+  reprint: reprintList,
   documents: z.array(z.object({ sha256, fileName: z.string(), bytes: z.int() })),
   licenceTerms: z.string(),
   cautions: z.string(),
@@ -146,7 +139,7 @@ export const deliveryEndpoints = {
   }),
   'POST /shelf/:slug/held': endpoint({
     access: 'signed-in',
-    summary: 'Say which revision one has printed',
+    summary: 'Say that one has printed all of a revision',
     params: slugParams,
     body: z.object({ revisionId: id }),
     response: shelfKit,

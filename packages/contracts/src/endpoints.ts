@@ -9,6 +9,7 @@ import { workshopLetterEndpoints } from './letters.js';
 import { newsEndpoints } from './news.js';
 import { ledgerEndpoints } from './ledger.js';
 import { peopleEndpoints } from './people.js';
+import { printRecordEndpoints } from './print-record.js';
 import { refundEndpoints } from './refunds.js';
 import { printerEndpoints } from './printers.js';
 import { sessionEndpoints } from './session.js';
@@ -23,6 +24,11 @@ export const endpoints = {
   ...printerEndpoints,
   ...basketEndpoints,
   ...deliveryEndpoints,
+  ...printRecordEndpoints,
+  ...workshopKitEndpoints,
+  ...workshopSalesEndpoints,
+  ...fitEndpoints,
+  ...journalEndpoints,
   ...refundEndpoints,
   ...workshopKitEndpoints,
   ...workshopSalesEndpoints,

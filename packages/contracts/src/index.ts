@@ -10,6 +10,7 @@ export * from './session.js';
 export * from './kits.js';
 export * from './printers.js';
 export * from './basket.js';
+export * from './print-record.js';
 export * from './delivery.js';
 export * from './refunds.js';
 export * from './workshop-kits.js';

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { clearance } from './clearances.js';
+import { clearance, variantClearance } from './clearances.js';
 import { endpoint } from './endpoint.js';
 import { buildVolume, orientations, printSpec, sizeMm } from './kits.js';
 import { id, idParams, line, minor, slugParams } from './values.js';
@@ -63,6 +63,10 @@ export const printSheetPart = printShape.extend({
   orientation: z.enum(orientations),
   /** Its own settings, where they differ from the revision's. */
   printSpec: printSpec.nullable(),
+  /** Tells which clearance fits a printer: of no use to whom that is known. */
+  isGauge: z.boolean(),
+  /** The part in other clearances, tightest first; the shape above is its zero. */
+  variants: z.array(printShape.extend({ clearance: variantClearance })),
 });
 export type PrintSheetPart = z.output<typeof printSheetPart>;
 
@@ -98,8 +102,7 @@ export const printerCardFields = z.object({
     .min(1, 'Write down at least one filament.')
     .max(mostCardMaterials, 'Ten filaments are the most a card holds.')
     .refine(hasEachOnce, 'One filament stands here twice; keep one of the two.'),
-  /** What a gauge part told; null until one was printed. */
-  /** How the printer wants moving parts: with less room than drawn, as drawn, or with more. */
+  /** What a gauge part told; null until one was printed. How the printer wants moving parts: with less room than drawn, as drawn, or with more. */
   clearance: clearance.nullable(),
 });
 /** A card as a visitor's browser keeps it. */

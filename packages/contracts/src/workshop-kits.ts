@@ -27,6 +27,8 @@ import {
   offerAnswer,
   gateNames,
   waiverBody,
+  withdrawalBody,
+  withdrawalFacts,
   variantBody,
 } from './workshop-revisions.js';
 
@@ -246,5 +248,18 @@ export const workshopKitEndpoints = {
     params: inRevision,
     response: revisionDetail,
     status: 202,
+  }),
+  'GET /workshop/revisions/:revisionId/withdrawal': endpoint({
+    access: 'revisions:release',
+    summary: 'Whom withdrawing a revision concerns, and what the shop falls back to',
+    params: inRevision,
+    response: withdrawalFacts,
+  }),
+  'POST /workshop/revisions/:revisionId/withdrawal': endpoint({
+    access: 'revisions:release',
+    summary: 'Withdraw a released revision: nobody gets it any more, and whoever holds it is told why',
+    params: inRevision,
+    body: withdrawalBody,
+    response: revisionDetail,
   }),
 };

@@ -178,6 +178,20 @@ export const waiverBody = z.object({
     .max(500, 'Say it in 500 characters or fewer.'),
 });
 
+export const withdrawalBody = z.object({
+  reason: z
+    .string()
+    .trim()
+    .min(10, 'Say in at least 10 characters what is wrong with it.')
+    .max(500, 'Say it in 500 characters or fewer.'),
+});
+export const withdrawalFacts = z.object({
+  /** Who last fetched it or printed of it. */
+  holders: z.int(),
+  /** The newest revision that then stands; null where none does, and the kit goes off sale. */
+  fallsBackTo: z.string().nullable(),
+});
+
 export const releaseProgress = z.object({
   state: z.enum(['not-started', 'waiting', 'building', 'failed', 'done']),
   percent: z.int(),
@@ -191,6 +205,7 @@ export const revisionDetail = z.object({
   state: revisionState,
   createdAt: moment,
   releasedAt: moment.nullable(),
+  withdrawn: z.object({ at: moment, reason: z.string() }).nullable(),
   assemblyNotes: z.string(),
   changeNotes: z.string(),
   cautions: z.string(),

@@ -149,6 +149,16 @@ export type RevisionReleasedMessage = {
   stopLink?: string;
 };
 
+/** A revision that the reader holds was withdrawn; `newest` is the one to take instead, where there is one. */
+export type RevisionWithdrawnMessage = {
+  template: 'revision-withdrawn';
+  kit: string;
+  revision: string;
+  reason: string;
+  newest: string | null;
+  link: string;
+};
+
 /** `from` is the giver; without it the kits come from the workshop itself. `note` is the giver's own words. */
 export type GiftReceivedMessage = {
   template: 'gift-received';
@@ -217,6 +227,7 @@ export type EmailMessage =
   | PaymentDisputedMessage
   | StaffInviteMessage
   | RevisionReleasedMessage
+  | RevisionWithdrawnMessage
   | GiftReceivedMessage
   | PledgeMessage
   | FitAnsweredMessage

@@ -25,6 +25,7 @@ export type {
   ReprintRow,
   ResetPassphraseMessage,
   RevisionReleasedMessage,
+  RevisionWithdrawnMessage,
   SignInLinkMessage,
   StaffInviteMessage,
   TaxLine,

@@ -36,6 +36,8 @@ function contentOf(message: EmailMessage, workshop: EmailWorkshop): EmailContent
       return accountMails.staffInvite(message, workshop);
     case 'revision-released':
       return deliveryMails.revisionReleased(message);
+    case 'revision-withdrawn':
+      return deliveryMails.revisionWithdrawn(message);
     case 'gift-received':
       return deliveryMails.giftReceived(message, workshop);
     case 'pledge-began':

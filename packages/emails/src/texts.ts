@@ -220,6 +220,21 @@ export const texts = {
     stop: 'Stop mails about new revisions',
   },
 
+  revisionWithdrawn: {
+    subject: (kit: string, revision: string): string => `${kit} ${revision} is withdrawn`,
+    preheader: 'Why, and what to do about it.',
+    heading: (kit: string, revision: string): string => `${kit} ${revision} is withdrawn`,
+    body: (kit: string, revision: string): string =>
+      `You hold ${revision} of ${kit}. The workshop hands it out no more, and says why:`,
+    workshop: 'The workshop',
+    takeInstead: (revision: string, newest: string): string =>
+      `Print no more parts of ${revision}. Take ${newest} instead: your shelf says which pieces differ from what you have.`,
+    wait: (revision: string): string =>
+      `Print no more parts of ${revision}. There is no other revision at the moment; the next one comes to your shelf.`,
+    button: 'See what to do',
+    reason: (kit: string, revision: string): string => `You get this because you hold ${revision} of ${kit}.`,
+  },
+
   letter: {
     times: (quantity: number): string => `×${nbsp}${quantity}`,
     ifItTroubles: 'Reprint these only if the old ones trouble you:',

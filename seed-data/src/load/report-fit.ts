@@ -4,7 +4,7 @@ import type { ShopBrowser } from './shop-browser.js';
 interface ShelfAnswer {
   held: { id: string } | null;
   newest: { id: string };
-  parts: { code: string; difference: string }[];
+  reprint: { parts: { code: string }[] };
 }
 
 /** A buyer says how a part fits; where the demo has an answer, the maker gives it. */
@@ -14,7 +14,7 @@ export const reportFit = async (
   { buyerEmail: _, kitSlug, partIndex, answer, ...words }: DemoFitReport,
 ): Promise<void> => {
   const shelf = await buyer.get<ShelfAnswer>(`/shelf/${kitSlug}`);
-  const codes = shelf.parts.map(({ code }) => code).toSorted();
+  const codes = shelf.reprint.parts.map(({ code }) => code).toSorted();
   const { id } = await buyer.post<{ id: string }>(`/shelf/${kitSlug}/fit-reports`, {
     ...words,
     clearance: null,

@@ -1,14 +1,17 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { Clearance, FilamentColour, KitCard, RankVoice } from '@windchest/contracts';
+import type { Answer, Clearance, FilamentColour, KitCard, RankVoice } from '@windchest/contracts';
 import { Op } from 'sequelize';
 import type { Tx } from '../database/transactions.js';
-import { Differences, type ReprintRow } from './comparison/differences.js';
+import { ChangedBundles } from './changed-parts/changed-bundles.js';
+import { Differences } from './comparison/differences.js';
+import type { NetRow } from './comparison/net-rows.js';
 import { contentTypes } from './files/file-kind.js';
 import { Kit } from './kits/kit.model.js';
 import { rankOf } from './kits/rank.js';
 import { Licence } from './kits/licence.model.js';
 import { OfferedLicences, type OfferedLicence } from './kits/offered-licences.js';
+import { PrintSheets } from './print/print-sheets.js';
 import { ShopKits } from './kits/shop-kits.js';
 import { ReleasedBundles, type BundleFile, type ClearanceBundle } from './release/released-bundles.js';
 import { servable, type ServableFile } from './release/stored-file-of.js';
@@ -17,7 +20,7 @@ import { RevisionContents } from './revisions/revision-contents.js';
 import { Revision, type Room } from './revisions/revision.model.js';
 
 export { filamentHex } from './build-book/kit-shades.js';
-export type { BundleFile, OfferedLicence, ReprintRow, ServableFile };
+export type { BundleFile, NetRow, OfferedLicence, ServableFile };
 
 export interface KitFacts {
   readonly id: string;
@@ -31,6 +34,8 @@ export interface ReleasedRevision {
   readonly id: string;
   readonly kitId: string;
   readonly label: string;
+  readonly mark: number;
+  readonly issue: number;
   readonly releasedAt: Date;
   readonly bundleSha256: string;
   readonly bundleBytes: number;
@@ -38,6 +43,7 @@ export interface ReleasedRevision {
   readonly bundles: readonly ClearanceBundle[];
   readonly changeNotes: string;
   readonly isWithdrawn: boolean;
+  readonly withdrawnReason: string | null;
 }
 
 /** What a revision is meant to sound like. */
@@ -58,6 +64,8 @@ export class CatalogueReader {
     private readonly contents: RevisionContents,
     private readonly bundles: ReleasedBundles,
     private readonly changes: Differences,
+    private readonly sheets: PrintSheets,
+    private readonly changedBundles: ChangedBundles,
     private readonly shop: ShopKits,
   ) {}
 
@@ -163,7 +171,8 @@ export class CatalogueReader {
   async fileOf(revisionId: string, sha256: string): Promise<ServableFile | null> {
     if (!(await this.finalById(revisionId))) return null;
     const file = (await this.contents.filesOf(revisionId)).find((one) => one.sha256 === sha256);
-    if (!file) return null;
+    // Bundles of changed parts are files of their revision, too.
+    if (!file) return this.changedBundles.fileOf(revisionId, sha256);
     const { bytes, fileName, kind } = file;
     return servable('files', { sha256, bytes, fileName, contentType: contentTypes[kind] });
   }
@@ -201,15 +210,20 @@ export class CatalogueReader {
   }
 
   /**
-   * Part by part, what differs between a revision held (or none) and another one of the same kit, for
-   * somebody who prints in this clearance; where that is not known, in any of them.
+   * Part by part, what differs between a revision (or none) and another one of the same kit, net and with each
+   * step's mark, for somebody who prints in this clearance; where that is not known, in any of them.
    */
-  differences(
+  netDifferences(
     fromRevisionId: string | null,
     toRevisionId: string,
-    clearance: Clearance | null = null,
-  ): Promise<ReprintRow[]> {
-    return this.changes.reprintRows(fromRevisionId, toRevisionId, clearance);
+    clearance: Clearance | null,
+  ): Promise<NetRow[]> {
+    return this.changes.net(fromRevisionId, toRevisionId, clearance);
+  }
+
+  /** What a browser lays a released revision out on plates from. */
+  async printSheetOf(revisionId: string): Promise<Answer<'GET /kits/:slug/print'> | null> {
+    return (await this.finalById(revisionId)) && this.sheets.sheetOf(revisionId);
   }
 
   private async toReleased(revisions: readonly Revision[]): Promise<ReleasedRevision[]> {
@@ -240,9 +254,12 @@ const releasedFacts = (revision: Revision): Omit<ReleasedRevision, 'bundles'> =>
   id: revision.id,
   kitId: revision.kitId,
   label: revision.label,
+  mark: revision.mark,
+  issue: revision.issue,
   releasedAt: revision.releasedAt ?? revision.updatedAt,
   bundleSha256: revision.bundleSha256 ?? '',
   bundleBytes: revision.bundleBytes ?? 0,
   changeNotes: revision.changeNotes,
   isWithdrawn: revision.state === 'withdrawn',
+  withdrawnReason: revision.withdrawnReason,
 });

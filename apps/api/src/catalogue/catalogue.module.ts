@@ -3,6 +3,10 @@ import { SequelizeModule } from '@nestjs/sequelize';
 import { AccountsModule } from '../accounts/accounts.module.js';
 import { CatalogueReader } from './catalogue-reader.js';
 import { CatalogueWaiting } from './catalogue-waiting.js';
+import { BuildChangedBundle } from './changed-parts/build-changed-bundle.js';
+import { ChangedBundle } from './changed-parts/changed-bundle.model.js';
+import { ChangedBundles } from './changed-parts/changed-bundles.js';
+import { CollectChangedBundles } from './changed-parts/collect-changed-bundles.js';
 import { Comparison } from './comparison/comparison.js';
 import { Differences } from './comparison/differences.js';
 import { MeshComparisonRecord } from './comparison/mesh-comparison.model.js';
@@ -40,6 +44,7 @@ import { BuildRelease } from './release/build-release.js';
 import { RevisionReleasedSteps } from './release/revision-released-steps.js';
 import { ReleasedBundles } from './release/released-bundles.js';
 import { RequestRelease } from './release/request-release.js';
+import { RevisionWithdrawnSteps, WithdrawRevision } from './release/withdraw-revision.js';
 import { TidyDraft } from './release/tidy-draft.js';
 import { RevisionBundle } from './release/revision-bundle.model.js';
 import { ChangeRevision } from './revisions/change-revision.js';
@@ -68,6 +73,7 @@ import { StartRevision } from './revisions/start-revision.js';
       MeasurementRecord,
       MeshComparisonRecord,
       GateWaiver,
+      ChangedBundle,
     ]),
   ],
   controllers: [KitsController, WorkshopKitsController, RevisionsController],
@@ -109,6 +115,11 @@ import { StartRevision } from './revisions/start-revision.js';
     PrintSheets,
     KitsTooBig,
     RevisionReleasedSteps,
+    RevisionWithdrawnSteps,
+    WithdrawRevision,
+    ChangedBundles,
+    BuildChangedBundle,
+    CollectChangedBundles,
   ],
   // The measuring room writes what it finds through the records.
   exports: [
@@ -119,6 +130,8 @@ import { StartRevision } from './revisions/start-revision.js';
     MeshComparisons,
     PrintPlans,
     RevisionReleasedSteps,
+    RevisionWithdrawnSteps,
+    ChangedBundles,
   ],
 })
 export class CatalogueModule {}

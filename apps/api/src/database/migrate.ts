@@ -18,6 +18,7 @@ import * as gifts from './migrations/0015-gifts.js';
 import * as journal from './migrations/0016-journal.js';
 import * as fitReports from './migrations/0017-fit-reports.js';
 import * as letters from './migrations/0018-letters.js';
+import * as printRecord from './migrations/0019-print-record.js';
 
 const migrations: Record<string, { up: (database: QueryInterface) => Promise<void> }> = {
   '0001-people': people,
@@ -38,6 +39,7 @@ const migrations: Record<string, { up: (database: QueryInterface) => Promise<voi
   '0016-journal': journal,
   '0017-fit-reports': fitReports,
   '0018-letters': letters,
+  '0019-print-record': printRecord,
 };
 
 /**

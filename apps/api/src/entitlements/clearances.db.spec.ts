@@ -196,10 +196,12 @@ describe('a kit with a part in three clearances', () => {
     expect(await shelf()).toMatchObject({
       clearance: { hasVariants: true, gauge: { code: 'G-01', name: 'Tongue gauge' }, chosen: null },
       newest: { bundles: [{ clearance: 'minus' }, { clearance: 'zero' }, { clearance: 'plus' }] },
-      parts: [
-        { code: 'G-01', clearance: null },
-        { code: 'J-01', clearance: null },
-      ],
+      reprint: {
+        parts: [
+          { code: 'G-01', clearance: null },
+          { code: 'J-01', clearance: null },
+        ],
+      },
     });
     const wish = { kitSlug: slug, revisionId: first.id };
     const whole = (await buyer.post('/api/shelf/grants').send(wish).expect(201)).body;
@@ -260,14 +262,15 @@ describe('a kit with a part in three clearances', () => {
     const tongueFor = async (clearance: 'minus' | 'plus' | null) => {
       const { body } = await buyer.put(`/api/shelf/${slug}/clearance`).send({ clearance }).expect(200);
       expect((body as ShelfKit).clearance.chosen).toBe(clearance);
-      return (body as ShelfKit).parts.find((part) => part.code === 'J-01');
+      return (body as ShelfKit).reprint.parts.find((part) => part.code === 'J-01');
     };
     const { mark: needed, reason } = mark;
+    const steps = [{ revision: 'Mk 1.1', mark: needed, reason }];
     expect(await tongueFor('plus')).toMatchObject({
       clearance: 'plus',
       difference: 'changed',
       mark: needed,
-      reason,
+      steps,
     });
     expect(await tongueFor('minus')).toMatchObject({ clearance: 'minus', difference: 'same', mark: null });
     expect(await tongueFor(null)).toMatchObject({ clearance: null, difference: 'changed', mark: needed });

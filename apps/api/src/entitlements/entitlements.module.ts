@@ -16,11 +16,21 @@ import { GiftMail } from './gift-mail.js';
 import { GiveEntitlements } from './give-entitlements.js';
 import { Holdings } from './holdings.js';
 import { Holders } from './holders.js';
+import { ChangedParts } from './reprint/changed-parts.js';
+import { KeepPrintRecord } from './reprint/keep-print-record.js';
+import { PrintRecordController } from './reprint/print-record.controller.js';
+import { PrintRecord } from './reprint/print-record.model.js';
+import { PrintRecords } from './reprint/print-records.js';
+import { ReprintPlans } from './reprint/reprint-plans.js';
+import { ReprintLists } from './reprint/reprint-lists.js';
+import { OwnRevisions } from './own-revisions.js';
 import { PledgeEntitlements } from './pledge-entitlements.js';
 import { ReaderParts } from './reader-parts.js';
 import { ServeFile } from './serve-file.js';
 import { ShelfController } from './shelf.controller.js';
 import { Shelf } from './shelf.js';
+import { Withdrawals } from './withdrawals/withdrawals.js';
+import { WithdrawalsController } from './withdrawals/withdrawals.controller.js';
 import { SignedAddress } from './signed-address.js';
 
 @Module({
@@ -29,9 +39,9 @@ import { SignedAddress } from './signed-address.js';
     CatalogueModule,
     OrdersModule,
     SupportersModule,
-    SequelizeModule.forFeature([Entitlement, DownloadLink, Download]),
+    SequelizeModule.forFeature([Entitlement, DownloadLink, Download, PrintRecord]),
   ],
-  controllers: [ShelfController, DeliveryController],
+  controllers: [ShelfController, PrintRecordController, WithdrawalsController, DeliveryController],
   providers: [
     DownloadLinks,
     SignedAddress,
@@ -45,8 +55,15 @@ import { SignedAddress } from './signed-address.js';
     Shelf,
     Holders,
     Holdings,
+    PrintRecords,
+    ReprintLists,
+    KeepPrintRecord,
+    OwnRevisions,
+    ReprintPlans,
+    ChangedParts,
+    Withdrawals,
     ReaderParts,
   ],
-  exports: [Holdings, DownloadLinks, ReaderParts],
+  exports: [Holdings, DownloadLinks, ReaderParts, ReprintLists],
 })
 export class EntitlementsModule {}

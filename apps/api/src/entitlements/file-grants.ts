@@ -3,7 +3,7 @@ import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
 import type { Answer, Clearance } from '@windchest/contracts';
 import { Clock } from '../adapters/clock/clock.js';
-import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { CatalogueReader, type ReleasedRevision } from '../catalogue/catalogue-reader.js';
 import { InjectConfig, type Config } from '../config/config.js';
 import { newId } from '../database/columns.js';
 import { Transactions, type Tx } from '../database/transactions.js';
@@ -86,7 +86,8 @@ export class FileGrants {
       },
       entitlements,
     });
-    if (!decision.isAllowed) throw downloadRefusal(decision.why);
+    if (!decision.isAllowed)
+      throw decision.why === 'withdrawn' ? withdrawnRefusal(revision) : downloadRefusal(decision.why);
     const file = wish.file
       ? await this.catalogue.fileOf(revision.id, wish.file)
       : await this.catalogue.bundleFile(revision.id, wish.clearance);
@@ -140,7 +141,11 @@ interface FileFacts {
   fileName: string;
 }
 
-const sentences: Record<Extract<DownloadDecision, { isAllowed: false }>['why'], string> = {
+export const withdrawnRefusal = ({ label, withdrawnReason }: ReleasedRevision): Refusal =>
+  new Refusal('forbidden', `The workshop has withdrawn ${label}: ${withdrawnReason ?? ''}`.trim());
+
+type Why = Exclude<Extract<DownloadDecision, { isAllowed: false }>['why'], 'withdrawn'>;
+const sentences: Record<Why, string> = {
   'not-entitled': 'This kit is not on your shelf.',
   suspended: 'Downloads of this kit rest while its payment is in dispute.',
   ended: 'The right to this kit’s files has ended, for it was refunded.',
@@ -149,7 +154,6 @@ const sentences: Record<Extract<DownloadDecision, { isAllowed: false }>['why'], 
   'outside-pledge':
     'Your pledge has ended. What stays of it are the revisions on your shelf; this one is not among them.',
   'not-released': 'This revision is not released.',
-  withdrawn: 'The workshop has withdrawn this revision. Take the newest one instead.',
 };
 /** Why no file goes out, in a sentence. */
 export const downloadRefusal = (why: keyof typeof sentences): Refusal =>

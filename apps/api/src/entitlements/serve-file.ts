@@ -11,7 +11,7 @@ import type { SignedIn } from '../http/person.js';
 import { Refusal } from '../http/refusal.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
-import { browserMark, downloadRefusal } from './file-grants.js';
+import { browserMark, downloadRefusal, withdrawnRefusal } from './file-grants.js';
 import { covers } from './may-download.js';
 import { sendStored } from './send-stored.js';
 import { SignedAddress } from './signed-address.js';
@@ -54,6 +54,8 @@ export class ServeFile {
       throw downloadRefusal(entitlement.source === 'pledge' ? 'pledge-rests' : 'suspended');
     if (!download || !entitlement || !(await this.isStillTheirs(entitlement, download.revisionId)))
       throw new Refusal('forbidden', 'The right to this file has ended.');
+    const revision = await this.catalogue.revisionById(download.revisionId);
+    if (revision?.isWithdrawn) throw withdrawnRefusal(revision);
     const file: (ServableFile & Partial<BundleFile>) | null = download.isBundle
       ? await this.catalogue.bundleByHash(download.revisionId, download.sha256)
       : await this.catalogue.fileOf(download.revisionId, download.sha256);

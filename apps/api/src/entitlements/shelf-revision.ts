@@ -12,4 +12,5 @@ export const toShelfRevision = (revision: ReleasedRevision): ShelfRevision => ({
   bundles: [...revision.bundles],
   changeNotes: revision.changeNotes,
   isWithdrawn: revision.isWithdrawn,
+  withdrawnReason: revision.withdrawnReason,
 });

@@ -3,14 +3,18 @@ import { InjectConnection, InjectModel } from '@nestjs/sequelize';
 import type { Answer, Clearance } from '@windchest/contracts';
 import type { Sequelize } from 'sequelize';
 import { Clock } from '../adapters/clock/clock.js';
-import { CatalogueReader, type ReleasedRevision } from '../catalogue/catalogue-reader.js';
+import { PrinterCards } from '../accounts/printers/printer-cards.js';
+import { CatalogueReader } from '../catalogue/catalogue-reader.js';
 import { selectRows } from '../database/rows.js';
+import { Transactions } from '../database/transactions.js';
 import type { SignedIn } from '../http/person.js';
 import { notFound, Refusal } from '../http/refusal.js';
 import { clearanceFor } from './clearance-for.js';
 import { Download } from './download.model.js';
 import { Entitlement } from './entitlement.model.js';
-import { covers } from './may-download.js';
+import { OwnRevisions } from './own-revisions.js';
+import { KeepPrintRecord } from './reprint/keep-print-record.js';
+import { ReprintLists } from './reprint/reprint-lists.js';
 import { toShelfRevision } from './shelf-revision.js';
 
 const PAGE_SIZE = 24;
@@ -23,6 +27,11 @@ export class Shelf {
     @InjectModel(Entitlement) private readonly entitlements: typeof Entitlement,
     @InjectModel(Download) private readonly downloads: typeof Download,
     private readonly catalogue: CatalogueReader,
+    private readonly printers: PrinterCards,
+    private readonly own: OwnRevisions,
+    private readonly lists: ReprintLists,
+    private readonly record: KeepPrintRecord,
+    private readonly transactions: Transactions,
     private readonly clock: Clock,
   ) {}
 
@@ -75,10 +84,11 @@ export class Shelf {
     if (kit && !item) await this.refuseResting(person, kit);
     if (!kit || !item) throw notFound('kit on your shelf');
     const best = await this.bestOf(person, kit.id);
-    const chosen = clearanceFor(best, null);
-    const mine = await this.revisionsOf(person, kit.id);
-    const [parts, clearances, documents, cautions, voicing, downloads, [licence]] = await Promise.all([
-      this.catalogue.differences(item.held?.id ?? null, item.newest.id, chosen),
+    const card = await this.printers.mainOf(person.id);
+    const chosen = clearanceFor(best, card);
+    const mine = await this.own.of(person.id, kit.id);
+    const [reprint, clearances, documents, cautions, voicing, downloads, [licence]] = await Promise.all([
+      this.lists.listFor(person, kit.id, item.newest.id),
       this.catalogue.clearancesOf(item.newest.id),
       this.catalogue.documentsOf(item.newest.id),
       this.catalogue.cautionsOf(item.newest.id),
@@ -92,9 +102,14 @@ export class Shelf {
       ...item,
       // The order behind a gift is the giver's own affair.
       orderId: best && best.source !== 'gift' ? best.orderId : null,
-      clearance: { ...clearances, chosen },
+      clearance: {
+        ...clearances,
+        chosen,
+        said: best?.clearance ?? null,
+        habit: card?.clearance ? { clearance: card.clearance, printer: card.name } : null,
+      },
       revisions: mine.covered.map(toShelfRevision),
-      parts,
+      reprint,
       documents,
       licenceTerms: licence?.terms ?? '',
       cautions,
@@ -125,10 +140,15 @@ export class Shelf {
     const revision = kit && (await this.catalogue.revisionsOf(kit.id)).find((one) => one.id === revisionId);
     if (!best || !revision) throw notFound('kit on your shelf');
     const now = this.clock.now();
-    await this.entitlements.update(
-      { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
-      { where: { personId: person.id, kitId: best.kitId, state: 'active' } },
-    );
+    const { clearance } = await this.lists.stateOf(person, kit.id);
+    const rows = await this.catalogue.netDifferences(null, revision.id, clearance);
+    await this.transactions.run(async (tx) => {
+      await this.entitlements.update(
+        { heldRevisionId: revision.id, heldSince: now, updatedAt: now },
+        { where: { personId: person.id, kitId: kit.id, state: 'active' }, transaction: tx },
+      );
+      await this.record.fill(tx, { personId: person.id, kitId: kit.id }, rows, revision.id, clearance);
+    });
     return this.read(person, slug);
   }
 
@@ -155,8 +175,7 @@ export class Shelf {
   ): Promise<Answer<'GET /shelf'>['items'][number] | null> {
     const best = await this.bestOf(person, kitId);
     const [kit] = await this.catalogue.kitsByIds([kitId]);
-    const { all, covered, active, heldRevisionId } = await this.revisionsOf(person, kitId);
-    const newest = covered.find((one) => !one.isWithdrawn);
+    const { all, active, newest, heldRevisionId } = await this.own.of(person.id, kitId);
     if (!best || !kit || !newest) return null;
     const held = all.find((one) => one.id === heldRevisionId);
     const beyond = all.find((one) => !one.isWithdrawn);
@@ -178,25 +197,6 @@ export class Shelf {
       held: held ? toShelfRevision(held) : null,
       newest: toShelfRevision(newest),
       newerNotIncluded: beyond && beyond.id !== newest.id ? beyond.label : null,
-    };
-  }
-
-  /** A kit's revisions, those of them that are theirs, and the one held, by whatever right it was fetched. */
-  private async revisionsOf(person: SignedIn, kitId: string): Promise<OwnRevisions> {
-    const mine = await this.entitlements.findAll({
-      where: { personId: person.id, kitId },
-      order: [['createdAt', 'ASC']],
-    });
-    const active = mine.filter((one) => one.state === 'active');
-    const all = await this.catalogue.revisionsOf(kitId);
-    const [held] = mine
-      .filter((one) => one.heldSince !== null)
-      .sort((a, b) => (b.heldSince?.getTime() ?? 0) - (a.heldSince?.getTime() ?? 0));
-    return {
-      all,
-      covered: all.filter(({ releasedAt }) => active.some((one) => covers(one, releasedAt))),
-      active,
-      heldRevisionId: held?.heldRevisionId ?? null,
     };
   }
 
@@ -225,10 +225,3 @@ export class Shelf {
 }
 
 type Resting = Pick<Answer<'GET /shelf'>, 'resting' | 'restingWithPledge'>;
-
-interface OwnRevisions {
-  readonly all: ReleasedRevision[];
-  readonly covered: ReleasedRevision[];
-  readonly active: Entitlement[];
-  readonly heldRevisionId: string | null;
-}

@@ -98,7 +98,7 @@ export class ReportFit {
   private async partOf(kit: KitFacts, { revisionId, partCode }: Body): Promise<{ name: string }> {
     const revision = await this.catalogue.revisionById(revisionId);
     if (!revision || revision.kitId !== kit.id) throw notFound('revision of this kit');
-    const parts = await this.catalogue.differences(null, revision.id);
+    const parts = await this.catalogue.netDifferences(null, revision.id, null);
     const part = parts.find(({ code }) => code === partCode);
     if (!part)
       throw new Refusal('validation-failed', `${kit.name} ${revision.label} has no part ${partCode}.`, {

@@ -58,13 +58,13 @@ export class Audience {
       leftOut,
       readers: {
         items: await Promise.all(
-          rows.map(async ({ reader, email, name, heldId, leftOut: reason }) => ({
+          rows.map(async ({ reader, personId, email, name, heldId, leftOut: reason }) => ({
             reader,
             email,
             name,
             held: labelOf(matter, heldId),
             leftOut: reason,
-            pieces: book && sumOf((await book.listOf(heldId)).map(({ quantity }) => quantity)),
+            pieces: book && sumOf((await book.listOf({ personId, heldId })).map(({ quantity }) => quantity)),
           })),
         ),
         page,

@@ -55,7 +55,7 @@ export class LetterDesk {
   }
 
   private async factsOf(
-    { name, heldId, linkId, newsReaderId }: Addressee,
+    { name, personId, heldId, linkId, newsReaderId }: Addressee,
     matter: LetterMatter,
     book: ReprintBook | null,
   ): Promise<ReaderFacts> {
@@ -63,7 +63,7 @@ export class LetterDesk {
     return {
       name,
       held: labelOf(matter, heldId),
-      toPrint: book ? await book.listOf(heldId) : [],
+      toPrint: book ? await book.listOf({ personId, heldId }) : [],
       downloadLink: linkId
         ? `${this.config.BASE_URL}/collect/${this.tokens.tokenOf('collect', linkId)}`
         : new URL(shelf, this.config.BASE_URL).href,

@@ -1,18 +1,19 @@
 import { Injectable } from '@nestjs/common';
-import { CatalogueReader, type ReprintRow } from '../catalogue/catalogue-reader.js';
+import { CatalogueReader } from '../catalogue/catalogue-reader.js';
+import { ReprintLists, type ListsTo } from '../entitlements/reprint/reprint-lists.js';
+import { reprintLines, type ReprintLine } from '../entitlements/reprint/reprint-words.js';
 
-export interface ToPrint {
-  readonly code: string;
-  readonly name: string;
-  readonly quantity: number;
-  readonly isOnlyIfItTroubles: boolean;
-  /** The maker's reason, else what differs. */
-  readonly why: string;
+export type ToPrint = ReprintLine;
+
+/** Whose list: what an account says of its prints, else what is held counts as printed. */
+export interface BookReader {
+  readonly personId: string | null;
+  readonly heldId: string | null;
 }
 
 export interface ReprintBook {
-  /** What one reader has to print to come from the revision held (null: none) to the letter's one. */
-  listOf(heldRevisionId: string | null): Promise<readonly ToPrint[]>;
+  /** What one reader has to print for the letter's revision. */
+  listOf(reader: BookReader): Promise<readonly ToPrint[]>;
   /** Those of the revisions whose holders have nothing to print. */
   needingNothing(heldRevisionIds: readonly string[]): Promise<string[]>;
 }
@@ -20,35 +21,34 @@ export interface ReprintBook {
 /** Reprint lists for readers of letters; each difference of two revisions is worked out once for a book. */
 @Injectable()
 export class ReprintBooks {
-  constructor(private readonly catalogue: CatalogueReader) {}
+  constructor(
+    private readonly catalogue: CatalogueReader,
+    private readonly lists: ReprintLists,
+  ) {}
 
   open(toRevisionId: string): ReprintBook {
-    const known = new Map<string | null, Promise<readonly ToPrint[]>>();
-    const listOf = (held: string | null): Promise<readonly ToPrint[]> => {
-      const list =
-        known.get(held) ?? this.catalogue.differences(held, toRevisionId).then((rows) => toPrint(rows));
-      known.set(held, list);
-      return list;
+    let opened: Promise<{ kitId: string; lists: ListsTo } | null> | undefined;
+    const book = () => (opened ??= this.listsTo(toRevisionId));
+    const ofHeld = async (heldRevisionId: string | null): Promise<readonly ToPrint[]> => {
+      const found = await book();
+      if (!found) return [];
+      return reprintLines(await found.lists.of({ heldRevisionId, clearance: null, record: new Map() }));
     };
     return {
-      listOf,
+      listOf: async ({ personId, heldId }) => {
+        const found = personId === null ? null : await book();
+        if (!found || personId === null) return ofHeld(heldId);
+        return reprintLines(await found.lists.of(await this.lists.stateOf({ id: personId }, found.kitId)));
+      },
       needingNothing: async (heldIds) => {
-        const lists = await Promise.all(heldIds.map(async (id) => [id, await listOf(id)] as const));
-        return lists.filter(([, list]) => list.length === 0).map(([id]) => id);
+        const all = await Promise.all(heldIds.map(async (id) => [id, await ofHeld(id)] as const));
+        return all.filter(([, list]) => list.length === 0).map(([id]) => id);
       },
     };
   }
-}
 
-/** New parts and those marked as needed first, then those to print only if the old ones trouble. */
-export const toPrint = (rows: readonly ReprintRow[]): ToPrint[] =>
-  rows
-    .filter(({ difference, mark }) => difference === 'new' || mark !== null)
-    .map(({ code, name, quantity, difference, mark, reason, whatDiffers }) => ({
-      code,
-      name,
-      quantity,
-      isOnlyIfItTroubles: difference !== 'new' && mark === 'reprint if it troubles you',
-      why: reason || whatDiffers,
-    }))
-    .sort((a, b) => Number(a.isOnlyIfItTroubles) - Number(b.isOnlyIfItTroubles));
+  private async listsTo(revisionId: string): Promise<{ kitId: string; lists: ListsTo } | null> {
+    const revision = await this.catalogue.revisionById(revisionId);
+    return revision && { kitId: revision.kitId, lists: await this.lists.open(revision.kitId, revisionId) };
+  }
+}

@@ -2,7 +2,6 @@ import { recipientOf, returnPathOf } from './bounce-address.js';
 import { isDeadAddressReply } from './dead-addresses.js';
 import { readDeliveryReport } from './delivery-status.js';
 import { heldBetween } from './letter-matter.js';
-import { toPrint } from './reprint-book.js';
 
 const tokens = { sign: (text: string) => `signature of ${text}` };
 const id = '018f3a5e-7b1c-7def-8123-456789abcdef';
@@ -92,30 +91,4 @@ describe('revisions held between two', () => {
     ['3', '1', []],
     ['gone', null, []],
   ])('from %s to %s', (from, to, held) => expect(heldBetween(revisions, from, to)).toEqual(held));
-});
-
-describe('a reprint list', () => {
-  const row = {
-    name: 'x',
-    clearance: null,
-    quantity: 1,
-    whatDiffers: 'taller',
-    drawing: null,
-    reason: '',
-  } as const;
-  it('has what is needed and new first, then what is only for those it troubles, and nothing else', () => {
-    const list = toPrint([
-      { ...row, code: 'A-01', difference: 'changed', mark: 'reprint if it troubles you' },
-      { ...row, code: 'B-01', difference: 'changed', mark: 'reprint needed', reason: 'Tight' },
-      { ...row, code: 'C-01', difference: 'new', mark: null },
-      { ...row, code: 'D-01', difference: 'same', mark: null },
-      { ...row, code: 'E-01', difference: 'changed', mark: null },
-      { ...row, code: 'F-01', difference: 'dropped', mark: null },
-    ]);
-    expect(list.map(({ code, why, isOnlyIfItTroubles }) => [code, why, isOnlyIfItTroubles])).toEqual([
-      ['B-01', 'Tight', false],
-      ['C-01', 'taller', false],
-      ['A-01', 'taller', true],
-    ]);
-  });
 });

@@ -51,7 +51,10 @@ export class TellOfRevision implements JobHandler<typeof tellOfRevision.payload>
         const from = holding?.heldRevisionId ? labels.get(holding.heldRevisionId) : undefined;
         // Who never fetched the files gets the newest revision whenever they do.
         if (!holding || !person?.verifiedAt || !from || holding.heldRevisionId === revision.id) continue;
-        const list = await book.listOf(holding.heldRevisionId);
+        const list = await book.listOf({
+          personId: watcher.personId,
+          heldId: holding.heldRevisionId,
+        });
         await this.mails.add(tx, {
           to: person.email,
           key: `revision:${revision.id}:${watcher.id}`,

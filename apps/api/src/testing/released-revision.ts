@@ -39,8 +39,8 @@ export const putOnShelf = (
 ): Promise<number> =>
   touchRows(
     shop.database,
-    `INSERT INTO entitlements (id, person_id, email, kit_id, source, held_revision_id, created_at, updated_at)
-     VALUES (:id, :personId, :email, :kitId, 'staff', :heldRevisionId, :now, :now)`,
+    `INSERT INTO entitlements (id, person_id, email, kit_id, source, held_revision_id, held_since, created_at, updated_at)
+     VALUES (:id, :personId, :email, :kitId, 'staff', :heldRevisionId, IF(:heldRevisionId IS NULL, NULL, :now), :now, :now)`,
     {
       id: newId(),
       personId: person.id,

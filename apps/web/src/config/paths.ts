@@ -37,6 +37,7 @@ export const paths = {
   collect: route('/collect/:token'),
   shelf: route('/shelf'),
   shelfKit: route('/shelf/:slug'),
+  shelfReprint: route('/shelf/:slug/reprint'),
   tuner: route('/shelf/:slug/tuner'),
   shelfFit: route('/shelf/:slug/fit'),
   cautions: route('/cautions'),

@@ -225,6 +225,17 @@ export const sampleMessages: readonly { title: string; message: EmailMessage }[]
     },
   },
   {
+    title: 'A revision withdrawn',
+    message: {
+      template: 'revision-withdrawn',
+      kit: 'Curlew',
+      revision: 'Mk 1.3',
+      reason: 'The foot breaks when the bellows are full. Do not play it standing.',
+      newest: 'Mk 1.2',
+      link: 'https://saltmarsh.example/shelf/curlew',
+    },
+  },
+  {
     title: 'Gift',
     message: {
       template: 'gift-received',

@@ -4,6 +4,7 @@ import type {
   GiftReceivedMessage,
   NewDownloadLinkMessage,
   RevisionReleasedMessage,
+  RevisionWithdrawnMessage,
 } from '../email-message.js';
 import { greetedName } from '../plain-text.js';
 import { texts } from '../texts.js';
@@ -54,6 +55,25 @@ export function revisionReleased(message: RevisionReleasedMessage): EmailContent
     blocks: [say(texts.hello(greetedName(message.name))), ...whatChanges],
     reason: words.reason(message.kit),
     stop: message.stopLink === undefined ? undefined : { label: words.stop, link: message.stopLink },
+  };
+}
+
+export function revisionWithdrawn(message: RevisionWithdrawnMessage): EmailContent {
+  const words = texts.revisionWithdrawn;
+  const { kit, reason } = message;
+  const revision = texts.unbroken(message.revision);
+  const newest = message.newest === null ? null : texts.unbroken(message.newest);
+  return {
+    subject: words.subject(kit, revision),
+    preheader: words.preheader,
+    heading: words.heading(kit, revision),
+    blocks: [
+      say(words.body(kit, revision)),
+      { kind: 'quote', text: reason, by: words.workshop },
+      say(newest === null ? words.wait(revision) : words.takeInstead(revision, newest)),
+      { kind: 'button', label: words.button, link: message.link },
+    ],
+    reason: words.reason(kit, revision),
   };
 }
 

@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { InjectModel } from '@nestjs/sequelize';
-import type { PrinterCard } from '@windchest/contracts';
+import type { Clearance, PrinterCard } from '@windchest/contracts';
 import type { Tx } from '../../database/transactions.js';
 import { PrinterCardRecord } from './printer-card.model.js';
 
@@ -31,6 +31,16 @@ export class PrinterCards {
       transaction: tx ?? null,
     });
     return records.map(toCard);
+  }
+
+  /** The clearance each prints in on their main printer; nothing for who has not said. */
+  async habitsOf(personIds: readonly string[]): Promise<Map<string, Clearance>> {
+    if (personIds.length === 0) return new Map();
+    const records = await this.cards.findAll({
+      attributes: ['personId', 'clearance'],
+      where: { personId: [...personIds], isMain: true },
+    });
+    return new Map(records.flatMap(({ personId, clearance }) => (clearance ? [[personId, clearance]] : [])));
   }
 
   /** The printer a person mostly prints on; null where they have written none down. */

@@ -108,9 +108,13 @@ describe('the comparison of two revisions', () => {
 
     // The shelf rests on the same knowledge: the foot is not to be printed again.
     const reader = shop.app.get(CatalogueReader);
-    expect(await reader.differences(revision.id, draft.id)).toMatchObject([
-      { code: 'H-03', difference: 're-exported', mark: null },
-      { code: 'J-01', difference: 'changed', mark: 'reprint needed', reason: 'Too short to lock.' },
+    expect(await reader.netDifferences(revision.id, draft.id, null)).toMatchObject([
+      { code: 'H-03', difference: 're-exported', steps: [] },
+      {
+        code: 'J-01',
+        difference: 'changed',
+        steps: [{ mark: 'reprint needed', reason: 'Too short to lock.' }],
+      },
     ]);
 
     // The tongue goes back to what it was, in other triangles.
@@ -128,15 +132,15 @@ describe('the comparison of two revisions', () => {
     expect(await rowOf(third.id, 'J-01', revision.id)).toMatchObject({ difference: 're-exported' });
     await mark(third.id, 'J-01', 'Locked too hard.');
     await release(shop, maker, third.id);
-    const fromFirst = await reader.differences(revision.id, third.id);
-    expect(fromFirst.map((row) => [row.code, row.difference, row.mark])).toEqual([
+    const fromFirst = await reader.netDifferences(revision.id, third.id, null);
+    expect(fromFirst.map((row) => [row.code, row.difference, row.steps[0]?.mark ?? null])).toEqual([
       ['H-03', 're-exported', null],
       ['J-01', 're-exported', null],
     ]);
-    expect((await reader.differences(draft.id, third.id))[1]).toMatchObject({
+    expect((await reader.netDifferences(draft.id, third.id, null))[1]).toMatchObject({
       difference: 'changed',
       // The mark that the foot got before it was known to be the same went with the draft.
-      reason: 'Locked too hard.',
+      steps: [{ reason: 'Locked too hard.' }],
     });
   });
 

@@ -1,26 +1,17 @@
 import { Injectable } from '@nestjs/common';
 import { InjectConnection, InjectModel } from '@nestjs/sequelize';
-import type { Answer, Clearance, Comparison } from '@windchest/contracts';
+import type { Clearance, Comparison } from '@windchest/contracts';
 import { Op, type Sequelize } from 'sequelize';
 import { selectRows } from '../../database/rows.js';
 import { Transactions, type Tx } from '../../database/transactions.js';
-import { tellingDrawing } from '../files/measured-mesh.js';
 import type { ReprintMark } from '../revisions/part.model.js';
-import { hasVariants } from '../revisions/part-files.js';
 import { RevisionContents, type PartOfRevision } from '../revisions/revision-contents.js';
-import { Revision } from '../revisions/revision.model.js';
+import { labelOf, Revision } from '../revisions/revision.model.js';
 import { meshPairsOf } from './compare-parts.js';
-import { asPrinted, compareVariants } from './compare-variants.js';
+import { compareVariants } from './compare-variants.js';
+import { netRows, type MarkedStep, type NetRow } from './net-rows.js';
 import { MeshComparisons, type Knowledge, type MeshPair } from './mesh-comparisons.js';
 
-/** One part on a person's reprint list. */
-export type ReprintRow = Answer<'GET /shelf/:slug'>['parts'][number];
-
-interface Pair {
-  readonly row: Comparison['rows'][number];
-  readonly after: PartOfRevision | null;
-  readonly hasChoice: boolean;
-}
 type Verdict = { mark: ReprintMark; reasons: string[] };
 
 /** What differs between two revisions of a kit, part by part, with what the maker says to do about it. */
@@ -35,30 +26,40 @@ export class Differences {
   ) {}
 
   async rows(from: Revision | null, to: Revision, tx?: Tx): Promise<Comparison['rows']> {
-    return (await this.pairs(from, to, { tx })).map(({ row }) => row);
+    const before = new Map(
+      from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
+    );
+    const after = await this.contents.partsOf(to.id, tx);
+    const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
+    const old = (code: string) => before.get(code) ?? null;
+    const known = await this.knownOf(
+      after.flatMap((part) => meshPairsOf(old(part.code), part)),
+      tx,
+    );
+    const now = after.map((part) => rowOf(old(part.code), part, { verdict: verdicts.get(part.code), known }));
+    const codes = new Set(after.map((part) => part.code));
+    const gone = [...before.values()].filter((part) => !codes.has(part.code));
+    return [...now, ...gone.map((part) => rowOf(part, null, { known }))];
   }
 
-  /** @param clearance what the reader prints: only that of a part counts; null counts all of them */
-  async reprintRows(
+  /** Net, for somebody who prints in this clearance; @returns nothing for a revision that is not there */
+  async net(
     fromRevisionId: string | null,
     toRevisionId: string,
-    clearance: Clearance | null = null,
-  ): Promise<ReprintRow[]> {
+    clearance: Clearance | null,
+  ): Promise<NetRow[]> {
     const to = await this.revisions.findByPk(toRevisionId);
     if (!to) return [];
-    const from = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
-    const pairs = await this.pairs(from?.kitId === to.kitId ? from : null, to, { clearance });
-    return pairs.map(({ row, after, hasChoice }) => ({
-      code: row.code,
-      name: row.name,
-      quantity: row.quantity,
-      clearance: hasChoice ? clearance : null,
-      difference: row.difference,
-      mark: row.mark,
-      reason: row.reason,
-      whatDiffers: row.whatDiffers,
-      drawing: tellingDrawing(after?.file?.drawings ?? null),
-    }));
+    const found = fromRevisionId ? await this.revisions.findByPk(fromRevisionId) : null;
+    const from = found?.kitId === to.kitId ? found : null;
+    const [before, after, steps] = await Promise.all([
+      from && this.contents.partsOf(from.id),
+      this.contents.partsOf(to.id),
+      from ? this.stepsBetween(from, to) : [],
+    ]);
+    const old = new Map((before ?? []).map((part) => [part.code, part]));
+    const known = await this.knownOf(after.flatMap((part) => meshPairsOf(old.get(part.code) ?? null, part)));
+    return netRows({ before, after, steps, clearance, known });
   }
 
   /** What buyers hold now: the newest revision before this one that was released. */
@@ -78,29 +79,6 @@ export class Differences {
     });
   }
 
-  private async pairs(
-    from: Revision | null,
-    to: Revision,
-    { tx, clearance = null }: { tx?: Tx | undefined; clearance?: Clearance | null },
-  ): Promise<Pair[]> {
-    const before = new Map(
-      from ? (await this.contents.partsOf(from.id, tx)).map((part) => [part.code, part]) : [],
-    );
-    const after = await this.contents.partsOf(to.id, tx);
-    const verdicts = from ? await this.verdictsBetween(from, to, tx) : new Map<string, Verdict>();
-    const old = (code: string) => before.get(code) ?? null;
-    const known = await this.knownOf(
-      after.flatMap((part) => meshPairsOf(old(part.code), part)),
-      tx,
-    );
-    const now = after.map((part) =>
-      pairOf(old(part.code), part, { verdict: verdicts.get(part.code), clearance, known }),
-    );
-    const codes = new Set(after.map((part) => part.code));
-    const gone = [...before.values()].filter((part) => !codes.has(part.code));
-    return [...now, ...gone.map((part) => pairOf(part, null, { clearance, known }))];
-  }
-
   /** What nobody has asked about so far is compared from now on. */
   private async knownOf(pairs: readonly MeshPair[], tx?: Tx): Promise<Knowledge> {
     const { of, unasked } = await this.meshes.known(pairs, tx);
@@ -114,9 +92,22 @@ export class Differences {
    * since the held one counts, with every reason, newest first.
    */
   private async verdictsBetween(from: Revision, to: Revision, tx?: Tx): Promise<Map<string, Verdict>> {
-    const rows = await selectRows<{ code: string; mark: ReprintMark; reason: string }>(
+    const verdicts = new Map<string, Verdict>();
+    for (const { code, mark, reason } of await this.stepsBetween(from, to, tx)) {
+      const known = verdicts.get(code) ?? { mark, reasons: [] };
+      if (mark === 'reprint needed') known.mark = mark;
+      if (reason !== '' && !known.reasons.includes(reason)) known.reasons.push(reason);
+      verdicts.set(code, known);
+    }
+    return verdicts;
+  }
+
+  /** Marks of the revisions after the older one up to the newer, newest first: back is as far as forth. */
+  private async stepsBetween(from: Revision, to: Revision, tx?: Tx): Promise<MarkedStep[]> {
+    const [older, newer] = isNewer(from, to) ? [to, from] : [from, to];
+    const rows = await selectRows<MarkedStep & { in_mark: number; in_issue: number }>(
       this.database,
-      `SELECT p.code, p.reprint_mark AS mark, p.reprint_reason AS reason
+      `SELECT p.code, p.reprint_mark AS mark, p.reprint_reason AS reason, r.mark AS in_mark, r.issue AS in_issue
        FROM parts p JOIN revisions r ON r.id = p.revision_id
        WHERE r.kit_id = :kitId AND p.reprint_mark IS NOT NULL
          AND (r.id = :toId OR r.state IN ('released', 'withdrawn'))
@@ -125,51 +116,46 @@ export class Differences {
        ORDER BY r.mark DESC, r.issue DESC`,
       {
         kitId: to.kitId,
-        toId: to.id,
-        fromMark: from.mark,
-        fromIssue: from.issue,
-        toMark: to.mark,
-        toIssue: to.issue,
+        toId: newer.id,
+        fromMark: older.mark,
+        fromIssue: older.issue,
+        toMark: newer.mark,
+        toIssue: newer.issue,
       },
       tx,
     );
-    const verdicts = new Map<string, Verdict>();
-    for (const { code, mark, reason } of rows) {
-      const known = verdicts.get(code) ?? { mark, reasons: [] };
-      if (mark === 'reprint needed') known.mark = mark;
-      if (reason !== '' && !known.reasons.includes(reason)) known.reasons.push(reason);
-      verdicts.set(code, known);
-    }
-    return verdicts;
+    return rows.map(({ code, mark, reason, in_mark, in_issue }) => ({
+      code,
+      revision: labelOf({ mark: in_mark, issue: in_issue }),
+      mark,
+      reason,
+    }));
   }
 }
 
-/** By what a pair is judged: the maker's word, what somebody prints, what is known of the meshes. */
+const isNewer = (one: Revision, other: Revision): boolean =>
+  one.mark > other.mark || (one.mark === other.mark && one.issue > other.issue);
+
+/** By what a pair is judged: the maker's word, and what is known of the meshes. */
 interface Judging {
   readonly verdict?: Verdict | undefined;
-  readonly clearance: Clearance | null;
   readonly known: Knowledge;
 }
 
-const pairOf = (
+const rowOf = (
   before: PartOfRevision | null,
-  whole: PartOfRevision | null,
-  { verdict, clearance, known }: Judging,
-): Pair => {
-  const part = (whole ?? before)!;
-  const after = asPrinted(whole, clearance);
-  const difference = compareVariants(asPrinted(before, clearance), after, known);
+  after: PartOfRevision | null,
+  { verdict, known }: Judging,
+): Comparison['rows'][number] => {
+  const part = (after ?? before)!;
+  const difference = compareVariants(before, after, known);
   const counts = difference.difference === 'changed' && verdict !== undefined;
   return {
-    after,
-    hasChoice: whole !== null && hasVariants(whole),
-    row: {
-      code: part.code,
-      name: part.name,
-      quantity: part.quantity,
-      ...difference,
-      mark: counts ? verdict.mark : null,
-      reason: counts ? verdict.reasons.join(' · ') : '',
-    },
+    code: part.code,
+    name: part.name,
+    quantity: part.quantity,
+    ...difference,
+    mark: counts ? verdict.mark : null,
+    reason: counts ? verdict.reasons.join(' · ') : '',
   };
 };

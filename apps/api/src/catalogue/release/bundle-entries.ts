@@ -23,6 +23,7 @@ export const bundleEntries = (source: BundleSource): BundleEntry[] => {
   }));
   const words = [
     ...(source.buildBook ? [made('build-book.pdf', source.buildBook)] : []),
+    ...(source.reprintList === undefined ? [] : [text('reprint-list.md', source.reprintList)]),
     text('assembly-notes.md', revision.assemblyNotes),
     ...(revision.changeNotes.trim() === '' ? [] : [text('change-notes.md', revision.changeNotes)]),
     text('print-specification.md', printSpecificationText(source)),

@@ -16,6 +16,8 @@ export interface BundleSource {
   readonly licences: readonly Licence[];
   /** The typeset build book, a PDF. */
   readonly buildBook?: Buffer;
+  /** Of a bundle that holds only what is to print again: what that is, in words. */
+  readonly reprintList?: string;
   /** Holds this clearance alone of parts that come in several; left out it holds all of them. */
   readonly clearance?: Clearance;
 }

@@ -15,6 +15,8 @@ export const bundleManifest = (source: BundleSource, listed: readonly BundleEntr
     revision: { id: revision.id, label: revision.label, mark: revision.mark, issue: revision.issue },
     /** Null where it holds every clearance there is. */
     clearance: source.clearance ?? null,
+    /** Only what is to print again, in the pieces wanted; a whole bundle says nothing of it. */
+    ...(source.reprintList === undefined ? {} : { contents: 'changed-parts' }),
     licences: licences.map(({ kind, name }) => ({ kind, name })),
     compass: compassOfRank(rankOf(parts), revision.room),
     declaredCents: revision.declaredCents,

@@ -423,21 +423,27 @@ describe('releases', () => {
       await writeNotes(maker, third.id, { changeNotes: '### Changed\n\n- A thicker foot.' });
       await release(shop, maker, third.id);
       const reader = shop.app.get(CatalogueReader);
-      expect(await reader.differences(revision.id, third.id)).toMatchObject([
-        { code: 'H-03', difference: 'changed', mark: 'reprint if it troubles you', reason: 'Stands firmer.' },
+      expect(await reader.netDifferences(revision.id, third.id, null)).toMatchObject([
+        {
+          code: 'H-03',
+          difference: 'changed',
+          steps: [{ mark: 'reprint if it troubles you', reason: 'Stands firmer.' }],
+        },
         {
           code: 'J-01',
           difference: 'changed',
-          mark: 'reprint needed',
-          reason: 'The tongue was too short to lock.',
+          steps: [{ mark: 'reprint needed', reason: 'The tongue was too short to lock.' }],
           drawing: { path: expect.stringMatching(/^M/) },
         },
       ]);
-      expect(await reader.differences(released.id, third.id)).toMatchObject([
+      expect(await reader.netDifferences(released.id, third.id, null)).toMatchObject([
         { code: 'H-03', difference: 'changed' },
-        { code: 'J-01', difference: 'same', mark: null, reason: '' },
+        { code: 'J-01', difference: 'same', steps: [] },
       ]);
-      expect((await reader.differences(null, third.id)).map((row) => row.difference)).toEqual(['new', 'new']);
+      expect((await reader.netDifferences(null, third.id, null)).map((row) => row.difference)).toEqual([
+        'new',
+        'new',
+      ]);
     });
   });
 });

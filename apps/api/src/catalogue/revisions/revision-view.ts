@@ -46,6 +46,9 @@ export class RevisionView {
       state: revision.state,
       createdAt: revision.createdAt.toISOString(),
       releasedAt: revision.releasedAt?.toISOString() ?? null,
+      withdrawn: revision.withdrawnAt
+        ? { at: revision.withdrawnAt.toISOString(), reason: revision.withdrawnReason ?? '' }
+        : null,
       assemblyNotes: revision.assemblyNotes,
       changeNotes: revision.changeNotes,
       cautions: revision.cautions,

@@ -10,6 +10,7 @@ import { RemoveFile } from '../files/remove-file.js';
 import { UploadFile } from '../files/upload-file.js';
 import { WaiveGate } from '../gates/waive-gate.js';
 import { RequestRelease } from '../release/request-release.js';
+import { WithdrawRevision } from '../release/withdraw-revision.js';
 import { ChangeRevision } from './change-revision.js';
 import { ChangeVariants } from './change-variants.js';
 import { RevisionView } from './revision-view.js';
@@ -28,6 +29,7 @@ export class RevisionsController {
     private readonly comparison: Comparison,
     private readonly waiveGate: WaiveGate,
     private readonly requestRelease: RequestRelease,
+    private readonly withdrawRevision: WithdrawRevision,
     private readonly previews: PartPreviews,
   ) {}
 
@@ -175,5 +177,14 @@ export class RevisionsController {
   ): Promise<RevisionDetail> {
     await this.requestRelease.request(person, params.revisionId);
     return this.view.read(params.revisionId);
+  }
+
+  @Endpoint('POST /workshop/revisions/:revisionId/withdrawal')
+  async withdraw(
+    @ThisPerson() person: SignedIn,
+    @Input() input: Handled<'POST /workshop/revisions/:revisionId/withdrawal'>,
+  ): Promise<RevisionDetail> {
+    await this.withdrawRevision.withdraw(person, input);
+    return this.view.read(input.params.revisionId);
   }
 }

@@ -54,6 +54,10 @@ export const accountRoutes: RouteObject[] = [
     ),
   },
   {
+    path: paths.shelfReprint.path,
+    element: lazyPage(async () => (await import('../../features/entitlements/reprint.page.js')).ReprintPage),
+  },
+  {
     path: paths.tuner.path,
     element: lazyPage(async () => (await import('../../features/entitlements/tuner.page.js')).TunerPage),
   },

@@ -34,6 +34,9 @@ export const platesTexts = {
   fitNozzle: (drawnFor: string, yours: string) =>
     `The kit is drawn for a ${drawnFor} nozzle; yours is ${yours}. The figures are for the maker’s settings.`,
 
+  inClearance: (clearance: string, gauges: string) =>
+    `Parts that come in several clearances are taken in ${clearance}, as your printer card says.${gauges && ` The gauge ${gauges} is left out: it has told you that.`}`,
+
   thePlate: 'The plate',
   plateOf: (at: number, count: number) => `Plate ${at} of ${count}`,
   thumb: (at: number, pieces: string) => `Plate ${at}, ${pieces}`,

@@ -62,6 +62,7 @@ export const shelfKitTexts = {
   holdNothing: (newest: string) => `${newest} is yours.`,
   getIt: (count: number) => `Get the bundle and print ${parts(count)}.`,
   upToDate: 'It is the newest: nothing to reprint.',
+  stillToPrint: (count: number, all: number) => `${count} of ${parts(all)} are still to print.`,
   isOut: (newest: string) => `${newest} is out:`,
   reprint: (needed: number, all: number) => `reprint ${needed} of ${parts(all)}`,
   reprintNone: 'nothing to reprint',
@@ -75,9 +76,12 @@ export const shelfKitTexts = {
       : `The other ${count} parts are the same; leave them as they are.`,
   heldIsNewer: (held: string, newest: string) =>
     `You hold ${held}. The workshop has withdrawn it; the newest that stands is ${newest}.`,
-  heldWithdrawnTitle: (held: string) => `${held} was withdrawn`,
-  heldWithdrawn: (newest: string) =>
-    `The workshop no longer hands it out. Take ${newest}; its change notes say why.`,
+  withdrawnTitle: (label: string) => `${label} was withdrawn`,
+  withdrawnTake: (label: string, newest: string) =>
+    `Print no more parts of ${label}. Take ${newest} instead; the list below says what differs from what you have.`,
+  withdrawnWait: (label: string) =>
+    `Print no more parts of ${label}. No other revision stands at the moment; the next one comes here.`,
+  nothingToGet: 'There is nothing to fetch at the moment.',
 
   sheet: (kit: string) => `Parts of ${kit}`,
   differences: 'What differs',
@@ -98,6 +102,8 @@ export const shelfKitTexts = {
   getAll: 'The bundle with all clearances',
   clearance: 'Clearance you print',
   clearanceUnknown: 'Not known yet',
+  clearanceHabit: (clearance: string) => `As my printer: ${clearance}`,
+  clearanceFromCard: (printer: string) => `From your printer card, ${printer}.`,
   clearanceFind: (gauge: string | undefined) =>
     gauge
       ? `The whole bundle holds all of them. Print the gauge first, ${gauge}: it shows which one fits.`
@@ -110,7 +116,7 @@ export const shelfKitTexts = {
   printedThis: 'I have printed this',
   printedTitle: (label: string) => `You have printed ${label}?`,
   printedDetail: (label: string) =>
-    `The shelf then compares new revisions with ${label} and says what to reprint from there. You can change it again.`,
+    `Every part of ${label} is then written down as printed, in place of what you said before. The shelf says from there what to reprint.`,
   printedConfirm: (label: string) => `Yes, I hold ${label}`,
   printedFailed: 'What you hold was not changed',
   tune: 'Tune what you printed',

@@ -13,7 +13,8 @@ export const revisionTexts = {
   },
   final: (label: string, released: string) =>
     `${label} was released on ${released}. A released revision never changes: people have printed it. A mistake is mended by a new revision.`,
-  withdrawn: (label: string) => `${label} was withdrawn and can no longer be changed.`,
+  withdrawn: (label: string, reason: string) =>
+    `${label} was withdrawn and can no longer be changed. ${reason}`,
   toKit: 'Start the next revision',
   noWriting: 'Your role reads revisions; makers change them.',
   aside: 'Release',

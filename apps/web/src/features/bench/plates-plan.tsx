@@ -2,6 +2,7 @@ import { Box } from '@chakra-ui/react/box';
 import type { PrinterCardFields, PrintSheetPart, PrintSpecification } from '@windchest/contracts';
 import { usual } from '@windchest/plates';
 import { useMemo, useState } from 'react';
+import { clearanceTexts } from '../../config/texts/clearance.js';
 import { platesTexts as texts } from '../../config/texts/plates.js';
 import { buildVolume, millimetres } from '../../lib/format.js';
 import { useSession } from '../../lib/session.js';
@@ -10,6 +11,7 @@ import { StatusLine } from '../../ui/status-mark.js';
 import { Text } from '../../ui/text.js';
 import { fitWords } from './fit-words.js';
 import { LayoutFields } from './layout-fields.js';
+import { clearanceEffect, partsInClearance } from './parts-in-clearance.js';
 import { PlanSections } from './plan-sections.js';
 import { usePlates } from './use-plates.js';
 
@@ -27,10 +29,12 @@ export interface PlatesPlanProps {
  * What some parts take on a printer: how each lies, the plates to scale, filament, hours, cost. Worked out in this
  * browser. Give it a key of the printer, so that nothing of another printer stays.
  */
-export function PlatesPlan({ parts, unmeasured = [], printSpec, printer }: PlatesPlanProps) {
+export function PlatesPlan({ parts: asDrawn, unmeasured = [], printSpec, printer }: PlatesPlanProps) {
   const { session } = useSession();
   const [layout, setLayout] = useState({ gapMm: usual.gapMm as number, marginMm: usual.marginMm as number });
-  const { bed } = printer;
+  const { bed, clearance } = printer;
+  const parts = useMemo(() => partsInClearance(asDrawn, clearance), [asDrawn, clearance]);
+  const effect = clearanceEffect(asDrawn, clearance);
   const question = useMemo(() => ({ parts, printSpec, bed, ...layout }), [parts, printSpec, bed, layout]);
   const { last, done, refusal } = usePlates(question);
   const names = useMemo(() => new Map(parts.map(({ code, name }) => [code, name])), [parts]);
@@ -61,6 +65,11 @@ export function PlatesPlan({ parts, unmeasured = [], printSpec, printer }: Plate
               {line.words}
             </StatusLine>
           ))}
+          {effect && (
+            <StatusLine state="note">
+              {texts.inClearance(clearanceTexts.named(effect.clearance), effect.gauges.join(', '))}
+            </StatusLine>
+          )}
           {printer.nozzleMm !== printSpec.nozzleMm && (
             <StatusLine state="note">
               {texts.fitNozzle(millimetres(printSpec.nozzleMm, 2), millimetres(printer.nozzleMm, 2))}

@@ -32,6 +32,8 @@ const boxPart = (
     footprint: footprintOf(mesh),
     profile: profileOf(mesh),
     printSpec: null,
+    isGauge: false,
+    variants: [],
     ...rest,
   };
 };

@@ -18,6 +18,7 @@ import { GatesList } from './gates-list.js';
 import { ReleaseBlock } from './release-block.js';
 import { type RevisionContext, useIsWritable, useRevisionDetail } from './revision-context.js';
 import { ThrowAway } from './throw-away.js';
+import { WithdrawAction } from './withdraw-action.js';
 import { useComparedWith } from './use-compared-with.js';
 
 const tabsOf = (params: { kitId: string; revisionId: string }, withId: string | undefined) => [
@@ -32,14 +33,14 @@ const tabsOf = (params: { kitId: string; revisionId: string }, withId: string | 
 /** Why nothing can be changed here. */
 function ReadOnlyLine({ revision }: Pick<RevisionContext, 'revision'>) {
   const { may } = useSession();
-  const { label, state, releasedAt, kit } = revision;
+  const { label, state, releasedAt, withdrawn, kit } = revision;
   if (state === 'draft' || state === 'proving')
     return may('revisions:write') ? null : <Notice>{revisionTexts.noWriting}</Notice>;
   return (
     <Notice>
       {state === 'released' && releasedAt
         ? revisionTexts.final(label, date(releasedAt))
-        : revisionTexts.withdrawn(label)}{' '}
+        : revisionTexts.withdrawn(label, withdrawn?.reason ?? '')}{' '}
       {may('revisions:write') && (
         <TextLink to={paths.workshop.kit.to({ kitId: kit.id })}>{revisionTexts.toKit}</TextLink>
       )}
@@ -51,6 +52,7 @@ function ReadOnlyLine({ revision }: Pick<RevisionContext, 'revision'>) {
 export function RevisionPage() {
   const { kitId = '', revisionId = '' } = useParams();
   const { withId } = useComparedWith();
+  const { may } = useSession();
   const { data: revision, fault, mutate, uploaded } = useRevisionDetail(revisionId);
   const isWritable = useIsWritable(revision);
   // The last answer of the polling may be older than the last file.
@@ -108,6 +110,11 @@ export function RevisionPage() {
           <>
             <GatesList revision={revision} />
             {isWritable && <ThrowAway revision={revision} />}
+            {revision.state === 'released' && may('revisions:release') && (
+              <Box marginTop="8">
+                <WithdrawAction revision={revision} />
+              </Box>
+            )}
           </>
         }
         block={<ReleaseBlock revision={revision} />}

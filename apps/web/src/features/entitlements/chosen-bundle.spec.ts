@@ -11,10 +11,11 @@ const revision = (...clearances: ('minus' | 'zero' | 'plus')[]): ShelfKit['newes
   bundles: clearances.map((clearance, at) => ({ clearance, bytes: 100 + at, sha256 })),
   changeNotes: '',
   isWithdrawn: false,
+  withdrawnReason: null,
 });
 const kit = (chosen: ShelfKit['clearance']['chosen']) => ({
   slug: 'curlew',
-  clearance: { hasVariants: true, gauge: null, chosen },
+  clearance: { hasVariants: true, gauge: null, chosen, said: chosen, habit: null },
 });
 
 describe('the bundle a person fetches', () => {

@@ -9,10 +9,15 @@ import { RadioRow, RadioRows } from '../../ui/field/radio-rows.js';
 /** Which clearance one prints of a kit: bundle and reprint list keep to it. Kept as soon as it is said. */
 export function ClearanceChoice({ kit }: { kit: ShelfKit }) {
   const name = useId();
-  const { run, fault } = useAction('PUT /shelf/:slug/clearance', ['GET /shelf/:slug']);
+  const { run, fault } = useAction('PUT /shelf/:slug/clearance', [
+    'GET /shelf/:slug',
+    'GET /shelf/:slug/printed',
+    'GET /shelf/:slug/reprint',
+    'GET /shelf/:slug/changed-parts',
+  ]);
   const [said, setSaid] = useState<Clearance | null>();
-  const { chosen, gauge } = kit.clearance;
-  const shown = said === undefined ? chosen : said;
+  const { said: kept, habit, gauge } = kit.clearance;
+  const shown = said === undefined ? kept : said;
   const say = async (clearance: Clearance | null) => {
     setSaid(clearance);
     await run({ params: { slug: kit.slug }, body: { clearance } });
@@ -34,8 +39,16 @@ export function ClearanceChoice({ kit }: { kit: ShelfKit }) {
         <RadioRow
           name={name}
           value=""
-          label={shelfKitTexts.clearanceUnknown}
-          note={shelfKitTexts.clearanceFind(gauge ? `${gauge.code} ${gauge.name}` : undefined)}
+          label={
+            habit
+              ? shelfKitTexts.clearanceHabit(clearanceTexts.named(habit.clearance))
+              : shelfKitTexts.clearanceUnknown
+          }
+          note={
+            habit
+              ? shelfKitTexts.clearanceFromCard(habit.printer)
+              : shelfKitTexts.clearanceFind(gauge ? `${gauge.code} ${gauge.name}` : undefined)
+          }
           checked={shown === null}
           onChange={() => void say(null)}
         />

@@ -14,7 +14,13 @@ export interface PrintedDialogProps {
 
 /** Asks before the shelf takes another revision for the one held. */
 export function PrintedDialog({ slug, revision, onClose }: PrintedDialogProps) {
-  const saying = useAction('POST /shelf/:slug/held', ['GET /shelf/:slug', 'GET /shelf']);
+  const saying = useAction('POST /shelf/:slug/held', [
+    'GET /shelf/:slug',
+    'GET /shelf',
+    'GET /shelf/:slug/printed',
+    'GET /shelf/:slug/reprint',
+    'GET /shelf/:slug/changed-parts',
+  ]);
   const label = revision?.label ?? '';
   const confirm = async () =>
     revision !== undefined &&

@@ -1,23 +1,29 @@
 import { Box } from '@chakra-ui/react/box';
-import type { ShelfKit } from '@windchest/contracts';
+import type { ReprintPart } from '@windchest/contracts';
 import { clearanceTexts } from '../../config/texts/clearance.js';
-import { shelfKitTexts } from '../../config/texts/shelf.js';
+import { reprintTexts as texts } from '../../config/texts/reprint.js';
 import { type Column, HairlineTable } from '../../ui/table/hairline-table.js';
 import { Unbroken } from '../../ui/unbroken.js';
 import { type ReprintRow, reprintRows } from './reprint-list.js';
 
 const sentence = (text: string) => text.charAt(0).toUpperCase() + text.slice(1);
 
-function why({ advice, reason }: ReprintRow): string {
-  if (advice === 'if-it-troubles')
-    return reason ? `${shelfKitTexts.ifItTroubles}: ${reason}` : shelfKitTexts.ifItTroubles;
-  return reason || (advice === 'not-asked' ? shelfKitTexts.unmarked : '');
+/** Each step's reason; with its revision where there are several. */
+function whyOf({ advice, steps, spare }: ReprintRow): string[] {
+  const told = steps.filter(({ reason }) => reason !== '');
+  const reasons = told.map(({ revision, reason }) =>
+    told.length > 1 ? texts.step(revision, reason) : reason,
+  );
+  if (advice === 'if-it-troubles') return [texts.ifItTroubles, ...reasons];
+  if (advice === 'not-asked') return [texts.unmarked];
+  if (advice === 'fewer' || advice === 'dropped') return [texts.spare(spare)];
+  return reasons;
 }
 
 const columns: readonly Column<ReprintRow>[] = [
   {
     key: 'part',
-    header: shelfKitTexts.part,
+    header: texts.part,
     isHeading: true,
     cell: (row) => (
       <span>
@@ -27,7 +33,7 @@ const columns: readonly Column<ReprintRow>[] = [
         {row.name}
         {row.clearance && (
           <Box as="span" fontWeight="normal">
-            , {shelfKitTexts.inClearance(clearanceTexts.signs[row.clearance])}
+            , {texts.inClearance(clearanceTexts.signs[row.clearance])}
           </Box>
         )}
       </span>
@@ -35,32 +41,51 @@ const columns: readonly Column<ReprintRow>[] = [
   },
   {
     key: 'print',
-    header: shelfKitTexts.print,
+    header: texts.print,
     isNumeric: true,
+    cell: (row) => <Unbroken>{row.pieces > 0 ? texts.times(row.pieces) : texts.noPrint}</Unbroken>,
+  },
+  { key: 'differs', header: texts.whatDiffers, cell: (row) => sentence(row.whatDiffers) },
+  {
+    key: 'why',
+    header: texts.why,
     cell: (row) => (
-      <Unbroken>
-        {row.advice === 'print' || row.advice === 'if-it-troubles'
-          ? shelfKitTexts.times(row.pieces)
-          : shelfKitTexts.noPrint}
-      </Unbroken>
+      <>
+        {whyOf(row).map((line) => (
+          <Box as="span" display="block" key={line}>
+            {line}
+          </Box>
+        ))}
+      </>
     ),
   },
-  { key: 'differs', header: shelfKitTexts.whatDiffers, cell: (row) => sentence(row.whatDiffers) },
-  { key: 'why', header: shelfKitTexts.why, cell: why },
 ];
 
-/** Nothing where no part differs. */
-export function ReprintTable({ parts }: { parts: ShelfKit['parts'] }) {
+const withTick: readonly Column<ReprintRow>[] = [
+  ...columns,
+  {
+    key: 'tick',
+    header: texts.tick,
+    cell: ({ pieces }) => (
+      <Box as="span" display="flex" gap="1.5" aria-hidden>
+        {Array.from({ length: Math.min(pieces, 8) }, (_, at) => (
+          <Box key={at} as="span" boxSize="4" borderWidth="1px" borderColor="edge" />
+        ))}
+      </Box>
+    ),
+  },
+];
+
+/** Nothing where no part differs. `hasTicks` leaves room to tick pieces off on paper. */
+export function ReprintTable({ parts, hasTicks }: { parts: readonly ReprintPart[]; hasTicks?: boolean }) {
   const rows = reprintRows(parts);
   if (rows.length === 0) return null;
   return (
-    <Box marginTop="8">
-      <HairlineTable
-        caption={shelfKitTexts.differences}
-        columns={columns}
-        rows={rows}
-        rowKey={(row) => row.codes.join()}
-      />
-    </Box>
+    <HairlineTable
+      caption={texts.caption}
+      columns={hasTicks ? withTick : columns}
+      rows={rows}
+      rowKey={(row) => row.codes.join()}
+    />
   );
 }

@@ -2,10 +2,12 @@ import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
 import { paths } from '../../config/paths.js';
 import { clearanceTexts } from '../../config/texts/clearance.js';
+import { reprintTexts } from '../../config/texts/reprint.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { bytes } from '../../lib/format.js';
 import { Button } from '../../ui/button.js';
 import { Fault } from '../../ui/fault.js';
+import { Text } from '../../ui/text.js';
 import { chosenBundle } from './chosen-bundle.js';
 import { ClearanceChoice } from './clearance-choice.js';
 import { RowAnchor, RowButton, RowLink } from './ruled-rows.js';
@@ -27,19 +29,25 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
     <>
       <Box display="grid" gap="3" marginBottom="4">
         {newest.bundles.length > 0 && <ClearanceChoice kit={kit} />}
-        <Button
-          onClick={() => void download.start(own)}
-          isBusy={download.isStarting(own)}
-          busyWords={shelfKitTexts.getting}
-        >
-          <span>
-            {clearance ? shelfKitTexts.getBundleIn(clearanceTexts.signs[clearance]) : shelfKitTexts.getBundle}
-            <Box as="span" fontWeight="normal">
-              {' '}
-              · {bytes(ownBytes)}
-            </Box>
-          </span>
-        </Button>
+        {newest.isWithdrawn ? (
+          <Text isSoft>{shelfKitTexts.nothingToGet}</Text>
+        ) : (
+          <Button
+            onClick={() => void download.start(own)}
+            isBusy={download.isStarting(own)}
+            busyWords={shelfKitTexts.getting}
+          >
+            <span>
+              {clearance
+                ? shelfKitTexts.getBundleIn(clearanceTexts.signs[clearance])
+                : shelfKitTexts.getBundle}
+              <Box as="span" fontWeight="normal">
+                {' '}
+                · {bytes(ownBytes)}
+              </Box>
+            </span>
+          </Button>
+        )}
         {held?.id !== newest.id && (
           <Button look="outline" onClick={() => onPrinted(newest)}>
             {shelfKitTexts.printed(newest.label)}
@@ -47,7 +55,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
         )}
       </Box>
       {download.fault && <Fault level={2} what={shelfKitTexts.getFailed} fault={download.fault} />}
-      {clearance && (
+      {clearance && !newest.isWithdrawn && (
         <RowButton onClick={() => void download.start(bundle)} aria-busy={download.isStarting(bundle)}>
           {shelfKitTexts.getAll}
           <Box as="span" color="ink.soft" whiteSpace="nowrap">
@@ -55,7 +63,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
           </Box>
         </RowButton>
       )}
-      {kit.documents.map((document) => {
+      {(newest.isWithdrawn ? [] : kit.documents).map((document) => {
         const wish = { ...bundle, file: document.sha256 };
         return (
           <RowButton
@@ -70,6 +78,7 @@ export function ShelfKitActions({ kit, download, onPrinted }: ShelfKitActionsPro
           </RowButton>
         );
       })}
+      <RowAnchor href={`#${sectionIds.build}`}>{reprintTexts.build}</RowAnchor>
       {kit.rank.length > 0 && <RowLink to={paths.tuner.to({ slug: kit.slug })}>{shelfKitTexts.tune}</RowLink>}
       <RowAnchor href={`#${sectionIds.changeNotes}`}>{shelfKitTexts.changeNotes}</RowAnchor>
       <RowAnchor href={`#${sectionIds.licence}`}>{shelfKitTexts.licence}</RowAnchor>

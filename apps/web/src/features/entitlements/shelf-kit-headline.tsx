@@ -13,7 +13,7 @@ const Strong = ({ children }: { children: string }) => (
 /** What the shelf has to say about a kit, in a sentence or two. */
 export function ShelfKitHeadline({ kit }: { kit: ShelfKit }) {
   const { held, newest } = kit;
-  const { all, print, ifItTroubles, same } = countReprints(kit.parts);
+  const { all, print, ifItTroubles, same } = countReprints(kit.reprint.parts);
   const lead = { look: 'lead', color: 'ink', marginTop: '2', maxWidth: '48rem', textWrap: 'pretty' } as const;
 
   if (!held)
@@ -22,10 +22,12 @@ export function ShelfKitHeadline({ kit }: { kit: ShelfKit }) {
         {shelfKitTexts.holdNothing(newest.label)} <Strong>{shelfKitTexts.getIt(all)}</Strong>
       </Text>
     );
+  if (newest.isWithdrawn) return null;
   if (held.id === newest.id)
     return (
       <Text {...lead}>
-        {shelfKitTexts.hold(held.label)} {shelfKitTexts.upToDate}
+        {shelfKitTexts.hold(held.label)}{' '}
+        {print > 0 ? <Strong>{shelfKitTexts.stillToPrint(print, all)}</Strong> : shelfKitTexts.upToDate}
       </Text>
     );
   const heldAt = kit.revisions.findIndex((one) => one.id === held.id);

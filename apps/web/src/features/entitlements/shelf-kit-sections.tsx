@@ -1,9 +1,11 @@
 import { Box } from '@chakra-ui/react/box';
 import type { ShelfKit } from '@windchest/contracts';
 import type { ReactNode } from 'react';
+import { reprintTexts } from '../../config/texts/reprint.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { Band } from '../../ui/sheet.js';
 import { Heading, Text } from '../../ui/text.js';
+import { BuildSection } from './build-section.js';
 import { DownloadsTable } from './downloads-table.js';
 import { RevisionNotes, type RevisionNotesProps } from './revision-notes.js';
 import { sectionIds } from './section-ids.js';
@@ -44,6 +46,9 @@ export const ShelfKitSections = (props: RevisionNotesProps) => (
       alignItems="start"
     >
       <Box display="grid" gap="12">
+        <Section id={sectionIds.build} title={reprintTexts.build}>
+          <BuildSection kit={props.kit} onPrinted={props.onPrinted} />
+        </Section>
         <Section id={sectionIds.changeNotes} title={shelfKitTexts.changeNotes}>
           <RevisionNotes {...props} />
         </Section>

@@ -4,17 +4,15 @@ import { useState } from 'react';
 import { paths } from '../../config/paths.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { date } from '../../lib/format.js';
-import { PartsSheet } from '../../ui/drawing/parts-sheet.js';
 import { TextLink } from '../../ui/link.js';
 import { Notice } from '../../ui/notice.js';
 import { PageTitle } from '../../ui/page-title.js';
 import { SplitSheet } from '../../ui/sheet.js';
-import { Heading } from '../../ui/text.js';
+import { Heading, Text } from '../../ui/text.js';
 import { KitColour } from '../../ui/theme/kit-colour.js';
 import { TitleBlock } from '../../ui/title-block.js';
 import { PrintedDialog } from './printed-dialog.js';
-import { adviceFor } from './reprint-list.js';
-import { ReprintTable } from './reprint-table.js';
+import { ReprintSection } from './reprint-section.js';
 import { ShelfKitActions } from './shelf-kit-actions.js';
 import { ShelfKitAnswer } from './shelf-kit-answer.js';
 import { ShelfKitHeadline } from './shelf-kit-headline.js';
@@ -28,23 +26,28 @@ const watchedMs = 10 * 60_000;
 const hasRunningDownload = (kit: ShelfKit | undefined): boolean =>
   kit?.downloads.some((one) => !one.isComplete && Date.now() - Date.parse(one.at) < watchedMs) ?? false;
 
-const drawnParts = (kit: ShelfKit) =>
-  kit.parts.flatMap((part) =>
-    part.drawing
-      ? {
-          ...part.drawing,
-          code: part.code,
-          name: part.name,
-          isToReprint: kit.held !== null && adviceFor(part) === 'print',
-        }
-      : [],
-  );
+/** Why a revision is handed out no more, and what to do. */
+const WithdrawnNotice = ({
+  revision,
+  newest,
+}: {
+  revision: ShelfKit['newest'];
+  newest: ShelfKit['newest'];
+}) => (
+  <Notice tone="warn" title={shelfKitTexts.withdrawnTitle(revision.label)}>
+    {revision.withdrawnReason && <Text marginBottom="1">“{revision.withdrawnReason}”</Text>}
+    <Text>
+      {newest.isWithdrawn
+        ? shelfKitTexts.withdrawnWait(revision.label)
+        : shelfKitTexts.withdrawnTake(revision.label, newest.label)}
+    </Text>
+  </Notice>
+);
 
 function Kit({ kit }: { kit: ShelfKit }) {
   const download = useShelfDownload();
   const [printed, setPrinted] = useState<ShelfKit['newest']>();
   const { held, newest } = kit;
-  const drawn = drawnParts(kit);
   return (
     <KitColour palette={kit.colour}>
       <SplitSheet
@@ -55,11 +58,9 @@ function Kit({ kit }: { kit: ShelfKit }) {
               {kit.name}
             </Heading>
             <ShelfKitHeadline kit={kit} />
-            {held?.isWithdrawn && (
+            {(held?.isWithdrawn || newest.isWithdrawn) && (
               <Box marginTop="5">
-                <Notice tone="warn" title={shelfKitTexts.heldWithdrawnTitle(held.label)}>
-                  {shelfKitTexts.heldWithdrawn(newest.label)}
-                </Notice>
+                <WithdrawnNotice revision={held?.isWithdrawn ? held : newest} newest={newest} />
               </Box>
             )}
             {kit.newerNotIncluded && (
@@ -71,12 +72,7 @@ function Kit({ kit }: { kit: ShelfKit }) {
                 </Notice>
               </Box>
             )}
-            {drawn.length > 0 && (
-              <Box marginTop="8">
-                <PartsSheet parts={drawn} label={shelfKitTexts.sheet(kit.name)} />
-              </Box>
-            )}
-            {held && <ReprintTable parts={kit.parts} />}
+            <ReprintSection kit={kit} download={download} />
           </>
         }
         aside={

@@ -19,7 +19,7 @@ const NameLink = chakra(RouterLink, {
 /** The one next step: fetch it, see what to reprint, or just open it. */
 function NextStep({ item }: { item: ShelfItem }) {
   const { held, newest } = item;
-  const isUpToDate = held?.id === newest.id;
+  const isUpToDate = held?.id === newest.id || newest.isWithdrawn;
   const words = !held
     ? shelfTexts.get(newest.label)
     : isUpToDate

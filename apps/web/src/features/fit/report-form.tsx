@@ -90,7 +90,7 @@ export function ReportForm({ kit }: { kit: ShelfKit }) {
   });
 
   const held = kit.held !== null;
-  const parts = kit.parts.filter(({ difference }) => !held || difference !== 'new');
+  const parts = kit.reprint.parts.filter(({ difference }) => !held || difference !== 'new');
   return (
     <Form onSubmit={send}>
       <Row>
