@@ -18,6 +18,11 @@ interface MailRow {
   state: 'queued' | 'handed-over' | 'sent' | 'refused';
 }
 
+/** Whether the database took the note, once that is known. */
+interface HandedOver {
+  readonly isNoted: Promise<boolean>;
+}
+
 /**
  * Sends one mail exactly once. The row turns `handed-over` just before the last line goes out: a row
  * found in that state by a later run was delivered by an earlier one that died before it could say so.
@@ -52,12 +57,19 @@ export class SendMail implements JobHandler<typeof sendMail.payload> {
       locale: this.config.WORKSHOP_LOCALE,
     });
     const messageId = `<${mailId}@${new URL(this.config.BASE_URL).hostname}>`;
+    let handedOver: HandedOver | undefined;
     try {
       await this.mailer.send(
         { to: mail.to_address, subject, html, text, messageId },
-        { beforeLastLine: () => this.handOver(mailId, subject) },
+        {
+          beforeLastLine: async () => {
+            handedOver = await this.handOver(mailId, subject);
+          },
+        },
       );
     } catch (fault) {
+      // What is undone below must have been done first.
+      await handedOver?.isNoted;
       if (fault instanceof MailRefused) {
         const { message: reason } = fault;
         return async (tx) => {
@@ -80,16 +92,34 @@ export class SendMail implements JobHandler<typeof sendMail.payload> {
       );
       throw fault;
     }
+    await handedOver?.isNoted;
     return this.markSent(mailId);
   }
 
-  private async handOver(mailId: string, subject: string): Promise<void> {
-    const mine = await touchRows(
-      this.database,
-      `UPDATE mails SET state = 'handed-over', subject = :subject WHERE id = :mailId AND state = 'queued'`,
-      { mailId, subject },
+  /**
+   * The change waits in an open transaction until the database has granted it; its commit and the mail's last
+   * line then leave this process within one turn, the commit first. Waiting for the commit's answer would leave
+   * a mail noted and unsent, should the process die meanwhile.
+   */
+  private async handOver(mailId: string, subject: string): Promise<HandedOver> {
+    const tx = await this.database.transaction();
+    try {
+      const mine = await touchRows(
+        this.database,
+        `UPDATE mails SET state = 'handed-over', subject = :subject WHERE id = :mailId AND state = 'queued'`,
+        { mailId, subject },
+        tx,
+      );
+      if (mine !== 1) throw new Error('Another worker is sending this mail.');
+    } catch (fault) {
+      await tx.rollback();
+      throw fault;
+    }
+    const isNoted = tx.commit().then(
+      () => true,
+      () => false,
     );
-    if (mine !== 1) throw new Error('Another worker is sending this mail.');
+    return { isNoted };
   }
 
   private markSent(mailId: string): Finish {

@@ -180,7 +180,9 @@ describe('will it print', () => {
       expect(bar?.footprint).toHaveLength(4);
       expect(bar?.profile?.volumeMm3).toBeCloseTo(125 * 6 * 5, 0);
       expect(Object.keys(bar ?? {}).sort()).toEqual(
-        'code footprint heightMm name orientation printSpec profile quantity sizeMm'.split(' '),
+        'code footprint heightMm isGauge name orientation printSpec profile quantity sizeMm variants'.split(
+          ' ',
+        ),
       );
       const tag = answer.headers['etag'] as string;
       expect((await visitor.get(at).set('If-None-Match', tag).expect(304)).text).toBe('');
