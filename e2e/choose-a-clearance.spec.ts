@@ -7,10 +7,12 @@ test('a buyer says which clearance they print; bundle and reprint list keep to i
   const pia = demoSignIns.find((one) => one.email.startsWith('pia')) ?? { email: '', passphrase: '' };
   await signIn(page, pia);
   await page.goto('/shelf/curlew');
-  await expect(page.getByText(/Print the gauge first, G-01 Tongue gauge/)).toBeVisible();
-  await expect(page.getByRole('button', { name: /Get the whole bundle/ })).toBeVisible();
+  // Her printer card says that she prints parts as they are drawn.
+  const asMyPrinter = page.getByRole('radio', { name: /As my printer: 0 as drawn/ });
+  await expect(asMyPrinter).toBeChecked();
+  await expect(page.getByRole('button', { name: /Get the bundle in 0/ })).toBeVisible();
   const tongue = page.getByRole('row', { name: /J-01/ });
-  await expect(tongue).toContainText('In 0: −0.24 mm depth');
+  await expect(tongue).toContainText('−0.24 mm depth');
   await expectAccessible(page, 'shelf kit with clearances');
 
   await page.getByRole('radio', { name: '+ looser' }).check();
@@ -20,6 +22,6 @@ test('a buyer says which clearance they print; bundle and reprint list keep to i
   await page.reload();
   await expect(page.getByRole('radio', { name: '+ looser' })).toBeChecked();
 
-  await page.getByRole('radio', { name: /Not known yet/ }).check();
-  await expect(page.getByRole('button', { name: /Get the whole bundle/ })).toBeVisible();
+  await asMyPrinter.check();
+  await expect(page.getByRole('button', { name: /Get the bundle in 0/ })).toBeVisible();
 });
