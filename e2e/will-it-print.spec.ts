@@ -24,7 +24,7 @@ test('a visitor sees a kit on their own plates, lists what fits, and keeps the p
   await page.getByRole('button', { name: 'Write down my printer' }).click();
   await writeDown(page, ['120', '120', '170'], 'PETG', '22.90');
   const section = page.getByRole('region', { name: 'Will it print on your machine?' });
-  await expect(section.getByText('All 27 parts fit 120 × 120 × 170 mm.')).toBeVisible();
+  await expect(section.getByText('All 28 parts fit 120 × 120 × 170 mm.')).toBeVisible();
   await expect(section.getByRole('heading', { name: /^\d plates, .* of filament, about €/ })).toBeVisible();
   expect(asked.filter((path) => /plates\.worker/.test(path))).toHaveLength(1);
 
@@ -34,7 +34,7 @@ test('a visitor sees a kit on their own plates, lists what fits, and keeps the p
   await expect(first).toBeVisible();
   await section.getByRole('button', { name: 'Next plate' }).click();
   await expect(section.getByRole('img', { name: /^Plate 2 of/ })).toBeVisible();
-  await section.locator('summary').getByText('All 27 parts on this printer').click();
+  await section.locator('summary').getByText('All 28 parts on this printer').click();
   await expectAccessible(page, 'a kit on plates');
 
   await section.getByLabel('Along the edges').fill('58');

@@ -4,7 +4,7 @@ import { Navigate, useParams } from 'react-router-dom';
 import { paths, signInThenBack } from '../../config/paths.js';
 import { shelfKitTexts } from '../../config/texts/shelf.js';
 import { useEndedSession, useSignInState } from '../../lib/sign-in-gate.js';
-import { type Asking, useEndpoint } from '../../lib/use-endpoint.js';
+import { useEndpoint } from '../../lib/use-endpoint.js';
 import { LinkButton } from '../../ui/button.js';
 import { Fault } from '../../ui/fault.js';
 import { PageTitle } from '../../ui/page-title.js';
@@ -15,18 +15,20 @@ import { Heading, Text } from '../../ui/text.js';
 export interface ShelfKitAnswerProps {
   /** This page's address, to come back to after signing in. */
   address: (slug: string) => string;
-  asking?: Asking<ShelfKit>;
+  /** How long until it is asked again, by what stands there now; 0 for never. */
+  askAgainMs?: (kit: ShelfKit | undefined) => number;
   children: (kit: ShelfKit) => ReactNode;
 }
 
 /** Pages of one kit on the shelf: what stands there until it is here, and where it is not this person's. */
-export function ShelfKitAnswer({ address, asking, children }: ShelfKitAnswerProps) {
+export function ShelfKitAnswer({ address, askAgainMs, children }: ShelfKitAnswerProps) {
   const { slug = '' } = useParams();
   const state = useSignInState();
   const { data, fault, mutate } = useEndpoint(
     'GET /shelf/:slug',
     state === 'signed-in' ? { params: { slug } } : null,
-    asking,
+    // SWR looks at the time anew only when it is given another function.
+    { refreshInterval: (now) => askAgainMs?.(now) ?? 0 },
   );
   useEndedSession(fault);
   if (state === 'signed-out') return <Navigate to={signInThenBack(address(slug))} replace />;

@@ -108,7 +108,7 @@ function Kit({ kit }: { kit: ShelfKit }) {
 export const ShelfKitPage = () => (
   <ShelfKitAnswer
     address={(slug) => paths.shelfKit.to({ slug })}
-    asking={{ refreshInterval: (kit) => (hasRunningDownload(kit) ? 4000 : 0) }}
+    askAgainMs={(kit) => (hasRunningDownload(kit) ? 4000 : 0)}
   >
     {(kit) => (
       <>
