@@ -18,7 +18,7 @@ test('a buyer says which clearance they print; bundle and reprint list keep to i
   await page.getByRole('radio', { name: '+ looser' }).check();
   await expect(page.getByRole('button', { name: /Get the bundle in \+/ })).toBeVisible();
   await expect(tongue).toContainText('Locking tongue, in +');
-  await expect(tongue).toContainText('−0.44 mm depth');
+  await expect(tongue).toContainText('Printed in 0, you print in +');
   await page.reload();
   await expect(page.getByRole('radio', { name: '+ looser' })).toBeChecked();
 

@@ -41,7 +41,11 @@ test('a business gives a kit away without VAT, and the bookkeeper finds it in th
     await page.getByRole('button', { name: 'Pay €7.56' }).click();
     await page.waitForURL(/\/pay\//);
     await page.getByLabel('Billing country').selectOption('DE');
-    await page.getByRole('button', { name: 'Pay €7.56' }).click();
+    await page
+      .getByRole('button', { name: /Succeeds/ })
+      .first()
+      .click();
+    await page.getByRole('button', { name: /^Pay €7\.56/ }).click();
     await expect(page.getByRole('heading', { name: 'The gift' })).toBeVisible({ timeout: 30_000 });
     await expect(page.getByText(/owes it in its own country/)).toBeVisible();
     await expectAccessible(page, 'order of a gift');
