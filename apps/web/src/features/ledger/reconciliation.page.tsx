@@ -38,7 +38,7 @@ const sumColumns: Column<Sum>[] = [
 ];
 
 const Result = ({ one, sums }: { one: Reconciliation; sums: readonly Sum[] }) => (
-  <Box display="grid" gap="9">
+  <Box display="grid" gap="9" gridTemplateColumns="minmax(0, 1fr)">
     {one.differences === 0 ? (
       <Notice tone="ok" title={texts.allAgrees}>
         {texts.allAgreesDetail}
